@@ -1,0 +1,8 @@
+import { defineConfig } from 'drizzle-kit'
+
+export default defineConfig({
+  dialect: 'postgresql',
+  schema: './server/db/schema/*.ts',
+  out: './drizzle',
+  schemaFilter: ['identity', 'club'],
+})

@@ -1,0 +1,30 @@
+import tailwindcss from '@tailwindcss/vite'
+import react from '@vitejs/plugin-react'
+import { defineConfig } from 'vitest/config'
+
+/** Test files by what they need to run; `npm test` runs each project and adds up the counts. */
+const unitTests = ['shared/**/*.test.ts', 'server/**/*.test.ts', 'seed/**/*.test.ts']
+
+export default defineConfig({
+  plugins: [react(), tailwindcss()],
+  build: { outDir: 'dist/client', sourcemap: true, target: 'es2022' },
+  server: { strictPort: true },
+  test: {
+    projects: [
+      { test: { name: 'unit', environment: 'node', include: unitTests } },
+      { test: { name: 'guards', environment: 'node', include: ['tests/guards/**/*.test.ts'] } },
+      { test: { name: 'reference', environment: 'node', include: ['tests/reference/**/*.test.ts', 'tests/cases/*.test.ts'] } },
+      { test: { name: 'api', environment: 'node', include: ['tests/api/**/*.test.ts'] } },
+      {
+        extends: true,
+        test: {
+          name: 'client',
+          environment: 'jsdom',
+          include: ['src/**/*.test.{ts,tsx}'],
+          setupFiles: ['tests/setup/client.ts'],
+        },
+      },
+      { test: { name: 'browser', environment: 'node', include: ['tests/browser/**/*.test.ts'] } },
+    ],
+  },
+})
