@@ -149,3 +149,30 @@ export interface AnalyseOptions {
   /** Events moved by a person, seconds from the first sample. */
   movedEvents?: Partial<Record<EventName, number>>
 }
+
+export interface RecordingAnalysis {
+  engineVersion: string
+  trials: TrialAnalysis[]
+  notes: Note[]
+}
+
+/** What the catalogue says of a metric; screens, exports and Method notes read it, and nothing else names one. */
+export interface MetricDefinition {
+  key: string
+  /** As a coach reads it, e.g. "Jump height". */
+  name: string
+  /** SI unit of the stored value, '' for a ratio. */
+  unit: string
+  /** How a screen shows it: value · factor, in this unit, with this many decimals. */
+  display: { unit: string; factor: number; decimals: number }
+  better: 'higher' | 'lower' | null
+  group: MetricGroup
+  phase: Phase | null
+  protocols: Protocol[]
+  /** Published source of the method, or "common practice" or "definition". */
+  source: string
+  /** One sentence that an athlete understands. */
+  athleteSentence: string
+  /** The metric of which this one is the same fact (an identity), so that no statistic counts it twice. */
+  sameFactAs?: string
+}
