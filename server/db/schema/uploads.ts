@@ -1,0 +1,99 @@
+import { sql } from 'drizzle-orm'
+import {
+  bigint,
+  foreignKey,
+  index,
+  integer,
+  jsonb,
+  primaryKey,
+  text,
+  uniqueIndex,
+  uuid,
+} from 'drizzle-orm/pg-core'
+import { club, clubId, createdAt, id, moment, ownClubPolicy, rowVersion, staffOnlyPolicy } from './base.ts'
+import { bytea, clubs, memberships } from './identity.ts'
+import { sessions } from './sessions.ts'
+
+/** The bytes of an original, finished once with the SHA-256 of the whole; the same bytes are one file a club. */
+export const files = club.table(
+  'files',
+  {
+    clubId: clubId().references(() => clubs.id),
+    id: id(),
+    sizeBytes: bigint('size_bytes', { mode: 'number' }).notNull(),
+    sha256: bytea('sha256'),
+    finishedAt: moment('finished_at'),
+    createdAt: createdAt(),
+  },
+  (t) => [
+    primaryKey({ columns: [t.clubId, t.id] }),
+    uniqueIndex('files_sha256')
+      .on(t.clubId, t.sha256)
+      .where(sql`sha256 is not null`),
+    ownClubPolicy('files'),
+    staffOnlyPolicy('files'),
+  ],
+)
+
+/** 1 MiB chunks, each its own short write. The column is stored EXTERNAL (custom migration): no compression on the way in. */
+export const fileChunks = club.table(
+  'file_chunks',
+  {
+    clubId: clubId(),
+    fileId: uuid('file_id').notNull(),
+    n: integer('n').notNull(),
+    bytes: bytea('bytes').notNull(),
+  },
+  (t) => [
+    primaryKey({ columns: [t.clubId, t.fileId, t.n] }),
+    foreignKey({ columns: [t.clubId, t.fileId], foreignColumns: [files.clubId, files.id] }),
+    ownClubPolicy('file_chunks'),
+    staffOnlyPolicy('file_chunks'),
+  ],
+)
+
+/** One file dropped on a session. `state`: receiving, waiting (for the read job), read, refused, duplicate. */
+export const uploads = club.table(
+  'uploads',
+  {
+    clubId: clubId(),
+    id: id(),
+    sessionId: uuid('session_id').notNull(),
+    fileId: uuid('file_id').notNull(),
+    /** As sent, without any path part. */
+    fileName: text('file_name').notNull(),
+    state: text('state').notNull().default('receiving'),
+    /** { code, sentence, remedy, line?, column?, seen? } where the file could not be read. */
+    error: jsonb('error').$type<ReadError | null>(),
+    /** How it was read: format, column map, rate, notes. */
+    reading: jsonb('reading').$type<unknown>(),
+    /** The upload that brought the same bytes first. */
+    duplicateOf: uuid('duplicate_of'),
+    uploadedBy: uuid('uploaded_by').notNull(),
+    version: rowVersion(),
+    createdAt: createdAt(),
+  },
+  (t) => [
+    primaryKey({ columns: [t.clubId, t.id] }),
+    index('uploads_session').on(t.clubId, t.sessionId),
+    index('uploads_file').on(t.clubId, t.fileId),
+    foreignKey({ columns: [t.clubId, t.sessionId], foreignColumns: [sessions.clubId, sessions.id] }),
+    foreignKey({ columns: [t.clubId, t.fileId], foreignColumns: [files.clubId, files.id] }),
+    foreignKey({ columns: [t.clubId, t.duplicateOf], foreignColumns: [t.clubId, t.id] }),
+    foreignKey({
+      columns: [t.clubId, t.uploadedBy],
+      foreignColumns: [memberships.clubId, memberships.personId],
+    }),
+    ownClubPolicy('uploads'),
+    staffOnlyPolicy('uploads'),
+  ],
+)
+
+export interface ReadError {
+  code: string
+  sentence: string
+  remedy: string
+  line?: number
+  column?: number
+  seen?: string
+}
