@@ -1,0 +1,19 @@
+/** Limits, each written once: forms, client and server read them here. */
+export const limits = {
+  fileBytes: 64 * 1024 * 1024,
+  chunkBytes: 1024 * 1024,
+  filesPerDrop: 300,
+  fileNameCharacters: 255,
+  nameCharacters: 120,
+  emailCharacters: 254,
+  titleCharacters: 120,
+  noteCharacters: 2000,
+  reasonCharacters: 300,
+  passwordMin: 12,
+  passwordMax: 200,
+  bodyMassKg: { min: 20, max: 250 },
+  externalLoadKg: { min: 0, max: 300 },
+  landingPeakBodyWeights: { min: 1, max: 20 },
+  invitationDays: 14,
+  resetMinutes: 60,
+} as const

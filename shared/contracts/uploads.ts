@@ -1,0 +1,75 @@
+import { z } from 'zod'
+import { endpoint } from './endpoint.ts'
+import { Id, Moment, Version } from './fields.ts'
+import { limits } from './limits.ts'
+import { measuringRoles } from './roles.ts'
+
+export const UploadState = z.enum(['receiving', 'waiting', 'read', 'refused', 'duplicate'])
+
+export const Upload = z.strictObject({
+  id: Id,
+  sessionId: Id,
+  fileName: z.string(),
+  sizeBytes: z.number().int(),
+  state: UploadState,
+  /** What was found in a file that could not be read, and what to do. */
+  error: z
+    .strictObject({
+      code: z.string(),
+      sentence: z.string(),
+      remedy: z.string(),
+      line: z.number().int().optional(),
+      column: z.number().int().optional(),
+      seen: z.string().optional(),
+    })
+    .nullable(),
+  notes: z.array(z.strictObject({ code: z.string(), sentence: z.string() })),
+  duplicateOf: z.strictObject({ uploadId: Id, sessionId: Id, fileName: z.string() }).nullable(),
+  /** Chunks that have arrived, for taking up an upload again. */
+  chunksReceived: z.array(z.number().int()),
+  trials: z.number().int(),
+  uploadedByName: z.string(),
+  createdAt: Moment,
+  version: Version,
+})
+export type Upload = z.infer<typeof Upload>
+
+/** Announces a file; its bytes follow in chunks of `limits.chunkBytes`, in any order, each repeatable. */
+export const startUpload = endpoint({
+  method: 'POST',
+  path: '/api/sessions/:sessionId/uploads',
+  access: measuringRoles,
+  params: z.strictObject({ sessionId: Id }),
+  body: z.strictObject({
+    fileName: z.string().min(1).max(limits.fileNameCharacters),
+    sizeBytes: z.number().int().min(0),
+  }),
+  response: Upload,
+})
+const UploadParams = z.strictObject({ uploadId: Id })
+/** multipart/form-data with one part named `chunk`. */
+export const sendChunk = endpoint({
+  method: 'PUT',
+  path: '/api/uploads/:uploadId/chunks/:n',
+  access: measuringRoles,
+  params: UploadParams.extend({ n: z.coerce.number().int().min(0).max(63) }),
+  body: z.unknown(),
+  response: z.strictObject({ n: z.number().int() }),
+  repeat: 'natural',
+})
+/** All chunks are there: the whole is hashed, recognised if the club has it, else queued for reading. */
+export const finishUpload = endpoint({
+  method: 'POST',
+  path: '/api/uploads/:uploadId/finish',
+  access: measuringRoles,
+  params: UploadParams,
+  response: Upload,
+})
+/** The original, byte for byte, as an attachment. */
+export const getOriginal = endpoint({
+  method: 'GET',
+  path: '/api/uploads/:uploadId/original',
+  access: measuringRoles,
+  params: UploadParams,
+  response: z.unknown(),
+})
