@@ -13,8 +13,23 @@ export default defineConfig({
     projects: [
       { test: { name: 'unit', environment: 'node', include: unitTests } },
       { test: { name: 'guards', environment: 'node', include: ['tests/guards/**/*.test.ts'] } },
-      { test: { name: 'reference', environment: 'node', include: ['tests/reference/**/*.test.ts', 'tests/cases/*.test.ts'] } },
-      { test: { name: 'api', environment: 'node', include: ['tests/api/**/*.test.ts'] } },
+      {
+        test: {
+          name: 'reference',
+          environment: 'node',
+          include: ['tests/reference/**/*.test.ts', 'tests/cases/*.test.ts'],
+        },
+      },
+      {
+        test: {
+          name: 'api',
+          environment: 'node',
+          include: ['tests/api/**/*.test.ts'],
+          globalSetup: ['tests/setup/cluster.ts'],
+          hookTimeout: 30_000,
+          testTimeout: 30_000,
+        },
+      },
       {
         extends: true,
         test: {
@@ -24,7 +39,16 @@ export default defineConfig({
           setupFiles: ['tests/setup/client.ts'],
         },
       },
-      { test: { name: 'browser', environment: 'node', include: ['tests/browser/**/*.test.ts'] } },
+      {
+        test: {
+          name: 'browser',
+          environment: 'node',
+          include: ['tests/browser/**/*.test.ts'],
+          globalSetup: ['tests/setup/cluster.ts'],
+          hookTimeout: 60_000,
+          testTimeout: 90_000,
+        },
+      },
     ],
   },
 })

@@ -1,0 +1,39 @@
+import { spawn } from 'node:child_process'
+import { checkout } from './paths.mjs'
+
+/**
+ * Runs a program to its end and hands back its exit code and what it wrote (both streams, in order).
+ * @param {string} program
+ * @param {string[]} args
+ * @param {{ cwd?: string, env?: NodeJS.ProcessEnv, show?: boolean, onStart?: (child: import('node:child_process').ChildProcess) => void }} [options]
+ *   `show` also lets the output through to the terminal
+ * @returns {Promise<{ code: number, output: string }>}
+ */
+export function run(program, args, options = {}) {
+  return new Promise((done, fail) => {
+    const child = spawn(program, args, {
+      cwd: options.cwd ?? checkout,
+      env: options.env ?? process.env,
+      stdio: ['ignore', 'pipe', 'pipe'],
+    })
+    options.onStart?.(child)
+    let output = ''
+    for (const stream of [child.stdout, child.stderr]) {
+      stream.setEncoding('utf8').on('data', (text) => {
+        output += text
+        if (options.show) process.stdout.write(text)
+      })
+    }
+    child.on('error', fail)
+    child.on('close', (code, signal) => done({ code: code ?? (signal ? 1 : 0), output }))
+  })
+}
+
+/**
+ * The last lines of an output: enough to see why a program failed.
+ * @param {string} output
+ * @param {number} [lines]
+ */
+export function lastLines(output, lines = 12) {
+  return output.trimEnd().split('\n').slice(-lines).join('\n')
+}

@@ -1,0 +1,52 @@
+import { randomBytes } from 'node:crypto'
+import { rmSync } from 'node:fs'
+import { tmpdir } from 'node:os'
+import { join } from 'node:path'
+import { makeCluster, startCluster } from './cluster.mjs'
+import { databaseUrl } from './database-urls.mjs'
+import { migrate } from './migrations.mjs'
+import { SetUpProblem } from './problem.mjs'
+import { forEachRole, makeDatabase, makeRoles } from './roles.mjs'
+import { serverUserFor } from './server-user.mjs'
+
+/** The migrated, empty database that each test file gets a clone of. */
+export const templateDatabase = 'underfoot_template'
+
+/** Tests may lose everything at a power cut: waiting for the disk would only make them slow. */
+const settings = { fsync: 'off', synchronous_commit: 'off', full_page_writes: 'off', max_connections: '200' }
+
+/**
+ * What a test needs to know of the server: enough to clone the template and sign in as each role.
+ * @typedef {{ port: number, adminUrl: string, passwords: import('./roles.mjs').OfRoles }} TestCluster
+ */
+
+/**
+ * Starts a database server that lives as long as one test run and holds the migrated template. Two runs never
+ * share one, so they cannot disturb each other.
+ * @returns {Promise<{ cluster: TestCluster, stop: () => Promise<void> }>}
+ */
+export async function startTestCluster() {
+  const folder = join(tmpdir(), `underfoot-test-${randomBytes(6).toString('hex')}`)
+  const log = `${folder}.log`
+  const user = serverUserFor(folder)
+  if (!user) throw new SetUpProblem(`The database server's user cannot write to ${tmpdir()}.`)
+  const files = { folder, log, user, password: randomText(), settings }
+  await makeCluster(files)
+  const { port, adminUrl, stop: stopServer } = await startCluster(files)
+  const stop = async () => {
+    await stopServer()
+    for (const path of [folder, log]) rmSync(path, { recursive: true, force: true })
+  }
+  try {
+    const passwords = forEachRole(randomText)
+    await makeRoles(adminUrl, passwords)
+    await makeDatabase(adminUrl, templateDatabase)
+    await migrate(databaseUrl('underfoot_owner', passwords.owner, port, templateDatabase))
+    return { cluster: { port, adminUrl, passwords }, stop }
+  } catch (error) {
+    await stop()
+    throw error
+  }
+}
+
+const randomText = () => randomBytes(16).toString('hex')
