@@ -25,7 +25,6 @@ export interface Recording {
   filledSamples: number
   /** Greatest distance of a time stamp from the even time base, as a fraction of one sample interval. */
   timeBaseError: number
-  /** Rounded force step of the file's figures in newtons, 0 when unknown. */
   notes: Note[]
 }
 
@@ -146,6 +145,10 @@ export interface AnalyseOptions {
   gravity: number
   /** Expanded relative uncertainty (k = 2) of each plate's calibration, e.g. 0.005. */
   calibrationU: Partial<Record<ForceChannel, number>>
+  /** Standard uncertainty of `gravity`, m/s²; the settings' value where not given. */
+  gravityUncertainty?: number
+  /** False leaves every uncertainty out (`null`), for speed; true where not given. */
+  uncertainty?: boolean
   /** Events moved by a person, seconds from the first sample. */
   movedEvents?: Partial<Record<EventName, number>>
 }
@@ -173,6 +176,8 @@ export interface MetricDefinition {
   source: string
   /** One sentence that an athlete understands. */
   athleteSentence: string
+  /** Whether the figure is also given for each foot, or only so; absent: of both feet together. */
+  feet?: 'also' | 'only'
   /** The metric of which this one is the same fact (an identity), so that no statistic counts it twice. */
   sameFactAs?: string
 }
