@@ -1,0 +1,123 @@
+import { ReadFault } from './errors.ts'
+import { MAX_FILLED_SHARE, MAX_GAP_S } from './limits.ts'
+
+/** Where each row of a file lies on an even time base. */
+export interface TimeBase {
+  sampleRateHz: number
+  /** Greatest distance of a stamp from the even base, in sample intervals. */
+  error: number
+  /** Samples from first to last, those of gaps included. */
+  length: number
+  /** Sample of each row; null where row and sample are the same. */
+  sampleOfRow: Int32Array | null
+  /** The step the stamps are rounded to in seconds where it is longer than a sample interval, else null. */
+  coarseStepS: number | null
+}
+
+/** A stamp further than this from the even base is no jitter: samples are missing. Ours. */
+const MAX_JITTER = 0.75
+/** A step further than this from whole intervals is no gap of whole samples. Ours. */
+const MAX_STEP_ERROR = 0.3
+
+/** Where a row of numbers stands in its file, for errors. */
+export type LineOfRow = (row: number) => number
+
+function smallestStep(stampsS: Float64Array): number {
+  let smallest = Infinity
+  for (let i = 1; i < stampsS.length; i++) {
+    const step = Math.abs((stampsS[i] ?? 0) - (stampsS[i - 1] ?? 0))
+    // Below a nanosecond it is the rounding of the numbers themselves.
+    if (step > 1e-9 && step < smallest) smallest = step
+  }
+  return smallest
+}
+
+/** Greatest distance of the stamps from an even base through the first and the last, in intervals. */
+function distanceFromEven(stampsS: Float64Array, stepS: number, sampleOfRow: Int32Array | null): number {
+  const first = stampsS[0] ?? 0
+  let greatest = 0
+  for (let i = 0; i < stampsS.length; i++) {
+    const sample = sampleOfRow ? (sampleOfRow[i] ?? 0) : i
+    const distance = Math.abs((stampsS[i] ?? 0) - first - sample * stepS)
+    if (distance > greatest) greatest = distance
+  }
+  return greatest / stepS
+}
+
+/** A whole number of hertz where the stamps cannot tell the rate from it. */
+function settledRate(stepS: number, intervals: number, error: number): number {
+  const rate = 1 / stepS
+  const whole = Math.round(rate)
+  const tolerance = Math.max(1e-6, (2 * error) / intervals)
+  return Math.abs(rate - whole) <= tolerance * rate ? whole : rate
+}
+
+function medianStep(stampsS: Float64Array): number {
+  const steps = new Float64Array(stampsS.length - 1)
+  for (let i = 0; i < steps.length; i++) steps[i] = (stampsS[i + 1] ?? 0) - (stampsS[i] ?? 0)
+  return steps.sort()[steps.length >> 1] ?? 0
+}
+
+function uneven(row: number, stampsS: Float64Array, lineOf: LineOfRow): ReadFault {
+  const [before, after] = [stampsS[row - 1] ?? 0, stampsS[row] ?? 0]
+  const line = lineOf(row)
+  const from = `${Number(before.toFixed(6))} s`
+  const seen = `${Number(after.toFixed(6))} s`
+  const sentence =
+    after > before
+      ? `The time stamps jump from ${from} to ${seen} in line ${line}, which is too much to bridge.`
+      : `The time stamps do not go on in line ${line}: ${seen} follows ${from}.`
+  return new ReadFault('uneven-time', sentence, { line, seen })
+}
+
+/** Places rows with missing samples between them. */
+function bridgeGaps(stampsS: Float64Array, lineOf: LineOfRow): Int32Array {
+  const step = medianStep(stampsS)
+  const samples = new Int32Array(stampsS.length)
+  for (let i = 1; i < stampsS.length; i++) {
+    const intervals = ((stampsS[i] ?? 0) - (stampsS[i - 1] ?? 0)) / step
+    const whole = Math.round(intervals)
+    const bridged =
+      step > 0 &&
+      whole >= 1 &&
+      Math.abs(intervals - whole) <= MAX_STEP_ERROR &&
+      (whole - 1) * step <= MAX_GAP_S
+    if (!bridged) throw uneven(i, stampsS, lineOf)
+    samples[i] = (samples[i - 1] ?? 0) + whole
+  }
+  const length = (samples[samples.length - 1] ?? 0) + 1
+  const missing = length - stampsS.length
+  if (missing > MAX_FILLED_SHARE * length) {
+    throw new ReadFault('uneven-time', `${missing} of ${length} samples are missing between the time stamps.`)
+  }
+  return samples
+}
+
+/**
+ * The even time base of a column of time stamps in seconds (no blanks, at least two). The rate comes from the
+ * whole length, which rounding of the stamps hardly touches; the median step serves to find missing samples.
+ * @throws ReadFault `uneven-time` where stamps go backwards, stand still or jump too far
+ */
+export function timeBaseOf(stampsS: Float64Array, lineOf: LineOfRow): TimeBase {
+  const rows = stampsS.length
+  const span = (stampsS[rows - 1] ?? 0) - (stampsS[0] ?? 0)
+  if (!(span > 0)) throw uneven(rows - 1, stampsS, lineOf)
+  const evenStep = span / (rows - 1)
+  const evenError = distanceFromEven(stampsS, evenStep, null)
+  const resolution = smallestStep(stampsS)
+  const isCoarse = resolution > 1.5 * evenStep
+  if (evenError <= (isCoarse ? Math.max(MAX_JITTER, (1.1 * resolution) / evenStep) : MAX_JITTER)) {
+    return {
+      sampleRateHz: settledRate(evenStep, rows - 1, evenError),
+      error: evenError,
+      length: rows,
+      sampleOfRow: null,
+      coarseStepS: isCoarse ? resolution : null,
+    }
+  }
+  const sampleOfRow = bridgeGaps(stampsS, lineOf)
+  const length = (sampleOfRow[rows - 1] ?? 0) + 1
+  const step = span / (length - 1)
+  const error = distanceFromEven(stampsS, step, sampleOfRow)
+  return { sampleRateHz: settledRate(step, length - 1, error), error, length, sampleOfRow, coarseStepS: null }
+}
