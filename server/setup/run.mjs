@@ -1,12 +1,19 @@
 import { spawn } from 'node:child_process'
 import { checkout } from './paths.mjs'
 
+/** @type {Set<import('node:child_process').ChildProcess>} */
+const running = new Set()
+
+/** Ends every program that `run` is waiting for. */
+export function endRunning() {
+  for (const child of running) child.kill()
+}
+
 /**
  * Runs a program to its end and hands back its exit code and what it wrote (both streams, in order).
  * @param {string} program
  * @param {string[]} args
- * @param {{ cwd?: string, env?: NodeJS.ProcessEnv, show?: boolean, onStart?: (child: import('node:child_process').ChildProcess) => void }} [options]
- *   `show` also lets the output through to the terminal
+ * @param {{ cwd?: string, env?: NodeJS.ProcessEnv, limitMs?: number }} [options] it is ended after `limitMs`
  * @returns {Promise<{ code: number, output: string }>}
  */
 export function run(program, args, options = {}) {
@@ -15,17 +22,18 @@ export function run(program, args, options = {}) {
       cwd: options.cwd ?? checkout,
       env: options.env ?? process.env,
       stdio: ['ignore', 'pipe', 'pipe'],
+      timeout: options.limitMs,
     })
-    options.onStart?.(child)
+    running.add(child)
     let output = ''
     for (const stream of [child.stdout, child.stderr]) {
-      stream.setEncoding('utf8').on('data', (text) => {
-        output += text
-        if (options.show) process.stdout.write(text)
-      })
+      stream.setEncoding('utf8').on('data', (text) => (output += text))
     }
     child.on('error', fail)
-    child.on('close', (code, signal) => done({ code: code ?? (signal ? 1 : 0), output }))
+    child.on('close', (code) => {
+      running.delete(child)
+      done({ code: code ?? 1, output })
+    })
   })
 }
 

@@ -1,0 +1,76 @@
+import { existsSync, readFileSync, writeFileSync } from 'node:fs'
+import { join } from 'node:path'
+import { localFolder } from './paths.mjs'
+import { pause } from './pause.mjs'
+
+/**
+ * Process groups of the product by name, with the moment each began: a number alone may have been given to
+ * another program since.
+ * @typedef {Record<string, { pid: number, began: string }>} Remembered
+ */
+
+const file = () => join(localFolder(), 'processes.json')
+
+/**
+ * Notes that a process group is ours.
+ * @param {string} name
+ * @param {number} pid
+ */
+export function remember(name, pid) {
+  write({ ...read(), [name]: { pid, began: beganAt(pid) ?? '' } })
+}
+
+/** @param {string} name */
+export function forget(name) {
+  const { [name]: _gone, ...others } = read()
+  write(others)
+}
+
+/** Ends what a starter that was killed left running, so that its ports are free again. */
+export async function endLeftovers() {
+  const alive = Object.values(read()).filter(({ pid, began }) => beganAt(pid) === began)
+  for (const { pid } of alive) killGroup(pid, 'SIGKILL')
+  while (alive.some(({ pid, began }) => beganAt(pid) === began)) await pause()
+  write({})
+}
+
+/**
+ * Signals a whole process group; one that is gone already is no error.
+ * @param {number} pid of its leader
+ * @param {NodeJS.Signals} signal
+ */
+export function killGroup(pid, signal) {
+  try {
+    process.kill(-pid, signal)
+  } catch {
+    // It ended by itself in the meantime.
+  }
+}
+
+/**
+ * When a live process began, in clock ticks since boot (field 22 of its stat, the name in brackets aside).
+ * @param {number} pid
+ */
+function beganAt(pid) {
+  try {
+    const stat = readFileSync(`/proc/${pid}/stat`, 'utf8')
+    const [state, ...fields] = stat.slice(stat.lastIndexOf(')') + 2).split(' ')
+    return state === 'Z' ? undefined : fields[18]
+  } catch {
+    return undefined
+  }
+}
+
+/** @returns {Remembered} */
+function read() {
+  try {
+    return existsSync(file()) ? JSON.parse(readFileSync(file(), 'utf8')) : {}
+  } catch {
+    return {}
+  }
+}
+
+/** @param {Remembered} remembered */
+function write(remembered) {
+  writeFileSync(file(), JSON.stringify(remembered))
+}

@@ -1,0 +1,57 @@
+import { ensureClient } from './client-build.mjs'
+import { openDatabase } from './database.mjs'
+import { ensureDemo } from './demo.mjs'
+import { endLeftovers } from './leftovers.mjs'
+import { migrate } from './migrations.mjs'
+import { freePort, portIsFree } from './ports.mjs'
+import { SetUpProblem, endWith, step } from './problem.mjs'
+import { keepRunning } from './processes.mjs'
+import { untilReady } from './readiness.mjs'
+import { mailService, viteService, webService, workerService } from './services.mjs'
+import { productEnvironment } from './settings.mjs'
+import { onStop, stopAll } from './stopping.mjs'
+import { welcome } from './welcome.mjs'
+
+/**
+ * Starts everything, in order, and says where it is to be found.
+ * @param {import('./settings.mjs').Settings} settings
+ * @param {{ reload: boolean }} options with `reload`, what changes in the sources shows without a new start
+ */
+export async function startProduct(settings, { reload }) {
+  await endLeftovers()
+  await refuseTakenPort(settings.port)
+  const urls = await openDatabase(settings)
+  step('Bringing the database up to date')
+  await migrate(urls.owner)
+  const mail = settings.smtpUrl ? undefined : { smtpPort: await freePort(), pagePort: await freePort() }
+  const smtpUrl = settings.smtpUrl ?? `smtp://127.0.0.1:${mail?.smtpPort}`
+  const env = productEnvironment(settings, { urls, smtpUrl })
+  if (!settings.production) await ensureDemo(urls, env, { disposable: !settings.database })
+  if (!reload) await ensureClient()
+
+  const webPort = reload ? await freePort() : settings.port
+  const services = [workerService(env, reload), webService(env, webPort, reload)]
+  if (mail) services.unshift(mailService(env, mail))
+  if (reload) services.push(viteService(env, settings.port, webPort))
+  step(`Starting ${services.map(({ name }) => name).join(', ')}`)
+  for (const service of services) await onStop(keepRunning(service, giveUp).stop)
+  await untilReady(webPort)
+  console.log(welcome(settings, mail?.pagePort, ''))
+}
+
+/** @param {number} port */
+async function refuseTakenPort(port) {
+  if (await portIsFree(port)) return
+  throw new SetUpProblem(
+    `Port ${port} is taken by another program: stop it, or choose another port, as in PORT=${port + 1} npm start.`,
+  )
+}
+
+/**
+ * @param {string} name of the service
+ * @param {string} log where it wrote
+ */
+async function giveUp(name, log) {
+  await stopAll()
+  endWith(new SetUpProblem(`The ${name} process keeps ending by itself; ${log} says why.`))
+}

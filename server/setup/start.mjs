@@ -1,0 +1,25 @@
+import { holdLock } from './lock.mjs'
+import { checkNode, ensurePackages } from './packages.mjs'
+import { localFolder } from './paths.mjs'
+import { SetUpProblem, endWith } from './problem.mjs'
+import { readSettings } from './settings.mjs'
+import { isStopping, stopAll, stopWhenAsked } from './stopping.mjs'
+
+/** `npm start`: from a fresh clone to the running product. `--dev` does the same and reloads what changes. */
+async function start() {
+  checkNode()
+  const settings = readSettings(process.env)
+  const { holder } = await holdLock(localFolder(), 'start')
+  if (holder) throw new SetUpProblem(`Underfoot already runs from this folder, as process ${holder}.`)
+  stopWhenAsked({ exitCode: 0 })
+  await ensurePackages()
+  // Only now are the packages there that the rest is built on.
+  const { startProduct } = await import('./product.mjs')
+  await startProduct(settings, { reload: process.argv.includes('--dev') })
+}
+
+start().catch(async (error) => {
+  const asked = isStopping()
+  await stopAll()
+  if (!asked) endWith(error)
+})
