@@ -15,7 +15,11 @@ export default tseslint.config(
       '@typescript-eslint/no-unused-vars': ['error', { argsIgnorePattern: '^_', varsIgnorePattern: '^_' }],
     },
   },
-  { files: ['src/**/*.{ts,tsx}'], ...reactHooks.configs.flat.recommended, languageOptions: { globals: globals.browser } },
+  {
+    files: ['src/**/*.{ts,tsx}'],
+    ...reactHooks.configs.flat.recommended,
+    languageOptions: { globals: globals.browser },
+  },
   {
     // What an operator types, the set-up scripts and the benchmarks speak to a terminal.
     files: ['server/setup/**', 'server/commands/**', 'tests/bench/**', 'tests/setup/**'],

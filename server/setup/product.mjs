@@ -7,7 +7,7 @@ import { freePort, portIsFree } from './ports.mjs'
 import { SetUpProblem, endWith, step } from './problem.mjs'
 import { keepRunning } from './processes.mjs'
 import { untilReady } from './readiness.mjs'
-import { mailService, viteService, webService, workerService } from './services.mjs'
+import { mailService, webService, workerService } from './services.mjs'
 import { productEnvironment } from './settings.mjs'
 import { onStop, stopAll } from './stopping.mjs'
 import { welcome } from './welcome.mjs'
@@ -23,20 +23,18 @@ export async function startProduct(settings, { reload }) {
   const urls = await openDatabase(settings)
   step('Bringing the database up to date')
   await migrate(urls.owner)
-  const mail = settings.smtpUrl ? undefined : { smtpPort: await freePort(), pagePort: await freePort() }
+  const mail = settings.smtpUrl ? undefined : { smtpPort: await freePort(), inboxPort: await freePort() }
   const smtpUrl = settings.smtpUrl ?? `smtp://127.0.0.1:${mail?.smtpPort}`
   const env = productEnvironment(settings, { urls, smtpUrl })
   if (!settings.production) await ensureDemo(urls, env, { disposable: !settings.database })
   if (!reload) await ensureClient()
 
-  const webPort = reload ? await freePort() : settings.port
-  const services = [workerService(env, reload), webService(env, webPort, reload)]
+  const services = [workerService(env, reload), webService(env, reload)]
   if (mail) services.unshift(mailService(env, mail))
-  if (reload) services.push(viteService(env, settings.port, webPort))
   step(`Starting ${services.map(({ name }) => name).join(', ')}`)
   for (const service of services) await onStop(keepRunning(service, giveUp).stop)
-  await untilReady(webPort)
-  console.log(welcome(settings, mail?.pagePort, ''))
+  await untilReady(settings.port)
+  console.log(welcome(settings, mail?.inboxPort, ''))
 }
 
 /** @param {number} port */

@@ -8,13 +8,12 @@ const tsxWatch = ['node_modules/tsx/dist/cli.mjs', 'watch', '--clear-screen=fals
 
 /**
  * @param {NodeJS.ProcessEnv} env
- * @param {number} port
  * @param {boolean} reload
  * @returns {Service}
  */
-export function webService(env, port, reload) {
+export function webService(env, reload) {
   const args = [...(reload ? tsxWatch : tsx), 'server/main.ts']
-  return { name: 'web', args, env: { ...env, PORT: String(port) }, showOutput: reload }
+  return { name: 'web', args, env: { ...env, CLIENT: reload ? 'vite' : 'built' }, showOutput: reload }
 }
 
 /**
@@ -28,27 +27,15 @@ export function workerService(env, reload) {
 
 /**
  * @param {NodeJS.ProcessEnv} env
- * @param {{ smtpPort: number, pagePort: number }} ports
+ * @param {{ smtpPort: number, inboxPort: number }} ports
  * @returns {Service}
  */
-export function mailService(env, { smtpPort, pagePort }) {
-  const ports = { MAIL_CATCHER_SMTP_PORT: String(smtpPort), MAIL_CATCHER_PAGE_PORT: String(pagePort) }
+export function mailService(env, { smtpPort, inboxPort }) {
+  const ports = { MAIL_CATCHER_SMTP_PORT: String(smtpPort), MAIL_CATCHER_INBOX_PORT: String(inboxPort) }
   return {
     name: 'mail',
     args: [...tsx, 'server/fakes/main.ts'],
     env: { ...env, ...ports },
     showOutput: false,
   }
-}
-
-/**
- * Vite's own server, which passes what the web process answers on to it.
- * @param {NodeJS.ProcessEnv} env
- * @param {number} port
- * @param {number} webPort
- * @returns {Service}
- */
-export function viteService(env, port, webPort) {
-  const args = ['node_modules/vite/bin/vite.js', '--port', String(port), '--clearScreen', 'false']
-  return { name: 'vite', args, env: { ...env, WEB_PORT: String(webPort) }, showOutput: true }
 }

@@ -10,7 +10,8 @@ import { runRunner, runners } from './test-runners.mjs'
 const atOnce = 2
 
 /** Settings of a running product, which must not reach into the tests. */
-const settingsOfProduct = /^(DATABASE_|SMTP_URL|APP_URL|PORT$|SESSION_SECRET|NODE_ENV|MAIL_|FORCE_COLOR|NO_COLOR)/
+const settingsOfProduct =
+  /^(DATABASE_|SMTP_URL|APP_URL|PORT$|SESSION_SECRET|NODE_ENV|MAIL_|FORCE_COLOR|NO_COLOR)/
 
 /**
  * Runs the tests and prints what they found.
@@ -22,9 +23,7 @@ export async function runTests(names) {
   const needsDatabase = chosen.some((runner) => runner.database)
   const needsBrowser = chosen.some((runner) => runner.browser)
   if (needsDatabase || needsBrowser) await ensurePrograms({ browser: needsBrowser })
-  const env = Object.fromEntries(
-    Object.entries(process.env).filter(([name]) => !settingsOfProduct.test(name)),
-  )
+  const env = testEnvironment()
   if (needsDatabase) env.UNDERFOOT_TEST_CLUSTER = JSON.stringify(await startDatabase())
   if (needsBrowser) await ensureClient()
 
