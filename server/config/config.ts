@@ -1,0 +1,58 @@
+import { z } from 'zod'
+import { developmentSecret, keys, type Keys } from './keys.ts'
+
+type Settings = { [K in keyof Keys]: z.output<Keys[K]['schema']> }
+
+/** Settings of one process. `databaseUrl` is that of its own role. */
+export interface Config extends Omit<Settings, 'ownerUrl' | 'webUrl' | 'workerUrl'> {
+  databaseUrl: string
+}
+
+/** Thrown where the environment cannot be used; the message names every wrong setting. */
+export class ConfigProblem extends Error {
+  override name = 'ConfigProblem'
+}
+
+export type DatabaseRole = 'owner' | 'web' | 'worker'
+export type Environment = Readonly<Record<string, string | undefined>>
+
+/** Reads and checks the environment for a process of the given role. */
+export function loadConfig(role: DatabaseRole, environment: Environment = process.env): Config {
+  const { ownerUrl, webUrl, workerUrl, ...settings } = parseSettings(environment)
+  const databaseUrl = { owner: ownerUrl, web: webUrl, worker: workerUrl }[role]
+  const problems = settings.mode === 'production' ? productionProblems(settings) : []
+  if (!databaseUrl) problems.push(`${keys[`${role}Url`].env} is not set: ${keys[`${role}Url`].says}`)
+  if (problems.length > 0 || !databaseUrl) throw new ConfigProblem(problems.join('\n'))
+  return { ...settings, databaseUrl }
+}
+
+/** Reads and checks every setting; an empty variable counts as not set. */
+export function parseSettings(environment: Environment): Settings {
+  const shape = Object.fromEntries(Object.values(keys).map(({ env, schema }) => [env, schema]))
+  const given = Object.fromEntries(
+    Object.values(keys).map(({ env }) => [env, environment[env] === '' ? undefined : environment[env]]),
+  )
+  const parsed = z.object(shape).safeParse(given)
+  if (!parsed.success) {
+    const lines = parsed.error.issues.map((issue) => `${issue.path.join('.')}: ${issue.message}`)
+    throw new ConfigProblem(lines.join('\n'))
+  }
+  return Object.fromEntries(
+    Object.entries(keys).map(([name, { env }]) => [name, parsed.data[env]]),
+  ) as unknown as Settings
+}
+
+function productionProblems(
+  settings: Pick<Settings, 'sessionSecret' | 'smtpUrl' | 'appUrl' | 'client'>,
+): string[] {
+  const problems: string[] = []
+  if (settings.sessionSecret === developmentSecret) {
+    problems.push('SESSION_SECRET is not set: in production it must be a secret of your own.')
+  }
+  if (!settings.smtpUrl) problems.push('SMTP_URL is not set: in production mail goes to a real server.')
+  if (!settings.appUrl.startsWith('https://')) {
+    problems.push('APP_URL must begin with https:// in production: passwords and cookies travel to it.')
+  }
+  if (settings.client === 'vite') problems.push('CLIENT=vite is for development only.')
+  return problems
+}
