@@ -1,0 +1,22 @@
+import { describe, expect, it } from 'vitest'
+import { sparkline } from './sparkline-path.ts'
+
+describe('sparkline(preview, width, height)', () => {
+  it('has nothing to draw for fewer than two values', () => {
+    expect(sparkline([], 100, 36)).toBeNull()
+    expect(sparkline([800], 100, 36)).toBeNull()
+  })
+
+  it('runs from edge to edge, the greatest force at the top and zero at the foot', () => {
+    expect(sparkline([0, 1000, 500], 100, 36)?.path).toBe('M0,35L50,1L100,18')
+  })
+
+  it('puts the standing line where the recording begins, unmoved by one odd value', () => {
+    const preview = [500, 500, 0, 500, 1000]
+    expect(sparkline(preview, 100, 36)?.standingY).toBe(18)
+  })
+
+  it('draws a record of nothing but zeros along the foot', () => {
+    expect(sparkline([0, 0], 10, 36)?.path).toBe('M0,35L10,35')
+  })
+})

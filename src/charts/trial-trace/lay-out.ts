@@ -1,0 +1,36 @@
+/** Where the parts of the trace stand, in pixels from the top left. */
+export interface TraceLayout {
+  width: number
+  height: number
+  plot: { left: number; right: number }
+  /** Baseline of the squares; names stand in tiers above it. */
+  eventsY: number
+  force: { top: number; bottom: number }
+  momentum: { top: number; bottom: number }
+  timeAxisY: number
+  narrow: boolean
+}
+
+export const eventTierPx = 15
+
+/** Below this width the drawing is on a phone: thinner margins, lower panels. */
+const narrowPx = 620
+
+export function layOutTrace(width: number, eventTiers: number): TraceLayout {
+  const narrow = width < narrowPx
+  const eventsY = 8 + eventTierPx * Math.max(1, eventTiers) + 8
+  const forceTop = eventsY + 12
+  const forceBottom = forceTop + (narrow ? 220 : 345)
+  const momentumTop = forceBottom + 44
+  const momentumBottom = momentumTop + (narrow ? 80 : 108)
+  return {
+    width,
+    height: momentumBottom + 30,
+    plot: { left: narrow ? 42 : 58, right: width - (narrow ? 62 : 100) },
+    eventsY,
+    force: { top: forceTop, bottom: forceBottom },
+    momentum: { top: momentumTop, bottom: momentumBottom },
+    timeAxisY: momentumBottom + 20,
+    narrow,
+  }
+}

@@ -1,0 +1,51 @@
+import { memo } from 'react'
+import type { TraceLayout } from './lay-out.ts'
+import type { PlacedEvent } from './trace-events.tsx'
+import { TraceAxes } from './trace-axes.tsx'
+import type { TraceData } from './trace-data.ts'
+import { TraceEvents } from './trace-events.tsx'
+import { TraceLines } from './trace-lines.tsx'
+import { PhaseFigures, TracePhases } from './trace-phases.tsx'
+import { phaseShape } from './phase-shapes.ts'
+import type { DrawnScales, TraceView } from './trace-scales.ts'
+
+interface Props {
+  data: TraceData
+  view: TraceView
+  layout: TraceLayout
+  scales: DrawnScales
+  events: PlacedEvent[]
+}
+
+/** All of the trace that does not move with the cursor; drawn once for a width and a view. */
+export const TraceDrawing = memo(function TraceDrawing({ data, view, layout, scales, events }: Props) {
+  const { weight } = data
+  const shapes = weight
+    ? data.phases.map((phase) => phaseShape(phase, data.total, data.sampleRateHz, weight.valueN, scales))
+    : []
+  return (
+    <g>
+      <TraceAxes layout={layout} scales={scales} withMomentum={data.momentum !== null} />
+      <TracePhases shapes={shapes} />
+      <TraceLines data={data} view={view} layout={layout} scales={scales} />
+      <PhaseFigures shapes={shapes} right={layout.plot.right} />
+      <TraceEvents events={events} layout={layout} />
+      <TakeoffMomentum data={data} scales={scales} />
+    </g>
+  )
+})
+
+/** The momentum that the athlete left the ground with, marked where the trace shows it. */
+function TakeoffMomentum({ data, scales }: { data: TraceData; scales: DrawnScales }) {
+  const takeoff = data.events.find((event) => event.key === 'takeoff')
+  if (!takeoff || !data.momentum) return null
+  const sample = Math.min(data.momentum.length - 1, Math.round(takeoff.timeS * data.sampleRateHz))
+  return (
+    <circle
+      cx={scales.time(takeoff.timeS)}
+      cy={scales.momentum(data.momentum[sample]!)}
+      r="4.5"
+      className="fill-tape stroke-ink"
+    />
+  )
+}

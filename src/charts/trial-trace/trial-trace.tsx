@@ -1,0 +1,106 @@
+import { useMemo, useState, type KeyboardEvent, type PointerEvent } from 'react'
+import { useWidth } from '../use-width.ts'
+import { layOutTrace } from './lay-out.ts'
+import { placeEvents } from './place-events.ts'
+import type { TraceData } from './trace-data.ts'
+import { TraceDrawing } from './trace-drawing.tsx'
+import { moveCursor, readTrace } from './trace-reading.ts'
+import { traceScales, type TraceView } from './trace-scales.ts'
+
+/**
+ * Force and momentum of one trial on one time axis. Read by pointer, or by keyboard as a slider: the readout
+ * under the picture says the figures at the cursor.
+ */
+export function TrialTrace({
+  data,
+  view,
+  summaryId,
+}: {
+  data: TraceData
+  view: TraceView
+  summaryId: string
+}) {
+  const { ref, width } = useWidth<HTMLDivElement>(900)
+  const drawing = useMemo(() => draw(data, view, width), [data, view, width])
+  const [cursorS, setCursorS] = useState<number | null>(null)
+  const { layout, scales } = drawing
+  const within = (timeS: number) => Math.min(Math.max(timeS, view.startS), view.endS)
+
+  const onKeyDown = (event: KeyboardEvent) => {
+    const next = moveCursor(event.key, event.shiftKey, cursorS ?? view.startS, data, view)
+    if (next === null) return
+    event.preventDefault()
+    setCursorS(next)
+  }
+  const onPointerMove = (event: PointerEvent<SVGSVGElement>) => {
+    const box = event.currentTarget.getBoundingClientRect()
+    setCursorS(within(scales.time.invert(((event.clientX - box.left) / box.width) * layout.width)))
+  }
+
+  return (
+    <div ref={ref}>
+      <div
+        role="slider"
+        tabIndex={0}
+        aria-label="Read the trace"
+        aria-describedby={summaryId}
+        aria-valuemin={round(view.startS)}
+        aria-valuemax={round(view.endS)}
+        aria-valuenow={round(within(cursorS ?? view.startS))}
+        aria-valuetext={`${within(cursorS ?? view.startS).toFixed(3)} s`}
+        onKeyDown={onKeyDown}
+      >
+        <svg
+          viewBox={`0 0 ${layout.width} ${layout.height}`}
+          className="block w-full touch-pan-y"
+          aria-hidden="true"
+          onPointerMove={onPointerMove}
+        >
+          <TraceDrawing data={data} view={view} layout={layout} scales={scales} events={drawing.events} />
+          {cursorS !== null && (
+            <line
+              x1={scales.time(within(cursorS))}
+              x2={scales.time(within(cursorS))}
+              y1={layout.eventsY}
+              y2={layout.momentum.bottom}
+              className="stroke-ink"
+            />
+          )}
+        </svg>
+      </div>
+      <Readout data={data} timeS={cursorS === null ? null : within(cursorS)} />
+    </div>
+  )
+}
+
+function Readout({ data, timeS }: { data: TraceData; timeS: number | null }) {
+  const reading = timeS === null ? null : readTrace(data, timeS)
+  return (
+    <output aria-live="polite" className="flex min-h-6 flex-wrap gap-x-5 text-small text-ink-2">
+      {reading ? (
+        <>
+          <span className="tabular-nums text-ink">{reading.timeS.toFixed(3)} s</span>
+          {reading.values.map((value) => (
+            <span key={value.label}>
+              {value.label} <span className="tabular-nums text-ink">{value.text}</span>
+            </span>
+          ))}
+        </>
+      ) : (
+        <span>
+          Point at the trace, or focus it and use the arrow keys, to read it. Page keys go from event to
+          event.
+        </span>
+      )}
+    </output>
+  )
+}
+
+function draw(data: TraceData, view: TraceView, width: number) {
+  const flat = layOutTrace(width, 1)
+  const { placed, tiers } = placeEvents(data.events, view, traceScales(data, view, flat).time)
+  const layout = layOutTrace(width, tiers)
+  return { layout, scales: traceScales(data, view, layout), events: placed }
+}
+
+const round = (timeS: number) => Math.round(timeS * 1000) / 1000
