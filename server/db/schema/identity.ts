@@ -21,6 +21,7 @@ import {
   id,
   identity,
   identityRole,
+  isAdmin,
   moment,
   rowVersion,
   webRole,
@@ -123,6 +124,9 @@ export const invitations = identity.table(
   (t) => [
     primaryKey({ columns: [t.clubId, t.id] }),
     uniqueIndex('invitations_token').on(t.tokenHash),
+    uniqueIndex('invitations_open')
+      .on(t.clubId, t.email)
+      .where(sql`accepted_at is null and withdrawn_at is null`),
     foreignKey({
       columns: [t.clubId, t.invitedBy],
       foreignColumns: [memberships.clubId, memberships.personId],
@@ -133,6 +137,13 @@ export const invitations = identity.table(
       to: [webRole],
       using: sql`club_id = ${currentClub}`,
       withCheck: sql`club_id = ${currentClub}`,
+    }),
+    pgPolicy('invitations_admin', {
+      as: 'restrictive',
+      for: 'all',
+      to: [webRole],
+      using: isAdmin,
+      withCheck: isAdmin,
     }),
   ],
 )
@@ -162,6 +173,8 @@ export const signInSessions = identity.table(
   },
   (t) => [
     index('sign_in_sessions_expire').on(t.expire),
+    // For ending a person's other sign-ins; the path is passport's.
+    index('sign_in_sessions_person').on(sql`(${t.sess} -> 'passport' -> 'user' ->> 'personId')`),
     pgPolicy('sign_in_sessions_web', {
       for: 'all',
       to: [webRole, identityRole],

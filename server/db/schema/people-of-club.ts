@@ -21,6 +21,7 @@ import {
   moment,
   ownClubPolicy,
   rowVersion,
+  staffOnlyPolicy,
   staffOrPolicy,
 } from './base.ts'
 import { clubs, memberships } from './identity.ts'
@@ -39,7 +40,7 @@ export const settings = club.table(
     demo: boolean('demo').notNull().default(false),
     version: rowVersion(),
   },
-  () => [ownClubPolicy('settings')],
+  () => [ownClubPolicy('settings'), staffOrPolicy('settings', sql`true`)],
 )
 
 export const squads = club.table(
@@ -58,6 +59,7 @@ export const squads = club.table(
       .on(t.clubId, sql`lower(${t.name})`)
       .where(sql`archived_at is null`),
     ownClubPolicy('squads'),
+    staffOrPolicy('squads', sql`true`),
   ],
 )
 
@@ -104,5 +106,6 @@ export const squadMembers = club.table(
     foreignKey({ columns: [t.clubId, t.squadId], foreignColumns: [squads.clubId, squads.id] }),
     foreignKey({ columns: [t.clubId, t.athleteId], foreignColumns: [athletes.clubId, athletes.id] }),
     ownClubPolicy('squad_members'),
+    staffOnlyPolicy('squad_members'),
   ],
 )

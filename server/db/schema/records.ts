@@ -1,5 +1,16 @@
-import { foreignKey, index, integer, jsonb, primaryKey, text, uuid } from 'drizzle-orm/pg-core'
-import { club, clubId, createdAt, id, moment, ownClubPolicy } from './base.ts'
+import { sql } from 'drizzle-orm'
+import { foreignKey, index, integer, jsonb, pgPolicy, primaryKey, text, uuid } from 'drizzle-orm/pg-core'
+import {
+  club,
+  clubId,
+  createdAt,
+  currentClub,
+  currentPerson,
+  id,
+  moment,
+  ownClubPolicy,
+  webRole,
+} from './base.ts'
 import { bytea, clubs, memberships } from './identity.ts'
 
 /** The first answer to a mutation, given again when the same key comes back. */
@@ -25,7 +36,12 @@ export const idempotencyKeys = club.table(
       columns: [t.clubId, t.personId],
       foreignColumns: [memberships.clubId, memberships.personId],
     }),
-    ownClubPolicy('idempotency_keys'),
+    pgPolicy('idempotency_keys_own', {
+      for: 'all',
+      to: [webRole],
+      using: sql`club_id = ${currentClub} and person_id = ${currentPerson}`,
+      withCheck: sql`club_id = ${currentClub} and person_id = ${currentPerson}`,
+    }),
   ],
 )
 

@@ -99,5 +99,6 @@ export const publications = club.table(
       foreignColumns: [memberships.clubId, memberships.personId],
     }),
     ownClubPolicy('publications'),
+    staffOrPolicy('publications', sql`true`),
   ],
 )
