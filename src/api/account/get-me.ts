@@ -1,0 +1,35 @@
+import { queryOptions, useQuery, useQueryClient, type QueryClient } from '@tanstack/react-query'
+import { getMe, type Me } from '../../../shared/contracts/account.ts'
+import { isApiError } from '../api-error.ts'
+import { call } from '../client.ts'
+
+export const meKey = ['me'] as const
+
+/**
+ * Who is signed in; null for nobody. Once somebody is, a "not signed in" is thrown like any other refusal: the
+ * sign-in has ended under a page that may hold unsaved work, which must not be swept away.
+ */
+export function meQuery(queryClient: QueryClient) {
+  return queryOptions({
+    queryKey: meKey,
+    queryFn: async ({ signal }): Promise<Me | null> => {
+      try {
+        return await call(getMe, {}, { signal })
+      } catch (error) {
+        const nobodyYet = !queryClient.getQueryData<Me | null>(meKey)
+        if (nobodyYet && isApiError(error, 'not-signed-in')) return null
+        throw error
+      }
+    },
+  })
+}
+
+export function useMe() {
+  return useQuery(meQuery(useQueryClient()))
+}
+
+/** After a sign-in or sign-out: what else is cached belongs to who was there before. */
+export function startAs(queryClient: QueryClient, me: Me | null): void {
+  queryClient.removeQueries({ predicate: (query) => query.queryKey[0] !== meKey[0] })
+  queryClient.setQueryData(meKey, me)
+}

@@ -1,0 +1,9 @@
+import { changeClubSettings } from '../../../shared/contracts/clubs.ts'
+import { landingWatchKeys } from '../landing-watch/list-high-landings.ts'
+import { useAct } from '../use-act.ts'
+import { clubSettingsKey } from './get-club-settings.ts'
+
+/** A limit decides what the Landing watch lists. */
+export function useChangeClubSettings() {
+  return useAct(changeClubSettings, { refreshes: [clubSettingsKey, landingWatchKeys.all] })
+}

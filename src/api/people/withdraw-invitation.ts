@@ -1,0 +1,7 @@
+import { withdrawInvitation } from '../../../shared/contracts/people.ts'
+import { useAct } from '../use-act.ts'
+import { peopleKey } from './list-people.ts'
+
+export function useWithdrawInvitation() {
+  return useAct(withdrawInvitation, { refreshes: [peopleKey] })
+}

@@ -1,0 +1,4 @@
+export const squadKeys = {
+  all: ['squads'] as const,
+  list: () => [...squadKeys.all, 'list'] as const,
+}

@@ -1,0 +1,37 @@
+import { Suspense } from 'react'
+import { Navigate, Outlet, ScrollRestoration, useLocation } from 'react-router-dom'
+import { useMe } from '../api/account/get-me.ts'
+import { ErrorState } from '../components/error-state.tsx'
+import { Loading } from '../components/loading.tsx'
+import { signInPathFrom } from '../lib/paths.ts'
+import { SessionEndedDialog } from '../features/account/session-ended-dialog.tsx'
+import { useSessionEnded } from './session-ended.ts'
+import { TopBar } from './top-bar.tsx'
+import { useFocusOnNewPage } from './use-focus-on-new-page.ts'
+
+/** The frame of every signed-in page. */
+export function Shell() {
+  const me = useMe()
+  const location = useLocation()
+  const session = useSessionEnded()
+  const main = useFocusOnNewPage()
+
+  if (me.data === undefined) {
+    if (me.isError)
+      return <ErrorState error={me.error} onRetry={() => void me.refetch()} retrying={me.isFetching} />
+    return <Loading what="your club" />
+  }
+  if (me.data === null) return <Navigate to={signInPathFrom(location)} replace />
+  return (
+    <>
+      <TopBar me={me.data} />
+      <main ref={main} id="page" tabIndex={-1} className="mx-auto max-w-[90rem] px-4 pb-16 md:px-8">
+        <Suspense fallback={<Loading what="the page" />}>
+          <Outlet />
+        </Suspense>
+      </main>
+      <ScrollRestoration />
+      {session.ended && <SessionEndedDialog me={me.data} onSignedIn={session.settle} />}
+    </>
+  )
+}

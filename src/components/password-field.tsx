@@ -1,0 +1,28 @@
+import { useState, type ComponentProps } from 'react'
+import { Button } from './button.tsx'
+import { Field } from './field.tsx'
+
+interface PasswordFieldProps extends ComponentProps<'input'> {
+  label: string
+  hint?: string
+  error?: string | undefined
+  autoComplete: 'current-password' | 'new-password'
+}
+
+/** A password that its owner may look at while typing. */
+export function PasswordField({ label, hint, error, className, ...input }: PasswordFieldProps) {
+  const [shown, setShown] = useState(false)
+  return (
+    <Field label={label} hint={hint} error={error} className={className}>
+      {(control) => (
+        <div className="flex gap-2">
+          <input {...input} {...control} type={shown ? 'text' : 'password'} className="control" />
+          <Button aria-pressed={shown} onClick={() => setShown(!shown)}>
+            {shown ? 'Hide' : 'Show'}
+            <span className="sr-only"> {label.toLowerCase()}</span>
+          </Button>
+        </div>
+      )}
+    </Field>
+  )
+}

@@ -1,0 +1,45 @@
+import { useQueryClient } from '@tanstack/react-query'
+import { lazy, Suspense } from 'react'
+import { useNavigate } from 'react-router-dom'
+import type { Me } from '../../../shared/contracts/account.ts'
+import { startAs } from '../../api/account/get-me.ts'
+import { Dialog } from '../../components/dialog.tsx'
+import { Loading } from '../../components/loading.tsx'
+import { paths } from '../../lib/paths.ts'
+
+// The form brings its validation along; a page that never loses its sign-in never fetches it.
+const SignInForm = lazy(async () => ({ default: (await import('./sign-in-form.tsx')).SignInForm }))
+
+interface SessionEndedDialogProps {
+  me: Me
+  onSignedIn: () => void
+}
+
+/** Over the page, not instead of it: what was typed there is still there after signing in again. */
+export function SessionEndedDialog({ me, onSignedIn }: SessionEndedDialogProps) {
+  const queryClient = useQueryClient()
+  const navigate = useNavigate()
+
+  const leave = () => {
+    onSignedIn()
+    startAs(queryClient, null)
+  }
+  const goOn = (now: Me) => {
+    onSignedIn()
+    if (now.person.id === me.person.id && now.club.id === me.club.id) {
+      void queryClient.invalidateQueries()
+      return
+    }
+    startAs(queryClient, now)
+    void navigate(paths.home)
+  }
+
+  return (
+    <Dialog title="Your sign-in has ended" onClose={leave}>
+      <p className="pb-4">Sign in again to go on from here. What is on this page is kept meanwhile.</p>
+      <Suspense fallback={<Loading what="the form" />}>
+        <SignInForm email={me.person.email} onSignedIn={goOn} />
+      </Suspense>
+    </Dialog>
+  )
+}

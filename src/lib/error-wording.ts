@@ -1,0 +1,117 @@
+import { isApiError, type AnyErrorCode } from '../api/api-error.ts'
+
+export interface ErrorWording {
+  /** What happened, as a heading. */
+  title: string
+  /** What to do about it. */
+  advice: string
+}
+
+/** The client's wording of every code; complete by type, so a new code does not compile without its words. */
+export const errorWording: Record<AnyErrorCode, ErrorWording> = {
+  'invalid-request': {
+    title: 'Something in the form needs another look',
+    advice: 'Correct what is marked and send it again. Nothing was saved.',
+  },
+  'not-signed-in': { title: 'You are not signed in', advice: 'Sign in to go on from here.' },
+  'wrong-credentials': {
+    title: 'E-mail address and password do not match',
+    advice: 'Check both and try again, or set a new password.',
+  },
+  'not-allowed': {
+    title: 'Your role does not allow this',
+    advice: 'If you need it for your work, ask a club admin for the role.',
+  },
+  'not-found': {
+    title: 'There is nothing here',
+    advice:
+      'It may have been moved, or it belongs to somebody else. Check the address, or go back to the start.',
+  },
+  'stale-version': {
+    title: 'Somebody changed this while you had it open',
+    advice: 'Look at what changed, then decide. Nothing of yours was saved yet.',
+  },
+  'idempotency-key-missing': {
+    title: 'The page could not mark this as a single act',
+    advice: 'Load the page again and repeat it. Nothing was saved.',
+  },
+  'idempotency-key-reused': {
+    title: 'This was sent before with other content',
+    advice: 'Load the page again, check what was saved, and repeat what is missing.',
+  },
+  'still-running': {
+    title: 'The first try is still at work',
+    advice: 'Wait a few seconds, then try again. It will not be done twice.',
+  },
+  'too-many-requests': {
+    title: 'Too many tries in a short time',
+    advice: 'Wait a few minutes, then try again.',
+  },
+  'cross-site-request': {
+    title: 'The request seems to come from another site',
+    advice: 'Open Underfoot at its own address and repeat it there. Nothing was saved.',
+  },
+  'token-invalid': {
+    title: 'This link no longer works',
+    advice: 'It was used already, was withdrawn or has run out. Ask for a new one.',
+  },
+  'email-taken': {
+    title: 'Somebody of the club has this e-mail address already',
+    advice: 'Use another address, or change the roles of the person who has it.',
+  },
+  'name-taken': { title: 'This name is taken', advice: 'Choose another name.' },
+  'last-admin': {
+    title: 'The club needs at least one active admin',
+    advice: 'Make somebody else an admin first.',
+  },
+  'already-invited': {
+    title: 'This address has an open invitation',
+    advice: 'Send that invitation again, or withdraw it first.',
+  },
+  'athlete-already-linked': {
+    title: 'Another person already signs in as this athlete',
+    advice: 'Choose another athlete, or deactivate the other person first.',
+  },
+  'file-too-large': { title: 'The file is too large', advice: 'Split the recording, or export it again.' },
+  'file-name-invalid': {
+    title: 'The file’s name cannot be used',
+    advice: 'Rename the file without slashes or control characters and add it again.',
+  },
+  'chunk-invalid': {
+    title: 'A piece of the file arrived damaged',
+    advice: 'Send the file again; what arrived whole is kept.',
+  },
+  'upload-incomplete': {
+    title: 'Parts of the file are missing',
+    advice: 'Send the file again; what arrived is kept, only the rest is sent.',
+  },
+  'upload-finished': {
+    title: 'This upload is finished already',
+    advice: 'Look for the file in the session. To send another, add it as a new file.',
+  },
+  'nothing-to-publish': {
+    title: 'There is nothing to publish yet',
+    advice: 'Put at least one analysed trial on an athlete and leave it included, then publish.',
+  },
+  'athlete-not-in-session': {
+    title: 'This athlete is not in the session',
+    advice: 'Choose an athlete of the session’s squads.',
+  },
+  internal: {
+    title: 'Something went wrong on our side',
+    advice: 'Try again in a moment. If it goes on, tell whoever runs Underfoot at your club.',
+  },
+  'no-answer': {
+    title: 'The server cannot be reached',
+    advice: 'Check the connection, then try again. What you typed is still here.',
+  },
+  'answer-unreadable': {
+    title: 'The answer could not be understood',
+    advice: 'The page may be older than the server. Load it again.',
+  },
+}
+
+/** The words for anything that was thrown. */
+export function wordingOf(error: unknown): ErrorWording {
+  return errorWording[isApiError(error) ? error.code : 'internal']
+}
