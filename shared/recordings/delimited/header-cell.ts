@@ -58,14 +58,13 @@ function bracketedUnit(text: string): { unit: HeadingUnit; rest: string } | null
 function trailingUnit(text: string): { unit: HeadingUnit; rest: string } {
   const whole = unitOf(text)
   if (whole.family !== 'none') return { unit: whole, rest: '' }
-  const slash = /^(.*\S)\s*\/\s*(\S+)$/u.exec(text)
-  const last = slash ?? /^(.*?)(?:[\s_,;:.-]+|(?<=[a-z]))(kN|[A-Za-z%]+)$/u.exec(text)
-  if (!last) return { unit: NO_UNIT, rest: text }
-  const unit = unitOf(last[2] ?? '')
-  // A side or an axis at the end ("Fz l") is no unit, and neither is a lower-case end of a word ("forces").
-  const glued = !slash && /[a-z]$/u.test(last[1] ?? '')
-  if (unit.family === 'none' || (glued && !/^(N|kN|Ms|Sec)$/u.test(last[2] ?? '')))
-    return { unit: NO_UNIT, rest: text }
+  const last =
+    /^(.*\S)\s*\/\s*(\S+)$/u.exec(text) ??
+    /^(.*\S)[\s_,;:.-]+([A-Za-z%]+)$/u.exec(text) ??
+    // Glued on, a unit shows by its capital only: "forceN", but not "forces".
+    /^(.*[a-z])(N|kN|Ms|Sec)$/u.exec(text)
+  const unit = unitOf(last?.[2] ?? '')
+  if (!last || unit.family === 'none') return { unit: NO_UNIT, rest: text }
   return { unit, rest: last[1] ?? '' }
 }
 
