@@ -6,7 +6,7 @@ import { connect, createServer } from 'node:net'
  * A name in Linux's abstract socket space: the kernel drops it with the process, so none is ever stale.
  * @param {string} folder
  * @param {string} purpose
- * @returns {Promise<{ holder?: string }>} the holder's process id where somebody else has it
+ * @returns {Promise<{ holder?: string, release: () => void }>} the holder's process id where somebody else has it
  */
 export async function holdLock(folder, purpose) {
   const { dev, ino } = statSync(folder)
@@ -19,7 +19,7 @@ export async function holdLock(folder, purpose) {
     server.listen(name, () => done(false))
   })
   server.unref()
-  return taken ? { holder: await ask(name) } : {}
+  return taken ? { holder: await ask(name), release: () => undefined } : { release: () => server.close() }
 }
 
 /**

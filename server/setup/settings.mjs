@@ -53,7 +53,7 @@ function ownDatabase(env) {
   if (missing.length === Object.keys(databaseNames).length) return undefined
   if (missing.length > 0) {
     throw new SetUpProblem(
-      `${missing.join(' and ')} not set: a database of your own needs all three addresses, a private one none.`,
+      `${missing.join(' and ')} ${missing.length === 1 ? 'is' : 'are'} not set: a database of your own needs all three addresses, a private one none.`,
     )
   }
   return {
