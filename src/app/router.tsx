@@ -1,6 +1,7 @@
 import type { ComponentType } from 'react'
 import type { RouteObject } from 'react-router-dom'
 import type { Role } from '../../shared/contracts/roles.ts'
+import { Loading } from '../components/loading.tsx'
 import { paths } from '../lib/paths.ts'
 import { HomeRedirect } from './home-redirect.tsx'
 import { NotFoundPage } from './not-found-page.tsx'
@@ -23,11 +24,13 @@ export function only(roles: readonly Role[], children: RouteObject[]): RouteObje
 export const routes: RouteObject[] = [
   {
     element: <SignedOutFrame />,
+    hydrateFallbackElement: <Loading what="the page" />,
     errorElement: <RouteError />,
     children: [page(paths.signIn, async () => (await import('../pages/sign-in.tsx')).SignInPage)],
   },
   {
     element: <Shell />,
+    hydrateFallbackElement: <Loading what="the page" />,
     errorElement: <RouteError />,
     children: [
       { path: paths.home, element: <HomeRedirect /> },

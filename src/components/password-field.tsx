@@ -17,9 +17,11 @@ export function PasswordField({ label, hint, error, className, ...input }: Passw
       {(control) => (
         <div className="flex gap-2">
           <input {...input} {...control} type={shown ? 'text' : 'password'} className="control" />
-          <Button aria-pressed={shown} onClick={() => setShown(!shown)}>
+          <Button
+            aria-label={`${shown ? 'Hide' : 'Show'} ${label.toLowerCase()}`}
+            onClick={() => setShown(!shown)}
+          >
             {shown ? 'Hide' : 'Show'}
-            <span className="sr-only"> {label.toLowerCase()}</span>
           </Button>
         </div>
       )}
