@@ -88,7 +88,8 @@ export const Trial = z.strictObject({
   sessionDate: IsoDate,
   place: z.string().nullable(),
   uploadId: Id,
-  fileName: z.string(),
+  /** null for an athlete: a file's name is the club's affair, and may name others. */
+  fileName: z.string().nullable(),
   athlete: z.strictObject({ id: Id, name: z.string() }).nullable(),
   /** Of this athlete's trials in the session, from 1; null in the Tray. */
   placeInSession: z.strictObject({ n: z.number().int(), of: z.number().int() }).nullable(),
