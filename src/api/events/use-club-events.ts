@@ -1,0 +1,49 @@
+import { useQueryClient, type QueryClient } from '@tanstack/react-query'
+import { useEffect } from 'react'
+import type { ClubEvent } from '../../../shared/contracts/events.ts'
+import { athleteKeys } from '../athletes/athlete-keys.ts'
+import { sessionKeys } from '../sessions/session-keys.ts'
+import { trialKeys } from '../trials/trial-keys.ts'
+import { coalesce } from './coalesce.ts'
+import { openStream, type StreamHandlers } from './open-stream.ts'
+import { shareStream } from './share-stream.ts'
+import { streamHealth } from './stream-health.ts'
+
+/**
+ * Keeps what is on the screen fresh while mounted: reads again what the club's events name, and everything they
+ * could have named whenever the stream opens, for what was missed before.
+ */
+export function useClubEvents(): void {
+  const queryClient = useQueryClient()
+  useEffect(() => {
+    const sharing = {
+      locks: navigator.locks as LockManager | undefined,
+      channel: (name: string) => new BroadcastChannel(name),
+      open: openStream,
+    }
+    const end = shareStream(sharing, clubEventHandlers(queryClient))
+    return () => {
+      end()
+      streamHealth.set(false)
+    }
+  }, [queryClient])
+}
+
+/** What each event makes out of date. */
+export function clubEventHandlers(queryClient: QueryClient): StreamHandlers {
+  const refresh = (...keys: (readonly unknown[])[]) =>
+    coalesce(() => Promise.all(keys.map((queryKey) => queryClient.invalidateQueries({ queryKey }))))
+  const refreshes: Record<ClubEvent['kind'], () => Promise<void>> = {
+    session: refresh(sessionKeys.all, trialKeys.all),
+    athletes: refresh(athleteKeys.all, sessionKeys.all),
+  }
+  return {
+    onOpen: () => {
+      streamHealth.set(true)
+      void refreshes.session()
+      void refreshes.athletes()
+    },
+    onLost: () => streamHealth.set(false),
+    onEvent: (event) => void refreshes[event.kind](),
+  }
+}
