@@ -8,8 +8,8 @@ const UNSEEN = /[\p{Cc}\p{Cf}\p{Cs}\p{Co}\p{Zl}\p{Zp}]/gu
 export function shown(text: string): string {
   const cleaned = text
     .slice(0, 4 * LONGEST)
-    .replace(UNSEEN, '\uFFFD')
     .replace(/\s+/gu, ' ')
+    .replace(UNSEEN, '\uFFFD')
     .trim()
   const characters = Array.from(cleaned)
   return characters.length <= LONGEST ? cleaned : `${characters.slice(0, LONGEST - 1).join('')}…`

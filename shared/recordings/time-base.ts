@@ -14,10 +14,10 @@ export interface TimeBase {
   coarseStepS: number | null
 }
 
-/** A stamp further than this from the even base is no jitter: samples are missing. Ours. */
-const MAX_JITTER = 0.75
-/** A step further than this from whole intervals is no gap of whole samples. Ours. */
+/** A step further than this from the median step, as a fraction of it, is no even step. Ours. */
 const MAX_STEP_ERROR = 0.3
+/** Stamps further than this from the even base, in samples, are more than jitter. Ours. */
+const MAX_JITTER = 0.75
 
 /** Where a row of numbers stands in its file, for errors. */
 export type LineOfRow = (row: number) => number
@@ -52,10 +52,20 @@ function settledRate(stepS: number, intervals: number, error: number): number {
   return Math.abs(rate - whole) <= tolerance * rate ? whole : rate
 }
 
-function medianStep(stampsS: Float64Array): number {
+function stepsOf(stampsS: Float64Array): Float64Array {
   const steps = new Float64Array(stampsS.length - 1)
   for (let i = 0; i < steps.length; i++) steps[i] = (stampsS[i + 1] ?? 0) - (stampsS[i] ?? 0)
-  return steps.sort()[steps.length >> 1] ?? 0
+  return steps
+}
+
+/** The median step, and the share of steps that are not it. */
+function judgeSteps(steps: Float64Array): { median: number; oddShare: number } {
+  const median = steps.slice().sort()[steps.length >> 1] ?? 0
+  const odd = steps.reduce(
+    (count, step) => count + (Math.abs(step - median) > MAX_STEP_ERROR * median ? 1 : 0),
+    0,
+  )
+  return { median, oddShare: median > 0 ? odd / steps.length : 1 }
 }
 
 function uneven(row: number, stampsS: Float64Array, lineOf: LineOfRow): ReadFault {
@@ -71,17 +81,12 @@ function uneven(row: number, stampsS: Float64Array, lineOf: LineOfRow): ReadFaul
 }
 
 /** Places rows with missing samples between them. */
-function bridgeGaps(stampsS: Float64Array, lineOf: LineOfRow): Int32Array {
-  const step = medianStep(stampsS)
+function bridgeGaps(stampsS: Float64Array, step: number, lineOf: LineOfRow): Int32Array {
   const samples = new Int32Array(stampsS.length)
   for (let i = 1; i < stampsS.length; i++) {
     const intervals = ((stampsS[i] ?? 0) - (stampsS[i - 1] ?? 0)) / step
-    const whole = Math.round(intervals)
-    const bridged =
-      step > 0 &&
-      whole >= 1 &&
-      Math.abs(intervals - whole) <= MAX_STEP_ERROR &&
-      (whole - 1) * step <= MAX_GAP_S
+    const whole = Math.max(1, Math.round(intervals))
+    const bridged = intervals > MAX_STEP_ERROR && (whole - 1) * step <= MAX_GAP_S
     if (!bridged) throw uneven(i, stampsS, lineOf)
     samples[i] = (samples[i - 1] ?? 0) + whole
   }
@@ -95,7 +100,8 @@ function bridgeGaps(stampsS: Float64Array, lineOf: LineOfRow): Int32Array {
 
 /**
  * The even time base of a column of time stamps in seconds (no blanks, at least two). The rate comes from the
- * whole length, which rounding of the stamps hardly touches; the median step serves to find missing samples.
+ * whole length, which rounding of the stamps hardly touches. A few odd steps are missing samples; many of them,
+ * with no stamp far from its place, are rounding or jitter.
  * @throws ReadFault `uneven-time` where stamps go backwards, stand still or jump too far
  */
 export function timeBaseOf(stampsS: Float64Array, lineOf: LineOfRow): TimeBase {
@@ -103,21 +109,23 @@ export function timeBaseOf(stampsS: Float64Array, lineOf: LineOfRow): TimeBase {
   const span = (stampsS[rows - 1] ?? 0) - (stampsS[0] ?? 0)
   if (!(span > 0)) throw uneven(rows - 1, stampsS, lineOf)
   const evenStep = span / (rows - 1)
+  const { median, oddShare } = judgeSteps(stepsOf(stampsS))
   const evenError = distanceFromEven(stampsS, evenStep, null)
   const resolution = smallestStep(stampsS)
-  const isCoarse = resolution > 1.5 * evenStep
-  if (evenError <= (isCoarse ? Math.max(MAX_JITTER, (1.1 * resolution) / evenStep) : MAX_JITTER)) {
+  const allowed = Math.max(MAX_JITTER, (1.1 * resolution) / evenStep)
+  if (oddShare === 0 || (oddShare > MAX_FILLED_SHARE && evenError <= allowed)) {
     return {
       sampleRateHz: settledRate(evenStep, rows - 1, evenError),
       error: evenError,
       length: rows,
       sampleOfRow: null,
-      coarseStepS: isCoarse ? resolution : null,
+      coarseStepS: resolution > 1.05 * evenStep ? resolution : null,
     }
   }
-  const sampleOfRow = bridgeGaps(stampsS, lineOf)
+  const sampleOfRow = bridgeGaps(stampsS, median, lineOf)
   const length = (sampleOfRow[rows - 1] ?? 0) + 1
   const step = span / (length - 1)
   const error = distanceFromEven(stampsS, step, sampleOfRow)
+  if (error > MAX_JITTER) throw new ReadFault('uneven-time', 'The time stamps lie on no even time base.')
   return { sampleRateHz: settledRate(step, length - 1, error), error, length, sampleOfRow, coarseStepS: null }
 }
