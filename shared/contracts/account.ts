@@ -35,7 +35,10 @@ export const signOut = endpoint({
 })
 export const getMe = endpoint({ method: 'GET', path: '/api/me', access: 'signed-in', response: Me })
 
-export const ChangePasswordForm = z.strictObject({ current: z.string().min(1).max(200), next: Password })
+export const ChangePasswordForm = z.strictObject({
+  current: z.string().min(1, 'Give your password').max(200),
+  next: Password,
+})
 export const changePassword = endpoint({
   method: 'POST',
   path: '/api/me/password',

@@ -4,7 +4,9 @@ import { Version } from './fields.ts'
 import { limits } from './limits.ts'
 import { Protocol } from './tests.ts'
 
-const Limit = z.number().min(limits.landingPeakBodyWeights.min).max(limits.landingPeakBodyWeights.max)
+const { min: lowest, max: highest } = limits.landingPeakBodyWeights
+const limitSentence = `Give a limit of ${lowest} to ${highest} body weights, or leave it empty`
+const Limit = z.number(limitSentence).min(lowest, limitSentence).max(highest, limitSentence)
 
 export const ClubSettings = z.strictObject({
   /** Peak landing force in body weights by protocol; none is set until the club sets one. */

@@ -4,12 +4,22 @@ import { limits } from './limits.ts'
 /** Field schemas that several nouns share. */
 export const Id = z.uuid()
 export const Version = z.number().int().positive()
-export const IsoDate = z.iso.date()
+export const IsoDate = z.iso.date('Give a date')
 export const Moment = z.iso.datetime()
-export const Email = z.email('Give an e-mail address').max(limits.emailCharacters).trim().toLowerCase()
-export const Name = z.string().trim().min(1, 'Give a name').max(limits.nameCharacters)
+export const Email = z
+  .email('Give an e-mail address')
+  .max(limits.emailCharacters, 'This address is too long')
+  .trim()
+  .toLowerCase()
+export const Name = z
+  .string()
+  .trim()
+  .min(1, 'Give a name')
+  .max(limits.nameCharacters, `Use at most ${limits.nameCharacters} characters`)
 export const Password = z
   .string()
   .min(limits.passwordMin, `Use at least ${limits.passwordMin} characters`)
-  .max(limits.passwordMax)
-export const BodyMassKg = z.number().min(limits.bodyMassKg.min).max(limits.bodyMassKg.max)
+  .max(limits.passwordMax, `Use at most ${limits.passwordMax} characters`)
+const { min: lightest, max: heaviest } = limits.bodyMassKg
+const massSentence = `Give a body mass of ${lightest} to ${heaviest} kg`
+export const BodyMassKg = z.number(massSentence).min(lightest, massSentence).max(heaviest, massSentence)

@@ -72,7 +72,7 @@ export const changePerson = endpoint({
   params: z.strictObject({ personId: Id }),
   body: z.strictObject({
     version: Version,
-    roles: z.array(Role).min(1).optional(),
+    roles: z.array(Role).min(1, 'Choose at least one role').optional(),
     active: z.boolean().optional(),
   }),
   response: Person,
