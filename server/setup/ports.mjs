@@ -1,4 +1,5 @@
 import { createServer } from 'node:net'
+import { SetUpProblem } from './problem.mjs'
 
 /** A loopback port that nothing listens on. */
 export async function freePort() {
@@ -10,11 +11,23 @@ export async function freePort() {
 }
 
 /**
+ * Stops where a port that the product needs is somebody else's.
+ * @param {number} port
+ */
+export async function refuseTakenPort(port) {
+  if (await portIsFree(port)) return
+  const other = port < 65535 ? port + 1 : port - 1
+  throw new SetUpProblem(
+    `Port ${port} is taken by another program: stop it, or choose another port, as in PORT=${other} npm start.`,
+  )
+}
+
+/**
  * Whether a server may listen on a port, on all addresses.
  * @param {number} port
  * @returns {Promise<boolean>}
  */
-export function portIsFree(port) {
+function portIsFree(port) {
   return new Promise((done) => {
     const server = createServer()
     server.once('error', () => done(false))

@@ -1,9 +1,8 @@
 import { ensureClient } from './client-build.mjs'
 import { openDatabase } from './database.mjs'
 import { ensureDemo } from './demo.mjs'
-import { endLeftovers } from './leftovers.mjs'
 import { migrate } from './migrations.mjs'
-import { freePort, portIsFree } from './ports.mjs'
+import { freePort } from './ports.mjs'
 import { SetUpProblem, endWith, step } from './problem.mjs'
 import { keepRunning } from './processes.mjs'
 import { untilReady } from './readiness.mjs'
@@ -18,8 +17,6 @@ import { welcome } from './welcome.mjs'
  * @param {{ reload: boolean }} options with `reload`, what changes in the sources shows without a new start
  */
 export async function startProduct(settings, { reload }) {
-  await endLeftovers()
-  await refuseTakenPort(settings.port)
   const urls = await openDatabase(settings)
   step('Bringing the database up to date')
   await migrate(urls.owner)
@@ -35,14 +32,6 @@ export async function startProduct(settings, { reload }) {
   for (const service of services) await onStop(keepRunning(service, giveUp).stop)
   await untilReady(settings.port)
   console.log(welcome(settings, mail?.inboxPort, ''))
-}
-
-/** @param {number} port */
-async function refuseTakenPort(port) {
-  if (await portIsFree(port)) return
-  throw new SetUpProblem(
-    `Port ${port} is taken by another program: stop it, or choose another port, as in PORT=${port + 1} npm start.`,
-  )
 }
 
 /**

@@ -1,6 +1,8 @@
+import { endLeftovers } from './leftovers.mjs'
 import { holdLock } from './lock.mjs'
 import { checkNode, ensurePackages } from './packages.mjs'
 import { localFolder } from './paths.mjs'
+import { refuseTakenPort } from './ports.mjs'
 import { SetUpProblem, endWith } from './problem.mjs'
 import { readSettings } from './settings.mjs'
 import { isStopping, stopAll, stopWhenAsked } from './stopping.mjs'
@@ -12,6 +14,8 @@ async function start() {
   const { holder } = await holdLock(localFolder(), 'start')
   if (holder) throw new SetUpProblem(`Underfoot already runs from this folder, as process ${holder}.`)
   stopWhenAsked({ exitCode: 0 })
+  await endLeftovers()
+  await refuseTakenPort(settings.port)
   await ensurePackages()
   // Only now are the packages there that the rest is built on.
   const { startProduct } = await import('./product.mjs')
