@@ -98,8 +98,9 @@ async function launch(cluster, end) {
   const port = await freePort()
   const settings = Object.entries({ ...fixedSettings, ...cluster.settings, port: String(port) })
   const flags = settings.flatMap(([name, value]) => ['-c', `${name}=${value}`])
-  const server = asServer(cluster, 'postgres', ['-D', cluster.folder, ...flags])
-  const [program = '', ...args] = [...endsWithStarter('INT'), ...server]
+  // The kernel forgets whom to signal when a process changes its user, so that comes after.
+  const server = asServer(cluster, 'postgres', ['-D', cluster.folder, ...flags], endsWithStarter('INT'))
+  const [program = '', ...args] = server
   const log = openSync(cluster.log, 'a')
   // A session of its own: Ctrl-C in the terminal must not stop the database before the product.
   const child = spawn(program, args, { cwd: '/', detached: true, stdio: ['ignore', log, log] })
@@ -136,8 +137,9 @@ function startProblem(cluster) {
  * @param {Cluster} cluster
  * @param {string} program
  * @param {string[]} args
+ * @param {string[]} [before] words before the program
  */
-function asServer(cluster, program, args) {
+function asServer(cluster, program, args, before = []) {
   const version = isMade(cluster)
     ? Number(readFileSync(join(cluster.folder, 'PG_VERSION'), 'utf8'))
     : undefined
@@ -148,5 +150,5 @@ function asServer(cluster, program, args) {
       `The database in ${cluster.folder} needs PostgreSQL ${needed}, which is not installed.`,
     )
   }
-  return [...cluster.user.prefix, join(folder, program), ...args]
+  return [...cluster.user.prefix, ...before, join(folder, program), ...args]
 }
