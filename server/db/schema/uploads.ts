@@ -5,14 +5,36 @@ import {
   index,
   integer,
   jsonb,
+  pgPolicy,
   primaryKey,
   text,
   uniqueIndex,
   uuid,
 } from 'drizzle-orm/pg-core'
-import { club, clubId, createdAt, id, moment, ownClubPolicy, rowVersion, staffOnlyPolicy } from './base.ts'
+import {
+  club,
+  clubId,
+  createdAt,
+  id,
+  moment,
+  ownClubPolicy,
+  rowVersion,
+  staffOnlyPolicy,
+  webRole,
+} from './base.ts'
+import type { Note } from '../../../shared/mechanics/types.ts'
+import type { ColumnMap, FileFormat } from '../../../shared/recordings/result.ts'
 import { bytea, clubs, memberships } from './identity.ts'
 import { sessions } from './sessions.ts'
+
+/** An original is never deleted; bytes that came twice are, before they count as a file. */
+const onlyUnfinishedDeleted = (table: string, unfinished: ReturnType<typeof sql>) =>
+  pgPolicy(`${table}_only_unfinished_deleted`, {
+    as: 'restrictive',
+    for: 'delete',
+    to: [webRole],
+    using: unfinished,
+  })
 
 /** The bytes of an original, finished once with the SHA-256 of the whole; the same bytes are one file a club. */
 export const files = club.table(
@@ -31,6 +53,7 @@ export const files = club.table(
       .on(t.clubId, t.sha256)
       .where(sql`sha256 is not null`),
     ownClubPolicy('files'),
+    onlyUnfinishedDeleted('files', sql`finished_at is null`),
     staffOnlyPolicy('files'),
   ],
 )
@@ -48,6 +71,10 @@ export const fileChunks = club.table(
     primaryKey({ columns: [t.clubId, t.fileId, t.n] }),
     foreignKey({ columns: [t.clubId, t.fileId], foreignColumns: [files.clubId, files.id] }),
     ownClubPolicy('file_chunks'),
+    onlyUnfinishedDeleted(
+      'file_chunks',
+      sql`exists (select 1 from club.files f where f.club_id = file_chunks.club_id and f.id = file_chunks.file_id and f.finished_at is null)`,
+    ),
     staffOnlyPolicy('file_chunks'),
   ],
 )
@@ -66,7 +93,7 @@ export const uploads = club.table(
     /** { code, sentence, remedy, line?, column?, seen? } where the file could not be read. */
     error: jsonb('error').$type<ReadError | null>(),
     /** How it was read: format, column map, rate, notes. */
-    reading: jsonb('reading').$type<unknown>(),
+    reading: jsonb('reading').$type<Reading | null>(),
     /** The upload that brought the same bytes first. */
     duplicateOf: uuid('duplicate_of'),
     uploadedBy: uuid('uploaded_by').notNull(),
@@ -96,4 +123,12 @@ export interface ReadError {
   line?: number
   column?: number
   seen?: string
+}
+
+/** What was assumed, corrected or left out, from the file's announcement on; the rest once it was read. */
+export interface Reading {
+  notes: Note[]
+  format?: FileFormat
+  columnMap?: ColumnMap
+  sampleRateHz?: number
 }
