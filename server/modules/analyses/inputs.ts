@@ -1,0 +1,55 @@
+import { createHash } from 'node:crypto'
+import { defaultSettings } from '../../../shared/mechanics/settings.ts'
+import type { AnalyseOptions, ForceChannel } from '../../../shared/mechanics/types.ts'
+import { standardGravity } from '../../../shared/units/gravity.ts'
+import type { AnalysisInputs } from '../../db/schema/trials.ts'
+
+/**
+ * Expanded relative uncertainty (k = 2) of a plate's calibration where nothing is known of the plate: 0.5 %, as
+ * makers commonly state (common practice).
+ */
+const unknownPlateU = 0.005
+
+/** What an analysis is made from besides the samples. */
+export interface TrialToAnalyse {
+  test: AnalysisInputs['test']
+  recordedMassKg: number | null
+  channels: readonly string[]
+}
+
+export function inputsOf({ test, recordedMassKg, channels }: TrialToAnalyse): AnalysisInputs {
+  return {
+    test,
+    recordedMassKg,
+    gravity: standardGravity,
+    calibrationU: Object.fromEntries(channels.map((channel) => [channel, unknownPlateU])),
+    settings: `default-${defaultSettings.version}`,
+  }
+}
+
+/** SHA-256 over the inputs and the stored samples: the same again is the same analysis. */
+export function hashInputs(inputs: AnalysisInputs, samples: Uint8Array): Buffer {
+  return createHash('sha256')
+    .update(JSON.stringify(sorted(inputs)))
+    .update(samples)
+    .digest()
+}
+
+export function engineOptions(inputs: AnalysisInputs): AnalyseOptions {
+  return {
+    test: inputs.test as AnalyseOptions['test'],
+    ...(inputs.recordedMassKg === null ? {} : { recordedMassKg: inputs.recordedMassKg }),
+    gravity: inputs.gravity,
+    calibrationU: inputs.calibrationU as Partial<Record<ForceChannel, number>>,
+  }
+}
+
+/** The same value with its keys in one order, whatever order it was built or read back in. */
+function sorted(value: unknown): unknown {
+  if (typeof value !== 'object' || value === null || Array.isArray(value)) return value
+  return Object.fromEntries(
+    Object.entries(value)
+      .sort(([a], [b]) => (a < b ? -1 : 1))
+      .map(([key, inner]) => [key, sorted(inner)]),
+  )
+}

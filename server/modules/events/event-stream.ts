@@ -1,0 +1,51 @@
+import type { Request, Response } from 'express'
+import type { ClubEvent } from '../../../shared/contracts/events.ts'
+import type { Caller } from '../../http/caller.ts'
+import type { ClubEvents } from './club-events.ts'
+import type { Notice } from './notify.ts'
+
+/** Notices within this time are told together: forty files at once are one refetch, not forty. */
+const gatherMs = 100
+/** A sign of life, below the patience of usual proxies. */
+const heartbeatMs = 20_000
+/** A stream ends after this time and the browser asks anew: whoever lost their place hears no more. */
+const longestMs = 10 * 60_000
+
+/** Answers with server-sent events: ids of what changed in the caller's club, for as long as the browser listens. */
+export function streamEvents(events: ClubEvents, ctx: Caller, req: Request, res: Response): void {
+  res.writeHead(200, {
+    'Content-Type': 'text/event-stream',
+    // `no-transform` keeps the compression, which would hold events back, away.
+    'Cache-Control': 'no-store, no-transform',
+    'X-Accel-Buffering': 'no',
+  })
+  const gathered = new Map<string, ClubEvent>()
+  let gathering: NodeJS.Timeout | undefined
+  const flush = () => {
+    gathering = undefined
+    for (const event of gathered.values()) res.write(`data: ${JSON.stringify(event)}\n\n`)
+    gathered.clear()
+  }
+  const add = ({ kind, id }: ClubEvent) => {
+    gathered.set(`${kind}/${id}`, { kind, id })
+    gathering ??= setTimeout(flush, gatherMs)
+  }
+  const stopListening = events.listen({
+    onNotice: (notice) => mayHear(ctx, notice) && add(notice),
+    // After a gap the browser is sent to ask anew, and refetches everything on its screen.
+    onGap: () => res.end(),
+  })
+  res.write('retry: 1000\n\n')
+  const heartbeat = setInterval(() => res.write(':\n\n'), heartbeatMs)
+  const longest = setTimeout(() => res.end(), longestMs)
+  res.on('close', () => {
+    stopListening()
+    clearInterval(heartbeat)
+    clearTimeout(longest)
+    clearTimeout(gathering)
+  })
+  req.socket.setNoDelay(true)
+}
+
+const mayHear = (ctx: Caller, { clubId, audience }: Notice) =>
+  clubId === ctx.clubId && (audience === 'everybody' || ctx.capabilities.includes('staff'))

@@ -1,0 +1,16 @@
+import { getEvents } from '../../../shared/contracts/events.ts'
+import { handled, implement, type Route } from '../../http/implement.ts'
+import { type ClubEvents, createClubEvents } from './club-events.ts'
+import { streamEvents } from './event-stream.ts'
+
+/** One connection for events a process, whichever of its requests asks first. */
+const eventsOf = new WeakMap<object, ClubEvents>()
+
+export const eventRoutes: Route[] = [
+  implement(getEvents, ({ deps, ctx, req, res }) => {
+    const events = eventsOf.get(deps) ?? createClubEvents(deps)
+    eventsOf.set(deps, events)
+    streamEvents(events, ctx, req, res)
+    return Promise.resolve(handled)
+  }),
+]

@@ -1,0 +1,165 @@
+import { and, asc, count, desc, eq, inArray, isNull, sql, type SQL } from 'drizzle-orm'
+import type { SessionSummary } from '../../../shared/contracts/sessions.ts'
+import type { Tx } from '../../db/database.ts'
+import { athletes, squadMembers, squads } from '../../db/schema/people-of-club.ts'
+import { sessionAthletes, sessions, sessionSquads } from '../../db/schema/sessions.ts'
+import { trials } from '../../db/schema/trials.ts'
+
+export const ofSession = (clubId: string, sessionId: string) =>
+  and(eq(sessions.clubId, clubId), eq(sessions.id, sessionId))
+
+const trialsWhere = (condition?: SQL) => sql<number>`(select count(*)::int from ${trials}
+  where ${trials.clubId} = ${sessions.clubId} and ${trials.sessionId} = ${sessions.id}
+  ${condition ? sql`and ${condition}` : sql``})`
+
+const summary = {
+  id: sessions.id,
+  date: sessions.date,
+  title: sessions.title,
+  place: sessions.place,
+  protocol: sql<SessionSummary['protocol']>`${sessions.protocol}`,
+  squadNames: sql<string[]>`array(
+    select ${squads.name} from ${sessionSquads} join ${squads}
+      on ${squads.clubId} = ${sessionSquads.clubId} and ${squads.id} = ${sessionSquads.squadId}
+    where ${sessionSquads.clubId} = ${sessions.clubId} and ${sessionSquads.sessionId} = ${sessions.id}
+    order by ${squads.name})`,
+  athletes: sql<number>`(select count(*)::int from ${sessionAthletes}
+    where ${sessionAthletes.clubId} = ${sessions.clubId} and ${sessionAthletes.sessionId} = ${sessions.id})`,
+  trials: trialsWhere(),
+  inTray: trialsWhere(sql`${trials.athleteId} is null and ${trials.setAsideAt} is null`),
+  publishedAt: sessions.publishedAt,
+  version: sessions.version,
+}
+
+const asSummary = (
+  row: Omit<SessionSummary, 'publishedAt'> & { publishedAt: Date | null },
+): SessionSummary => ({
+  ...row,
+  publishedAt: row.publishedAt?.toISOString() ?? null,
+})
+
+export async function findSummary(tx: Tx, clubId: string, sessionId: string): Promise<SessionSummary | null> {
+  const [row] = await tx.select(summary).from(sessions).where(ofSession(clubId, sessionId))
+  return row ? asSummary(row) : null
+}
+
+export interface SessionFilter {
+  clubId: string
+  search?: string
+  squadId?: string
+}
+
+/** Sessions whose title, place, date or squads hold the searched words, newest first. */
+function filtered({ clubId, search, squadId }: SessionFilter): SQL | undefined {
+  const ofSquads = (condition: SQL) => sql`exists (
+    select 1 from ${sessionSquads} join ${squads}
+      on ${squads.clubId} = ${sessionSquads.clubId} and ${squads.id} = ${sessionSquads.squadId}
+    where ${sessionSquads.clubId} = ${sessions.clubId} and ${sessionSquads.sessionId} = ${sessions.id}
+      and ${condition})`
+  const words = search?.trim().split(/\s+/u).filter(Boolean) ?? []
+  const holds = (word: string) => {
+    const pattern = `%${word.replace(/[\\%_]/gu, '\\$&')}%`
+    return sql`(${sessions.title} ilike ${pattern} or ${sessions.place} ilike ${pattern}
+      or ${sessions.date}::text like ${pattern} or ${ofSquads(sql`${squads.name} ilike ${pattern}`)})`
+  }
+  return and(
+    eq(sessions.clubId, clubId),
+    squadId ? ofSquads(sql`${squads.id} = ${squadId}`) : undefined,
+    ...words.map(holds),
+  )
+}
+
+export async function findSummaries(
+  tx: Tx,
+  filter: SessionFilter,
+  page: { offset: number; limit: number },
+): Promise<SessionSummary[]> {
+  const rows = await tx
+    .select(summary)
+    .from(sessions)
+    .where(filtered(filter))
+    .orderBy(desc(sessions.date), desc(sessions.createdAt), asc(sessions.id))
+    .limit(page.limit)
+    .offset(page.offset)
+  return rows.map(asSummary)
+}
+
+export async function countSessions(tx: Tx, filter: SessionFilter): Promise<number> {
+  const [{ n }] = await tx.select({ n: count() }).from(sessions).where(filtered(filter))
+  return n
+}
+
+export type SessionRow = typeof sessions.$inferSelect
+
+export async function findSession(tx: Tx, clubId: string, sessionId: string): Promise<SessionRow | null> {
+  const [row] = await tx.select().from(sessions).where(ofSession(clubId, sessionId))
+  return row ?? null
+}
+
+/** How many of these squads the club has and has not archived. */
+export async function countSquads(tx: Tx, clubId: string, squadIds: string[]): Promise<number> {
+  const [{ n }] = await tx
+    .select({ n: count() })
+    .from(squads)
+    .where(and(eq(squads.clubId, clubId), inArray(squads.id, squadIds), isNull(squads.archivedAt)))
+  return n
+}
+
+export type NewSession = Pick<
+  typeof sessions.$inferInsert,
+  'clubId' | 'date' | 'title' | 'place' | 'note' | 'protocol' | 'createdBy'
+>
+
+/** A session with all athletes that its squads have today. */
+export async function insertSession(tx: Tx, session: NewSession, squadIds: string[]): Promise<string> {
+  const { clubId } = session
+  const [{ id: sessionId }] = await tx.insert(sessions).values(session).returning({ id: sessions.id })
+  await tx.insert(sessionSquads).values(squadIds.map((squadId) => ({ clubId, sessionId, squadId })))
+  const members = await tx
+    .selectDistinct({ athleteId: athletes.id })
+    .from(squadMembers)
+    .innerJoin(
+      athletes,
+      and(eq(athletes.clubId, squadMembers.clubId), eq(athletes.id, squadMembers.athleteId)),
+    )
+    .where(
+      and(
+        eq(squadMembers.clubId, clubId),
+        inArray(squadMembers.squadId, squadIds),
+        isNull(athletes.archivedAt),
+      ),
+    )
+  if (members.length > 0) {
+    await tx
+      .insert(sessionAthletes)
+      .values(members.map(({ athleteId }) => ({ clubId, sessionId, athleteId })))
+  }
+  return sessionId
+}
+
+/** Changes the session if it still is of that version; false if not. */
+export async function updateSession(
+  tx: Tx,
+  { clubId, sessionId, version }: { clubId: string; sessionId: string; version: number },
+  change: Partial<Pick<SessionRow, 'date' | 'title' | 'place' | 'note' | 'publishedAt'>>,
+): Promise<boolean> {
+  const changed = await tx
+    .update(sessions)
+    .set({ ...change, version: sql`${sessions.version} + 1` })
+    .where(and(ofSession(clubId, sessionId), eq(sessions.version, version)))
+    .returning({ id: sessions.id })
+  return changed.length > 0
+}
+
+/** The athletes of a session by name. */
+export function athletesOfSession(tx: Tx, clubId: string, sessionId: string) {
+  return tx
+    .select({ id: athletes.id, name: athletes.name, nameKey: athletes.nameKey })
+    .from(sessionAthletes)
+    .innerJoin(
+      athletes,
+      and(eq(athletes.clubId, sessionAthletes.clubId), eq(athletes.id, sessionAthletes.athleteId)),
+    )
+    .where(and(eq(sessionAthletes.clubId, clubId), eq(sessionAthletes.sessionId, sessionId)))
+    .orderBy(asc(athletes.nameKey), asc(athletes.id))
+}

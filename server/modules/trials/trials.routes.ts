@@ -1,0 +1,12 @@
+import { changeTrial, getSamples, getTrial } from '../../../shared/contracts/trials.ts'
+import { handled, implement, type Route } from '../../http/implement.ts'
+import * as trials from './trials.service.ts'
+
+export const trialRoutes: Route[] = [
+  implement(getTrial, ({ deps, ctx, params }) => trials.getTrial(deps, ctx, params.trialId)),
+  implement(getSamples, async ({ deps, ctx, params, res }) => {
+    res.type('application/octet-stream').send(await trials.getSamples(deps, ctx, params.trialId))
+    return handled
+  }),
+  implement(changeTrial, ({ deps, ctx, params, body }) => trials.change(deps, ctx, params.trialId, body)),
+]

@@ -1,0 +1,59 @@
+import { limits } from '../../../shared/contracts/limits.ts'
+import type { ReadError } from '../../db/schema/uploads.ts'
+import { namedError } from '../../http/errors.ts'
+import type { ThreadEnded } from '../../jobs/threads/threads.ts'
+
+const MIB = 1024 * 1024
+
+export const fileTooLarge = (sizeBytes: number) =>
+  namedError(
+    'file-too-large',
+    413,
+    // Rounded up, so that a file just over the limit is never said to be of the limit's size.
+    `The file has ${Math.ceil((sizeBytes / MIB) * 10) / 10} MiB, and ${limits.fileBytes / MIB} MiB is the most that is taken. Split the recording and upload its parts.`,
+  )
+
+export const fileNameInvalid = (fileName: string) =>
+  namedError(
+    'file-name-invalid',
+    400,
+    `“${fileName.slice(0, 40)}” holds no file name. Give the file a name and upload it again.`,
+  )
+
+export const chunkInvalid = (sentence: string, status = 400) => namedError('chunk-invalid', status, sentence)
+
+export const uploadFinished = () =>
+  namedError('upload-finished', 409, 'This file was finished already; nothing can be added to it.')
+
+export const uploadIncomplete = (missing: number[]) =>
+  namedError(
+    'upload-incomplete',
+    409,
+    'Parts of this file have not arrived yet. Send them and finish it then.',
+    {
+      missing,
+    },
+  )
+
+const tryElse = 'Export the recording again, or one jump a file, and upload that. The file itself is kept.'
+
+/** The thread that read the file was ended: by its time limit, or by its memory limit. */
+export const readingEnded = (ended: ThreadEnded): ReadError =>
+  ended.reason === 'time'
+    ? {
+        code: 'reading-too-long',
+        sentence: 'The file took too long to read, and reading was stopped.',
+        remedy: tryElse,
+      }
+    : {
+        code: 'reading-too-much-memory',
+        sentence: 'The file needed more memory to read than there is.',
+        remedy: tryElse,
+      }
+
+/** Every try to read the file ended badly, without saying why. */
+export const readingFailed = (): ReadError => ({
+  code: 'reading-failed',
+  sentence: 'The file could not be read after several tries; the fault is on our side.',
+  remedy: 'Upload it again later. The file itself is kept.',
+})

@@ -1,0 +1,63 @@
+import type { Tx } from '../../db/database.ts'
+import { workerContext } from '../../db/database.ts'
+import type { ReadError } from '../../db/schema/uploads.ts'
+import type { Deps } from '../../deps.ts'
+import { defineJob, type JobDeps } from '../../jobs/define-job.ts'
+import type { FileRead } from '../../jobs/threads/tasks.ts'
+import { ThreadEnded } from '../../jobs/threads/threads.ts'
+import { notify } from '../events/notify.ts'
+import { addTrial } from '../trials/add-trial.service.ts'
+import { wholeFile } from './chunks.ts'
+import { readingEnded, readingFailed } from './uploads.errors.ts'
+import { advance, findUpload, type Step, type UploadRow } from './uploads.queries.ts'
+
+/**
+ * Reads a file in a thread, and makes its trial or says why there is none. Run twice, it finds the upload out of
+ * `waiting` and leaves everything as it is.
+ */
+export const readUploadJob = defineJob('read-upload', async (deps, { clubId, uploadId }) => {
+  const ctx = workerContext(clubId)
+  const upload = await deps.db.inClub(ctx, (tx) => findUpload(tx, clubId, uploadId))
+  if (upload?.state !== 'waiting') return
+  const bytes = await wholeFile(deps, ctx, upload)
+  const result = await readInThread(deps, upload, bytes)
+  await deps.db.inClub(ctx, async (tx) => {
+    if (result.ok) await keepTrial(tx, clubId, upload, result)
+    else await settle(tx, clubId, upload, { state: 'refused', error: result.error })
+  })
+})
+
+/** Every try ended badly: the upload says so, instead of waiting for ever. */
+export const giveUpReadingJob = defineJob('give-up-reading', (deps, { clubId, uploadId }) =>
+  refuse(deps, clubId, uploadId, readingFailed()),
+)
+
+async function refuse(deps: Deps, clubId: string, uploadId: string, error: ReadError): Promise<void> {
+  await deps.db.inClub(workerContext(clubId), async (tx) => {
+    const upload = await findUpload(tx, clubId, uploadId)
+    if (upload) await settle(tx, clubId, upload, { state: 'refused', error })
+  })
+}
+
+async function readInThread({ threads }: JobDeps, { fileName }: UploadRow, bytes: Uint8Array) {
+  try {
+    return await threads.readFile({ bytes, fileName })
+  } catch (error) {
+    if (error instanceof ThreadEnded) return { ok: false as const, error: readingEnded(error) }
+    throw error
+  }
+}
+
+async function keepTrial(tx: Tx, clubId: string, upload: UploadRow, read: FileRead): Promise<void> {
+  const { format, columnMap, sampleRateHz } = read
+  const notes = [...(upload.reading?.notes ?? []), ...read.notes]
+  const reading = { notes, format, columnMap, sampleRateHz }
+  if (await settle(tx, clubId, upload, { state: 'read', reading })) await addTrial(tx, clubId, upload, read)
+}
+
+/** Takes the upload out of `waiting`; false where that was done already. */
+async function settle(tx: Tx, clubId: string, upload: UploadRow, step: Step): Promise<boolean> {
+  const settled = await advance(tx, clubId, upload.id, 'waiting', step)
+  if (settled) await notify(tx, clubId, { kind: 'session', id: upload.sessionId })
+  return settled
+}

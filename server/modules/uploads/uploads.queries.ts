@@ -1,0 +1,119 @@
+import { and, asc, eq, sql, type SQL } from 'drizzle-orm'
+import { alias } from 'drizzle-orm/pg-core'
+import type { Upload } from '../../../shared/contracts/uploads.ts'
+import type { Tx } from '../../db/database.ts'
+import { people } from '../../db/schema/identity.ts'
+import { trials } from '../../db/schema/trials.ts'
+import { files, uploads, type Reading, type ReadError } from '../../db/schema/uploads.ts'
+
+export const ofUpload = (clubId: string, uploadId: string) =>
+  and(eq(uploads.clubId, clubId), eq(uploads.id, uploadId))
+
+const first = alias(uploads, 'first')
+
+/** Uploads in the form that the API answers with, oldest first. */
+export async function viewUploads(tx: Tx, where: SQL | undefined): Promise<Upload[]> {
+  const rows = await tx
+    .select({
+      upload: uploads,
+      sizeBytes: files.sizeBytes,
+      uploadedByName: people.name,
+      first: { uploadId: first.id, sessionId: first.sessionId, fileName: first.fileName },
+      // Only a file still on its way is taken up again.
+      chunksReceived: sql<number[]>`case when ${uploads.state} = 'receiving' then array(
+        select c.n from club.file_chunks c
+        where c.club_id = ${uploads.clubId} and c.file_id = ${uploads.fileId} order by c.n
+      ) else '{}' end`,
+      trials: sql<number>`(select count(*)::int from ${trials}
+        where ${trials.clubId} = ${uploads.clubId} and ${trials.uploadId} = ${uploads.id})`,
+    })
+    .from(uploads)
+    .innerJoin(files, and(eq(files.clubId, uploads.clubId), eq(files.id, uploads.fileId)))
+    .innerJoin(people, eq(people.id, uploads.uploadedBy))
+    .leftJoin(first, and(eq(first.clubId, uploads.clubId), eq(first.id, uploads.duplicateOf)))
+    .where(where)
+    .orderBy(asc(uploads.createdAt), asc(uploads.id))
+  return rows.map(({ upload, first: duplicateOf, ...row }) => ({
+    ...row,
+    duplicateOf,
+    id: upload.id,
+    sessionId: upload.sessionId,
+    fileName: upload.fileName,
+    state: upload.state as Upload['state'],
+    error: upload.error,
+    notes: upload.reading?.notes ?? [],
+    createdAt: upload.createdAt.toISOString(),
+    version: upload.version,
+  }))
+}
+
+export interface UploadRow {
+  id: string
+  sessionId: string
+  fileId: string
+  fileName: string
+  state: Upload['state']
+  reading: Reading | null
+  sizeBytes: number
+}
+
+export async function findUpload(tx: Tx, clubId: string, uploadId: string): Promise<UploadRow | null> {
+  const [row] = await tx
+    .select({
+      id: uploads.id,
+      sessionId: uploads.sessionId,
+      fileId: uploads.fileId,
+      fileName: uploads.fileName,
+      state: sql<Upload['state']>`${uploads.state}`,
+      reading: uploads.reading,
+      sizeBytes: files.sizeBytes,
+    })
+    .from(uploads)
+    .innerJoin(files, and(eq(files.clubId, uploads.clubId), eq(files.id, uploads.fileId)))
+    .where(ofUpload(clubId, uploadId))
+  return row ?? null
+}
+
+export interface NewUpload {
+  clubId: string
+  sessionId: string
+  fileName: string
+  sizeBytes: number
+  reading: Reading
+  uploadedBy: string
+}
+
+export async function insertUpload(tx: Tx, { sizeBytes, ...upload }: NewUpload): Promise<string> {
+  const { clubId } = upload
+  const [file] = await tx.insert(files).values({ clubId, sizeBytes }).returning({ id: files.id })
+  const [row] = await tx
+    .insert(uploads)
+    .values({ ...upload, fileId: file.id })
+    .returning({ id: uploads.id })
+  return row.id
+}
+
+/** What a step of an upload's way changes. */
+export interface Step {
+  state: Upload['state']
+  fileId?: string
+  duplicateOf?: string
+  reading?: Reading
+  error?: ReadError
+}
+
+/** Takes an upload from one state to the next; false where it is not in that state any more. */
+export async function advance(
+  tx: Tx,
+  clubId: string,
+  uploadId: string,
+  from: Upload['state'],
+  step: Step,
+): Promise<boolean> {
+  const moved = await tx
+    .update(uploads)
+    .set({ ...step, version: sql`${uploads.version} + 1` })
+    .where(and(ofUpload(clubId, uploadId), eq(uploads.state, from)))
+    .returning({ id: uploads.id })
+  return moved.length > 0
+}
