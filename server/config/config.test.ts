@@ -7,6 +7,8 @@ const webUrl = 'postgresql://web@127.0.0.1/underfoot'
 const production = {
   NODE_ENV: 'production',
   DATABASE_WEB_URL: webUrl,
+  DATABASE_WORKER_URL: 'postgresql://worker@127.0.0.1/underfoot',
+  DATABASE_OWNER_URL: 'postgresql://owner@127.0.0.1/underfoot',
   SESSION_SECRET: 'x'.repeat(40),
   SMTP_URL: 'smtp://mail.example.org',
   APP_URL: 'https://underfoot.example.org/',
@@ -35,13 +37,19 @@ describe('configuration', () => {
   })
 
   it.each([
-    ['SESSION_SECRET', ''],
-    ['SESSION_SECRET', 'short'],
-    ['SMTP_URL', ''],
-    ['APP_URL', 'http://underfoot.example.org'],
-    ['CLIENT', 'vite'],
-  ])('refuses production with %s=%j', (name, value) => {
-    expect(() => loadConfig('web', { ...production, [name]: value })).toThrow(name)
+    ['web', 'SESSION_SECRET', ''],
+    ['web', 'SESSION_SECRET', 'short'],
+    ['web', 'APP_URL', 'http://underfoot.example.org'],
+    ['web', 'CLIENT', 'vite'],
+    ['worker', 'SMTP_URL', ''],
+    ['worker', 'APP_URL', 'http://underfoot.example.org'],
+  ] as const)('refuses to start the %s process in production with %s=%j', (role, name, value) => {
+    expect(() => loadConfig(role, { ...production, [name]: value })).toThrow(name)
+  })
+
+  it('lets the owner migrate with nothing but the address of the database', () => {
+    const { NODE_ENV, DATABASE_OWNER_URL } = production
+    expect(loadConfig('owner', { NODE_ENV, DATABASE_OWNER_URL }).mode).toBe('production')
   })
 
   it('is written down in .env.example as it stands in the code', () => {

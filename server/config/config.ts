@@ -20,14 +20,14 @@ export type Environment = Readonly<Record<string, string | undefined>>
 export function loadConfig(role: DatabaseRole, environment: Environment = process.env): Config {
   const { ownerUrl, webUrl, workerUrl, ...settings } = parseSettings(environment)
   const databaseUrl = { owner: ownerUrl, web: webUrl, worker: workerUrl }[role]
-  const problems = settings.mode === 'production' ? productionProblems(settings) : []
+  const problems = settings.mode === 'production' ? productionProblems(role, settings) : []
   if (!databaseUrl) problems.push(`${keys[`${role}Url`].env} is not set: ${keys[`${role}Url`].says}`)
   if (problems.length > 0 || !databaseUrl) throw new ConfigProblem(problems.join('\n'))
   return { ...settings, databaseUrl }
 }
 
 /** Reads and checks every setting; an empty variable counts as not set. */
-export function parseSettings(environment: Environment): Settings {
+export function parseSettings(environment: Environment = process.env): Settings {
   const shape = Object.fromEntries(Object.values(keys).map(({ env, schema }) => [env, schema]))
   const given = Object.fromEntries(
     Object.values(keys).map(({ env }) => [env, environment[env] === '' ? undefined : environment[env]]),
@@ -42,17 +42,19 @@ export function parseSettings(environment: Environment): Settings {
   ) as unknown as Settings
 }
 
-function productionProblems(
-  settings: Pick<Settings, 'sessionSecret' | 'smtpUrl' | 'appUrl' | 'client'>,
-): string[] {
+/** What a role may not do without in production. The owner only migrates, and needs nothing but its database. */
+function productionProblems(role: DatabaseRole, settings: Omit<Settings, `${DatabaseRole}Url`>): string[] {
+  if (role === 'owner') return []
   const problems: string[] = []
-  if (settings.sessionSecret === developmentSecret) {
+  if (role === 'web' && settings.sessionSecret === developmentSecret) {
     problems.push('SESSION_SECRET is not set: in production it must be a secret of your own.')
   }
-  if (!settings.smtpUrl) problems.push('SMTP_URL is not set: in production mail goes to a real server.')
+  if (role === 'web' && settings.client === 'vite') problems.push('CLIENT=vite is for development only.')
+  if (role === 'worker' && !settings.smtpUrl) {
+    problems.push('SMTP_URL is not set: in production mail goes to a real server.')
+  }
   if (!settings.appUrl.startsWith('https://')) {
     problems.push('APP_URL must begin with https:// in production: passwords and cookies travel to it.')
   }
-  if (settings.client === 'vite') problems.push('CLIENT=vite is for development only.')
   return problems
 }

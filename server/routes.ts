@@ -1,0 +1,27 @@
+import type { Route } from './http/implement.ts'
+import { accountRoutes } from './modules/account/account.routes.ts'
+import { athleteRoutes } from './modules/athletes/athletes.routes.ts'
+import { clubRoutes } from './modules/clubs/clubs.routes.ts'
+import { eventRoutes } from './modules/events/events.routes.ts'
+import { landingWatchRoutes } from './modules/landing-watch/landing-watch.routes.ts'
+import { peopleRoutes } from './modules/people/people.routes.ts'
+import { resultRoutes } from './modules/results/results.routes.ts'
+import { sessionRoutes } from './modules/sessions/sessions.routes.ts'
+import { squadRoutes } from './modules/squads/squads.routes.ts'
+import { trialRoutes } from './modules/trials/trials.routes.ts'
+import { uploadRoutes } from './modules/uploads/uploads.routes.ts'
+
+/** Every route of the API. */
+export const routes: Route[] = [
+  ...accountRoutes,
+  ...peopleRoutes,
+  ...squadRoutes,
+  ...athleteRoutes,
+  ...clubRoutes,
+  ...sessionRoutes,
+  ...uploadRoutes,
+  ...trialRoutes,
+  ...resultRoutes,
+  ...landingWatchRoutes,
+  ...eventRoutes,
+]
