@@ -2,6 +2,7 @@ import { existsSync, readFileSync, writeFileSync } from 'node:fs'
 import { join } from 'node:path'
 import { localFolder } from './paths.mjs'
 import { pause } from './pause.mjs'
+import { beganAt } from './process-table.mjs'
 
 /**
  * Process groups of the product by name, with the moment each began: a number alone may have been given to
@@ -44,20 +45,6 @@ export function killGroup(pid, signal) {
     process.kill(-pid, signal)
   } catch {
     // It ended by itself in the meantime.
-  }
-}
-
-/**
- * When a live process began, in clock ticks since boot (field 22 of its stat, the name in brackets aside).
- * @param {number} pid
- */
-function beganAt(pid) {
-  try {
-    const stat = readFileSync(`/proc/${pid}/stat`, 'utf8')
-    const [state, ...fields] = stat.slice(stat.lastIndexOf(')') + 2).split(' ')
-    return state === 'Z' ? undefined : fields[18]
-  } catch {
-    return undefined
   }
 }
 

@@ -1,3 +1,4 @@
+import { parentOf } from './process-table.mjs'
 import { step } from './problem.mjs'
 import { endRunning } from './run.mjs'
 
@@ -41,8 +42,17 @@ export function stopWhenAsked({ exitCode }) {
   for (const signal of ['SIGINT', 'SIGTERM', 'SIGHUP']) process.on(signal, end)
   // A terminal that closed takes no more text.
   process.stdout.on('error', () => undefined)
-  const starter = process.ppid
-  if (process.env.npm_lifecycle_event) setInterval(() => process.ppid !== starter && end(), 500).unref()
+  if (process.env.npm_lifecycle_event) onDeathOfNpm(end)
+}
+
+/**
+ * npm runs a script through a shell, which outlives it: npm is this process's parent's parent.
+ * @param {() => void} end
+ */
+function onDeathOfNpm(end) {
+  const ancestors = () => `${process.ppid} ${parentOf(process.ppid)}`
+  const atFirst = ancestors()
+  setInterval(() => ancestors() !== atFirst && end(), 500).unref()
 }
 
 /** Whether the end was asked for, so that what breaks from now on is no problem to report. */
