@@ -35,5 +35,5 @@ export function kindIfNotText(bytes: Uint8Array): string | null {
   const looked = bytes.subarray(0, LOOKED_AT)
   // Text holds tabs, line breaks and form feeds, and no other control byte.
   const controls = looked.filter((byte) => byte < 0x20 && (byte < 0x09 || byte > 0x0d)).length
-  return controls > looked.length / 200 ? 'not text' : null
+  return controls > looked.length / 200 ? 'binary data of no known kind' : null
 }

@@ -152,9 +152,11 @@ export function proposeMap(headings: Heading[], line: number): ProposedMap {
           unit: timeHeading.unit.family === 'time' ? timeHeading.unit.unit : null,
         }
       : null,
-    forces: channels.flatMap(({ channel, columns }) =>
-      columns.map((column) => ({ index: column.index, name: column.name, unit: unitOf(column), channel })),
-    ),
+    forces: channels
+      .flatMap(({ channel, columns }) =>
+        columns.map((column) => ({ index: column.index, name: column.name, unit: unitOf(column), channel })),
+      )
+      .sort((a, b) => a.index - b.index),
     notes: [
       ...notes,
       ...unitNotes,

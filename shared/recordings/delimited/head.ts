@@ -1,10 +1,11 @@
-import Papa from 'papaparse'
 import { ReadFault } from '../errors.ts'
 import { byteOrderMarkLength } from '../file-kind.ts'
 import type { FileFormat } from '../result.ts'
 import { shown } from '../safe-text.ts'
 import { unitOf } from './header-cell.ts'
 import { cellKind, hasDecimalComma } from './numbers.ts'
+import { HEAD_ROWS, bodyRun, topRows } from './rows.ts'
+import type { Row, Run } from './rows.ts'
 
 /** The top of a delimited file: how it is built, its headings, and where the numbers begin. */
 export interface Head {
@@ -19,23 +20,24 @@ export interface Head {
   bodyLine: number
 }
 
-const HEAD_BYTES = 64 * 1024
-const HEAD_ROWS = 100
-const DELIMITERS = [',', ';', '\t', '|'] as const
+type Delimiter = FileFormat['delimiter']
 
-interface Row {
-  cells: string[]
-  /** Offset of the byte after the row. */
-  end: number
-  numbers: number
-  texts: number
+/** A delimiter that occurs in the file, and what the top of the file looks like under it. */
+interface Candidate {
+  delimiter: Delimiter
+  rows: Row[]
+  run: Run | null
 }
+
+const HEAD_BYTES = 64 * 1024
+const DELIMITERS: readonly Delimiter[] = [',', ';', '\t', '|']
 
 /** One character a byte, so that Papa Parse's positions are byte offsets whatever the encoding. */
 function oneCharacterAByte(bytes: Uint8Array): string {
   const pieces: string[] = []
-  for (let at = 0; at < bytes.length; at += 8192)
+  for (let at = 0; at < bytes.length; at += 8192) {
     pieces.push(String.fromCharCode(...bytes.subarray(at, at + 8192)))
+  }
   return pieces.join('')
 }
 
@@ -45,82 +47,59 @@ function asUtf8(cell: string): string {
   return utf8.decode(Uint8Array.from(cell, (character) => character.charCodeAt(0)))
 }
 
-/** Line feed wherever there is one: a carriage return before it counts as a blank, so mixed line ends are no matter. */
-export function lineEndFor(text: string): '\n' | '\r' {
-  return text.includes('\n') ? '\n' : '\r'
-}
-
-function rowsOf(text: string, delimiter: string, from: number): Row[] {
-  const rows: Row[] = []
-  Papa.parse<string[]>(text, {
-    delimiter,
-    newline: lineEndFor(text),
-    preview: HEAD_ROWS,
-    step: ({ data, meta }) => {
-      const kinds = data.map(cellKind)
-      const numbers = kinds.filter((kind) => kind === 'number').length
-      const texts = kinds.filter((kind) => kind === 'text').length
-      rows.push({ cells: data, end: from + meta.cursor, numbers, texts })
-    },
+function candidatesFor(text: string, from: number, isWhole: boolean): Candidate[] {
+  const present = DELIMITERS.filter((delimiter) => text.includes(delimiter))
+  return (present.length > 0 ? present : DELIMITERS.slice(0, 1)).map((delimiter) => {
+    const rows = topRows(text, delimiter, from)
+    // The last row looked at may be cut short.
+    if (!isWhole && rows.length > 1 && rows.length < HEAD_ROWS) rows.pop()
+    return { delimiter, rows, run: bodyRun(rows) }
   })
-  return rows
-}
-
-const isData = (row: Row | undefined): boolean =>
-  row !== undefined && row.numbers > 0 && row.texts <= row.numbers
-
-/** The longest stretch of rows of numbers with one count of cells: the body, or as much of it as was looked at. */
-function longestRun(rows: Row[]): { start: number; length: number; columns: number } {
-  let best = { start: -1, length: 0, columns: 0 }
-  for (let start = 0; start < rows.length; start++) {
-    if (!isData(rows[start])) continue
-    const width = rows[start]?.cells.length
-    let end = start + 1
-    while (end < rows.length && isData(rows[end]) && rows[end]?.cells.length === width) end++
-    if (end - start > best.length) best = { start, length: end - start, columns: rows[start]?.numbers ?? 0 }
-    start = end - 1
-  }
-  return best
 }
 
 /** The last row above the body that holds words and no number. */
 function headingRow(rows: Row[], bodyStart: number): number {
-  for (let i = bodyStart - 1; i >= 0; i--) {
-    const row = rows[i]
-    if (row && row.numbers === 0 && row.texts > 0) return i
-  }
-  return -1
+  return rows.slice(0, bodyStart).findLastIndex((row) => row.numbers === 0 && row.texts > 0)
 }
 
 const isUnitRow = (row: Row): boolean => {
-  const filled = row.cells
+  const cells = row.cells
     .map((cell) => cell.replace(/[()[\]{}<>]/gu, '').trim())
     .filter((cell) => cell !== '')
-  return filled.length > 0 && filled.every((cell) => unitOf(asUtf8(cell)).family !== 'none')
+  return cells.length > 0 && cells.every((cell) => unitOf(asUtf8(cell)).family !== 'none')
 }
 
-/** A file whose numbers no delimiter makes sense of: say the likeliest reason. */
-function noNumbers(candidates: { rows: Row[] }[], bytes: Uint8Array): ReadFault {
-  for (const { rows } of candidates) {
-    const line = rows.findIndex((row) => row.cells.length > 1 && row.cells.filter(hasDecimalComma).length > 0)
+/** A row between marks that are no comma, of numbers some of which have a decimal comma. */
+function isDecimalCommaRow({ cells }: Row): boolean {
+  return (
+    cells.some(hasDecimalComma) && cells.every((cell) => hasDecimalComma(cell) || cellKind(cell) !== 'text')
+  )
+}
+
+function refuseDecimalCommas(candidates: Candidate[]): void {
+  for (const { rows, delimiter } of candidates) {
+    if (delimiter === ',') continue
+    const line = rows.findIndex(isDecimalCommaRow)
+    if (line < 0 || rows.filter(isDecimalCommaRow).length < rows.length / 2) continue
     const seen = shown(rows[line]?.cells.find(hasDecimalComma) ?? '')
-    if (line >= 0)
-      return new ReadFault('decimal-comma', `The numbers are written with a decimal comma: “${seen}”.`, {
-        line: line + 1,
-        seen,
-      })
+    throw new ReadFault('decimal-comma', `The numbers are written with a decimal comma: “${seen}”.`, {
+      line: line + 1,
+      seen,
+    })
   }
+}
+
+/** A file whose numbers no delimiter makes sense of. */
+function noTable(bytes: Uint8Array): ReadFault {
   const seen = shown(utf8.decode(bytes.subarray(0, 240)))
-  if (/\d/u.test(seen))
-    return new ReadFault(
-      'no-header',
-      `No table of numbers under headings was found; the file begins “${seen}”.`,
-      { line: 1, seen },
-    )
-  return new ReadFault('not-a-recording', `The file is text without numbers; it begins “${seen}”.`, {
-    line: 1,
-    seen,
-  })
+  const place = { line: 1, seen }
+  return /\d/u.test(seen)
+    ? new ReadFault(
+        'no-header',
+        `No table of numbers under headings was found; the file begins “${seen}”.`,
+        place,
+      )
+    : new ReadFault('not-a-recording', `The file is text without numbers; it begins “${seen}”.`, place)
 }
 
 function lineBreakOf(text: string): FileFormat['lineBreak'] {
@@ -131,51 +110,33 @@ function lineBreakOf(text: string): FileFormat['lineBreak'] {
 
 /**
  * Finds delimiter, headings and the beginning of the numbers. Papa Parse reads the rows; the delimiter taken is
- * the one under which the most rows, and among those the most columns, are numbers.
- * @throws ReadFault `not-a-recording`, `decimal-comma`, `no-header`, `too-few-samples`
+ * the one under which the most cells are numbers.
+ * @throws ReadFault `not-a-recording`, `decimal-comma`, `no-header`
  */
 export function readHead(bytes: Uint8Array): Head {
   const mark = byteOrderMarkLength(bytes)
-  const window = bytes.subarray(mark, mark + HEAD_BYTES)
-  const text = oneCharacterAByte(window)
-  const present = DELIMITERS.filter((delimiter) => text.includes(delimiter))
-  const candidates = (present.length > 0 ? present : DELIMITERS.slice(0, 1)).map((delimiter) => {
-    const rows = rowsOf(text, delimiter, mark)
-    // The window's last row may be cut short.
-    if (mark + window.length < bytes.length && rows.length > 1 && rows.length < HEAD_ROWS) rows.pop()
-    return { delimiter, rows, run: longestRun(rows) }
-  })
-  const best = candidates.reduce((a, b) =>
-    b.run.length * b.run.columns > a.run.length * a.run.columns ? b : a,
-  )
+  const text = oneCharacterAByte(bytes.subarray(mark, mark + HEAD_BYTES))
+  const candidates = candidatesFor(text, mark, mark + text.length === bytes.length)
+  refuseDecimalCommas(candidates)
+  const cells = ({ run }: Candidate): number => (run ? run.length * run.columns : 0)
+  const best = candidates.reduce((a, b) => (cells(b) > cells(a) ? b : a))
+  if (!best.run) throw noTable(bytes.subarray(mark))
   const { rows, run, delimiter } = best
-  if (run.length === 0) throw noNumbers(candidates, bytes.subarray(mark))
-  return describeHead(rows, run.start, { delimiter, byteOrderMark: mark > 0, lineBreak: lineBreakOf(text) })
+  return describeHead(rows, run, { delimiter, byteOrderMark: mark > 0, lineBreak: lineBreakOf(text) })
 }
 
-function describeHead(rows: Row[], runStart: number, format: Omit<FileFormat, 'kind' | 'headerLine'>): Head {
-  const last = headingRow(rows, runStart)
+function describeHead(rows: Row[], run: Run, format: Omit<FileFormat, 'kind' | 'headerLine'>): Head {
+  const last = headingRow(rows, run.start)
   const row = rows[last]
   if (!row) {
     const seen = shown(rows[0]?.cells.join(format.delimiter) ?? '')
-    throw new ReadFault(
-      'no-header',
-      `The file begins with numbers, and no headings say what they are: “${seen}”.`,
-      { line: 1, seen },
-    )
+    const sentence = `The file begins with numbers, and no headings say what they are: “${seen}”.`
+    throw new ReadFault('no-header', sentence, { line: 1, seen })
   }
   const above = rows[last - 1]
   const unitsUnder = isUnitRow(row) && above !== undefined && above.numbers === 0 && above.texts > 1
   const names = (unitsUnder ? above : row).cells.map(asUtf8)
-  const width = rows[runStart]?.cells.length ?? 0
-  if (names.length < width - 1) {
-    const sentence = `There are ${names.length} headings over ${width} columns of numbers.`
-    const decimalComma = format.delimiter === ',' && names.length * 2 === width
-    throw new ReadFault(decimalComma ? 'decimal-comma' : 'no-header', sentence, {
-      line: last + 1,
-      seen: shown(names.join(', ')),
-    })
-  }
+  refuseFewHeadings(names, run.columns, last + 1, format.delimiter)
   return {
     format: { kind: 'delimited', headerLine: unitsUnder ? last : last + 1, ...format },
     names,
@@ -183,4 +144,15 @@ function describeHead(rows: Row[], runStart: number, format: Omit<FileFormat, 'k
     bodyStart: row.end,
     bodyLine: last + 2,
   }
+}
+
+/** Fewer headings than columns of numbers: under commas, the likeliest reason is that each number holds one. */
+function refuseFewHeadings(names: string[], columns: number, line: number, delimiter: Delimiter): void {
+  if (names.length >= columns) return
+  const isComma = delimiter === ',' && names.length * 2 === columns
+  const sentence = `There ${names.length === 1 ? 'is 1 heading' : `are ${names.length} headings`} over ${columns} columns of numbers.`
+  throw new ReadFault(isComma ? 'decimal-comma' : 'no-header', sentence, {
+    line,
+    seen: shown(names.join(', ')),
+  })
 }

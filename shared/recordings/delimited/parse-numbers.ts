@@ -2,8 +2,8 @@ import Papa from 'papaparse'
 import { ReadFault } from '../errors.ts'
 import { MAX_SAMPLES } from '../limits.ts'
 import { shown } from '../safe-text.ts'
-import { lineEndFor } from './head.ts'
 import { cellKind } from './numbers.ts'
+import { lineEndFor } from './rows.ts'
 import type { NumberColumns } from './scan-numbers.ts'
 
 /** Rows of numbers read by Papa Parse, and what stood among and after them. */

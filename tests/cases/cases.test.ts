@@ -1,0 +1,83 @@
+import { readdirSync, readFileSync } from 'node:fs'
+import { join } from 'node:path'
+import { describe, expect, it } from 'vitest'
+import type { ForceChannel } from '../../shared/mechanics/types.ts'
+import { readErrorCodes } from '../../shared/recordings/errors.ts'
+import type { ReadError } from '../../shared/recordings/errors.ts'
+import { readRecording } from '../../shared/recordings/read-recording.ts'
+import type { FileFormat, ReadHints } from '../../shared/recordings/result.ts'
+
+/** What `expected.json` of a numbered folder says; beside it lies `input.*`, or `input` says how to make it. */
+interface Case {
+  fileName?: string
+  hints?: ReadHints
+  /** A file too large to keep: the head, then the repeated text up to so many bytes. */
+  input?: { head: string; repeat: string; bytes: number }
+  reading?: {
+    sampleRateHz: number
+    filledSamples: number
+    channels: Partial<Record<ForceChannel, number[]>>
+    /** Codes, in order. */
+    notes: string[]
+    format?: Partial<FileFormat>
+    forces?: { index: number; unit: string; channel: ForceChannel }[]
+  }
+  error?: Partial<ReadError>
+}
+
+const here = import.meta.dirname
+const folders = readdirSync(here, { withFileTypes: true })
+  .filter((entry) => entry.isDirectory() && /^\d{3}-/u.test(entry.name))
+  .map((entry) => entry.name)
+  .sort()
+
+function load(folder: string): { expected: Case; bytes: Uint8Array; fileName: string } {
+  const expected = JSON.parse(readFileSync(join(here, folder, 'expected.json'), 'utf8')) as Case
+  const stored = readdirSync(join(here, folder)).find((name) => name.startsWith('input.'))
+  if (expected.input) return { expected, bytes: made(expected.input), fileName: 'made.csv' }
+  if (!stored) throw new Error(`The case ${folder} has no input.`)
+  const bytes = new Uint8Array(readFileSync(join(here, folder, stored)))
+  return { expected, bytes, fileName: expected.fileName ?? stored }
+}
+
+function made({ head, repeat, bytes }: NonNullable<Case['input']>): Uint8Array {
+  const out = Buffer.alloc(bytes, repeat)
+  out.write(head)
+  return out
+}
+
+describe('reading', () => {
+  it.each(folders)('%s', (folder) => {
+    const { expected, bytes, fileName } = load(folder)
+    const before = bytes.slice(0, 4096)
+    const result = readRecording(bytes, fileName, expected.hints)
+    expect(bytes.slice(0, 4096)).toStrictEqual(before)
+    if (expected.error) {
+      if (result.ok) throw new Error('The file was read, and an error was expected.')
+      expect(result.error).toMatchObject(expected.error)
+      expect(result.error.sentence).toMatch(/^[A-Z0-9].*\.$/u)
+      expect(result.error.remedy).toMatch(/\.$/u)
+      return
+    }
+    if (!result.ok) throw new Error(`${result.error.code}: ${result.error.sentence}`)
+    const { channels, notes, ...rest } = result.recording
+    expect({
+      sampleRateHz: rest.sampleRateHz,
+      filledSamples: rest.filledSamples,
+      channels: Object.fromEntries(Object.entries(channels).map(([name, force]) => [name, [...force]])),
+      notes: notes.map((note) => note.code),
+    }).toStrictEqual({
+      sampleRateHz: expected.reading?.sampleRateHz,
+      filledSamples: expected.reading?.filledSamples,
+      channels: expected.reading?.channels,
+      notes: expected.reading?.notes,
+    })
+    if (expected.reading?.format) expect(result.format).toMatchObject(expected.reading.format)
+    if (expected.reading?.forces) expect(result.columnMap.forces).toMatchObject(expected.reading.forces)
+  })
+
+  it('has a case for every error that the catalogue knows', () => {
+    const met = new Set(folders.map((folder) => load(folder).expected.error?.code))
+    expect(readErrorCodes.filter((code) => !met.has(code))).toStrictEqual([])
+  })
+})
