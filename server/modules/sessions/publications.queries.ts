@@ -35,8 +35,8 @@ const ofCurrent = (clubId: string, sessionId: string) =>
   and(
     eq(publishedTrials.clubId, clubId),
     eq(publishedTrials.current, true),
-    sql`exists (select 1 from ${publications} where ${publications.clubId} = ${publishedTrials.clubId}
-      and ${publications.id} = ${publishedTrials.publicationId} and ${publications.sessionId} = ${sessionId})`,
+    sql`exists (select 1 from club.publications p where p.club_id = published_trials.club_id
+      and p.id = published_trials.publication_id and p.session_id = ${sessionId})`,
   )
 
 /** What athletes read of the session now. */

@@ -3,14 +3,18 @@ import type { SessionSummary } from '../../../shared/contracts/sessions.ts'
 import type { Tx } from '../../db/database.ts'
 import { athletes, squadMembers, squads } from '../../db/schema/people-of-club.ts'
 import { sessionAthletes, sessions, sessionSquads } from '../../db/schema/sessions.ts'
-import { trials } from '../../db/schema/trials.ts'
 
 export const ofSession = (clubId: string, sessionId: string) =>
   and(eq(sessions.clubId, clubId), eq(sessions.id, sessionId))
 
-const trialsWhere = (condition?: SQL) => sql<number>`(select count(*)::int from ${trials}
-  where ${trials.clubId} = ${sessions.clubId} and ${trials.sessionId} = ${sessions.id}
-  ${condition ? sql`and ${condition}` : sql``})`
+/** Inside a subquery Drizzle leaves the outer table's name off its columns, so these are written out. */
+const countTrials = (condition = 'true') =>
+  sql<number>`(select count(*)::int from club.trials t
+    where t.club_id = sessions.club_id and t.session_id = sessions.id and ${sql.raw(condition)})`
+
+const squadsOfSession = sql`club.session_squads ss
+  join club.squads s on s.club_id = ss.club_id and s.id = ss.squad_id
+  where ss.club_id = sessions.club_id and ss.session_id = sessions.id`
 
 const summary = {
   id: sessions.id,
@@ -18,15 +22,11 @@ const summary = {
   title: sessions.title,
   place: sessions.place,
   protocol: sql<SessionSummary['protocol']>`${sessions.protocol}`,
-  squadNames: sql<string[]>`array(
-    select ${squads.name} from ${sessionSquads} join ${squads}
-      on ${squads.clubId} = ${sessionSquads.clubId} and ${squads.id} = ${sessionSquads.squadId}
-    where ${sessionSquads.clubId} = ${sessions.clubId} and ${sessionSquads.sessionId} = ${sessions.id}
-    order by ${squads.name})`,
-  athletes: sql<number>`(select count(*)::int from ${sessionAthletes}
-    where ${sessionAthletes.clubId} = ${sessions.clubId} and ${sessionAthletes.sessionId} = ${sessions.id})`,
-  trials: trialsWhere(),
-  inTray: trialsWhere(sql`${trials.athleteId} is null and ${trials.setAsideAt} is null`),
+  squadNames: sql<string[]>`array(select s.name from ${squadsOfSession} order by s.name)`,
+  athletes: sql<number>`(select count(*)::int from club.session_athletes a
+    where a.club_id = sessions.club_id and a.session_id = sessions.id)`,
+  trials: countTrials(),
+  inTray: countTrials('t.athlete_id is null and t.set_aside_at is null'),
   publishedAt: sessions.publishedAt,
   version: sessions.version,
 }
@@ -51,20 +51,16 @@ export interface SessionFilter {
 
 /** Sessions whose title, place, date or squads hold the searched words, newest first. */
 function filtered({ clubId, search, squadId }: SessionFilter): SQL | undefined {
-  const ofSquads = (condition: SQL) => sql`exists (
-    select 1 from ${sessionSquads} join ${squads}
-      on ${squads.clubId} = ${sessionSquads.clubId} and ${squads.id} = ${sessionSquads.squadId}
-    where ${sessionSquads.clubId} = ${sessions.clubId} and ${sessionSquads.sessionId} = ${sessions.id}
-      and ${condition})`
+  const ofSquads = (condition: SQL) => sql`exists (select 1 from ${squadsOfSession} and ${condition})`
   const words = search?.trim().split(/\s+/u).filter(Boolean) ?? []
   const holds = (word: string) => {
     const pattern = `%${word.replace(/[\\%_]/gu, '\\$&')}%`
     return sql`(${sessions.title} ilike ${pattern} or ${sessions.place} ilike ${pattern}
-      or ${sessions.date}::text like ${pattern} or ${ofSquads(sql`${squads.name} ilike ${pattern}`)})`
+      or ${sessions.date}::text like ${pattern} or ${ofSquads(sql`s.name ilike ${pattern}`)})`
   }
   return and(
     eq(sessions.clubId, clubId),
-    squadId ? ofSquads(sql`${squads.id} = ${squadId}`) : undefined,
+    squadId ? ofSquads(sql`s.id = ${squadId}`) : undefined,
     ...words.map(holds),
   )
 }
