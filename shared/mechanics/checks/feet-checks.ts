@@ -1,0 +1,72 @@
+import type { TrialCheck } from '../types.ts'
+import type { Foot } from '../metrics/sides.ts'
+import type { JumpModel } from '../metrics/jump-model.ts'
+import { allGroups, check, rounded } from './check.ts'
+
+/** Longest run, in samples, in which a foot is off its plate within [from, to) while the other is loaded. */
+function longestOff(foot: Foot, model: JumpModel, from: number, to: number): number {
+  const { settings, motion } = model
+  const threshold = Math.max(2 * settings.eventForceN, settings.unloadedSd * foot.noise.sd)
+  const { force } = foot.plate
+  let run = 0
+  let longest = 0
+  for (let i = Math.max(0, Math.ceil(from)); i < Math.min(force.length, to); i++) {
+    run = force[i] < threshold && motion.force[i] > 4 * threshold ? run + 1 : 0
+    if (run > longest) longest = run
+  }
+  return longest
+}
+
+/** Both feet carry a fair part of the weight while the athlete stands, and stay on through the push. */
+function bothOn(model: JumpModel, feet: [Foot, Foot]): TrialCheck {
+  const { settings, motion, signal, weighing, events } = model
+  const share = Math.min(...feet.map(({ plate }) => plate.stanceForce)) / motion.systemWeight
+  const limitS = settings.footOffLandingS
+  const off =
+    Math.max(...feet.map((foot) => longestOff(foot, model, weighing.window.from, events.takeoff.position))) *
+    signal.dt
+  const fail = share < settings.footShareFail || off > limitS
+  return check(
+    'both-feet',
+    fail ? 'fail' : share < settings.footShareCaution ? 'caution' : 'pass',
+    fail ? allGroups : ['sides'],
+    { measured: 100 * share, limit: 100 * settings.footShareCaution, unit: '%' },
+    {
+      pass: `The lighter foot carries ${rounded(100 * share, 0)} % of the weight in stance.`,
+      caution: `The lighter foot carries only ${rounded(100 * share, 0)} % of the weight in stance.`,
+      fail:
+        share < settings.footShareFail
+          ? `One plate carries only ${rounded(100 * share, 0)} % of the weight: a foot stands beside it.`
+          : `A foot was off its plate for ${rounded(1000 * off, 0)} ms before takeoff.`,
+      remedy: 'Place each foot in the middle of its own plate.',
+    },
+  )
+}
+
+/** After both have touched down, no foot leaves its plate until the fall is stopped and the athlete stands. */
+function offInLanding(model: JumpModel, feet: [Foot, Foot]): TrialCheck | null {
+  const { events, signal, settings } = model
+  if (!events.touchdown) return null
+  const latest = Math.max(events.touchdown.position, ...feet.map(({ touchdown }) => touchdown?.position ?? 0))
+  const end = events.still ?? events.landingZeroVelocity ?? signal.length
+  const off = Math.max(...feet.map((foot) => longestOff(foot, model, latest, end))) * signal.dt
+  const absent = feet.some(({ touchdown }) => touchdown === null)
+  return check(
+    'foot-off-landing',
+    absent || off > settings.footOffLandingS ? 'fail' : 'pass',
+    ['landing', 'sides', 'ledger'],
+    { measured: off, limit: settings.footOffLandingS, unit: 's' },
+    {
+      pass: 'Both feet stayed on the plates after touchdown.',
+      fail: absent
+        ? 'One foot did not come down on its plate.'
+        : `A foot was off its plate for ${rounded(off, 2)} s during the landing.`,
+      remedy: 'Land with each foot on its own plate; the takeoff figures stand.',
+    },
+  )
+}
+
+/** Checks that need two plates. */
+export function feetChecks(model: JumpModel, feet: [Foot, Foot]): TrialCheck[] {
+  return [bothOn(model, feet), offInLanding(model, feet)].filter((entry) => entry !== null)
+}

@@ -1,0 +1,180 @@
+import type { Ledger, TrialCheck } from '../types.ts'
+import type { Unloaded } from '../events/unloaded.ts'
+import type { JumpModel } from '../metrics/jump-model.ts'
+import { afterTakeoff, allButWeighing, allGroups, check, rounded, verdictOn } from './check.ts'
+
+/** What the checks of the jump need beside the model. */
+export interface JumpReadings {
+  unloaded: Unloaded
+  heightImpulseM: number
+  heightFlightM: number | null
+  ledger: Ledger
+}
+
+function oneTakeoff({ unloaded }: JumpReadings): TrialCheck {
+  const count = unloaded.flights.length
+  return check(
+    'one-takeoff',
+    count <= 1 ? 'pass' : 'fail',
+    allButWeighing,
+    { measured: count, limit: 1, unit: 'flights' },
+    {
+      pass: 'There is one jump in the recording.',
+      fail: `There are ${count} flights in the recording; the figures are those of the first.`,
+      remedy: 'Record one jump a file, or set this trial aside.',
+    },
+  )
+}
+
+function plausible({ settings, events }: JumpModel, { heightImpulseM }: JumpReadings): TrialCheck {
+  const low = settings.lowestJumpM
+  const high = settings.highestJumpM
+  const dip = events.minimumVelocity !== null && events.zeroVelocity !== null
+  const ok = heightImpulseM >= low && heightImpulseM <= high && dip
+  return check(
+    'plausible-jump',
+    ok ? 'pass' : 'fail',
+    allButWeighing,
+    { measured: heightImpulseM, limit: heightImpulseM < low ? low : high, unit: 'm' },
+    {
+      pass: 'The trace is that of a countermovement jump.',
+      fail: dip
+        ? `A jump height of ${rounded(100 * heightImpulseM, 1)} cm is not that of a standing jump.`
+        : 'No countermovement was found before the push.',
+      remedy: 'Look at the trace: perhaps this is another test, or the athlete stepped instead of jumping.',
+    },
+  )
+}
+
+function heightAgreement({ settings }: JumpModel, readings: JumpReadings): TrialCheck | null {
+  const { heightImpulseM, heightFlightM } = readings
+  if (heightFlightM === null) return null
+  const difference = heightFlightM - heightImpulseM
+  const ok = difference <= settings.heightAgreementM && difference >= -settings.heightNegativeM
+  const far = difference > 2.5 * settings.heightAgreementM || difference < -4 * settings.heightNegativeM
+  return check(
+    'height-agreement',
+    ok ? 'pass' : far ? 'fail' : 'caution',
+    difference > 0 && !far ? ['flight'] : ['jump', 'impulse', 'push', 'flight', 'landing', 'ledger'],
+    {
+      measured: difference,
+      limit: difference < 0 ? -settings.heightNegativeM : settings.heightAgreementM,
+      unit: 'm',
+    },
+    {
+      pass: 'Height by impulse and height by flight time agree.',
+      caution: `Height by flight time is ${rounded(100 * difference, 1)} cm from height by impulse.`,
+      fail: `Height by flight time is ${rounded(100 * difference, 1)} cm from height by impulse: one of them is wrong.`,
+      remedy: 'Land with straight legs, stand still before the jump, and check the weighing.',
+    },
+  )
+}
+
+function closing({ motion, settings }: JumpModel, { ledger }: JumpReadings): TrialCheck {
+  const testable = ledger.closing.closes !== null || ledger.closing.U !== null
+  const mass = motion.systemWeight / motion.gravity
+  const speed = Math.abs(ledger.closing.value) / mass
+  if (!testable)
+    return check(
+      'closing-balance',
+      'caution',
+      ['ledger'],
+      { measured: null, limit: settings.closingCaution, unit: 'm/s' },
+      {
+        pass: '',
+        caution:
+          'The closing balance cannot be tested: the athlete did not stand still for a second after landing.',
+        remedy: 'Let the recording run until the athlete has stood still for a second.',
+      },
+    )
+  return check(
+    'closing-balance',
+    verdictOn(speed, settings.closingCaution, settings.closingFail),
+    ['jump', 'impulse', 'push', 'landing', 'ledger'],
+    { measured: speed, limit: settings.closingCaution, unit: 'm/s' },
+    {
+      pass: `The momentum account closes to ${rounded(speed, 3)} m/s.`,
+      caution: `The momentum account is ${rounded(speed, 3)} m/s off at the end.`,
+      fail: `The momentum account is ${rounded(speed, 3)} m/s off at the end: weighing, zero or the record is wrong.`,
+      remedy: 'Check the weighing and that both feet stayed on the plates; repeat the trial.',
+    },
+  )
+}
+
+function landedOnPlates({ events }: JumpModel): TrialCheck {
+  return check(
+    'landing-on-plates',
+    events.touchdown ? 'pass' : 'fail',
+    afterTakeoff,
+    { measured: events.touchdown ? 1 : 0, limit: 1, unit: 'touchdown' },
+    {
+      pass: 'The athlete came down on the plates.',
+      fail: 'No landing on the plates was found after the takeoff.',
+      remedy: 'Land on the plates; the takeoff figures stand.',
+    },
+  )
+}
+
+function landingLength({ events, signal, settings }: JumpModel): TrialCheck | null {
+  if (!events.touchdown) return null
+  const left = (signal.length - 1 - events.touchdown.position) * signal.dt
+  const verdict =
+    events.landingZeroVelocity === null ? 'fail' : left < settings.landingLengthS ? 'caution' : 'pass'
+  return check(
+    'landing-length',
+    verdict,
+    ['landing', 'ledger'],
+    { measured: left, limit: settings.landingLengthS, unit: 's' },
+    {
+      pass: 'The recording goes on long enough after touchdown.',
+      caution: `The recording ends ${rounded(left, 2)} s after touchdown.`,
+      fail: `The recording ends ${rounded(left, 2)} s after touchdown, before the fall was stopped.`,
+      remedy: 'Let the recording run for three seconds after the landing.',
+    },
+  )
+}
+
+function fellAtPlausibleSpeed({ events, motion, settings }: JumpModel): TrialCheck | null {
+  if (!events.landingPeak) return null
+  const bodyWeights = events.landingPeak.value / motion.systemWeight
+  const ok = bodyWeights > 1.1
+  return check(
+    'plausible-landing',
+    ok ? 'pass' : 'fail',
+    ['landing', 'sides', 'ledger'],
+    { measured: bodyWeights, limit: 1.1, unit: 'BW' },
+    {
+      pass: 'The landing looks like one.',
+      fail: `The landing force reaches only ${rounded(bodyWeights, 2)} times the weight (event force ${settings.eventForceN} N).`,
+      remedy: 'Check that the athlete landed with both feet on the plates.',
+    },
+  )
+}
+
+/** Checks of jump and landing. */
+export function jumpChecks(model: JumpModel, readings: JumpReadings): TrialCheck[] {
+  return [
+    oneTakeoff(readings),
+    plausible(model, readings),
+    heightAgreement(model, readings),
+    landedOnPlates(model),
+    landingLength(model),
+    fellAtPlausibleSpeed(model),
+    closing(model, readings),
+  ].filter((entry) => entry !== null)
+}
+
+/** A foot that carries next to nothing while both should stand. */
+export function deadPlateCheck(deadChannels: string[]): TrialCheck {
+  return check(
+    'plate-alive',
+    deadChannels.length === 0 ? 'pass' : 'fail',
+    allGroups,
+    { measured: deadChannels.length, limit: 0, unit: 'plates' },
+    {
+      pass: 'Every plate reads a changing force.',
+      fail: `The ${deadChannels.join(' and ')} plate reads the same all along: not connected, or not stood upon.`,
+      remedy: 'Check the connection of the plate and that each foot stands on its own.',
+    },
+  )
+}

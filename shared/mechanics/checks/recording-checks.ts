@@ -1,0 +1,168 @@
+import type { Recording, TrialCheck } from '../types.ts'
+import type { Unloaded } from '../events/unloaded.ts'
+import type { Zero } from '../events/zero.ts'
+import type { Settings } from '../settings.ts'
+import type { Signal } from '../signal/condition.ts'
+import { allGroups, check, rounded, verdictOn } from './check.ts'
+
+function sampleRate(signal: Signal, settings: Settings): TrialCheck {
+  const rate = signal.sampleRateHz
+  const verdict =
+    rate < settings.poorestSampleRateHz ? 'fail' : rate < settings.lowestSampleRateHz ? 'caution' : 'pass'
+  return check(
+    'sample-rate',
+    verdict,
+    allGroups,
+    { measured: rate, limit: settings.lowestSampleRateHz, unit: 'Hz' },
+    {
+      pass: `Force was sampled ${rounded(rate, 0)} times a second.`,
+      caution: `Force was sampled only ${rounded(rate, 0)} times a second; short events are coarse.`,
+      fail: `Force was sampled only ${rounded(rate, 0)} times a second, too seldom for a jump.`,
+      remedy: 'Set the plates to 1000 samples a second.',
+    },
+  )
+}
+
+function timeBase(recording: Recording, settings: Settings): TrialCheck {
+  const error = recording.timeBaseError
+  return check(
+    'time-base',
+    verdictOn(error, settings.timeBaseLimit, 0.5),
+    allGroups,
+    { measured: error, limit: settings.timeBaseLimit, unit: 'sample intervals' },
+    {
+      pass: 'The time stamps are even.',
+      caution: `A time stamp lies ${rounded(error, 2)} of a sample interval off the even time base.`,
+      fail: 'The time stamps are uneven: samples were lost or doubled.',
+      remedy: 'Export the recording again, and check the connection of the plates.',
+    },
+  )
+}
+
+function gaps(recording: Recording, signal: Signal, settings: Settings): TrialCheck {
+  const filled = recording.filledSamples + signal.unreadable
+  const share = filled / signal.length
+  return check(
+    'gaps',
+    verdictOn(share, 0, settings.filledLimit),
+    allGroups,
+    { measured: filled, limit: Math.floor(settings.filledLimit * signal.length), unit: 'samples' },
+    {
+      pass: 'No sample is missing.',
+      caution: `${filled} samples could not be read and were bridged by straight lines.`,
+      fail: `${filled} samples could not be read, too many to bridge.`,
+      remedy: 'Export the recording again; what is missing cannot be measured.',
+    },
+  )
+}
+
+/** Longest run of samples that stay exactly at the greatest value: the amplifier's ceiling. */
+function flatTop(force: Float64Array): number {
+  let greatest = -Infinity
+  let run = 0
+  let longest = 0
+  for (let i = 0; i < force.length; i++) {
+    if (force[i] > greatest) {
+      greatest = force[i]
+      run = 1
+      longest = 1
+    } else if (force[i] === greatest && i > 0 && force[i - 1] === greatest) {
+      run++
+      if (run > longest) longest = run
+    } else run = force[i] === greatest ? 1 : 0
+  }
+  return longest
+}
+
+function saturation(signal: Signal, settings: Settings): TrialCheck {
+  const longest = Math.max(...signal.plates.map(({ force }) => flatTop(force)))
+  const limit = settings.saturationSamples
+  return check(
+    'saturation',
+    longest < limit ? 'pass' : 'fail',
+    ['push', 'landing', 'sides', 'impulse', 'jump', 'ledger'],
+    { measured: longest, limit, unit: 'samples' },
+    {
+      pass: 'The force stays within the range of the plates.',
+      fail: `The force stays at its greatest value for ${longest} samples: the plate's range was exceeded.`,
+      remedy: 'Choose a larger measuring range of the plates.',
+    },
+  )
+}
+
+/** Whether the plates were set to zero with the athlete on them: loaded reads nothing, unloaded reads minus the weight. */
+export function taredWithAthlete({ level, stanceLevel }: Unloaded): boolean {
+  return Math.abs(stanceLevel) < 0.15 * (stanceLevel - level)
+}
+
+function zeroOffset(signal: Signal, unloaded: Unloaded, settings: Settings): TrialCheck {
+  const tared = taredWithAthlete(unloaded)
+  const largest = signal.plates.reduce((most, { offsetN }) => Math.max(most, Math.abs(offsetN)), 0)
+  const verdict = tared
+    ? 'caution'
+    : verdictOn(largest, settings.zeroOffsetCautionN, settings.zeroOffsetFailN)
+  return check(
+    'zero-offset',
+    verdict,
+    allGroups,
+    { measured: largest, limit: settings.zeroOffsetCautionN, unit: 'N' },
+    {
+      pass: `The empty plates read within ${rounded(largest, 1)} N of zero; corrected.`,
+      caution: tared
+        ? 'The plates were set to zero with the athlete on them; put right from the flight.'
+        : `The empty plates read ${rounded(largest, 1)} N off zero; corrected.`,
+      fail: `The empty plates read ${rounded(largest, 1)} N off zero, more than a drift explains.`,
+      remedy: 'Set the plates to zero while nobody stands on them.',
+    },
+  )
+}
+
+function plateNoise(zero: Zero, settings: Settings): TrialCheck {
+  const sd = zero.total.sd
+  return check(
+    'noise',
+    verdictOn(sd, settings.noiseCautionN, settings.noiseFailN),
+    allGroups,
+    { measured: sd, limit: settings.noiseCautionN, unit: 'N' },
+    {
+      pass: `The empty plates waver by ${rounded(sd, 1)} N.`,
+      caution: `The empty plates waver by ${rounded(sd, 1)} N; every figure is less sure.`,
+      fail: `The empty plates waver by ${rounded(sd, 1)} N, too much to measure a jump.`,
+      remedy: 'Look for a vibrating floor, a loose cable or a plate that touches its frame.',
+    },
+  )
+}
+
+function polarity(signal: Signal): TrialCheck {
+  const turned = signal.plates.filter(({ flipped }) => flipped).length
+  return check(
+    'polarity',
+    turned === 0 ? 'pass' : 'caution',
+    allGroups,
+    { measured: turned, limit: 0, unit: 'plates' },
+    {
+      pass: 'Pressing down reads positive.',
+      caution: 'Pressing down read negative; the sign was turned over.',
+      remedy: 'Check the sign of the force columns in the export.',
+    },
+  )
+}
+
+/** Checks of the recording as such. */
+export function recordingChecks(
+  recording: Recording,
+  signal: Signal,
+  unloaded: Unloaded,
+  zero: Zero,
+  settings: Settings,
+): TrialCheck[] {
+  return [
+    sampleRate(signal, settings),
+    timeBase(recording, settings),
+    gaps(recording, signal, settings),
+    saturation(signal, settings),
+    polarity(signal),
+    zeroOffset(signal, unloaded, settings),
+    plateNoise(zero, settings),
+  ]
+}

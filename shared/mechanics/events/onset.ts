@@ -1,0 +1,123 @@
+import type { Settings } from '../settings.ts'
+import { fitParabola, parabolaCrossing, parabolaNoiseAt, parabolaSlopeAt } from '../signal/local-parabola.ts'
+import type { Noise } from '../signal/noise.ts'
+import { meanOver, type RunningSums } from '../signal/running-mean.ts'
+import type { Weighing } from './weighing.ts'
+
+/** The beginning of the movement. */
+export interface Onset {
+  /** Position of the onset in samples: the lead before the crossing. */
+  position: number
+  /** Position of the crossing of the onset threshold, samples. */
+  crossing: number
+  /** Standard uncertainty of the position from noise, samples. */
+  positionU: number
+  /** Slope of the force at the crossing, N a sample. */
+  slope: number
+  /** Share of the weight at which the crossing lies, e.g. 0.975. */
+  level: number
+  /** Whether quiet stance was found before the movement. */
+  fromQuiet: boolean
+}
+
+interface Search {
+  sums: RunningSums
+  weight: number
+  half: number
+}
+
+function deviation({ sums, weight, half }: Search, sample: number): number {
+  return meanOver(sums, sample - half, sample + half + 1) - weight
+}
+
+/** First sample of the movement that leads to the flight: the earliest gross deviation without a long pause after it. */
+function firstGrossDeviation(
+  search: Search,
+  takeoff: number,
+  earliest: number,
+  gross: number,
+  gap: number,
+): number {
+  let first = takeoff
+  for (let i = takeoff; i >= earliest && first - i <= gap; i--)
+    if (Math.abs(deviation(search, i)) >= gross) first = i
+  return first
+}
+
+/** Walks back to where the force had stayed within the threshold for the asked time; the first sample beyond it. */
+function leaveOfQuiet(
+  search: Search,
+  first: number,
+  earliest: number,
+  threshold: number,
+  persistence: number,
+) {
+  let crossing = first
+  for (let i = first; i >= earliest; i--) {
+    if (Math.abs(deviation(search, i)) > threshold) crossing = i
+    else if (crossing - i >= persistence) return { crossing, fromQuiet: true }
+  }
+  return { crossing, fromQuiet: crossing - earliest >= persistence / 2 }
+}
+
+/** Distance from the crossing within which the flank keeps its shape: a part of the way to the gross deviation. */
+function fitReach(search: Search, crossing: number, latest: number, gross: number, dt: number): number {
+  let i = crossing
+  while (i < latest && Math.abs(deviation(search, i)) < gross) i++
+  return Math.max(4, Math.min(0.6 * (i - crossing), 0.025 / dt))
+}
+
+/**
+ * Onset: `onsetLeadS` before the force leaves the band of ±`onsetFraction` of the weight (or so many standard
+ * deviations of the weighing, by `onsetRule`) at the start of the movement that leads to the flight. Found on a
+ * running mean, placed by a parabola fitted to the unfiltered force around the crossing.
+ */
+export function findOnset(
+  force: Float64Array,
+  sums: RunningSums,
+  weighing: Weighing,
+  limits: { earliest: number; takeoff: number },
+  noise: Noise,
+  dt: number,
+  settings: Settings,
+): Onset {
+  const weight = weighing.systemWeight
+  const half = Math.max(1, Math.round(settings.onsetSmoothingS / dt / 2))
+  const search = { sums, weight, half }
+  const gross = settings.movementFraction * weight
+  const threshold =
+    settings.onsetRule === 'fraction' ? settings.onsetFraction * weight : settings.onsetSd * weighing.spread
+  const first = firstGrossDeviation(
+    search,
+    limits.takeoff,
+    limits.earliest,
+    gross,
+    settings.movementGapS / dt,
+  )
+  const { crossing, fromQuiet } = leaveOfQuiet(
+    search,
+    first,
+    limits.earliest,
+    threshold,
+    settings.quietPersistenceS / dt,
+  )
+
+  const sign = deviation(search, crossing) >= 0 ? 1 : -1
+  const target = weight + sign * threshold
+  const reach = fitReach(search, crossing, limits.takeoff, gross, dt)
+  let fit = fitParabola(force, crossing, reach)
+  let position = parabolaCrossing(fit, target, crossing, 1.5 * reach) ?? crossing
+  fit = fitParabola(force, position, reach)
+  position = parabolaCrossing(fit, target, position, reach) ?? position
+  const slope = parabolaSlopeAt(fit, position)
+  const positionU = Math.min(reach, parabolaNoiseAt(fit, position, noise) / Math.abs(slope))
+  const lead = settings.onsetLeadS / dt
+  return {
+    position: Math.max(limits.earliest, position - lead),
+    crossing: position,
+    positionU,
+    slope,
+    level: target / weight,
+    fromQuiet,
+  }
+}

@@ -1,0 +1,105 @@
+import type { Settings } from '../settings.ts'
+import { usualLevel } from '../signal/condition.ts'
+import { meanOver, type RunningSums } from '../signal/running-mean.ts'
+
+/** Samples from (inclusive) to (exclusive). */
+export interface Stretch {
+  from: number
+  to: number
+}
+
+/** Where the plates carry nobody. */
+export interface Unloaded {
+  /** Force of the empty plates as recorded, N. */
+  level: number
+  sd: number
+  /** Usual force of the loaded plates as recorded, N. */
+  stanceLevel: number
+  /** Unloaded stretches between two loaded ones, short enough for a flight. */
+  flights: Stretch[]
+  /** Unloaded too long for a flight, or at an end of the record. */
+  offPlate: Stretch[]
+}
+
+/** Start of the window of `width` samples with the least mean. */
+function lowestWindow(sums: RunningSums, length: number, width: number): number {
+  let lowest = 0
+  let least = Infinity
+  for (let i = 0; i + width <= length; i++) {
+    const sum = sums.sums[i + width] - sums.sums[i]
+    if (sum < least) {
+      least = sum
+      lowest = i
+    }
+  }
+  return lowest
+}
+
+function spread(force: Float64Array, from: number, to: number, mean: number): number {
+  let squares = 0
+  for (let i = from; i < to; i++) squares += (force[i] - mean) * (force[i] - mean)
+  return Math.sqrt(squares / Math.max(1, to - from - 1))
+}
+
+/** Usual level of what lies well above the empty plates. */
+function usualLoad(force: Float64Array, level: number, smallestLoad: number): number {
+  const usual = usualLevel(force)
+  if (usual > level + smallestLoad) return usual
+  return usualLevel(force.filter((value) => value > level + smallestLoad))
+}
+
+/** Stretches below `threshold`, joined over gaps shorter than `gap` samples. */
+function stretchesBelow(force: Float64Array, threshold: number, gap: number): Stretch[] {
+  const found: Stretch[] = []
+  let from = -1
+  for (let i = 0; i <= force.length; i++) {
+    const below = i < force.length && force[i] < threshold
+    if (below && from < 0) from = i
+    if (!below && from >= 0) {
+      const last = found.at(-1)
+      if (last && from - last.to < gap) last.to = i
+      else found.push({ from, to: i })
+      from = -1
+    }
+  }
+  return found
+}
+
+/**
+ * Finds where the plates carry nobody: the lowest tenth of a second gives the level and noise of the empty plates,
+ * and a threshold that adapts to that noise cuts the stretches. `null` where nothing stands out as empty.
+ */
+export function findUnloaded(
+  force: Float64Array,
+  sums: RunningSums,
+  dt: number,
+  settings: Settings,
+): Unloaded | null {
+  const width = Math.max(2, Math.round(settings.unloadedWindowS / dt))
+  if (force.length < 2 * width) return null
+  const start = lowestWindow(sums, force.length, width)
+  const level = meanOver(sums, start, start + width)
+  const sd = spread(force, start, start + width, level)
+  const stanceLevel = usualLoad(force, level, settings.smallestLoadN)
+  if (!(stanceLevel - level > settings.smallestLoadN)) return null
+
+  const load = stanceLevel - level
+  const threshold = level + Math.max(settings.eventForceN, settings.unloadedSd * sd)
+  const nearZero = Math.abs(level) < 0.15 * load || Math.abs(stanceLevel) < 0.15 * load
+  const flat = sd < 0.02 * load
+  if (threshold > level + load / 2 || (!nearZero && !flat)) return null
+
+  const gap = Math.round(settings.shortestContactS / dt)
+  const shortest = settings.eventPersistenceS / dt
+  const longest = settings.longestFlightS / dt
+  const flights: Stretch[] = []
+  const offPlate: Stretch[] = []
+  for (const stretch of stretchesBelow(force, threshold, gap)) {
+    const inside = stretch.from > 0 && stretch.to < force.length
+    const duration = stretch.to - stretch.from
+    if (inside && duration <= longest) {
+      if (duration >= 0.9 * shortest) flights.push(stretch)
+    } else if (duration >= shortest || !inside) offPlate.push(stretch)
+  }
+  return { level, sd, stanceLevel, flights, offPlate }
+}

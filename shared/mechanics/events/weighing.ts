@@ -1,0 +1,119 @@
+import type { Settings } from '../settings.ts'
+import { effectiveSamples, estimateNoise } from '../signal/noise.ts'
+import { meanOver, type RunningSums } from '../signal/running-mean.ts'
+import type { Stretch } from './unloaded.ts'
+
+/** The weighing: what the quiet stance before the jump says of the weight. */
+export interface Weighing {
+  window: Stretch
+  /** Quiet stance around the window, up to the movement. */
+  stance: Stretch
+  systemWeight: number
+  /** SD of the samples in the window, N. */
+  spread: number
+  /** Standard error of the mean from noise, N, and its degrees of freedom. */
+  noiseU: number
+  noiseDof: number
+  /** Standard uncertainty from slow sway, N, and its degrees of freedom; system mass still to be known where NaN. */
+  swayU: number
+  swayDof: number
+}
+
+/** Start of the window of `width` samples within [from, to) whose samples spread least. */
+function steadiestWindow(force: Float64Array, from: number, to: number, width: number): number {
+  const reference = force[from]
+  let sum = 0
+  let squares = 0
+  for (let i = from; i < from + width; i++) {
+    const x = force[i] - reference
+    sum += x
+    squares += x * x
+  }
+  let least = squares - (sum * sum) / width
+  let best = from
+  for (let i = from + width; i < to; i++) {
+    const entering = force[i] - reference
+    const leaving = force[i - width] - reference
+    sum += entering - leaving
+    squares += entering * entering - leaving * leaving
+    const spread = squares - (sum * sum) / width
+    if (spread < least) {
+      least = spread
+      best = i - width + 1
+    }
+  }
+  return best
+}
+
+/** Widens the window by blocks while their means stay at the weight. */
+function quietAround(
+  sums: RunningSums,
+  window: Stretch,
+  limits: Stretch,
+  weight: number,
+  band: number,
+  block: number,
+): Stretch {
+  let { from, to } = window
+  while (from - block >= limits.from && Math.abs(meanOver(sums, from - block, from) - weight) < band)
+    from -= block
+  while (to + block <= limits.to && Math.abs(meanOver(sums, to, to + block) - weight) < band) to += block
+  return { from, to }
+}
+
+function blockMeans(sums: RunningSums, stance: Stretch, block: number): Float64Array {
+  const means = new Float64Array(Math.floor((stance.to - stance.from) / block))
+  for (let k = 0; k < means.length; k++)
+    means[k] = meanOver(sums, stance.from + k * block, stance.from + (k + 1) * block)
+  return means
+}
+
+function spreadOf(force: Float64Array, { from, to }: Stretch): number {
+  let sum = 0
+  for (let i = from; i < to; i++) sum += force[i] - force[from]
+  const mean = force[from] + sum / (to - from)
+  let squares = 0
+  for (let i = from; i < to; i++) squares += (force[i] - mean) * (force[i] - mean)
+  return Math.sqrt(squares / Math.max(1, to - from - 1))
+}
+
+/**
+ * Weighs: the mean over the steadiest window within `limits`. Its standard error takes the noise from the whole
+ * quiet stance, because the steadiest window alone looks calmer than it is, and counts independent samples by the
+ * autocorrelation; sway adds what it moves the mean. `null` where the limits are shorter than the shortest weighing.
+ */
+export function weigh(
+  force: Float64Array,
+  sums: RunningSums,
+  limits: Stretch,
+  gravity: number,
+  dt: number,
+  settings: Settings,
+): Weighing | null {
+  const available = limits.to - limits.from
+  const width = Math.min(available, Math.round(settings.weighingWindowS / dt))
+  if (width < Math.max(8, settings.shortestWeighingS / dt)) return null
+  const from = steadiestWindow(force, limits.from, limits.to, width)
+  const window = { from, to: from + width }
+  const systemWeight = meanOver(sums, window.from, window.to)
+  const block = Math.max(1, Math.round(settings.noiseBlockS / dt))
+  const band = settings.onsetFraction * Math.abs(systemWeight)
+  const stance = quietAround(sums, window, limits, systemWeight, band, 4 * block)
+
+  const blocks = blockMeans(sums, stance, block)
+  const noise = estimateNoise(blocks, 0, blocks.length)
+  const blocksInWindow = width / block
+  const noiseU = noise.sd * Math.sqrt(noise.inflation / blocksInWindow)
+  const noiseDof = Math.max(1, effectiveSamples(noise) - 1)
+
+  const mass = systemWeight / gravity
+  let swayU = (mass * settings.swayVelocityChange) / (width * dt)
+  let swayDof = Infinity
+  if ((stance.to - stance.from) * dt >= settings.swayFromMeansS) {
+    const means = blockMeans(sums, stance, width)
+    const spread = spreadOf(means, { from: 0, to: means.length })
+    swayU = Math.sqrt(Math.max(0, spread * spread - noiseU * noiseU))
+    swayDof = means.length - 1
+  }
+  return { window, stance, systemWeight, spread: spreadOf(force, window), noiseU, noiseDof, swayU, swayDof }
+}

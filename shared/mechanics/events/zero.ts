@@ -1,0 +1,49 @@
+import type { Settings } from '../settings.ts'
+import type { Plate, Signal } from '../signal/condition.ts'
+import { effectiveSamples, estimateNoise, type Noise } from '../signal/noise.ts'
+import type { Stretch } from './unloaded.ts'
+
+/** What the unloaded plates say: zero and noise. */
+export interface Zero {
+  /** Sample in the middle of the stretch. */
+  centre: number
+  /** Noise of each plate, in the order of the signal's plates, and of the total. */
+  plates: Noise[]
+  total: Noise
+  /** Standard uncertainty of each plate's zero, N, with degrees of freedom. */
+  offsetU: number[]
+  offsetDof: number[]
+}
+
+/** The inner part of an unloaded stretch, clear of ringing at its edges, at most a second long. */
+function inner({ from, to }: Stretch, dt: number, settings: Settings): Stretch {
+  const margin = Math.min(Math.round(settings.flightMarginS / dt), Math.floor((to - from) / 3))
+  const end = Math.min(to - margin, from + margin + Math.round(1 / dt))
+  return { from: from + margin, to: end }
+}
+
+function takeOff(plate: Plate, total: Float64Array, offset: number): void {
+  const { force } = plate
+  for (let i = 0; i < force.length; i++) {
+    force[i] -= offset
+    total[i] -= offset
+  }
+  plate.offsetN = offset
+}
+
+/**
+ * Takes each plate's zero from an unloaded stretch and subtracts it from the signal (which is the engine's own copy).
+ * A plate that was tared with the athlete on it is put right by the same step.
+ */
+export function zeroPlates(signal: Signal, unloaded: Stretch, settings: Settings): Zero {
+  const stretch = inner(unloaded, signal.dt, settings)
+  const plates = signal.plates.map((plate) => estimateNoise(plate.force, stretch.from, stretch.to))
+  signal.plates.forEach((plate, i) => takeOff(plate, signal.total, plates[i].mean))
+  return {
+    centre: (stretch.from + stretch.to - 1) / 2,
+    plates,
+    total: signal.plates.length === 1 ? plates[0] : estimateNoise(signal.total, stretch.from, stretch.to),
+    offsetU: plates.map((noise) => noise.sd / Math.sqrt(effectiveSamples(noise))),
+    offsetDof: plates.map((noise) => Math.max(1, effectiveSamples(noise) - 1)),
+  }
+}

@@ -1,0 +1,26 @@
+import type { MetricKey } from '../catalogue.ts'
+import type { Quantity } from '../uncertainty/budget.ts'
+
+/** What became of a metric: a quantity, one without an honest uncertainty, or none. */
+export type Outcome = { quantity: Quantity; withoutU?: string } | { missing: string }
+
+/** Outcomes by key; a metric that does not apply is not there. */
+export type Measured = Partial<Record<MetricKey, Outcome>>
+
+/** Reasons that several metrics share. */
+export const reasons = {
+  noTouchdown: 'No touchdown was found: the athlete did not come back onto the plates within a flight.',
+  noLandingEnd: 'The velocity did not come back to zero before the recording ended.',
+  noStill: 'The athlete did not stand still for a second after landing before the recording ended.',
+  noDip: 'No countermovement was found: the body did not move down before the push.',
+} as const
+
+/** Quantities by key, each taken as measured with its uncertainty. */
+export function measured(quantities: Partial<Record<MetricKey, Quantity>>): Measured {
+  return Object.fromEntries(Object.entries(quantities).map(([key, quantity]) => [key, { quantity }]))
+}
+
+/** The same reason for each of the keys. */
+export function missing(keys: readonly MetricKey[], reason: string): Measured {
+  return Object.fromEntries(keys.map((key) => [key, { missing: reason }]))
+}

@@ -1,0 +1,82 @@
+import { forceKeys, type ForceKey } from '../catalogue/force.ts'
+import { fitParabola, parabolaAt, parabolaNoiseAt } from '../signal/local-parabola.ts'
+import { findPeak, type Peak } from '../signal/peak.ts'
+import type { Quantity } from '../uncertainty/budget.ts'
+import type { EventTimes } from './event-times.ts'
+import { downwardVelocityOf } from './impulse.ts'
+import { forceOf, type JumpModel } from './jump-model.ts'
+import { measured, missing, reasons, type Measured } from './measured.ts'
+
+function peakForceOf(model: JumpModel, peak: Peak): Quantity {
+  return forceOf(model, peak.value, peak.position, peak.valueU)
+}
+
+function greatest(model: JumpModel, from: number, to: number): Quantity {
+  const { motion, zero, signal } = model
+  return peakForceOf(model, findPeak(motion.force, from, to, 1, zero.total, signal.dt))
+}
+
+/** Force at an instant within the movement, by a parabola over some milliseconds around it. */
+function smoothForceAt(model: JumpModel, position: number): Quantity {
+  const { motion, zero, signal } = model
+  const fit = fitParabola(motion.force, position, Math.max(2, Math.round(0.006 / signal.dt)))
+  return forceOf(model, parabolaAt(fit, position), position, parabolaNoiseAt(fit, position, zero.total))
+}
+
+/** Mean force over a phase: weight plus change of momentum over time. */
+function meanForce(
+  { budget, systemWeight }: JumpModel,
+  momentumChange: Quantity,
+  duration: Quantity,
+): Quantity {
+  return budget.plus(systemWeight, budget.over(momentumChange, duration))
+}
+
+function allForces(
+  model: JumpModel,
+  times: EventTimes,
+  takeoffVelocity: Quantity,
+): Partial<Record<ForceKey, Quantity>> {
+  const { budget, events, systemMass } = model
+  const { onset, minimumForce, minimumVelocity, zeroVelocity, takeoff } = events
+  const peakForce = greatest(model, onset.position, takeoff.position)
+  const downward = downwardVelocityOf(model)
+  if (
+    !minimumForce ||
+    !minimumVelocity ||
+    !zeroVelocity ||
+    !downward ||
+    !times.minimumVelocity ||
+    !times.zeroVelocity
+  )
+    return { peakForce }
+  const brakingTime = budget.minus(times.zeroVelocity, times.minimumVelocity)
+  const propulsionTime = budget.minus(times.takeoff, times.zeroVelocity)
+  const momentumUp = budget.times(systemMass, takeoffVelocity)
+  const momentumDown = budget.scaled(budget.times(systemMass, downward), -1)
+  return {
+    peakForce,
+    minimumForce: peakForceOf(model, minimumForce),
+    forceAtZeroVelocity: smoothForceAt(model, zeroVelocity.position),
+    peakBrakingForce: greatest(model, minimumVelocity.position, zeroVelocity.position),
+    meanBrakingForce: meanForce(model, momentumDown, brakingTime),
+    peakPropulsionForce: greatest(model, zeroVelocity.position, takeoff.position),
+    meanPropulsionForce: meanForce(model, momentumUp, propulsionTime),
+  }
+}
+
+/** Forces of the push in newtons and per body weight. */
+export function pushForceFigures(model: JumpModel, times: EventTimes, takeoffVelocity: Quantity): Measured {
+  const forces = allForces(model, times, takeoffVelocity)
+  const figures: Measured = {}
+  for (const key of forceKeys) {
+    const force = forces[key]
+    Object.assign(
+      figures,
+      force
+        ? measured({ [key]: force, [`${key}PerBodyWeight`]: model.budget.over(force, model.bodyWeight) })
+        : missing([key, `${key}PerBodyWeight`], reasons.noDip),
+    )
+  }
+  return figures
+}

@@ -1,0 +1,222 @@
+import type { MetricKey } from '../catalogue.ts'
+import type { AsymmetryFigure, Figure, Sides } from '../types.ts'
+import { fitFlank, type Crossing } from '../events/flank.ts'
+import { phasesOf } from '../phases.ts'
+import { grossImpulse } from '../signal/gross-impulse.ts'
+import { integratedNoise, type Noise } from '../signal/noise.ts'
+import { findPeak } from '../signal/peak.ts'
+import type { Quantity } from '../uncertainty/budget.ts'
+import { isSide, type JumpModel, type PlateInputs } from './jump-model.ts'
+import { findRise, greatestSlope } from './loading-rate.ts'
+import { missing, type Measured, type Outcome } from './measured.ts'
+
+/** One foot: its plate's inputs, its noise, and its own takeoff and touchdown. */
+export interface Foot {
+  plate: PlateInputs
+  noise: Noise
+  takeoff: Crossing | null
+  touchdown: Crossing | null
+}
+
+const perPhase = {
+  unweighting: { gross: 'unweightingGrossImpulse' },
+  braking: { gross: 'brakingGrossImpulse', mean: 'meanBrakingForce', peak: 'peakBrakingForce' },
+  propulsion: { gross: 'propulsionGrossImpulse', mean: 'meanPropulsionForce', peak: 'peakPropulsionForce' },
+  landing: { gross: 'landingGrossImpulse', mean: 'meanLandingForce', peak: 'landingPeakForce' },
+} as const satisfies Record<string, { gross: MetricKey; mean?: MetricKey; peak?: MetricKey }>
+
+/** Sample at which a plate's force first falls (or last fell) under a threshold near the total's event. */
+function edgeNear(
+  force: Float64Array,
+  around: number,
+  reach: number,
+  threshold: number,
+  rising: boolean,
+): number | null {
+  if (rising) {
+    for (let i = Math.max(1, Math.floor(around - 2)); i <= Math.min(force.length - 1, around + reach); i++)
+      if (force[i] >= threshold) return i
+    return null
+  }
+  for (let i = Math.min(force.length - 1, Math.ceil(around + 2)); i >= Math.max(1, around - reach); i--)
+    if (force[i - 1] >= threshold) return i
+  return null
+}
+
+/** The feet of a trial on two plates, left first; `null` with one plate. */
+export function findFeet(model: JumpModel): [Foot, Foot] | null {
+  const { plates, zero, events, signal, settings } = model
+  if (plates.length !== 2 || !plates.every(({ channel }) => isSide(channel))) return null
+  const reach = settings.unloadedWindowS / signal.dt
+  const feet = plates.map((plate, i): Foot => {
+    const noise = zero.plates[i]
+    const threshold = Math.max(settings.eventForceN, settings.unloadedSd * noise.sd)
+    const place = (around: number, rising: boolean) => {
+      const edge = edgeNear(plate.force, around, reach, threshold, rising)
+      return edge === null
+        ? null
+        : fitFlank(plate.force, edge, rising ? 'rising' : 'falling', noise, signal.dt, settings)
+    }
+    return {
+      plate,
+      noise,
+      takeoff: place(events.takeoff.position, false),
+      touchdown: events.touchdown && place(events.touchdown.position, true),
+    }
+  })
+  return [feet[0], feet[1]]
+}
+
+/** A force of one foot: noise of its own, its plate's zero and calibration. */
+function footForce({ budget }: JumpModel, foot: Foot, value: number, u: number): Quantity {
+  return budget.linear(value, [
+    [1, budget.input(0, u)],
+    [1, foot.plate.offset],
+    [value, foot.plate.gain],
+  ])
+}
+
+function footImpulse(model: JumpModel, foot: Foot, from: number, to: number): Quantity {
+  const { budget, signal } = model
+  const duration = (to - from) * signal.dt
+  const value = grossImpulse(foot.plate.force, foot.plate.sums, from, to, signal.dt)
+  return budget.linear(value, [
+    [1, budget.input(0, integratedNoise(foot.noise, duration, signal.dt))],
+    [duration, foot.plate.offset],
+    [value, foot.plate.gain],
+  ])
+}
+
+function loadingRates(model: JumpModel, foot: Foot, landingEnd: number): Measured {
+  const keys: MetricKey[] = ['landingLoadingRateMean', 'landingLoadingRate2080', 'landingLoadingRateMax']
+  const { budget, signal, settings } = model
+  if (!foot.touchdown) return missing(keys, 'This foot has no touchdown of its own.')
+  const { force } = foot.plate
+  const start = foot.touchdown.position
+  const peak = findPeak(force, start, landingEnd, 1, foot.noise, signal.dt)
+  const timeToPeak = (peak.position - start) * signal.dt
+  const relative = (value: number, timeU: number, duration: number): Quantity =>
+    budget.linear(value, [
+      [value, foot.plate.gain],
+      [value / peak.value, budget.input(0, peak.valueU)],
+      [value / duration, budget.input(0, timeU)],
+    ])
+  const mean = peak.value / timeToPeak
+  const meanU = Math.hypot(peak.positionU, foot.touchdown.positionU) * signal.dt
+  const rise = findRise(force, start, peak, foot.noise, settings)
+  const steepest = greatestSlope(force, start, peak.position, settings.loadingRateWindowS / signal.dt)
+  const outcomes: Measured = {
+    landingLoadingRateMean:
+      timeToPeak > 0 ? { quantity: relative(mean, meanU, timeToPeak) } : { missing: 'No rise was found.' },
+  }
+  if (rise) {
+    const duration = (rise.high.position - rise.low.position) * signal.dt
+    const share = settings.loadingRateHigh - settings.loadingRateLow
+    const u = Math.hypot(rise.low.positionU, rise.high.positionU) * signal.dt
+    const quantity = relative((share * peak.value) / duration, u, duration)
+    outcomes.landingLoadingRate2080 = rise.doubt === null ? { quantity } : { quantity, withoutU: rise.doubt }
+  } else
+    outcomes.landingLoadingRate2080 = { missing: 'The force does not rise through 20 and 80 % of its peak.' }
+  if (steepest) {
+    const value = steepest.slope / signal.dt
+    const u = (steepest.slopeU * foot.noise.sd * Math.sqrt(foot.noise.inflation)) / signal.dt
+    outcomes.landingLoadingRateMax = {
+      quantity: budget.linear(value, [
+        [1, budget.input(0, u)],
+        [value, foot.plate.gain],
+      ]),
+    }
+  }
+  return outcomes
+}
+
+/** Every figure of one foot, over the phases of the total. */
+export function footFigures(model: JumpModel, foot: Foot): Measured {
+  const { signal, budget, weighing } = model
+  const windowS = (weighing.window.to - weighing.window.from) * signal.dt
+  const stanceU = integratedNoise(foot.noise, windowS, signal.dt) / windowS
+  const outcomes: Measured = {
+    stanceForce: { quantity: footForce(model, foot, foot.plate.stanceForce, stanceU) },
+  }
+  for (const { phase, from, to } of phasesOf(model.events)) {
+    if (!(phase in perPhase)) continue
+    const keys: { gross: MetricKey; mean?: MetricKey; peak?: MetricKey } =
+      perPhase[phase as keyof typeof perPhase]
+    const gross = footImpulse(model, foot, from, to)
+    outcomes[keys.gross] = { quantity: gross }
+    if (keys.mean) outcomes[keys.mean] = { quantity: budget.scaled(gross, 1 / ((to - from) * signal.dt)) }
+    if (keys.peak) {
+      const peak = findPeak(foot.plate.force, from, to, 1, foot.noise, signal.dt)
+      outcomes[keys.peak] = { quantity: footForce(model, foot, peak.value, peak.valueU) }
+    }
+    if (phase === 'landing') Object.assign(outcomes, loadingRates(model, foot, to))
+  }
+  return outcomes
+}
+
+/** Lags of the feet, right less left. */
+export function lagFigures(model: JumpModel, [left, right]: [Foot, Foot]): Measured {
+  const { budget, signal } = model
+  const lag = (a: Crossing | null, b: Crossing | null): Outcome => {
+    if (!a || !b) return { missing: 'A foot has no event of its own here.' }
+    const u = Math.hypot(a.positionU, b.positionU) * signal.dt
+    return {
+      quantity: budget.linear((b.position - a.position) * signal.dt, [
+        [1, budget.input(0, u)],
+        [-signal.dt / b.slope, right.plate.offset],
+        [signal.dt / a.slope, left.plate.offset],
+      ]),
+    }
+  }
+  return {
+    feetTakeoffLag: lag(left.takeoff, right.takeoff),
+    feetTouchdownLag: lag(left.touchdown, right.touchdown),
+  }
+}
+
+/**
+ * Signed symmetry index (right − left) / (½(right + left)) · 100 % (Robinson 1987, from memory; formula as in
+ * BMC Sports Sci Med Rehabil 13:115). `null` where both feet carry nothing.
+ */
+export function asymmetryOf(
+  { budget }: JumpModel,
+  left: Quantity,
+  right: Quantity,
+  withoutU: boolean,
+): AsymmetryFigure | null {
+  const sum = left.value + right.value
+  if (!(Math.abs(sum) > 0)) return null
+  const value = (200 * (right.value - left.value)) / sum
+  const quantity = budget.linear(value, [
+    [(400 * left.value) / (sum * sum), right],
+    [(-400 * right.value) / (sum * sum), left],
+  ])
+  const figure = budget.figure(quantity, withoutU)
+  return {
+    ...figure,
+    larger: value >= 0 ? 'right' : 'left',
+    zeroWithin: figure.U === null ? null : Math.abs(value) <= figure.U,
+  }
+}
+
+/** Figures of each foot and their asymmetry. */
+export function sidesOf(model: JumpModel, feet: [Foot, Foot]): Sides {
+  const [left, right] = feet.map((foot) => footFigures(model, foot))
+  const sides: Sides = { left: {}, right: {}, asymmetry: {} }
+  const put = (into: Record<string, Figure>, key: string, outcome: Outcome) => {
+    if ('quantity' in outcome)
+      into[key] = model.budget.figure(outcome.quantity, outcome.withoutU !== undefined)
+  }
+  for (const key of Object.keys(left) as MetricKey[]) {
+    const a = left[key]
+    const b = right[key]
+    if (!a || !b) continue
+    put(sides.left, key, a)
+    put(sides.right, key, b)
+    if (!('quantity' in a) || !('quantity' in b)) continue
+    const withoutU = a.withoutU !== undefined || b.withoutU !== undefined
+    const asymmetry = asymmetryOf(model, a.quantity, b.quantity, withoutU)
+    if (asymmetry) sides.asymmetry[key] = asymmetry
+  }
+  return sides
+}

@@ -1,0 +1,150 @@
+import type { ForceChannel, Note, Recording } from '../types.ts'
+import type { Settings } from '../settings.ts'
+
+/** One plate's force in newtons, a copy that the engine may correct. */
+export interface Plate {
+  channel: ForceChannel
+  force: Float64Array
+  /** Zero offset taken off, N. */
+  offsetN: number
+  /** The whole record was turned over because pressing down read negative. */
+  flipped: boolean
+  /** The record hardly moves: nothing stood on this plate, or it was not connected. */
+  dead: boolean
+}
+
+/** The force of a recording on an even time base, ready for the search of events. */
+export interface Signal {
+  sampleRateHz: number
+  /** Sample interval, s. */
+  dt: number
+  length: number
+  plates: Plate[]
+  total: Float64Array
+  /** Samples that were no number or beyond any plate, filled by straight lines. */
+  unreadable: number
+}
+
+/** Either a signal or the reason why there is none. */
+export type Conditioned = { signal: Signal } | { problem: Note }
+
+const fewestSamples = 20
+
+function problem(code: string, sentence: string): Conditioned {
+  return { problem: { code, sentence } }
+}
+
+/** Which channels carry the force: two feet where both are there, otherwise the one there is. */
+function chooseChannels(recording: Recording): ForceChannel[] {
+  const { left, right, single, total } = recording.channels
+  if (left && right) return ['left', 'right']
+  if (total) return ['total']
+  if (single) return ['single']
+  if (left) return ['left']
+  return right ? ['right'] : []
+}
+
+/** Copies a channel, bridging samples that are not finite or beyond `limit` by straight lines; answers how many. */
+function copyReadable(from: Float64Array, to: Float64Array, limit: number): number {
+  let bad = 0
+  let lastGood = -1
+  for (let i = 0; i < to.length; i++) {
+    const value = from[i]
+    if (value <= limit && value >= -limit) {
+      to[i] = value
+      if (lastGood < i - 1) bridge(to, lastGood, i)
+      lastGood = i
+    } else bad++
+  }
+  if (lastGood >= 0) to.fill(to[lastGood], lastGood + 1)
+  return bad
+}
+
+function bridge(force: Float64Array, lastGood: number, nextGood: number): void {
+  const start = lastGood >= 0 ? force[lastGood] : force[nextGood]
+  const slope = lastGood >= 0 ? (force[nextGood] - start) / (nextGood - lastGood) : 0
+  for (let i = lastGood + 1; i < nextGood; i++) force[i] = start + slope * (i - lastGood)
+}
+
+/** Median of about 500 samples spread over the record: its usual level. */
+export function usualLevel(force: Float64Array): number {
+  const step = Math.max(1, Math.floor(force.length / 500))
+  const some = new Float64Array(Math.ceil(force.length / step))
+  for (let i = 0, k = 0; i < force.length; i += step) some[k++] = force[i]
+  some.sort()
+  return some[some.length >> 1]
+}
+
+/**
+ * Pressing down reads negative where the usual level is below zero and the largest force points the same way:
+ * a push and a landing reach further from standing than the empty plate does.
+ */
+function isNegativeGoing(force: Float64Array, least: number, greatest: number): boolean {
+  const usual = usualLevel(force)
+  const span = greatest - least
+  return usual < -0.1 * span && usual - least > greatest - usual
+}
+
+function conditionPlate(
+  channel: ForceChannel,
+  raw: Float64Array,
+  settings: Settings,
+): Plate & { unreadable: number } {
+  const force = new Float64Array(raw.length)
+  const unreadable = copyReadable(raw, force, settings.greatestForceN)
+  let least = Infinity
+  let greatest = -Infinity
+  for (let i = 0; i < force.length; i++) {
+    const value = force[i]
+    if (value < least) least = value
+    if (value > greatest) greatest = value
+  }
+  const flipped = isNegativeGoing(force, least, greatest)
+  if (flipped) for (let i = 0; i < force.length; i++) force[i] = -force[i]
+  const dead = !(greatest - least > settings.smallestLoadN / 3)
+  return { channel, force, offsetN: 0, flipped, dead, unreadable }
+}
+
+/**
+ * Takes the force channels of a recording as copies: bridges unreadable samples and counts them, turns over a
+ * plate that reads negative. The recording itself stays as it was.
+ */
+export function conditionRecording(recording: Recording, settings: Settings): Conditioned {
+  const rate = recording.sampleRateHz
+  if (!(rate > 0 && Number.isFinite(rate)))
+    return problem(
+      'rate-unknown',
+      'The sample rate is not known, so no time can be told. Give the rate in hertz.',
+    )
+  const channels = chooseChannels(recording)
+  if (channels.length === 0)
+    return problem(
+      'no-force-column',
+      'The recording has no vertical force. Say which column holds the force.',
+    )
+  const raws = channels.map((channel) => recording.channels[channel] as Float64Array)
+  const length = raws[0].length
+  if (raws.some((raw) => raw.length !== length))
+    return problem(
+      'unequal-channels',
+      'The two plates have different numbers of samples. Export the file again.',
+    )
+  if (length < fewestSamples)
+    return problem(
+      'too-short',
+      `The recording has ${length} samples, too few for a jump. Record the whole trial.`,
+    )
+
+  const conditioned = channels.map((channel, i) => conditionPlate(channel, raws[i], settings))
+  const total = new Float64Array(length)
+  for (const plate of conditioned) for (let i = 0; i < length; i++) total[i] += plate.force[i]
+  const unreadable = conditioned.reduce((sum, plate) => sum + plate.unreadable, 0)
+  const plates = conditioned.map(({ channel, force, offsetN, flipped, dead }) => ({
+    channel,
+    force,
+    offsetN,
+    flipped,
+    dead,
+  }))
+  return { signal: { sampleRateHz: rate, dt: 1 / rate, length, plates, total, unreadable } }
+}

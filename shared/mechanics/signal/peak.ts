@@ -1,0 +1,79 @@
+import { fitParabola, parabolaNoiseAt, parabolaSlopeNoise, type Parabola } from './local-parabola.ts'
+import type { Noise } from './noise.ts'
+
+/** A greatest or least force of the noise-free curve, estimated between samples. */
+export interface Peak {
+  position: number
+  value: number
+  /** Standard uncertainties from noise and sampling: of the value, N, and of the position, samples. */
+  valueU: number
+  positionU: number
+}
+
+/** Part of the noise by which the fitted window may fall away from the peak: more averages better, less bends less. */
+const fallInSd = 4
+const widestS = 0.015
+
+function extremeSample(force: Float64Array, from: number, to: number, sign: 1 | -1): number {
+  let best = from
+  for (let i = from; i <= to; i++) if (sign * force[i] > sign * force[best]) best = i
+  return best
+}
+
+function vertex(fit: Parabola, sign: 1 | -1): number {
+  const x = sign * fit.bend < 0 ? -fit.slope / (2 * fit.bend) : 0
+  return fit.centre + Math.max(-fit.half, Math.min(fit.half, x))
+}
+
+function heightAt(fit: Parabola, position: number): number {
+  const x = position - fit.centre
+  return fit.level + x * (fit.slope + x * fit.bend)
+}
+
+/** Half-width at which the curve has fallen `fallInSd` standard deviations from its peak. */
+function halfWidth(force: Float64Array, centre: number, noise: Noise, dt: number): number {
+  const widest = Math.max(1, Math.round(widestS / dt))
+  let half = Math.min(widest, Math.max(2, Math.round(0.004 / dt)))
+  for (let pass = 0; pass < 3; pass++) {
+    const bend = Math.abs(fitParabola(force, centre, half).bend)
+    const wanted = Math.sqrt((fallInSd * noise.sd) / Math.max(bend, 1e-9))
+    half = Math.max(1, Math.min(widest, Math.round(wanted)))
+  }
+  return half
+}
+
+/**
+ * Greatest (sign 1) or least (sign −1) force in [from, to] (samples). The largest sample of a noisy peak lies above
+ * the true one; a parabola fitted over a window that fits the noise and the sharpness of the peak does not, and its
+ * vertex is the estimate. A peak at an end of the stretch is read there.
+ */
+export function findPeak(
+  force: Float64Array,
+  from: number,
+  to: number,
+  sign: 1 | -1,
+  noise: Noise,
+  dt: number,
+): Peak {
+  const a = Math.max(0, Math.ceil(from))
+  const b = Math.min(force.length - 1, Math.floor(to))
+  let centre = extremeSample(force, a, Math.max(a, b), sign)
+  const half = halfWidth(force, centre, noise, dt)
+  let fit = fitParabola(force, centre, half)
+  for (let pass = 0; pass < 2; pass++) {
+    centre = Math.max(a, Math.min(b, Math.round(vertex(fit, sign))))
+    fit = fitParabola(force, centre, half)
+  }
+  const position = Math.max(from, Math.min(to, vertex(fit, sign)))
+  const value = heightAt(fit, position)
+  const wider = heightAt(fitParabola(force, centre, half + 1), position)
+  const sampling = Math.abs(value - wider) / Math.sqrt(3)
+  const fromNoise = parabolaNoiseAt(fit, position, noise)
+  const positionU = parabolaSlopeNoise(fit, noise) / Math.max(1e-9, 2 * Math.abs(fit.bend))
+  return {
+    position,
+    value,
+    valueU: Math.hypot(fromNoise, sampling),
+    positionU: Math.min(half + 1, Math.hypot(positionU, 0.05)),
+  }
+}

@@ -1,0 +1,44 @@
+import { describe, expect, it } from 'vitest'
+import { studentT } from './student-t.ts'
+
+describe('studentT', () => {
+  // Quantiles by SciPy 1.17: two-sided coverage 0.95 and 0.99.
+  const table: [dof: number, t95: number, t99: number][] = [
+    [1, 12.7062, 63.6567],
+    [2, 4.3027, 9.9248],
+    [3, 3.1824, 5.8409],
+    [4, 2.7764, 4.6041],
+    [5, 2.5706, 4.0321],
+    [7, 2.3646, 3.4995],
+    [9, 2.2622, 3.2498],
+    [10, 2.2281, 3.1693],
+    [15, 2.1314, 2.9467],
+    [20, 2.086, 2.8453],
+    [30, 2.0423, 2.75],
+    [60, 2.0003, 2.6603],
+    [120, 1.9799, 2.6174],
+  ]
+  it.each(table)('meets the table at %i degrees of freedom', (dof, t95, t99) => {
+    expect(Math.abs(studentT(0.95, dof) / t95 - 1)).toBeLessThan(4e-5)
+    expect(Math.abs(studentT(0.99, dof) / t99 - 1)).toBeLessThan(4e-5)
+  })
+
+  it('comes to the normal distribution where nothing is statistical', () => {
+    expect(studentT(0.95, Infinity)).toBeCloseTo(1.959964, 6)
+    expect(studentT(0.95, NaN)).toBeCloseTo(1.959964, 6)
+    expect(studentT(0.6826894921, Infinity)).toBeCloseTo(1, 6)
+  })
+
+  it('falls steadily as the degrees of freedom grow, whole or not', () => {
+    let last = Infinity
+    for (let dof = 1; dof < 200; dof *= 1.07) {
+      const t = studentT(0.95, dof)
+      expect(t).toBeLessThan(last)
+      last = t
+    }
+  })
+
+  it('takes fewer than one degree of freedom as one', () => {
+    expect(studentT(0.95, 0.3)).toBeCloseTo(12.7062, 3)
+  })
+})
