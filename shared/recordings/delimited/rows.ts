@@ -28,10 +28,21 @@ export function lineEndFor(text: string): '\n' | '\r' {
   return text.includes('\n') ? '\n' : '\r'
 }
 
+/** The first lines of a text, a few more than are looked at: Papa Parse takes apart all that it is given. */
+function firstLines(text: string): string {
+  const lineEnd = lineEndFor(text)
+  let end = -1
+  for (let line = 0; line < HEAD_ROWS + 1; line++) {
+    end = text.indexOf(lineEnd, end + 1)
+    if (end < 0) return text
+  }
+  return text.slice(0, end + 1)
+}
+
 /** The first rows of a text of one character a byte; `from` is the offset of its first byte in the file. */
 export function topRows(text: string, delimiter: string, from: number): Row[] {
   const rows: Row[] = []
-  Papa.parse<string[]>(text, {
+  Papa.parse<string[]>(firstLines(text), {
     delimiter,
     newline: lineEndFor(text),
     preview: HEAD_ROWS,
