@@ -2,7 +2,7 @@ import { randomBytes } from 'node:crypto'
 import { inject } from 'vitest'
 import { databaseUrl, onDatabase } from '../../server/setup/database-urls.mjs'
 import { forEachRole, makeDatabase } from '../../server/setup/roles.mjs'
-import { templateDatabase } from '../../server/setup/test-cluster.mjs'
+import { templateDatabase, type TestCluster } from '../../server/setup/test-cluster.mjs'
 
 /** A migrated database without a row, for one test file: the three addresses the product knows, and its end. */
 export interface TestDatabase {
@@ -14,9 +14,12 @@ export interface TestDatabase {
   drop: () => Promise<void>
 }
 
-/** Clones the migrated template. Call it in `beforeAll`, and `drop` in `afterAll`. */
-export async function createTestDatabase(): Promise<TestDatabase> {
-  const { port, adminUrl, passwords } = inject('testCluster')
+/**
+ * Clones the migrated template. Call it in `beforeAll`, and `drop` in `afterAll`.
+ * @param cluster where it is not Vitest that runs
+ */
+export async function createTestDatabase(cluster?: TestCluster): Promise<TestDatabase> {
+  const { port, adminUrl, passwords } = cluster ?? inject('testCluster')
   const name = `test_${randomBytes(6).toString('hex')}`
   await makeDatabase(adminUrl, name, templateDatabase)
   const urls = forEachRole((role, key) => databaseUrl(role, passwords[key], port, name))

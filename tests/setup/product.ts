@@ -2,6 +2,7 @@ import { spawn, type ChildProcess } from 'node:child_process'
 import { endsWithStarter } from '../../server/setup/parent-death.mjs'
 import { pause } from '../../server/setup/pause.mjs'
 import { freePort } from '../../server/setup/ports.mjs'
+import type { TestCluster } from '../../server/setup/test-cluster.mjs'
 import { createTestDatabase, type TestDatabase } from './database.ts'
 
 /** The whole product, as it runs for a club: real processes on a database of their own. */
@@ -19,17 +20,21 @@ export interface Product {
   stop: () => Promise<void>
 }
 
+export interface ProductOptions {
+  /** Fills the database before the first process starts. */
+  prepare?: (env: NodeJS.ProcessEnv) => Promise<void>
+  /** Where it is not Vitest that runs. */
+  cluster?: TestCluster
+}
+
 const readyMs = 30_000
 
 /**
  * Starts web, worker and mail catcher on a clone of the migrated database. Call it in `beforeAll`, and `stop`
  * in `afterAll`; the kernel ends the processes where a killed test could not.
- * @param prepare fills the database before the first process starts
  */
-export async function startProduct(
-  prepare: (env: NodeJS.ProcessEnv) => Promise<void> = () => Promise.resolve(),
-): Promise<Product> {
-  const database = await createTestDatabase()
+export async function startProduct({ cluster, prepare }: ProductOptions = {}): Promise<Product> {
+  const database = await createTestDatabase(cluster)
   const ports = { web: await freePort(), smtp: await freePort(), inbox: await freePort() }
   const env = environmentOf(database, ports)
   const children: ChildProcess[] = []
@@ -47,7 +52,7 @@ export async function startProduct(
   }
   const url = `http://localhost:${ports.web}`
   try {
-    await prepare(env)
+    await prepare?.(env)
     for (const file of ['server/fakes/main.ts', 'server/main.ts', 'server/worker.ts']) start(file)
     await untilOk(`${url}/readyz`, () => output)
   } catch (error) {
