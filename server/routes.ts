@@ -17,11 +17,11 @@ export const routes: Route[] = [
   ...peopleRoutes,
   ...squadRoutes,
   ...athleteRoutes,
-  ...clubRoutes,
+  ...resultRoutes,
   ...sessionRoutes,
   ...uploadRoutes,
   ...trialRoutes,
-  ...resultRoutes,
   ...landingWatchRoutes,
+  ...clubRoutes,
   ...eventRoutes,
 ]

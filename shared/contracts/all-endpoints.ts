@@ -2,6 +2,7 @@ import * as account from './account.ts'
 import * as athletes from './athletes.ts'
 import * as clubs from './clubs.ts'
 import type { Endpoint } from './endpoint.ts'
+import * as events from './events.ts'
 import * as landingWatch from './landing-watch.ts'
 import * as people from './people.ts'
 import * as results from './results.ts'
@@ -15,7 +16,7 @@ const isEndpoint = (value: unknown): value is Endpoint =>
 
 /** Every endpoint of the API by name: what the authorisation test walks. */
 export const endpoints: Record<string, Endpoint> = Object.fromEntries(
-  [account, people, squads, athletes, results, sessions, uploads, trials, landingWatch, clubs]
+  [account, people, squads, athletes, results, sessions, uploads, trials, landingWatch, clubs, events]
     .flatMap((noun) => Object.entries(noun))
     .filter((entry): entry is [string, Endpoint] => isEndpoint(entry[1])),
 )

@@ -7,6 +7,7 @@ import type { Caller } from '../../http/caller.ts'
 import { notFound, staleVersion } from '../../http/errors.ts'
 import { record } from '../audit/audit.service.ts'
 import { notify } from '../events/notify.ts'
+import { pointsOfAthlete } from '../results/results.service.ts'
 import { setSquadsOfAthlete } from '../squads/squads.service.ts'
 import { findAthlete, insertAthlete, selectAthletes, updateAthlete } from './athletes.queries.ts'
 
@@ -15,6 +16,14 @@ export async function listClubAthletes(
   ctx: Caller,
 ): Promise<{ athletes: Athlete[] }> {
   return db.inClub(ctx, async (tx) => ({ athletes: await selectAthletes(tx, ctx.clubId) }))
+}
+
+/** An athlete with one point a session, of the sheets as they stand. */
+export async function openAthlete({ db }: Pick<Deps, 'db'>, ctx: Caller, id: string) {
+  return db.inClub(ctx, async (tx) => ({
+    athlete: await readAthlete(tx, ctx, id),
+    results: await pointsOfAthlete(tx, ctx, id),
+  }))
 }
 
 export async function addAthlete(
@@ -48,7 +57,7 @@ export async function editAthlete(
 }
 
 /** One athlete of the club; a 404 of anybody else. */
-export async function readAthlete(tx: Tx, ctx: Caller, id: string): Promise<Athlete> {
+async function readAthlete(tx: Tx, ctx: Caller, id: string): Promise<Athlete> {
   const athlete = await findAthlete(tx, ctx.clubId, id)
   if (!athlete) throw notFound('This athlete')
   return athlete

@@ -1,4 +1,5 @@
 import { randomUUID } from 'node:crypto'
+import type { IncomingMessage } from 'node:http'
 import request, { type Response, type Test } from 'supertest'
 import { signIn } from '../../../shared/contracts/account.ts'
 import type { Endpoint, ResponseOf } from '../../../shared/contracts/endpoint.ts'
@@ -11,6 +12,8 @@ export interface CallOptions {
   /** Of the Idempotency-Key; a fresh one unless given, none where null. */
   key?: string | null
   headers?: Record<string, string>
+  /** Sent as multipart/form-data, as the part `chunk`. */
+  part?: Buffer
 }
 
 /** A browser as far as the API is concerned: it keeps its cookie and calls endpoints by their contract. */
@@ -25,7 +28,7 @@ export class ApiClient {
   }
 
   /** Sends a request, whatever the answer will be. */
-  send(endpoint: Endpoint, { params = {}, query, body, key, headers = {} }: CallOptions = {}): Test {
+  send(endpoint: Endpoint, { params = {}, query, body, key, headers = {}, part }: CallOptions = {}): Test {
     const path = endpoint.path.replace(/:(\w+)/g, (_, name: string) =>
       encodeURIComponent(String(params[name] ?? '')),
     )
@@ -35,6 +38,7 @@ export class ApiClient {
     const keyed = endpoint.method !== 'GET' && endpoint.repeat === 'key'
     if (keyed && key !== null) test.set('Idempotency-Key', key ?? randomUUID())
     if (body !== undefined) test.send(body as object)
+    if (part) test.attach('chunk', part, 'blob')
     return test
   }
 
@@ -56,6 +60,28 @@ export class ApiClient {
   /** Status and error code of a request that is refused. */
   async refusal(endpoint: Endpoint, options: CallOptions = {}): Promise<[number, string]> {
     return refusalOf(await this.send(endpoint, options))
+  }
+
+  /** Status, error code and text of an answer, of a stream only its beginning. */
+  async glance(
+    endpoint: Endpoint,
+    options: CallOptions = {},
+  ): Promise<{ status: number; code: string; text: string }> {
+    const response = await this.send(endpoint, options)
+      .buffer(true)
+      .parse((stream, done) => {
+        const { headers } = stream as unknown as IncomingMessage
+        let text = ''
+        const finish = () => done(null, text)
+        stream.on('data', (data: Buffer) => (text += data.toString('latin1')))
+        stream.on('end', finish)
+        if (!headers['content-type']?.startsWith('text/event-stream')) return
+        finish()
+        stream.on('error', () => undefined)
+        ;(stream as unknown as IncomingMessage).destroy()
+      })
+    const text = String(response.body)
+    return { status: response.status, code: /"code":"([\w-]+)"/.exec(text)?.[1] ?? '', text }
   }
 
   async signIn(email: string, password = builtPassword): Promise<void> {
