@@ -1,6 +1,6 @@
 import type { ComponentType } from 'react'
 import type { RouteObject } from 'react-router-dom'
-import type { Role } from '../../shared/contracts/roles.ts'
+import { measuringRoles, staffRoles, type Role } from '../../shared/contracts/roles.ts'
 import { Loading } from '../components/loading.tsx'
 import { paths } from '../lib/paths.ts'
 import { HomeRedirect } from './home-redirect.tsx'
@@ -16,7 +16,7 @@ function page(path: string, load: () => Promise<ComponentType>): RouteObject {
 }
 
 /** Pages for whoever holds one of these roles; anybody else reads why not. */
-export function only(roles: readonly Role[], children: RouteObject[]): RouteObject {
+function only(roles: readonly Role[], children: RouteObject[]): RouteObject {
   return { element: <RequireRole roles={roles} />, children }
 }
 
@@ -25,15 +25,42 @@ export const routes: RouteObject[] = [
   {
     element: <SignedOutFrame />,
     hydrateFallbackElement: <Loading what="the page" />,
-    errorElement: <RouteError />,
-    children: [page(paths.signIn, async () => (await import('../pages/sign-in.tsx')).SignInPage)],
+    errorElement: <RouteError framed />,
+    children: [
+      page(paths.signIn, async () => (await import('../pages/sign-in.tsx')).SignInPage),
+      page(paths.invite, async () => (await import('../pages/invite.tsx')).InvitePage),
+      page(paths.reset, async () => (await import('../pages/reset.tsx')).ResetPage),
+      page(paths.finishReset, async () => (await import('../pages/finish-reset.tsx')).FinishResetPage),
+    ],
   },
   {
     element: <Shell />,
     hydrateFallbackElement: <Loading what="the page" />,
-    errorElement: <RouteError />,
+    errorElement: <RouteError framed />,
     children: [
       { path: paths.home, element: <HomeRedirect /> },
+      page(paths.account, async () => (await import('../pages/account.tsx')).AccountPage),
+      only(staffRoles, [
+        page(paths.athletes, async () => (await import('../pages/athletes.tsx')).AthletesPage),
+      ]),
+      only(measuringRoles, [
+        page(paths.athlete, async () => (await import('../pages/athlete.tsx')).AthletePage),
+      ]),
+      only(
+        ['coach', 'admin'],
+        [page(paths.squads, async () => (await import('../pages/club-squads.tsx')).ClubSquadsPage)],
+      ),
+      only(
+        ['admin'],
+        [
+          page(paths.people, async () => (await import('../pages/club-people.tsx')).ClubPeoplePage),
+          page(paths.seats, async () => (await import('../pages/club-seats.tsx')).ClubSeatsPage),
+        ],
+      ),
+      only(
+        ['admin', 'physio'],
+        [page(paths.settings, async () => (await import('../pages/club-settings.tsx')).ClubSettingsPage)],
+      ),
       { path: '*', element: <NotFoundPage /> },
     ],
   },

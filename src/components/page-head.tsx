@@ -19,10 +19,14 @@ export function PageHead({ title, context, aside, actions }: PageHeadProps) {
         {context !== undefined && <p className="text-ink-2">{context}</p>}
         <h1 className="text-page font-semibold text-balance break-words">
           {title}
-          {aside !== undefined && <span className="text-panel font-normal text-ink-2"> {aside}</span>}
+          {aside !== undefined && aside !== false && (
+            <span className="text-panel font-normal text-ink-2"> {aside}</span>
+          )}
         </h1>
       </div>
-      {actions !== undefined && <div className="no-print flex flex-wrap items-center gap-3">{actions}</div>}
+      {actions !== undefined && actions !== false && (
+        <div className="no-print flex flex-wrap items-center gap-3">{actions}</div>
+      )}
     </header>
   )
 }

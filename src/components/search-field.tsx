@@ -26,6 +26,8 @@ export function SearchField({ label, value, onChange }: SearchFieldProps) {
           type="search"
           defaultValue={value}
           onChange={(event) => onChange(event.target.value)}
+          // Inside a form, Enter here must not send the form.
+          onKeyDown={(event) => event.key === 'Enter' && event.preventDefault()}
           className="control"
         />
       )}

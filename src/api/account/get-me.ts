@@ -1,5 +1,6 @@
 import { queryOptions, useQuery, useQueryClient, type QueryClient } from '@tanstack/react-query'
 import { getMe, type Me } from '../../../shared/contracts/account.ts'
+import type { Role } from '../../../shared/contracts/roles.ts'
 import { isApiError } from '../api-error.ts'
 import { call } from '../client.ts'
 
@@ -32,4 +33,9 @@ export function useMe() {
 export function startAs(queryClient: QueryClient, me: Me | null): void {
   queryClient.removeQueries({ predicate: (query) => query.queryKey[0] !== meKey[0] })
   queryClient.setQueryData(meKey, me)
+}
+
+/** The roles of whoever is signed in; none for nobody. */
+export function useRoles(): Role[] {
+  return useMe().data?.roles ?? []
 }

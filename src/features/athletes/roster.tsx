@@ -1,0 +1,103 @@
+import { useState } from 'react'
+import { changeAthlete, getAthlete, type Athlete } from '../../../shared/contracts/athletes.ts'
+import { foldName } from '../../../shared/contracts/names.ts'
+import type { Squad } from '../../../shared/contracts/squads.ts'
+import { useRoles } from '../../api/account/get-me.ts'
+import { Button } from '../../components/button.tsx'
+import { EmptyState } from '../../components/empty-state.tsx'
+import { SelectField } from '../../components/field.tsx'
+import { ListBar, SortField } from '../../components/list-bar.tsx'
+import { SearchField } from '../../components/search-field.tsx'
+import { Sheet } from '../../components/sheet.tsx'
+import { Table } from '../../components/table.tsx'
+import { countOf } from '../../lib/count-of.ts'
+import { mayCall } from '../../lib/may-call.ts'
+import { formatSort, parseSort, sortRows } from '../../lib/sort-rows.ts'
+import { useListState } from '../../lib/use-list-state.ts'
+import { ChangeAthleteDialog } from './change-athlete-dialog.tsx'
+import { rosterColumns } from './roster-columns.tsx'
+import { useArchiveAthlete } from './use-archive-athlete.ts'
+
+const defaults = { search: '', squad: '', show: 'active', sort: 'name' }
+
+/** The club's athletes: search, filter by squad, sort, change, archive. */
+export function Roster({ athletes, squads }: { athletes: Athlete[]; squads: Squad[] }) {
+  const [list, setList] = useListState(defaults)
+  const [changing, setChanging] = useState<Athlete | null>(null)
+  const archive = useArchiveAthlete()
+  const roles = useRoles()
+  const current = squads.filter((squad) => !squad.archived)
+  const columns = rosterColumns(squads, {
+    mayOpen: mayCall(getAthlete, roles),
+    mayChange: mayCall(changeAthlete, roles),
+    onChange: setChanging,
+    onArchive: archive,
+  })
+  const shown = sortRows(athletes.filter(fits(list)), columns, parseSort(list.sort))
+
+  return (
+    <>
+      <ListBar
+        count={countOf(
+          shown.length,
+          athletes.filter(fits({ ...defaults, show: list.show })).length,
+          'athlete',
+        )}
+      >
+        <SearchField label="Search by name" value={list.search} onChange={(search) => setList({ search })} />
+        <SelectField
+          label="Squad"
+          className="w-full sm:w-44"
+          value={list.squad}
+          onChange={(event) => setList({ squad: event.target.value })}
+        >
+          <option value="">All squads</option>
+          {current.map(({ id, name }) => (
+            <option key={id} value={id}>
+              {name}
+            </option>
+          ))}
+        </SelectField>
+        <SelectField
+          label="Show"
+          className="w-full sm:w-36"
+          value={list.show}
+          onChange={(event) => setList({ show: event.target.value })}
+        >
+          <option value="active">Active</option>
+          <option value="archived">Archived</option>
+          <option value="all">All</option>
+        </SelectField>
+        <SortField columns={columns} value={list.sort} onChange={(sort) => setList({ sort })} />
+      </ListBar>
+      <Sheet flush>
+        {shown.length === 0 ? (
+          <EmptyState
+            title="No athlete fits"
+            action={<Button onClick={() => setList(defaults)}>Show all active athletes</Button>}
+          />
+        ) : (
+          <Table
+            caption="Athletes"
+            columns={columns}
+            rows={shown}
+            rowKey={({ id }) => id}
+            sort={parseSort(list.sort)}
+            onSort={(sort) => setList({ sort: formatSort(sort) })}
+          />
+        )}
+      </Sheet>
+      {changing && (
+        <ChangeAthleteDialog athlete={changing} squads={current} onClose={() => setChanging(null)} />
+      )}
+    </>
+  )
+}
+
+function fits({ search, squad, show }: typeof defaults): (athlete: Athlete) => boolean {
+  const words = foldName(search).split(' ')
+  return ({ name, squadIds, archived }) =>
+    (show === 'all' || archived === (show === 'archived')) &&
+    (squad === '' || squadIds.includes(squad)) &&
+    words.every((word) => foldName(name).includes(word))
+}
