@@ -1,6 +1,5 @@
 import { createHash } from 'node:crypto'
 import type { Analysis } from '../../../shared/contracts/trials.ts'
-import type { TrialAnalysis } from '../../../shared/mechanics/types.ts'
 import { engineVersion } from '../../../shared/mechanics/version.ts'
 import type { ClubContext, Tx } from '../../db/database.ts'
 import type { Deps } from '../../deps.ts'
@@ -16,9 +15,9 @@ import {
   restoreAnalysis,
   type TrialRow,
 } from './analyses.queries.ts'
-import { toRow, toView } from './analysis-form.ts'
-import { givenUp } from './given-up.ts'
+import { type EngineSaid, toRow, toView } from './analysis-form.ts'
 import { engineOptions, hashInputs, inputsOf } from './inputs.ts'
+import { givenUp, ofOneTrial } from './without-figures.ts'
 
 /** A trial's current analysis, or the pinned one. */
 export async function viewAnalysis(
@@ -40,8 +39,8 @@ export async function analyseTrial(deps: JobDeps, ctx: ClubContext, trialId: str
   const known = await deps.db.inClub(ctx, (tx) => keepKnown(tx, ctx, trialId, keyOf(ctx, trialId, trial)))
   if (known) return
   const options = engineOptions(inputsOf(trial))
-  const { trials } = await deps.threads.analyseSamples({ samples: trial.samples, options })
-  await deps.db.inClub(ctx, (tx) => keep(tx, ctx, trialId, { before: trial, said: trials[0] }))
+  const answer = await deps.threads.analyseSamples({ samples: trial.samples, options })
+  await deps.db.inClub(ctx, (tx) => keep(tx, ctx, trialId, { before: trial, said: ofOneTrial(answer) }))
 }
 
 function keyOf({ clubId }: ClubContext, trialId: string, trial: TrialRow) {
@@ -69,7 +68,7 @@ async function keep(
   tx: Tx,
   ctx: ClubContext,
   trialId: string,
-  { before, said }: { before: TrialRow; said: TrialAnalysis },
+  { before, said }: { before: TrialRow; said: EngineSaid },
 ): Promise<void> {
   await lockTrial(tx, ctx.clubId, trialId)
   const now = await findTrialToAnalyse(tx, ctx.clubId, trialId)
