@@ -31,7 +31,7 @@ export function analyse(
   const conditioned = conditionRecording(recording, settings)
   if ('problem' in conditioned) return none([...notes, conditioned.problem])
   const { signal } = conditioned
-  const sums = runningSums(signal.total)
+  const sums = runningSums(signal.total, 'sums of the total')
   const unloaded = findUnloaded(signal.total, sums, signal.dt, settings)
   if (!unloaded)
     return none([

@@ -56,26 +56,8 @@ function gaps(recording: Recording, signal: Signal, settings: Settings): TrialCh
   )
 }
 
-/** Longest run of samples that stay exactly at the greatest value: the amplifier's ceiling. */
-function flatTop(force: Float64Array): number {
-  let greatest = -Infinity
-  let run = 0
-  let longest = 0
-  for (let i = 0; i < force.length; i++) {
-    if (force[i] > greatest) {
-      greatest = force[i]
-      run = 1
-      longest = 1
-    } else if (force[i] === greatest && i > 0 && force[i - 1] === greatest) {
-      run++
-      if (run > longest) longest = run
-    } else run = force[i] === greatest ? 1 : 0
-  }
-  return longest
-}
-
 function saturation(signal: Signal, settings: Settings): TrialCheck {
-  const longest = Math.max(...signal.plates.map(({ force }) => flatTop(force)))
+  const longest = Math.max(...signal.plates.map(({ flatTop }) => flatTop))
   const limit = settings.saturationSamples
   return check(
     'saturation',

@@ -77,6 +77,37 @@ function spreadOf(force: Float64Array, { from, to }: Stretch): number {
   return Math.sqrt(squares / Math.max(1, to - from - 1))
 }
 
+/** Shorter windows that are tried, as parts of the full one, where no full one is steady. */
+const shorter = [1, 0.75, 0.5, 0.35, 0.25]
+
+/** The steadiest window of full length, or the longest shorter one that is steady; `null` if all are too short. */
+function chooseWindow(
+  force: Float64Array,
+  sums: RunningSums,
+  limits: Stretch,
+  dt: number,
+  settings: Settings,
+): Stretch | null {
+  const full = Math.round(settings.weighingWindowS / dt)
+  const shortest = Math.max(8, settings.shortestWeighingS / dt)
+  const available = limits.to - limits.from
+  let steadiest: Stretch | null = null
+  let least = Infinity
+  for (const part of shorter) {
+    const width = Math.min(available, Math.round(part * full))
+    if (width < shortest) break
+    const from = steadiestWindow(force, limits.from, limits.to, width)
+    const window = { from, to: from + width }
+    const unrest = spreadOf(force, window) / Math.abs(meanOver(sums, window.from, window.to))
+    if (unrest <= settings.steadinessCaution) return window
+    if (unrest < 0.5 * least) {
+      steadiest = window
+      least = unrest
+    }
+  }
+  return steadiest
+}
+
 /**
  * Weighs: the mean over the steadiest window within `limits`. Its standard error takes the noise from the whole
  * quiet stance, because the steadiest window alone looks calmer than it is, and counts independent samples by the
@@ -90,11 +121,9 @@ export function weigh(
   dt: number,
   settings: Settings,
 ): Weighing | null {
-  const available = limits.to - limits.from
-  const width = Math.min(available, Math.round(settings.weighingWindowS / dt))
-  if (width < Math.max(8, settings.shortestWeighingS / dt)) return null
-  const from = steadiestWindow(force, limits.from, limits.to, width)
-  const window = { from, to: from + width }
+  const window = chooseWindow(force, sums, limits, dt, settings)
+  if (!window) return null
+  const width = window.to - window.from
   const systemWeight = meanOver(sums, window.from, window.to)
   const block = Math.max(1, Math.round(settings.noiseBlockS / dt))
   const band = settings.onsetFraction * Math.abs(systemWeight)

@@ -68,7 +68,7 @@ function plateInputs(
 ): PlateInputs[] {
   const alone = signal.plates.length === 1
   return signal.plates.map(({ channel, force }, i) => {
-    const plateSums = alone ? sums : runningSums(force)
+    const plateSums = alone ? sums : runningSums(force, `sums of ${channel}`)
     const calibration = options.calibrationU[channel] ?? 0
     const { from, to } = weighing.window
     return {

@@ -1,5 +1,6 @@
 import type { ForceChannel, Note, Recording } from '../types.ts'
 import type { Settings } from '../settings.ts'
+import { borrow } from './workspace.ts'
 
 /** One plate's force in newtons, a copy that the engine may correct. */
 export interface Plate {
@@ -11,6 +12,8 @@ export interface Plate {
   flipped: boolean
   /** The record hardly moves: nothing stood on this plate, or it was not connected. */
   dead: boolean
+  /** Samples in a row at exactly the greatest force. */
+  flatTop: number
 }
 
 /** The force of a recording on an even time base, ready for the search of events. */
@@ -44,7 +47,10 @@ function chooseChannels(recording: Recording): ForceChannel[] {
   return right ? ['right'] : []
 }
 
-/** Copies a channel, bridging samples that are not finite or beyond `limit` by straight lines; answers how many. */
+/**
+ * Copies a channel, bridging samples that are not finite or beyond `limit` by straight lines; answers how many.
+ * A record without one readable sample becomes zeros.
+ */
 function copyReadable(from: Float64Array, to: Float64Array, limit: number): number {
   let bad = 0
   let lastGood = -1
@@ -56,7 +62,7 @@ function copyReadable(from: Float64Array, to: Float64Array, limit: number): numb
       lastGood = i
     } else bad++
   }
-  if (lastGood >= 0) to.fill(to[lastGood], lastGood + 1)
+  to.fill(lastGood >= 0 ? to[lastGood] : 0, lastGood + 1)
   return bad
 }
 
@@ -66,13 +72,37 @@ function bridge(force: Float64Array, lastGood: number, nextGood: number): void {
   for (let i = lastGood + 1; i < nextGood; i++) force[i] = start + slope * (i - lastGood)
 }
 
-/** Median of about 500 samples spread over the record: its usual level. */
+const levelSamples = 200
+const some = new Float64Array(levelSamples)
+
+/** Median of some 200 samples spread over the record: its usual level. */
 export function usualLevel(force: Float64Array): number {
-  const step = Math.max(1, Math.floor(force.length / 500))
-  const some = new Float64Array(Math.ceil(force.length / step))
-  for (let i = 0, k = 0; i < force.length; i += step) some[k++] = force[i]
-  some.sort()
-  return some[some.length >> 1]
+  const count = Math.min(levelSamples, force.length)
+  const step = force.length / count
+  for (let k = 0; k < count; k++) some[k] = force[Math.floor(k * step)]
+  const sorted = count === levelSamples ? some.sort() : some.slice(0, count).sort()
+  return sorted[count >> 1]
+}
+
+/** Extremes of a record, and for how many samples in a row it stays exactly at the greatest. */
+function extremes(force: Float64Array): { least: number; greatest: number; flatTop: number } {
+  let least = Infinity
+  let greatest = -Infinity
+  let run = 0
+  let flatTop = 0
+  for (let i = 0; i < force.length; i++) {
+    const value = force[i]
+    if (value < least) least = value
+    if (value > greatest) {
+      greatest = value
+      run = 1
+      flatTop = 1
+    } else if (value === greatest) {
+      run++
+      if (run > flatTop) flatTop = run
+    } else run = 0
+  }
+  return { least, greatest, flatTop }
 }
 
 /**
@@ -80,9 +110,9 @@ export function usualLevel(force: Float64Array): number {
  * a push and a landing reach further from standing than the empty plate does.
  */
 function isNegativeGoing(force: Float64Array, least: number, greatest: number): boolean {
+  if (least > -0.1 * (greatest - least)) return false
   const usual = usualLevel(force)
-  const span = greatest - least
-  return usual < -0.1 * span && usual - least > greatest - usual
+  return usual < -0.1 * (greatest - least) && usual - least > greatest - usual
 }
 
 function conditionPlate(
@@ -90,19 +120,25 @@ function conditionPlate(
   raw: Float64Array,
   settings: Settings,
 ): Plate & { unreadable: number } {
-  const force = new Float64Array(raw.length)
+  const force = borrow(`force of ${channel}`, raw.length)
   const unreadable = copyReadable(raw, force, settings.greatestForceN)
-  let least = Infinity
-  let greatest = -Infinity
-  for (let i = 0; i < force.length; i++) {
-    const value = force[i]
-    if (value < least) least = value
-    if (value > greatest) greatest = value
+  let range = extremes(force)
+  const flipped = isNegativeGoing(force, range.least, range.greatest)
+  if (flipped) {
+    for (let i = 0; i < force.length; i++) force[i] = -force[i]
+    range = extremes(force)
   }
-  const flipped = isNegativeGoing(force, least, greatest)
-  if (flipped) for (let i = 0; i < force.length; i++) force[i] = -force[i]
-  const dead = !(greatest - least > settings.smallestLoadN / 3)
-  return { channel, force, offsetN: 0, flipped, dead, unreadable }
+  const dead = !(range.greatest - range.least > settings.smallestLoadN / 3)
+  return { channel, force, offsetN: 0, flipped, dead, flatTop: range.flatTop, unreadable }
+}
+
+/** Force of all plates together; one plate is its own total, in an array of its own. */
+function addUp(plates: readonly Plate[]): Float64Array {
+  const [first, second] = plates
+  const total = borrow('total', first.force.length)
+  if (second) for (let i = 0; i < total.length; i++) total[i] = first.force[i] + second.force[i]
+  else total.set(first.force)
+  return total
 }
 
 /**
@@ -136,15 +172,7 @@ export function conditionRecording(recording: Recording, settings: Settings): Co
     )
 
   const conditioned = channels.map((channel, i) => conditionPlate(channel, raws[i], settings))
-  const total = new Float64Array(length)
-  for (const plate of conditioned) for (let i = 0; i < length; i++) total[i] += plate.force[i]
+  const total = addUp(conditioned)
   const unreadable = conditioned.reduce((sum, plate) => sum + plate.unreadable, 0)
-  const plates = conditioned.map(({ channel, force, offsetN, flipped, dead }) => ({
-    channel,
-    force,
-    offsetN,
-    flipped,
-    dead,
-  }))
-  return { signal: { sampleRateHz: rate, dt: 1 / rate, length, plates, total, unreadable } }
+  return { signal: { sampleRateHz: rate, dt: 1 / rate, length, plates: conditioned, total, unreadable } }
 }

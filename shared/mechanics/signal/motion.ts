@@ -1,3 +1,5 @@
+import { borrow } from './workspace.ts'
+
 /** Velocity and displacement of the centre of mass from rest at an instant between samples. */
 export interface Motion {
   /** Start of the integration, samples. */
@@ -41,8 +43,8 @@ export function integrate(
   gravity: number,
   dt: number,
 ): Motion {
-  const velocity = new Float64Array(force.length)
-  const displacement = new Float64Array(force.length)
+  const velocity = borrow('velocity', force.length)
+  const displacement = borrow('displacement', force.length)
   const first = Math.min(force.length - 1, Math.max(0, Math.ceil(start)))
   const perMass = gravity / systemWeight
   let before = (forceAt(force, start) - systemWeight) * perMass

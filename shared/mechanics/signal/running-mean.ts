@@ -1,3 +1,5 @@
+import { borrow } from './workspace.ts'
+
 /**
  * Running sums of a record, so that the mean over any stretch costs one subtraction. Sums are of the distance from
  * the first sample, which keeps their digits.
@@ -7,9 +9,11 @@ export interface RunningSums {
   reference: number
 }
 
-export function runningSums(force: Float64Array): RunningSums {
+/** Sums a record up. `slot` names the workspace's array for them. */
+export function runningSums(force: Float64Array, slot: string): RunningSums {
   const reference = force.length > 0 ? force[0] : 0
-  const sums = new Float64Array(force.length + 1)
+  const sums = borrow(slot, force.length + 1)
+  sums[0] = 0
   let sum = 0
   for (let i = 0; i < force.length; i++) {
     sum += force[i] - reference
@@ -19,8 +23,9 @@ export function runningSums(force: Float64Array): RunningSums {
 }
 
 /** Mean of the samples from (inclusive) to (exclusive), cut to the record; `NaN` of none. */
-export function meanOver({ sums, reference }: RunningSums, from: number, to: number): number {
-  const a = Math.max(0, from)
-  const b = Math.min(sums.length - 1, to)
+export function meanOver(running: RunningSums, from: number, to: number): number {
+  const { sums, reference } = running
+  const a = from > 0 ? from : 0
+  const b = to < sums.length ? to : sums.length - 1
   return b > a ? reference + (sums[b] - sums[a]) / (b - a) : NaN
 }

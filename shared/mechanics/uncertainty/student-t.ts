@@ -28,13 +28,34 @@ function upperTail(x: number): number {
   return density / (x + fraction)
 }
 
+/** The last coverage asked for and its normal deviate: a trial asks for one coverage a hundred times. */
+let known = { tails: NaN, deviate: NaN }
+
+function deviateFor(tails: number): number {
+  if (known.tails !== tails) known = { tails, deviate: normalDeviate(tails) }
+  return known.deviate
+}
+
+/** From this many degrees of freedom on, the Cornish–Fisher series is good to a millionth. */
+const seriesFrom = 30
+
+/** Fisher, Cornish 1960: t in powers of 1/dof about the normal deviate (Abramowitz, Stegun 26.7.5). */
+function series(x: number, dof: number): number {
+  const x2 = x * x
+  const g1 = (x * (x2 + 1)) / 4
+  const g2 = (x * ((5 * x2 + 16) * x2 + 3)) / 96
+  const g3 = (x * (((3 * x2 + 19) * x2 + 17) * x2 - 15)) / 384
+  return x + (g1 + (g2 + g3 / dof) / dof) / dof
+}
+
 /**
  * Student's t: the factor that holds `coverage` (two-sided) at `dof` degrees of freedom, which need not be whole.
  * G. W. Hill 1970, Algorithm 396, Commun ACM 13:619–620; to some six digits. Below one degree of freedom, as at one.
  */
 export function studentT(coverage: number, dof: number): number {
   const tails = 1 - coverage
-  if (!(dof < 1e7)) return normalDeviate(tails)
+  if (!(dof < seriesFrom))
+    return dof >= seriesFrom && dof < Infinity ? series(deviateFor(tails), dof) : deviateFor(tails)
   const n = Math.max(1, dof)
   if (n === 1) return Math.cos((tails * Math.PI) / 2) / Math.sin((tails * Math.PI) / 2)
   if (n === 2) return Math.sqrt(2 / (tails * (2 - tails)) - 2)
@@ -46,7 +67,7 @@ export function studentT(coverage: number, dof: number): number {
   let x = d * tails
   let y = Math.pow(x, 2 / n)
   if (y > 0.05 + a) {
-    x = -normalDeviate(tails)
+    x = -deviateFor(tails)
     y = x * x
     if (n < 5) c += 0.3 * (n - 4.5) * (x + 0.6)
     c = (((0.05 * d * x - 5) * x - 7) * x - 2) * x + b + c
