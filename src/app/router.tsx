@@ -44,8 +44,20 @@ export const routes: RouteObject[] = [
         page(paths.athletes, async () => (await import('../pages/athletes.tsx')).AthletesPage),
       ]),
       only(measuringRoles, [
+        page(paths.sessions, async () => (await import('../pages/sessions.tsx')).SessionsPage),
+        page(paths.newSession, async () => (await import('../pages/new-session.tsx')).NewSessionPage),
+        page(paths.session, async () => (await import('../pages/session.tsx')).SessionPage),
         page(paths.athlete, async () => (await import('../pages/athlete.tsx')).AthletePage),
       ]),
+      only(
+        ['physio'],
+        [page(paths.landingWatch, async () => (await import('../pages/landing-watch.tsx')).LandingWatchPage)],
+      ),
+      only(
+        ['coach', 'physio', 'athlete'],
+        [page(paths.trial, async () => (await import('../pages/trial.tsx')).TrialPage)],
+      ),
+      only(['athlete'], [page(paths.me, async () => (await import('../pages/me.tsx')).MePage)]),
       only(
         ['coach', 'admin'],
         [page(paths.squads, async () => (await import('../pages/club-squads.tsx')).ClubSquadsPage)],

@@ -2,6 +2,7 @@ import { useQueryClient, type QueryClient } from '@tanstack/react-query'
 import { useEffect } from 'react'
 import type { ClubEvent } from '../../../shared/contracts/events.ts'
 import { athleteKeys } from '../athletes/athlete-keys.ts'
+import { landingWatchKeys } from '../landing-watch/list-high-landings.ts'
 import { sessionKeys } from '../sessions/session-keys.ts'
 import { trialKeys } from '../trials/trial-keys.ts'
 import { coalesce } from './coalesce.ts'
@@ -16,6 +17,7 @@ import { streamHealth } from './stream-health.ts'
 export function useClubEvents(): void {
   const queryClient = useQueryClient()
   useEffect(() => {
+    if (typeof EventSource === 'undefined') return
     const sharing = {
       locks: navigator.locks as LockManager | undefined,
       channel: (name: string) => new BroadcastChannel(name),
@@ -34,7 +36,7 @@ export function clubEventHandlers(queryClient: QueryClient): StreamHandlers {
   const refresh = (...keys: (readonly unknown[])[]) =>
     coalesce(() => Promise.all(keys.map((queryKey) => queryClient.invalidateQueries({ queryKey }))))
   const refreshes: Record<ClubEvent['kind'], () => Promise<void>> = {
-    session: refresh(sessionKeys.all, trialKeys.all),
+    session: refresh(sessionKeys.all, trialKeys.all, landingWatchKeys.all),
     athletes: refresh(athleteKeys.all, sessionKeys.all),
   }
   return {

@@ -1,0 +1,116 @@
+import type { MeanFigure } from '../../../shared/contracts/results.ts'
+import { FigureText } from '../results/figure-text.tsx'
+import { metricHead } from '../results/metric-words.ts'
+import { cellMetric } from './cell-words.ts'
+import type { SheetRow } from './sheet-rows.ts'
+import './sheet-table.css'
+import { TrialCell, type CellActs } from './trial-cell.tsx'
+import { useSheetCursor, type SheetCursor } from './use-sheet-cursor.ts'
+
+const massMetric = 'bodyMass'
+const landingMetric = 'landingPeakForcePerBodyWeight'
+
+interface Props {
+  caption: string
+  rows: readonly SheetRow[]
+  columns: number
+  acts: CellActs
+}
+
+/** Athletes down, their trials across, the means of what is included at the right. */
+export function SheetTable({ caption, rows, columns, acts }: Props) {
+  const cursor = useSheetCursor(rows.map((row) => row.trials.length))
+  const numbers = Array.from({ length: columns }, (_, i) => i + 1)
+  return (
+    <div
+      className="overflow-x-auto border-t-2 border-ink bg-sheet"
+      role="region"
+      aria-label={caption}
+      tabIndex={0}
+    >
+      <table className="data-table sheet-table">
+        <caption className="sr-only">{caption}</caption>
+        <thead>
+          <tr>
+            <th scope="col">Athlete</th>
+            <th scope="col" className="figure">
+              {metricHead(massMetric)}
+            </th>
+            {numbers.map((n) => (
+              <th key={n} scope="col">
+                Trial {n}
+              </th>
+            ))}
+            <th scope="col" className="figure">
+              Mean of {metricHead(cellMetric).toLowerCase()}
+            </th>
+            <th scope="col" className="figure">
+              Mean of {metricHead(landingMetric).replace(/^L/, 'l')}
+            </th>
+          </tr>
+        </thead>
+        <tbody onKeyDown={cursor.onKeyDown}>
+          {rows.map((row, i) => (
+            <AthleteRow
+              key={row.athlete.athleteId}
+              row={row}
+              index={i}
+              columns={columns}
+              cursor={cursor}
+              acts={acts}
+            />
+          ))}
+        </tbody>
+      </table>
+    </div>
+  )
+}
+
+interface RowProps {
+  row: SheetRow
+  index: number
+  columns: number
+  cursor: SheetCursor
+  acts: CellActs
+}
+
+function AthleteRow({ row: { athlete, trials }, index, columns, cursor, acts }: RowProps) {
+  const empty = columns - trials.length
+  return (
+    <tr>
+      <th scope="row">{athlete.name}</th>
+      <MeanCell metricKey={massMetric} mean={athlete.means[massMetric]} plain />
+      {trials.map((trial, i) => (
+        <TrialCell
+          key={trial.id}
+          trial={trial}
+          athleteName={athlete.name}
+          n={i + 1}
+          focus={cursor.cellProps(index, i)}
+          acts={acts}
+        />
+      ))}
+      {empty > 0 && (
+        <td colSpan={empty} className="text-small text-ink-2">
+          {trials.length === 0 ? 'no trial yet' : ''}
+        </td>
+      )}
+      <MeanCell metricKey={cellMetric} mean={athlete.means[cellMetric]} />
+      <MeanCell metricKey={landingMetric} mean={athlete.means[landingMetric]} plain />
+    </tr>
+  )
+}
+
+function MeanCell({
+  metricKey,
+  mean,
+  plain = false,
+}: {
+  metricKey: string
+  mean: MeanFigure | undefined
+  plain?: boolean
+}) {
+  return (
+    <td className="figure">{mean && <FigureText metricKey={metricKey} figure={mean} strong={!plain} />}</td>
+  )
+}

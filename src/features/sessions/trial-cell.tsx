@@ -1,0 +1,84 @@
+import { Link } from 'react-router-dom'
+import type { SheetTrial } from '../../../shared/contracts/sessions.ts'
+import { Sparkline } from '../../charts/sparkline.tsx'
+import { Button } from '../../components/button.tsx'
+import { Tag } from '../../components/tag.tsx'
+import { pathOf } from '../../lib/paths.ts'
+import { FigureText } from '../results/figure-text.tsx'
+import { useTakeBack, type ActedTrial } from '../trials/use-trial-acts.ts'
+import { cellMetric, cellName, checkWords } from './cell-words.ts'
+import type { SheetCursor } from './use-sheet-cursor.ts'
+
+/** What may be done to a trial from its cell. */
+export interface CellActs {
+  setAside: (trial: ActedTrial) => void
+  move: (trial: ActedTrial) => void
+}
+
+interface Props {
+  trial: SheetTrial
+  athleteName: string
+  n: number
+  focus: ReturnType<SheetCursor['cellProps']>
+  acts: CellActs
+}
+
+/** A trial on the sheet: its trace, its height, its checks in words. Opens it; x sets it aside, m moves it. */
+export function TrialCell({ trial, athleteName, n, focus, acts }: Props) {
+  const { id, version, athleteId } = trial
+  const acted = { id, version, athleteId, words: `trial ${n} of ${athleteName}` }
+  const { takeBack } = useTakeBack(acted)
+  const aside = () => (trial.setAside ? takeBack(version) : acts.setAside(acted))
+  return (
+    <td className={trial.setAside ? 'trial-cell hatched' : 'trial-cell'}>
+      <Link
+        {...focus}
+        to={pathOf.trial(id)}
+        aria-label={cellName(athleteName, n, trial)}
+        aria-keyshortcuts="x m"
+        className="flex min-h-11 items-center gap-2 px-2 no-underline"
+        onKeyDown={(event) => {
+          if (event.ctrlKey || event.altKey || event.metaKey) return
+          if (event.key === 'x') aside()
+          if (event.key === 'm') acts.move(acted)
+        }}
+      >
+        <Sparkline preview={trial.preview} quiet={trial.setAside !== null} />
+        <CellFigures trial={trial} />
+      </Link>
+      <span className="cell-acts no-print">
+        <Button
+          look="word"
+          tabIndex={-1}
+          aria-label={`${trial.setAside ? 'Take back' : 'Set aside'} ${acted.words}`}
+          onClick={aside}
+        >
+          {trial.setAside ? 'take back' : 'set aside'}
+        </Button>
+        <Button look="word" tabIndex={-1} aria-label={`Move ${acted.words}`} onClick={() => acts.move(acted)}>
+          move
+        </Button>
+      </span>
+    </td>
+  )
+}
+
+function CellFigures({ trial: { setAside, analysis } }: { trial: SheetTrial }) {
+  if (setAside) return <span className="text-small text-ink-2">set aside: {setAside.reason}</span>
+  if (!analysis) return <span className="text-small text-ink-2">being analysed</span>
+  const height = analysis.metrics[cellMetric]
+  const words = checkWords(analysis)
+  const withheld = analysis.withheld.includes(cellMetric)
+  return (
+    <span className="flex flex-col items-start">
+      {height === undefined ? (
+        <span className="text-small text-ink-2">no height</span>
+      ) : (
+        <span className={withheld ? 'text-ink-2 line-through' : undefined}>
+          <FigureText metricKey={cellMetric} figure={height} strong={!withheld} />
+        </span>
+      )}
+      {words !== null && <Tag tone={analysis.fails > 0 ? 'stop' : 'caution'}>{words}</Tag>}
+    </span>
+  )
+}

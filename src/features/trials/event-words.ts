@@ -1,0 +1,38 @@
+import type { EventName, MetricGroup, Phase } from '../../../shared/mechanics/types.ts'
+
+/** The events of a trial in the order in which they come, as screens name them. */
+export const eventWords: Record<EventName, string> = {
+  onset: 'onset',
+  minimumForce: 'least force',
+  minimumVelocity: 'fastest down',
+  zeroVelocity: 'lowest',
+  takeoff: 'takeoff',
+  touchdown: 'touchdown',
+  landingPeak: 'landing peak',
+  landingZeroVelocity: 'landing’s lowest',
+  still: 'still',
+}
+
+/** Those that stand on the trace; the table of the trace has them all. */
+export const tracedEvents: readonly EventName[] = ['onset', 'zeroVelocity', 'takeoff', 'touchdown', 'still']
+
+export const phaseWords: Record<Phase, string> = {
+  unweighting: 'Unweighting',
+  braking: 'Braking',
+  propulsion: 'Propulsion',
+  flight: 'Flight',
+  landing: 'Landing',
+  settling: 'Settling',
+}
+
+/** Groups of metrics: heads of the measured figures, and what a check affects. */
+export const groupWords: Record<MetricGroup, string> = {
+  jump: 'Jump',
+  push: 'Push',
+  flight: 'Flight',
+  landing: 'Landing',
+  impulse: 'Impulse',
+  weighing: 'Weighing',
+  ledger: 'Ledger',
+  sides: 'Left and right',
+}

@@ -1,0 +1,67 @@
+import type { Analysis } from '../../../shared/contracts/trials.ts'
+import { catalogue } from '../../../shared/mechanics/catalogue.ts'
+import { Sheet } from '../../components/sheet.tsx'
+import { formatUncertainty } from '../../lib/format-figure.ts'
+import { formatSigned } from '../../lib/format-signed.ts'
+import { phaseWords } from './event-words.ts'
+import './impulse-ledger.css'
+
+type Ledger = NonNullable<Analysis['ledger']>
+
+const { display } = catalogue.closingBalance
+
+/** The momentum account of a trial: opening balance, an entry a phase, running balance, closing balance. */
+export function ImpulseLedger({ ledger }: { ledger: Ledger }) {
+  const figure = (newtonSeconds: number) => formatSigned(newtonSeconds, display.decimals)
+  return (
+    <Sheet title="Impulse ledger">
+      <table className="ledger">
+        <caption className="sr-only">
+          Net impulse of each phase and the balance after it, in {display.unit}
+        </caption>
+        <thead>
+          <tr>
+            <th scope="col">{display.unit}</th>
+            <th scope="col">impulse</th>
+            <th scope="col">balance</th>
+          </tr>
+        </thead>
+        <tbody>
+          <tr>
+            <th scope="row">Opening, standing still</th>
+            <td />
+            <td>0</td>
+          </tr>
+          {ledger.entries.map((entry) => (
+            <tr key={entry.phase}>
+              <th scope="row">{phaseWords[entry.phase]}</th>
+              <td>{figure(entry.netImpulse)}</td>
+              <td>{figure(entry.balance)}</td>
+            </tr>
+          ))}
+        </tbody>
+        <tfoot>
+          <tr>
+            <th scope="row">{closesAtRest(ledger) ? 'Closing, standing still' : 'Closing, still moving'}</th>
+            <td />
+            <td>{figure(ledger.closing.value)}</td>
+          </tr>
+        </tfoot>
+      </table>
+      <p className="pt-2 text-small text-ink-2">{closingSentence(ledger)}</p>
+    </Sheet>
+  )
+}
+
+const closesAtRest = (ledger: Ledger) => ledger.entries.at(-1)?.phase === 'settling'
+
+/** Whether the books close, in a sentence. */
+export function closingSentence({ closing }: Ledger): string {
+  const U = formatUncertainty(closing.U, display)
+  if (closing.closes === null || U === null) {
+    return 'The closing balance cannot be tested: the recording has no quiet stance after the landing.'
+  }
+  return closing.closes
+    ? `Zero lies within the closing balance’s ${U} ${display.unit}: the books close.`
+    : `Zero lies outside the closing balance’s ${U} ${display.unit}: the books do not close. What is left over is measurement error; the Trial checks say what it touches.`
+}

@@ -1,0 +1,67 @@
+import type { Analysis } from '../../../shared/contracts/trials.ts'
+import { catalogue, isMetricKey } from '../../../shared/mechanics/catalogue.ts'
+import { CautionLine } from '../../components/caution-line.tsx'
+import { Sheet } from '../../components/sheet.tsx'
+import { FigureText } from '../results/figure-text.tsx'
+import { measuredGroups, type MeasuredFigure } from './measured-groups.ts'
+
+/** Every figure of the trial, by group; what a failed check takes away is struck, what is missing says why. */
+export function MeasuredSheet({ analysis }: { analysis: Analysis }) {
+  return (
+    <Sheet title="Measured" titleAside="± is how sure the plate is of this one trial, for about 95 %">
+      <div className="gap-x-8 sm:columns-2 xl:columns-3">
+        {measuredGroups(analysis).map(({ group, words, figures }) => (
+          <div key={group} className="pb-4">
+            <h3 className="break-after-avoid border-b border-ink text-small text-ink-2">{words}</h3>
+            <dl>
+              {figures.map((measured) => (
+                <MeasuredRow key={measured.metric.key} {...measured} />
+              ))}
+            </dl>
+          </div>
+        ))}
+      </div>
+      <Missing missing={analysis.missing} />
+      <CautionLine />
+    </Sheet>
+  )
+}
+
+function MeasuredRow({ metric, figure, withheldBecause }: MeasuredFigure) {
+  return (
+    <div className="break-inside-avoid border-b border-rule-2 py-1">
+      <div className="flex items-baseline justify-between gap-4">
+        <dt className={withheldBecause ? 'text-ink-2' : undefined}>{metric.name}</dt>
+        <dd>
+          {withheldBecause ? (
+            <s className="text-ink-2">
+              <span className="sr-only">withheld: </span>
+              <FigureText metricKey={metric.key} figure={figure} unit />
+            </s>
+          ) : (
+            <FigureText metricKey={metric.key} figure={figure} unit />
+          )}
+        </dd>
+      </div>
+      {withheldBecause && <dd className="text-small text-ink-2">{withheldBecause}</dd>}
+    </div>
+  )
+}
+
+function Missing({ missing }: Pick<Analysis, 'missing'>) {
+  if (missing.length === 0) return null
+  return (
+    <details className="pb-3">
+      <summary className="cursor-pointer">
+        {missing.length} {missing.length === 1 ? 'figure' : 'figures'} could not be computed
+      </summary>
+      <ul className="text-small">
+        {missing.map(({ key, reason }) => (
+          <li key={key} className="py-0.5">
+            {isMetricKey(key) ? catalogue[key].name : key}: <span className="text-ink-2">{reason}</span>
+          </li>
+        ))}
+      </ul>
+    </details>
+  )
+}

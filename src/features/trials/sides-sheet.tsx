@@ -1,0 +1,83 @@
+import type { Analysis } from '../../../shared/contracts/trials.ts'
+import { catalogue, metricKeys, type MetricKey } from '../../../shared/mechanics/catalogue.ts'
+import { CautionLine } from '../../components/caution-line.tsx'
+import { Sheet } from '../../components/sheet.tsx'
+import { formatUncertainty } from '../../lib/format-figure.ts'
+import { formatSigned } from '../../lib/format-signed.ts'
+import { FigureText } from '../results/figure-text.tsx'
+
+type Sides = NonNullable<Analysis['sides']>
+
+const percent = { unit: '%', factor: 1, decimals: 1 }
+
+/** The figures of each foot, their difference, and which is larger. */
+export function SidesSheet({ sides, checks }: { sides: Sides; checks: Analysis['checks'] }) {
+  const taken = new Set(checks.filter(({ verdict }) => verdict === 'fail').flatMap(({ affects }) => affects))
+  const isTaken = (key: MetricKey) => taken.has('sides') || taken.has(catalogue[key].group)
+  const keys = metricKeys.filter((key) => sides.left[key] && sides.right[key])
+  return (
+    <Sheet title="Left and right" titleAside="difference: right less left, of their mean" flush>
+      <div className="overflow-x-auto">
+        <table className="data-table">
+          <caption className="sr-only">Figures of the left and the right foot</caption>
+          <thead>
+            <tr>
+              <th scope="col">Figure</th>
+              <th scope="col" className="figure">
+                <span className="border-b-2 border-left text-(--color-left)">Left</span>
+              </th>
+              <th scope="col" className="figure">
+                <span className="border-b-2 border-dashed border-right text-(--color-right)">Right</span>
+              </th>
+              <th scope="col" className="figure">
+                Difference
+              </th>
+              <th scope="col">Larger</th>
+            </tr>
+          </thead>
+          <tbody>
+            {keys.map((key) => (
+              <SideRow key={key} metricKey={key} sides={sides} struck={isTaken(key)} />
+            ))}
+          </tbody>
+        </table>
+      </div>
+      <div className="px-3 py-2">
+        <CautionLine />
+      </div>
+    </Sheet>
+  )
+}
+
+function SideRow({ metricKey, sides, struck }: { metricKey: MetricKey; sides: Sides; struck: boolean }) {
+  const asymmetry = sides.asymmetry[metricKey]
+  const { name } = catalogue[metricKey]
+  return (
+    <tr className={struck ? 'text-ink-2 line-through' : undefined}>
+      <th scope="row">
+        {name}
+        {struck && <span className="sr-only"> (withheld by a failed check)</span>}
+      </th>
+      <td className="figure">
+        <FigureText metricKey={metricKey} figure={sides.left[metricKey]!} unit />
+      </td>
+      <td className="figure">
+        <FigureText metricKey={metricKey} figure={sides.right[metricKey]!} unit />
+      </td>
+      <td className="figure">
+        {asymmetry && (
+          <>
+            {formatSigned(asymmetry.value, percent.decimals)}{' '}
+            <span className="text-small text-ink-2">{formatUncertainty(asymmetry.U, percent)} %</span>
+          </>
+        )}
+      </td>
+      <td>{asymmetry && largerWords(asymmetry)}</td>
+    </tr>
+  )
+}
+
+/** The larger side, or that the plate cannot tell. */
+function largerWords({ larger, zeroWithin }: Sides['asymmetry'][string]): string {
+  return zeroWithin ? 'cannot be told from none' : larger
+}

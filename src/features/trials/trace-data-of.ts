@@ -1,0 +1,47 @@
+import type { Trial } from '../../../shared/contracts/trials.ts'
+import type { Signal } from '../../../shared/mechanics/signal/condition.ts'
+import type { EventName } from '../../../shared/mechanics/types.ts'
+import type { Samples } from '../../api/trials/read-samples.ts'
+import type { TraceChannel, TraceData, TraceEvent } from '../../charts/trial-trace/trace-data.ts'
+import { eventWords, phaseWords } from './event-words.ts'
+import { momentumOf, zeroedSignal } from './zeroed-signal.ts'
+
+/** What the trace of a trial is drawn from; null where the recording holds no force to draw. */
+export function traceDataOf(trial: Trial, samples: Samples): TraceData | null {
+  const signal = zeroedSignal(trial, samples)
+  if (!signal) return null
+  const { analysis } = trial
+  return {
+    sampleRateHz: signal.sampleRateHz,
+    durationS: (signal.length - 1) * signal.dt,
+    total: signal.total,
+    feet: feetOf(signal),
+    weight: weightOf(trial),
+    momentum: analysis && momentumOf(signal, analysis),
+    phases: (analysis?.ledger?.entries ?? []).map((entry) => ({ ...entry, phase: phaseWords[entry.phase] })),
+    events: eventsOf(trial),
+  }
+}
+
+function feetOf(signal: Signal): TraceChannel[] {
+  return signal.plates.flatMap(({ channel, force }) =>
+    channel === 'left' || channel === 'right' ? [{ key: channel, label: channel, values: force }] : [],
+  )
+}
+
+function weightOf({ analysis, test }: Trial): TraceData['weight'] {
+  const weight = analysis?.metrics.systemWeight
+  if (!weight) return null
+  return { valueN: weight.value, label: test.externalLoadKg > 0 ? 'weight, loaded' : 'body weight' }
+}
+
+/** In the order in which they come. */
+export function eventsOf({ analysis }: Pick<Trial, 'analysis'>): TraceEvent[] {
+  const names = Object.keys(eventWords) as EventName[]
+  return names
+    .flatMap((name) => {
+      const event = analysis?.events[name]
+      return event ? [{ key: name, label: eventWords[name], timeS: event.timeS }] : []
+    })
+    .sort((a, b) => a.timeS - b.timeS)
+}

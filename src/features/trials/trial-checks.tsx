@@ -1,0 +1,80 @@
+import type { Analysis } from '../../../shared/contracts/trials.ts'
+import { Sheet } from '../../components/sheet.tsx'
+import { Tag } from '../../components/tag.tsx'
+import { groupWords } from './event-words.ts'
+import { formatMeasured } from './format-measured.ts'
+
+type Check = Analysis['checks'][number]
+
+const order = { fail: 0, caution: 1, pass: 2 } as const
+
+/** The quality checks: those to look at first, the others behind one line. */
+export function TrialChecks({ checks, notes }: Pick<Analysis, 'checks' | 'notes'>) {
+  const sorted = [...checks].sort((a, b) => order[a.verdict] - order[b.verdict])
+  const looks = sorted.filter((check) => check.verdict !== 'pass')
+  const passes = sorted.filter((check) => check.verdict === 'pass')
+  return (
+    <Sheet title="Trial checks">
+      {looks.length > 0 && (
+        <ul>
+          {looks.map((check) => (
+            <CheckToLookAt key={check.key} check={check} />
+          ))}
+        </ul>
+      )}
+      {passes.length > 0 && (
+        <details className="py-1">
+          <summary className="cursor-pointer text-ink-2">
+            {looks.length === 0 ? `All ${passes.length} pass` : `${passes.length} more, all pass`}
+          </summary>
+          <ul>
+            {passes.map((check) => (
+              <li
+                key={check.key}
+                className="flex justify-between gap-4 border-b border-rule-2 py-1 text-small"
+              >
+                <span>{check.sentence}</span>
+                <Measured check={check} />
+              </li>
+            ))}
+          </ul>
+        </details>
+      )}
+      {notes.length > 0 && (
+        <ul aria-label="Notes" className="pt-1 text-small text-ink-2">
+          {notes.map((note, i) => (
+            <li key={i}>{note.sentence}</li>
+          ))}
+        </ul>
+      )}
+    </Sheet>
+  )
+}
+
+function CheckToLookAt({ check }: { check: Check }) {
+  const affects = check.affects.map((group) => groupWords[group].toLowerCase())
+  return (
+    <li className="border-b border-rule-2 py-1.5">
+      <div className="flex justify-between gap-4">
+        <span>
+          <Tag tone={check.verdict === 'fail' ? 'stop' : 'caution'}>
+            {check.verdict === 'fail' ? 'failed' : 'look'}
+          </Tag>{' '}
+          {check.sentence}
+        </span>
+        <Measured check={check} />
+      </div>
+      <p className="text-small text-ink-2">
+        {check.limit !== null && `Limit ${formatMeasured(check.limit, check.unit)}. `}
+        {affects.length > 0 &&
+          `${check.verdict === 'fail' ? 'Takes away' : 'Touches'}: ${affects.join(', ')}. `}
+        {check.remedy}
+      </p>
+    </li>
+  )
+}
+
+function Measured({ check }: { check: Check }) {
+  if (check.measured === null) return null
+  return <span className="text-small whitespace-nowrap">{formatMeasured(check.measured, check.unit)}</span>
+}

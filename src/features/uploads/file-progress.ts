@@ -1,0 +1,76 @@
+import type { Upload } from '../../../shared/contracts/uploads.ts'
+import { isApiError } from '../../api/api-error.ts'
+import { wordingOf } from '../../lib/error-wording.ts'
+import type { QueuedFile } from './upload-queue.ts'
+
+/** One file of this page's drop, from the disk to the sheet. */
+export interface FileProgress {
+  key: string
+  fileName: string
+  words: string
+  /** 0 to 1 while it goes up; null before and after. */
+  sent: number | null
+  problem: { sentence: string; remedy: string } | null
+  canRetry: boolean
+  canRemove: boolean
+  done: boolean
+}
+
+/** What there is to say of a file, by what this page knows and what the server says of it. */
+export function fileProgress(file: QueuedFile, upload: Upload | undefined): FileProgress {
+  const { key, fileName, stage } = file
+  const said = wordsOf(file, upload)
+  return {
+    key,
+    fileName,
+    words: said,
+    sent: stage === 'sending' ? (file.sizeBytes === 0 ? 1 : file.sentBytes / file.sizeBytes) : null,
+    problem: problemOf(file, upload),
+    canRetry: stage === 'failed',
+    canRemove: stage === 'queued' || stage === 'refused' || (stage === 'failed' && file.uploadId === null),
+    done:
+      stage === 'sent' && upload !== undefined && upload.state !== 'waiting' && upload.state !== 'receiving',
+  }
+}
+
+function wordsOf({ stage }: QueuedFile, upload: Upload | undefined): string {
+  if (stage === 'refused') return 'not sent'
+  if (stage === 'queued') return 'in line'
+  if (stage === 'sending') return 'going up'
+  if (stage === 'failed') return 'stopped'
+  switch (upload?.state) {
+    case 'read':
+      return upload.trials === 1 ? 'read, 1 trial' : `read, ${upload.trials} trials`
+    case 'refused':
+      return 'could not be read'
+    case 'duplicate':
+      return 'here already'
+    default:
+      return 'sent, being read'
+  }
+}
+
+function problemOf(
+  { stage, refusal, error }: QueuedFile,
+  upload: Upload | undefined,
+): FileProgress['problem'] {
+  if (refusal) return refusal
+  if (stage === 'failed') {
+    const { title, advice } = wordingOf(error)
+    return { sentence: isApiError(error) ? error.message : `${title}.`, remedy: advice }
+  }
+  return stage === 'sent' && upload?.error ? upload.error : null
+}
+
+/** "41 of 48 files read", over what the server has and what is still on this page. */
+export function readCount(
+  uploads: readonly Upload[],
+  files: readonly QueuedFile[],
+): { read: number; of: number } {
+  const announced = new Set(uploads.map((upload) => upload.id))
+  const coming = files.filter(
+    (file) => file.stage !== 'refused' && (file.uploadId === null || !announced.has(file.uploadId)),
+  )
+  const settled = uploads.filter((upload) => upload.state !== 'receiving' && upload.state !== 'waiting')
+  return { read: settled.length, of: uploads.length + coming.length }
+}
