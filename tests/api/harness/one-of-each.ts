@@ -20,7 +20,7 @@ export async function buildOneOfEach({ db, deps, workerDeps }: Harness) {
   const sessionId = await buildSession(db, clubId, owner)
   const uploadId = await buildUpload(db, clubId, { sessionId, uploadedBy: personId })
   const trialId = await buildTrial(db, clubId, { sessionId, uploadId, athleteId })
-  await buildAnalysis(workerDeps.db, clubId, { trialId })
+  const analysisId = await buildAnalysis(workerDeps.db, clubId, { trialId })
   const admin = {
     clubId,
     personId,
@@ -30,5 +30,5 @@ export async function buildOneOfEach({ db, deps, workerDeps }: Harness) {
   } as const
   const guest = { name: 'Guest', email: `${randomUUID()}@example.org`, roles: ['coach' as const] }
   const { id: invitationId } = await invite(deps, admin, { ...guest, athleteId: null })
-  return { clubId, personId, squadId, athleteId, sessionId, uploadId, trialId, invitationId }
+  return { clubId, personId, squadId, athleteId, sessionId, uploadId, trialId, analysisId, invitationId }
 }
