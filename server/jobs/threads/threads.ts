@@ -43,7 +43,7 @@ export function createThreads(limits: Partial<ThreadLimits> = {}): Threads {
   const { threads, timeLimitMs, memoryMb, filename } = { ...usual, ...limits }
   const pool = new Piscina({
     filename,
-    execArgv: ['--import', 'tsx'],
+    execArgv: ['--import', new URL('./load-typescript.mjs', import.meta.url).href],
     minThreads: threads,
     maxThreads: threads,
     resourceLimits: { maxOldGenerationSizeMb: memoryMb },
