@@ -6,11 +6,12 @@ export const Id = z.uuid()
 export const Version = z.number().int().positive()
 export const IsoDate = z.iso.date('Give a date')
 export const Moment = z.iso.datetime()
+/** Blanks round an address, as pasting leaves them, are taken off before it is judged. */
 export const Email = z
-  .email('Give an e-mail address')
-  .max(limits.emailCharacters, 'This address is too long')
+  .string()
   .trim()
   .toLowerCase()
+  .pipe(z.email('Give an e-mail address').max(limits.emailCharacters, 'This address is too long'))
 export const Name = z
   .string()
   .trim()
