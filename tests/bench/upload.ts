@@ -1,0 +1,102 @@
+import { getSession } from '../../shared/contracts/sessions.ts'
+import { loadConfig } from '../../server/config/config.ts'
+import { createDatabase } from '../../server/db/database.ts'
+import { ensureClient } from '../../server/setup/client-build.mjs'
+import { pause } from '../../server/setup/pause.mjs'
+import { startTestCluster } from '../../server/setup/test-cluster.mjs'
+import { makeJump } from '../../seed/synthetic/jump.ts'
+import { recordJump } from '../../seed/synthetic/record.ts'
+import { writeDelimited } from '../../seed/synthetic/write-delimited.ts'
+import { ApiClient } from '../api/harness/api-client.ts'
+import { dropFile, startTestingDay, type TestingDay } from '../api/harness/testing-day.ts'
+import { startProduct, type Product } from '../setup/product.ts'
+
+const files = 40
+/** As many at once as the drop zone sends. */
+const atOnce = 4
+/** s, from the first byte sent to the last figure on the sheet. */
+const mostS = 8
+const giveUpMs = 60_000
+/** As often as an open sheet reads again while files come in. */
+const lookEveryMs = 250
+
+/**
+ * Drops files on a session through the real web process, worker and PostgreSQL, as a browser does, and prints the
+ * time until the sheet shows every one of them analysed.
+ */
+export async function benchUpload(): Promise<void> {
+  await ensureClient()
+  const { cluster, stop } = await startTestCluster()
+  try {
+    const product = await startProduct({ cluster })
+    try {
+      await measure(product)
+    } catch (error) {
+      console.error(product.output())
+      throw error
+    } finally {
+      await product.stop()
+    }
+  } finally {
+    await stop()
+  }
+}
+
+async function measure(product: Product): Promise<void> {
+  const db = createDatabase(loadConfig('web', product.env), () => undefined)
+  const names = Array.from({ length: files / 2 }, (_, i) => `Invented Person${String.fromCharCode(65 + i)}`)
+  const signedIn = async ({ email }: { email: string }) => {
+    const client = new ApiClient(product.url, [])
+    await client.signIn(email)
+    return client
+  }
+  try {
+    const day = await startTestingDay({ db, signedIn }, names)
+    const drop = Array.from({ length: files }, (_, i) => ({
+      name: `${names[i % names.length]} cmj ${1 + Math.floor(i / names.length)}.csv`,
+      bytes: eightSeconds(i + 1),
+    }))
+    report(
+      await timeDrop(day, drop),
+      drop.reduce((sum, { bytes }) => sum + bytes.length, 0),
+    )
+  } finally {
+    await db.close()
+  }
+}
+
+/** A recording of 8 s at 1000 Hz on two plates; each seed is another one. */
+function eightSeconds(seed: number): Uint8Array {
+  const noise = { whiteNoiseN: 1 }
+  const jump = makeJump({ takeoffVelocity: 2.2 + (seed % 8) * 0.1 }, seed)
+  return writeDelimited(recordJump(jump, { durationS: 8 }, { left: noise, right: noise }, seed))
+}
+
+async function timeDrop(day: TestingDay, drop: { name: string; bytes: Uint8Array }[]): Promise<number> {
+  const waiting = [...drop]
+  const began = performance.now()
+  const send = async () => {
+    for (let file = waiting.shift(); file; file = waiting.shift()) {
+      await dropFile(day.coach, day.session.id, file.name, file.bytes)
+    }
+  }
+  await Promise.all(Array.from({ length: atOnce }, send))
+  while ((await countAnalysed(day)) < files) {
+    if (performance.now() - began > giveUpMs) throw new Error('The trials were not analysed in time.')
+    await pause(lookEveryMs)
+  }
+  return (performance.now() - began) / 1000
+}
+
+async function countAnalysed({ coach, session }: TestingDay): Promise<number> {
+  const { trials } = await coach.call(getSession, { params: { sessionId: session.id } })
+  return trials.filter(({ analysis }) => analysis !== null).length
+}
+
+function report(seconds: number, bytes: number): void {
+  const ratio = seconds / mostS
+  console.log(
+    `${files} files dropped → ${files} analysed: ${seconds.toFixed(2)} s (${(bytes / 1e6).toFixed(1)} MB)`,
+  )
+  console.log(`limit ${mostS} s, ratio ${ratio.toFixed(2)}: ${ratio < 1 ? 'kept' : 'MISSED'}`)
+}
