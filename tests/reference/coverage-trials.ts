@@ -8,7 +8,12 @@ import type { Recording } from '../../shared/mechanics/types.ts'
 
 const RATES = [500, 1000, 2000] as const
 const NOISES = ['clean', 'white', 'slow', 'rough'] as const
-const MASSES = { light: [45, 60], middle: [60, 85], heavy: [85, 120] } as const
+/** kg */
+const MASSES = {
+  light: { from: 45, to: 60 },
+  middle: { from: 60, to: 85 },
+  heavy: { from: 85, to: 120 },
+} as const
 const PUSHES: readonly PushShape[] = ['even', 'early', 'late', 'twoHumps']
 const LANDINGS: readonly LandingShape[] = ['onePeak', 'twoPeaks']
 
@@ -84,7 +89,7 @@ export function coverageTrial(number: number): CoverageTrial {
   const share = (): number => random.between(0.46, 0.54)
   const jump = makeJump(
     {
-      massKg: random.between(...MASSES[mass]),
+      massKg: random.between(MASSES[mass].from, MASSES[mass].to),
       takeoffVelocity: random.between(1.9, 3.1),
       depthM: random.between(0.22, 0.42),
       stanceS: random.between(1.4, 3.2),

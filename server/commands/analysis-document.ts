@@ -1,0 +1,140 @@
+import { createHash } from 'node:crypto'
+import { basename } from 'node:path'
+import { analyse } from '../../shared/mechanics/analyse.ts'
+import { catalogue, isMetricKey } from '../../shared/mechanics/catalogue.ts'
+import type { Settings } from '../../shared/mechanics/settings.ts'
+import type {
+  AsymmetryFigure,
+  Figure,
+  Note,
+  Recording,
+  Test,
+  TrialAnalysis,
+} from '../../shared/mechanics/types.ts'
+import type { ReadError } from '../../shared/recordings/errors.ts'
+import { readRecording } from '../../shared/recordings/read-recording.ts'
+import type { ColumnMap, FileFormat } from '../../shared/recordings/result.ts'
+import { engineOptions, inputsOf } from '../modules/analyses/inputs.ts'
+
+/** A countermovement jump of both feet, hands on hips, without load. */
+export const plainJump: Test = {
+  protocol: 'cmj',
+  side: 'both',
+  externalLoadKg: 0,
+  boxHeightM: null,
+  arms: 'hips',
+}
+
+/** What the person at the command line says of the files. */
+export interface GivenFacts {
+  /** Without it the engine proposes the test. */
+  test?: Test
+  massKg?: number
+  sampleRateHz?: number
+}
+
+type WithUnit<F> = F & { unit: string }
+type FileError = Omit<ReadError, 'code'> & { code: string }
+
+interface TrialEntry extends Omit<TrialAnalysis, 'test' | 'metrics' | 'sides' | 'ledger'> {
+  protocol: Test['protocol']
+  test: Test
+  metrics: Record<string, WithUnit<Figure>>
+  sides: {
+    left: Record<string, WithUnit<Figure>>
+    right: Record<string, WithUnit<Figure>>
+    asymmetry: Record<string, WithUnit<AsymmetryFigure>>
+  } | null
+  ledger:
+    | (Omit<NonNullable<TrialAnalysis['ledger']>, 'closing'> & {
+        closing: WithUnit<NonNullable<TrialAnalysis['ledger']>['closing']>
+      })
+    | null
+}
+
+/** One file of the document that the command prints. */
+export interface FileEntry {
+  file: string
+  sha256: string | null
+  format: FileFormat | null
+  columnMap: ColumnMap | null
+  sampleRateHz: number | null
+  durationS: number | null
+  notes: Note[]
+  error?: FileError
+  trials: TrialEntry[]
+}
+
+const unitOf = (key: string): string => (isMetricKey(key) ? catalogue[key].unit : '')
+
+function withUnits<F extends Figure>(
+  figures: Record<string, F>,
+  unit: (key: string) => string,
+): Record<string, WithUnit<F>> {
+  return Object.fromEntries(
+    Object.entries(figures).map(([key, figure]) => [key, { ...figure, unit: unit(key) }]),
+  )
+}
+
+function trialEntry({ test, metrics, sides, ledger, ...rest }: TrialAnalysis): TrialEntry {
+  return {
+    protocol: test.protocol,
+    test,
+    ...rest,
+    metrics: withUnits(metrics, unitOf),
+    sides: sides && {
+      left: withUnits(sides.left, unitOf),
+      right: withUnits(sides.right, unitOf),
+      asymmetry: withUnits(sides.asymmetry, () => '%'),
+    },
+    ledger: ledger && { ...ledger, closing: { ...ledger.closing, unit: 'N·s' } },
+  }
+}
+
+/** A file that gave no recording. */
+export function failedEntry(file: string, sha256: string | null, error: FileError): FileEntry {
+  return {
+    file,
+    sha256,
+    format: null,
+    columnMap: null,
+    sampleRateHz: null,
+    durationS: null,
+    notes: [],
+    error,
+    trials: [],
+  }
+}
+
+/** What the server would have the engine analyse the recording with, where nothing is known of plates and place. */
+function analysed(
+  recording: Recording,
+  { test, massKg }: GivenFacts,
+  settings: Settings,
+): ReturnType<typeof analyse> {
+  const channels = Object.keys(recording.channels)
+  const inputs = inputsOf({ test: test ?? plainJump, recordedMassKg: massKg ?? null, channels })
+  const { test: named, ...proposing } = engineOptions(inputs)
+  return analyse(recording, test ? { ...proposing, test: named } : proposing, settings)
+}
+
+/** Reads and analyses one file as the server does; `file` is named in the entry as it was given. */
+export function fileEntry(file: string, bytes: Uint8Array, given: GivenFacts, settings: Settings): FileEntry {
+  const sha256 = createHash('sha256').update(bytes).digest('hex')
+  const { sampleRateHz } = given
+  const read = readRecording(bytes, basename(file), sampleRateHz === undefined ? {} : { sampleRateHz })
+  if (!read.ok) return failedEntry(file, sha256, read.error)
+  const { recording, format, columnMap } = read
+  const { notes, trials } = analysed(recording, given, settings)
+  const samples = Object.values(recording.channels)[0]?.length ?? 0
+  return {
+    file,
+    sha256,
+    format,
+    columnMap,
+    sampleRateHz: recording.sampleRateHz,
+    durationS: samples / recording.sampleRateHz,
+    notes,
+    trials: trials.map(trialEntry),
+  }
+}
