@@ -13,7 +13,7 @@ export function comesToStay(
   hold: number,
   half: number,
 ): number | null {
-  const last = sums.sums.length - 2
+  const last = sums.length - 1
   let since = -1
   for (let i = Math.ceil(from); i <= last; i++) {
     const distance = Math.abs(meanOver(sums, i - half, i + half + 1) - weight)

@@ -1,6 +1,6 @@
 import type { Quantity } from '../uncertainty/budget.ts'
 import { at, velocityOf, type JumpModel } from './jump-model.ts'
-import { measured, missing, reasons, type Measured } from './measured.ts'
+import { miss, put, reasons, type Measured } from './measured.ts'
 
 /** Greatest downward velocity, where force comes back to the weight; `null` without a countermovement. */
 export function downwardVelocityOf(model: JumpModel): Quantity | null {
@@ -9,22 +9,15 @@ export function downwardVelocityOf(model: JumpModel): Quantity | null {
 }
 
 /** Net impulses of the push, each the change of momentum over its phase. */
-export function impulseFigures(model: JumpModel, takeoffVelocity: Quantity): Measured {
+export function impulseFigures(model: JumpModel, takeoffVelocity: Quantity, into: Measured): void {
   const { budget, systemMass, events } = model
-  const net = measured({ netImpulse: budget.times(systemMass, takeoffVelocity) })
+  const net = budget.times(systemMass, takeoffVelocity)
+  put(into, 'netImpulse', net)
   const downward = downwardVelocityOf(model)
   if (!downward || !events.zeroVelocity)
-    return {
-      ...net,
-      ...missing(['unweightingImpulse', 'brakingImpulse', 'propulsionImpulse'], reasons.noDip),
-    }
+    return miss(into, ['unweightingImpulse', 'brakingImpulse', 'propulsionImpulse'], reasons.noDip)
   const unweighting = budget.times(systemMass, downward)
-  return {
-    ...net,
-    ...measured({
-      unweightingImpulse: unweighting,
-      brakingImpulse: budget.scaled(unweighting, -1),
-      propulsionImpulse: budget.times(systemMass, takeoffVelocity),
-    }),
-  }
+  put(into, 'unweightingImpulse', unweighting)
+  put(into, 'brakingImpulse', budget.scaled(unweighting, -1))
+  put(into, 'propulsionImpulse', net)
 }

@@ -8,7 +8,7 @@ import type { Quantity } from '../uncertainty/budget.ts'
 import type { EventTimes } from './event-times.ts'
 import { at, displacementOf, forceOf, velocityOf, type JumpModel } from './jump-model.ts'
 import { findRise, greatestSlope } from './loading-rate.ts'
-import { measured, missing, reasons, type Measured, type Outcome } from './measured.ts'
+import { miss, put, reasons, type Measured, type Outcome } from './measured.ts'
 
 const peakKeys: MetricKey[] = [
   'landingPeakForce',
@@ -90,53 +90,54 @@ function rateMax(model: JumpModel, touchdown: number, peak: Peak): Outcome {
   return { quantity: budget.linear(perSecond, [[1, budget.input(0, u)], ...gain]) }
 }
 
-function withPerWeight(model: JumpModel, key: MetricKey, outcome: Outcome): Measured {
-  const twin = `${key}PerBodyWeight`
-  if ('missing' in outcome) return { [key]: outcome, [twin]: outcome }
-  return { [key]: outcome, [twin]: { ...outcome, quantity: perWeight(model, outcome.quantity) } }
+/** Enters a landing figure and its twin per body weight. */
+function withPerWeight(
+  model: JumpModel,
+  into: Measured,
+  key: 'landingPeakForce' | 'landingLoadingRateMean' | 'landingLoadingRate2080' | 'landingLoadingRateMax',
+  outcome: Outcome,
+): void {
+  into.set(key, outcome)
+  const twin = 'missing' in outcome ? outcome : { ...outcome, quantity: perWeight(model, outcome.quantity) }
+  into.set(`${key}PerBodyWeight`, twin)
 }
 
-function peakFigures(model: JumpModel, times: EventTimes): Measured {
+function peakFigures(model: JumpModel, times: EventTimes, into: Measured): void {
   const { budget, events } = model
   const { touchdown, landingPeak } = events
   if (!touchdown || !landingPeak || !times.touchdown || !times.landingPeak)
-    return missing(peakKeys, reasons.noTouchdown)
+    return miss(into, peakKeys, reasons.noTouchdown)
   const peakForce = forceOf(model, landingPeak.value, landingPeak.position, landingPeak.valueU)
   const first = firstPeak(model, touchdown.position, landingPeak)
   const timeToPeak = budget.minus(times.landingPeak, times.touchdown)
-  return {
-    ...withPerWeight(model, 'landingPeakForce', { quantity: peakForce }),
-    ...measured({
-      landingFirstPeakForce: forceOf(model, first.value, first.position, first.valueU),
-      timeToLandingPeak: timeToPeak,
-    }),
-    ...withPerWeight(model, 'landingLoadingRateMean', { quantity: budget.over(peakForce, timeToPeak) }),
-    ...withPerWeight(
-      model,
-      'landingLoadingRate2080',
-      rate2080(model, touchdown.position, landingPeak, peakForce),
-    ),
-    ...withPerWeight(model, 'landingLoadingRateMax', rateMax(model, touchdown.position, landingPeak)),
-  }
+  withPerWeight(model, into, 'landingPeakForce', { quantity: peakForce })
+  put(into, 'landingFirstPeakForce', forceOf(model, first.value, first.position, first.valueU))
+  put(into, 'timeToLandingPeak', timeToPeak)
+  withPerWeight(model, into, 'landingLoadingRateMean', { quantity: budget.over(peakForce, timeToPeak) })
+  withPerWeight(
+    model,
+    into,
+    'landingLoadingRate2080',
+    rate2080(model, touchdown.position, landingPeak, peakForce),
+  )
+  withPerWeight(model, into, 'landingLoadingRateMax', rateMax(model, touchdown.position, landingPeak))
 }
 
-function motionFigures(model: JumpModel, times: EventTimes, landingVelocity: Quantity): Measured {
+function motionFigures(model: JumpModel, times: EventTimes, landingVelocity: Quantity, into: Measured): void {
   const { budget, events, motion, settings, systemMass } = model
   const { touchdown, landingPeak, landingZeroVelocity } = events
-  if (!touchdown || !times.touchdown || !landingPeak) return missing(motionKeys, reasons.noTouchdown)
+  if (!touchdown || !times.touchdown || !landingPeak) return miss(into, motionKeys, reasons.noTouchdown)
   if (landingZeroVelocity === null || !times.landingZeroVelocity)
-    return missing(motionKeys, reasons.noLandingEnd)
+    return miss(into, motionKeys, reasons.noLandingEnd)
   const start = velocityAtCrossing(motion, touchdown, settings)
   const down = displacementOf(model, start)
   const lowest = displacementOf(model, at(model, landingZeroVelocity))
   const atPeak = displacementOf(model, at(model, landingPeak.position))
   const peakForce = forceOf(model, landingPeak.value, landingPeak.position, landingPeak.valueU)
-  return measured({
-    landingImpulse: budget.scaled(budget.times(systemMass, landingVelocity), -1),
-    landingTime: budget.minus(times.landingZeroVelocity, times.touchdown),
-    landingDepth: budget.minus(lowest, down),
-    landingStiffness: budget.over(peakForce, budget.minus(down, atPeak)),
-  })
+  put(into, 'landingImpulse', budget.scaled(budget.times(systemMass, landingVelocity), -1))
+  put(into, 'landingTime', budget.minus(times.landingZeroVelocity, times.touchdown))
+  put(into, 'landingDepth', budget.minus(lowest, down))
+  put(into, 'landingStiffness', budget.over(peakForce, budget.minus(down, atPeak)))
 }
 
 /** Gross impulse over a fixed window from touchdown; a late touchdown leaves some out and takes some in. */
@@ -188,18 +189,18 @@ function landingVelocityOf(model: JumpModel, touchdown: Quantity): Quantity | nu
 }
 
 /** Everything about the landing. */
-export function landingFigures(model: JumpModel, times: EventTimes): Measured {
+export function landingFigures(model: JumpModel, times: EventTimes, into: Measured): void {
   const { touchdown } = model.events
   const landingVelocity = times.touchdown && landingVelocityOf(model, times.touchdown)
   if (!touchdown || !times.touchdown || !landingVelocity)
-    return missing([...peakKeys, ...motionKeys, ...fixedKeys], reasons.noTouchdown)
+    return miss(into, [...peakKeys, ...motionKeys, ...fixedKeys], reasons.noTouchdown)
   const { settings } = model
-  return {
-    ...peakFigures(model, times),
-    ...motionFigures(model, times, landingVelocity),
-    landingVelocity: { quantity: landingVelocity },
-    landingImpulse50: fixedImpulse(model, times.touchdown, touchdown.position, settings.landingImpulseShortS),
-    landingImpulse100: fixedImpulse(model, times.touchdown, touchdown.position, settings.landingImpulseLongS),
-    timeToStabilisation: stabilisation(model, times.touchdown, touchdown.position),
-  }
+  const window = (windowS: number) =>
+    fixedImpulse(model, times.touchdown as Quantity, touchdown.position, windowS)
+  peakFigures(model, times, into)
+  motionFigures(model, times, landingVelocity, into)
+  put(into, 'landingVelocity', landingVelocity)
+  into.set('landingImpulse50', window(settings.landingImpulseShortS))
+  into.set('landingImpulse100', window(settings.landingImpulseLongS))
+  into.set('timeToStabilisation', stabilisation(model, times.touchdown, touchdown.position))
 }

@@ -5,7 +5,7 @@ import type { Quantity } from '../uncertainty/budget.ts'
 export type Outcome = { quantity: Quantity; withoutU?: string } | { missing: string }
 
 /** Outcomes by key; a metric that does not apply is not there. */
-export type Measured = Partial<Record<MetricKey, Outcome>>
+export type Measured = Map<MetricKey, Outcome>
 
 /** Reasons that several metrics share. */
 export const reasons = {
@@ -15,12 +15,12 @@ export const reasons = {
   noDip: 'No countermovement was found: the body did not move down before the push.',
 } as const
 
-/** Quantities by key, each taken as measured with its uncertainty. */
-export function measured(quantities: Partial<Record<MetricKey, Quantity>>): Measured {
-  return Object.fromEntries(Object.entries(quantities).map(([key, quantity]) => [key, { quantity }]))
+/** Enters a quantity as measured with its uncertainty. */
+export function put(into: Measured, key: MetricKey, quantity: Quantity): void {
+  into.set(key, { quantity })
 }
 
-/** The same reason for each of the keys. */
-export function missing(keys: readonly MetricKey[], reason: string): Measured {
-  return Object.fromEntries(keys.map((key) => [key, { missing: reason }]))
+/** Enters the same reason for each of the keys. */
+export function miss(into: Measured, keys: readonly MetricKey[], reason: string): void {
+  for (const key of keys) into.set(key, { missing: reason })
 }

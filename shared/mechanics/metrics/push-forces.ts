@@ -5,7 +5,12 @@ import type { Quantity } from '../uncertainty/budget.ts'
 import type { EventTimes } from './event-times.ts'
 import { downwardVelocityOf } from './impulse.ts'
 import { forceOf, type JumpModel } from './jump-model.ts'
-import { measured, missing, reasons, type Measured } from './measured.ts'
+import { miss, put, reasons, type Measured } from './measured.ts'
+
+/** Each force's twin per body weight. */
+const perBodyWeight = Object.fromEntries(forceKeys.map((key) => [key, `${key}PerBodyWeight`])) as {
+  [Key in ForceKey]: `${Key}PerBodyWeight`
+}
 
 function peakForceOf(model: JumpModel, peak: Peak): Quantity {
   return forceOf(model, peak.value, peak.position, peak.valueU)
@@ -66,17 +71,19 @@ function allForces(
 }
 
 /** Forces of the push in newtons and per body weight. */
-export function pushForceFigures(model: JumpModel, times: EventTimes, takeoffVelocity: Quantity): Measured {
+export function pushForceFigures(
+  model: JumpModel,
+  times: EventTimes,
+  takeoffVelocity: Quantity,
+  into: Measured,
+): void {
   const forces = allForces(model, times, takeoffVelocity)
-  const figures: Measured = {}
   for (const key of forceKeys) {
     const force = forces[key]
-    Object.assign(
-      figures,
-      force
-        ? measured({ [key]: force, [`${key}PerBodyWeight`]: model.budget.over(force, model.bodyWeight) })
-        : missing([key, `${key}PerBodyWeight`], reasons.noDip),
-    )
+    if (!force) miss(into, [key, perBodyWeight[key]], reasons.noDip)
+    else {
+      put(into, key, force)
+      put(into, perBodyWeight[key], model.budget.over(force, model.bodyWeight))
+    }
   }
-  return figures
 }

@@ -8,7 +8,7 @@ import type { Quantity } from '../uncertainty/budget.ts'
 import type { EventTimes } from './event-times.ts'
 import { downwardVelocityOf } from './impulse.ts'
 import { at, displacementOf, forceOf, velocityOf, type JumpModel } from './jump-model.ts'
-import { measured, missing, reasons, type Measured } from './measured.ts'
+import { miss, put, reasons, type Measured } from './measured.ts'
 
 /** What needs a countermovement. */
 const dipKeys: MetricKey[] = [
@@ -100,49 +100,55 @@ function peakVelocityOf(model: JumpModel): Quantity {
   return velocityOf(model, at(model, placeWeightCrossing(motion, fastest, zero.total).position))
 }
 
+function putPower(
+  model: JumpModel,
+  into: Measured,
+  key: 'peakPower' | 'meanPropulsionPower' | 'peakBrakingPower',
+  power: Quantity,
+) {
+  put(into, key, power)
+  put(into, `${key}PerKg`, model.budget.over(power, model.bodyMass))
+}
+
 /** Times, velocities, depth, stiffness, power and work of the push. */
-export function pushFigures(model: JumpModel, times: EventTimes, takeoffVelocity: Quantity): Measured {
-  const { budget, motion, events, settings, systemWeight, systemMass, bodyMass } = model
-  const peakVelocity = measured({ peakVelocity: peakVelocityOf(model) })
+export function pushFigures(
+  model: JumpModel,
+  times: EventTimes,
+  takeoffVelocity: Quantity,
+  into: Measured,
+): void {
+  const { budget, motion, events, settings, systemWeight, systemMass } = model
+  put(into, 'peakVelocity', peakVelocityOf(model))
   const { minimumVelocity, zeroVelocity, takeoff } = events
   const downward = downwardVelocityOf(model)
   if (!minimumVelocity || !zeroVelocity || !downward || !times.minimumVelocity || !times.zeroVelocity)
-    return { ...peakVelocity, ...missing(dipKeys, reasons.noDip) }
+    return miss(into, dipKeys, reasons.noDip)
 
   const brakingTime = budget.minus(times.zeroVelocity, times.minimumVelocity)
   const propulsionTime = budget.minus(times.takeoff, times.zeroVelocity)
+  put(into, 'unweightingTime', budget.minus(times.minimumVelocity, times.onset))
+  put(into, 'brakingTime', brakingTime)
+  put(into, 'propulsionTime', propulsionTime)
+  put(into, 'peakDownwardVelocity', downward)
+
   const deepest = at(model, zeroVelocity.position)
   const depth = displacementOf(model, deepest)
-  const whereFastest = displacementOf(model, at(model, minimumVelocity.position))
-  const way = budget.minus(whereFastest, depth)
+  const way = budget.minus(displacementOf(model, at(model, minimumVelocity.position)), depth)
   const force = forceOf(model, deepest.force, deepest.position, model.zero.total.sd / 2)
+  put(into, 'countermovementDepth', depth)
+  put(into, 'legStiffness', budget.over(budget.minus(force, systemWeight), way))
+
   const rates = ratesOfForce(model, brakingTime)
+  put(into, 'brakingRateOfForce', rates.braking)
+  put(into, 'propulsionRateOfForce', rates.propulsion)
 
   const atTakeoff = velocityAtCrossing(motion, takeoff, settings)
   const rise = budget.minus(displacementOf(model, atTakeoff), depth)
   const kinetic = budget.scaled(budget.times(systemMass, budget.times(takeoffVelocity, takeoffVelocity)), 0.5)
   const work = budget.plus(kinetic, budget.times(systemWeight, rise))
-  const meanPower = budget.over(work, propulsionTime)
-  const peakPower = extremePower(model, zeroVelocity.position, takeoff.position, 1)
-  const brakingPower = extremePower(model, minimumVelocity.position, zeroVelocity.position, -1)
-  return {
-    ...peakVelocity,
-    ...measured({
-      brakingRateOfForce: rates.braking,
-      propulsionRateOfForce: rates.propulsion,
-      unweightingTime: budget.minus(times.minimumVelocity, times.onset),
-      brakingTime,
-      propulsionTime,
-      peakDownwardVelocity: downward,
-      countermovementDepth: depth,
-      legStiffness: budget.over(budget.minus(force, systemWeight), way),
-      peakPower,
-      peakPowerPerKg: budget.over(peakPower, bodyMass),
-      meanPropulsionPower: meanPower,
-      meanPropulsionPowerPerKg: budget.over(meanPower, bodyMass),
-      peakBrakingPower: brakingPower,
-      peakBrakingPowerPerKg: budget.over(brakingPower, bodyMass),
-      propulsionWork: work,
-    }),
-  }
+  put(into, 'propulsionWork', work)
+  putPower(model, into, 'meanPropulsionPower', budget.over(work, propulsionTime))
+  putPower(model, into, 'peakPower', extremePower(model, zeroVelocity.position, takeoff.position, 1))
+  const braking = extremePower(model, minimumVelocity.position, zeroVelocity.position, -1)
+  putPower(model, into, 'peakBrakingPower', braking)
 }

@@ -1,5 +1,5 @@
 import type { MetricKey } from '../catalogue.ts'
-import type { AsymmetryFigure, Figure, Sides } from '../types.ts'
+import type { AsymmetryFigure, Figure, Phase, Sides } from '../types.ts'
 import { fitFlank, type Crossing } from '../events/flank.ts'
 import { phasesOf } from '../phases.ts'
 import { grossImpulse } from '../signal/gross-impulse.ts'
@@ -8,7 +8,7 @@ import { findPeak } from '../signal/peak.ts'
 import type { Quantity } from '../uncertainty/budget.ts'
 import { isSide, type JumpModel, type PlateInputs } from './jump-model.ts'
 import { findRise, greatestSlope } from './loading-rate.ts'
-import { missing, type Measured, type Outcome } from './measured.ts'
+import { miss, put, type Measured, type Outcome } from './measured.ts'
 
 /** One foot: its plate's inputs, its noise, and its own takeoff and touchdown. */
 export interface Foot {
@@ -18,12 +18,12 @@ export interface Foot {
   touchdown: Crossing | null
 }
 
-const perPhase = {
+const perPhase: Partial<Record<Phase, { gross: MetricKey; mean?: MetricKey; peak?: MetricKey }>> = {
   unweighting: { gross: 'unweightingGrossImpulse' },
   braking: { gross: 'brakingGrossImpulse', mean: 'meanBrakingForce', peak: 'peakBrakingForce' },
   propulsion: { gross: 'propulsionGrossImpulse', mean: 'meanPropulsionForce', peak: 'peakPropulsionForce' },
   landing: { gross: 'landingGrossImpulse', mean: 'meanLandingForce', peak: 'landingPeakForce' },
-} as const satisfies Record<string, { gross: MetricKey; mean?: MetricKey; peak?: MetricKey }>
+}
 
 /** Sample at which a plate's force first falls (or last fell) under a threshold near the total's event. */
 function edgeNear(
@@ -87,75 +87,80 @@ function footImpulse(model: JumpModel, foot: Foot, from: number, to: number): Qu
   ])
 }
 
-function loadingRates(model: JumpModel, foot: Foot, landingEnd: number): Measured {
-  const keys: MetricKey[] = ['landingLoadingRateMean', 'landingLoadingRate2080', 'landingLoadingRateMax']
+/** A loading rate of one foot: calibration, its peak's own error, and the error of its duration. */
+function footRate(
+  { budget }: JumpModel,
+  foot: Foot,
+  rate: number,
+  peakU: number,
+  durationU: number,
+): Quantity {
+  return budget.linear(rate, [
+    [rate, foot.plate.gain],
+    [rate, budget.input(0, Math.hypot(peakU, durationU))],
+  ])
+}
+
+function loadingRates(model: JumpModel, foot: Foot, landingEnd: number, into: Measured): void {
   const { budget, signal, settings } = model
-  if (!foot.touchdown) return missing(keys, 'This foot has no touchdown of its own.')
+  if (!foot.touchdown)
+    return miss(
+      into,
+      ['landingLoadingRateMean', 'landingLoadingRate2080', 'landingLoadingRateMax'],
+      'This foot has no touchdown of its own.',
+    )
   const { force } = foot.plate
   const start = foot.touchdown.position
   const peak = findPeak(force, start, landingEnd, 1, foot.noise, signal.dt)
-  const timeToPeak = (peak.position - start) * signal.dt
-  const relative = (value: number, timeU: number, duration: number): Quantity =>
-    budget.linear(value, [
-      [value, foot.plate.gain],
-      [value / peak.value, budget.input(0, peak.valueU)],
-      [value / duration, budget.input(0, timeU)],
-    ])
-  const mean = peak.value / timeToPeak
-  const meanU = Math.hypot(peak.positionU, foot.touchdown.positionU) * signal.dt
+  const peakU = peak.valueU / peak.value
+  const toPeak = peak.position - start
+  const toPeakU = Math.hypot(peak.positionU, foot.touchdown.positionU) / toPeak
+  const mean = peak.value / (toPeak * signal.dt)
+  if (toPeak > 0) put(into, 'landingLoadingRateMean', footRate(model, foot, mean, peakU, toPeakU))
+
   const rise = findRise(force, start, peak, foot.noise, settings)
-  const steepest = greatestSlope(force, start, peak.position, settings.loadingRateWindowS / signal.dt)
-  const outcomes: Measured = {
-    landingLoadingRateMean:
-      timeToPeak > 0 ? { quantity: relative(mean, meanU, timeToPeak) } : { missing: 'No rise was found.' },
-  }
   if (rise) {
-    const duration = (rise.high.position - rise.low.position) * signal.dt
-    const share = settings.loadingRateHigh - settings.loadingRateLow
-    const u = Math.hypot(rise.low.positionU, rise.high.positionU) * signal.dt
-    const quantity = relative((share * peak.value) / duration, u, duration)
-    outcomes.landingLoadingRate2080 = rise.doubt === null ? { quantity } : { quantity, withoutU: rise.doubt }
-  } else
-    outcomes.landingLoadingRate2080 = { missing: 'The force does not rise through 20 and 80 % of its peak.' }
-  if (steepest) {
-    const value = steepest.slope / signal.dt
-    const u = (steepest.slopeU * foot.noise.sd * Math.sqrt(foot.noise.inflation)) / signal.dt
-    outcomes.landingLoadingRateMax = {
-      quantity: budget.linear(value, [
-        [1, budget.input(0, u)],
-        [value, foot.plate.gain],
-      ]),
-    }
-  }
-  return outcomes
+    const duration = rise.high.position - rise.low.position
+    const durationU = Math.hypot(rise.low.positionU, rise.high.positionU) / duration
+    const rate = ((settings.loadingRateHigh - settings.loadingRateLow) * peak.value) / (duration * signal.dt)
+    const quantity = footRate(model, foot, rate, peakU, durationU)
+    into.set(
+      'landingLoadingRate2080',
+      rise.doubt === null ? { quantity } : { quantity, withoutU: rise.doubt },
+    )
+  } else miss(into, ['landingLoadingRate2080'], 'The force does not rise through 20 and 80 % of its peak.')
+
+  const steepest = greatestSlope(force, start, peak.position, settings.loadingRateWindowS / signal.dt)
+  if (!steepest) return
+  const rate = steepest.slope / signal.dt
+  const u = (steepest.slopeU * foot.noise.sd * Math.sqrt(foot.noise.inflation)) / signal.dt
+  put(into, 'landingLoadingRateMax', budget.pair(rate, 1, budget.input(0, u), rate, foot.plate.gain))
 }
 
 /** Every figure of one foot, over the phases of the total. */
 export function footFigures(model: JumpModel, foot: Foot): Measured {
   const { signal, budget, weighing } = model
+  const into: Measured = new Map()
   const windowS = (weighing.window.to - weighing.window.from) * signal.dt
   const stanceU = integratedNoise(foot.noise, windowS, signal.dt) / windowS
-  const outcomes: Measured = {
-    stanceForce: { quantity: footForce(model, foot, foot.plate.stanceForce, stanceU) },
-  }
+  put(into, 'stanceForce', footForce(model, foot, foot.plate.stanceForce, stanceU))
   for (const { phase, from, to } of phasesOf(model.events)) {
-    if (!(phase in perPhase)) continue
-    const keys: { gross: MetricKey; mean?: MetricKey; peak?: MetricKey } =
-      perPhase[phase as keyof typeof perPhase]
+    const keys = perPhase[phase]
+    if (!keys) continue
     const gross = footImpulse(model, foot, from, to)
-    outcomes[keys.gross] = { quantity: gross }
-    if (keys.mean) outcomes[keys.mean] = { quantity: budget.scaled(gross, 1 / ((to - from) * signal.dt)) }
+    put(into, keys.gross, gross)
+    if (keys.mean) put(into, keys.mean, budget.scaled(gross, 1 / ((to - from) * signal.dt)))
     if (keys.peak) {
       const peak = findPeak(foot.plate.force, from, to, 1, foot.noise, signal.dt)
-      outcomes[keys.peak] = { quantity: footForce(model, foot, peak.value, peak.valueU) }
+      put(into, keys.peak, footForce(model, foot, peak.value, peak.valueU))
     }
-    if (phase === 'landing') Object.assign(outcomes, loadingRates(model, foot, to))
+    if (phase === 'landing') loadingRates(model, foot, to, into)
   }
-  return outcomes
+  return into
 }
 
 /** Lags of the feet, right less left. */
-export function lagFigures(model: JumpModel, [left, right]: [Foot, Foot]): Measured {
+export function lagFigures(model: JumpModel, [left, right]: [Foot, Foot], into: Measured): void {
   const { budget, signal } = model
   const lag = (a: Crossing | null, b: Crossing | null): Outcome => {
     if (!a || !b) return { missing: 'A foot has no event of its own here.' }
@@ -168,10 +173,8 @@ export function lagFigures(model: JumpModel, [left, right]: [Foot, Foot]): Measu
       ]),
     }
   }
-  return {
-    feetTakeoffLag: lag(left.takeoff, right.takeoff),
-    feetTouchdownLag: lag(left.touchdown, right.touchdown),
-  }
+  into.set('feetTakeoffLag', lag(left.takeoff, right.takeoff))
+  into.set('feetTouchdownLag', lag(left.touchdown, right.touchdown))
 }
 
 /**
@@ -187,10 +190,8 @@ export function asymmetryOf(
   const sum = left.value + right.value
   if (!(Math.abs(sum) > 0)) return null
   const value = (200 * (right.value - left.value)) / sum
-  const quantity = budget.linear(value, [
-    [(400 * left.value) / (sum * sum), right],
-    [(-400 * right.value) / (sum * sum), left],
-  ])
+  const square = sum * sum
+  const quantity = budget.pair(value, (400 * left.value) / square, right, (-400 * right.value) / square, left)
   const figure = budget.figure(quantity, withoutU)
   return {
     ...figure,
@@ -203,16 +204,15 @@ export function asymmetryOf(
 export function sidesOf(model: JumpModel, feet: [Foot, Foot]): Sides {
   const [left, right] = feet.map((foot) => footFigures(model, foot))
   const sides: Sides = { left: {}, right: {}, asymmetry: {} }
-  const put = (into: Record<string, Figure>, key: string, outcome: Outcome) => {
+  const enter = (into: Record<string, Figure>, key: string, outcome: Outcome) => {
     if ('quantity' in outcome)
       into[key] = model.budget.figure(outcome.quantity, outcome.withoutU !== undefined)
   }
-  for (const key of Object.keys(left) as MetricKey[]) {
-    const a = left[key]
-    const b = right[key]
-    if (!a || !b) continue
-    put(sides.left, key, a)
-    put(sides.right, key, b)
+  for (const [key, a] of left) {
+    const b = right.get(key)
+    if (!b) continue
+    enter(sides.left, key, a)
+    enter(sides.right, key, b)
     if (!('quantity' in a) || !('quantity' in b)) continue
     const withoutU = a.withoutU !== undefined || b.withoutU !== undefined
     const asymmetry = asymmetryOf(model, a.quantity, b.quantity, withoutU)

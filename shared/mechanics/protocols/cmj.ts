@@ -1,5 +1,5 @@
 import type { AnalyseOptions, EventTime, Figure, Note, Recording, Test, TrialAnalysis } from '../types.ts'
-import type { MetricKey } from '../catalogue.ts'
+import { catalogue } from '../catalogue.ts'
 import { jumpChecks, deadPlateCheck } from '../checks/jump-checks.ts'
 import { feetChecks } from '../checks/feet-checks.ts'
 import { recordingChecks, taredWithAthlete } from '../checks/recording-checks.ts'
@@ -16,7 +16,7 @@ import { landingFigures } from '../metrics/landing.ts'
 import type { Measured } from '../metrics/measured.ts'
 import { pushFigures } from '../metrics/push.ts'
 import { pushForceFigures } from '../metrics/push-forces.ts'
-import { findFeet, lagFigures, sidesOf } from '../metrics/sides.ts'
+import { findFeet, lagFigures, sidesOf, type Foot } from '../metrics/sides.ts'
 import { restToRestFigures, weighingFigures } from '../metrics/weighing.ts'
 import type { Settings } from '../settings.ts'
 import type { Signal } from '../signal/condition.ts'
@@ -59,18 +59,19 @@ function eventsOut(events: JumpEvents, signal: Signal): TrialAnalysis['events'] 
   return Object.fromEntries(placed)
 }
 
-function measureAll(model: JumpModel): Measured {
+function measureAll(model: JumpModel, feet: [Foot, Foot] | null): Measured {
+  const into: Measured = new Map()
   const times = eventTimes(model)
   const takeoffVelocity = takeoffVelocityOf(model, times)
-  return {
-    ...weighingFigures(model),
-    ...restToRestFigures(model),
-    ...jumpFigures(model, times, takeoffVelocity),
-    ...impulseFigures(model, takeoffVelocity),
-    ...pushForceFigures(model, times, takeoffVelocity),
-    ...pushFigures(model, times, takeoffVelocity),
-    ...landingFigures(model, times),
-  }
+  weighingFigures(model, into)
+  restToRestFigures(model, into)
+  jumpFigures(model, times, takeoffVelocity, into)
+  impulseFigures(model, takeoffVelocity, into)
+  pushForceFigures(model, times, takeoffVelocity, into)
+  pushFigures(model, times, takeoffVelocity, into)
+  landingFigures(model, times, into)
+  if (feet) lagFigures(model, feet, into)
+  return into
 }
 
 /** Sorts outcomes into figures, what is missing, and notes on figures without uncertainty. */
@@ -78,16 +79,14 @@ function sortOut(model: JumpModel, outcomes: Measured) {
   const metrics: Record<string, Figure> = {}
   const missing: TrialAnalysis['missing'] = []
   const notes: Note[] = []
-  for (const key of Object.keys(outcomes) as MetricKey[]) {
-    const outcome = outcomes[key]
-    if (!outcome) continue
+  for (const [key, outcome] of outcomes) {
     if ('missing' in outcome) missing.push({ key, reason: outcome.missing })
     else if (!Number.isFinite(outcome.quantity.value))
       missing.push({ key, reason: 'The trace gives no finite value for it.' })
     else {
       metrics[key] = model.budget.figure(outcome.quantity, outcome.withoutU !== undefined)
       if (outcome.withoutU !== undefined)
-        notes.push({ code: 'no-uncertainty', sentence: `${key}: ${outcome.withoutU}` })
+        notes.push({ code: 'no-uncertainty', sentence: `${catalogue[key].name}: ${outcome.withoutU}` })
     }
   }
   return { metrics, missing, notes }
@@ -131,8 +130,7 @@ export function analyseCmj(
     }
   const model = buildModel(signal, zeroedSums, zero, located, test, options, settings)
   const feet = findFeet(model)
-  const outcomes = { ...measureAll(model), ...(feet ? lagFigures(model, feet) : {}) }
-  const { metrics, missing, notes } = sortOut(model, outcomes)
+  const { metrics, missing, notes } = sortOut(model, measureAll(model, feet))
   const ledger = ledgerOf(model, metrics.closingBalance)
   const readings = {
     unloaded,

@@ -7,6 +7,8 @@ import { borrow } from './workspace.ts'
 export interface RunningSums {
   sums: Float64Array
   reference: number
+  /** Number of samples summed. */
+  length: number
 }
 
 /** Sums a record up. `slot` names the workspace's array for them. */
@@ -19,13 +21,13 @@ export function runningSums(force: Float64Array, slot: string): RunningSums {
     sum += force[i] - reference
     sums[i + 1] = sum
   }
-  return { sums, reference }
+  return { sums, reference, length: force.length }
 }
 
 /** Mean of the samples from (inclusive) to (exclusive), cut to the record; `NaN` of none. */
 export function meanOver(running: RunningSums, from: number, to: number): number {
-  const { sums, reference } = running
+  const { sums, reference, length } = running
   const a = from > 0 ? from : 0
-  const b = to < sums.length ? to : sums.length - 1
+  const b = to < length ? to : length
   return b > a ? reference + (sums[b] - sums[a]) / (b - a) : NaN
 }

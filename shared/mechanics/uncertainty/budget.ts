@@ -58,42 +58,39 @@ export class Budget {
     return { value, parts }
   }
 
+  /** The same for two quantities. */
+  pair(value: number, ofA: number, a: Quantity, ofB: number, b: Quantity): Quantity {
+    if (!this.on) return this.exact(value)
+    const long = a.parts.length >= b.parts.length
+    const [ofLonger, longer, ofShorter, shorter] = long
+      ? [ofA, a.parts, ofB, b.parts]
+      : [ofB, b.parts, ofA, a.parts]
+    const parts = new Float64Array(longer.length)
+    for (let i = 0; i < longer.length; i++) parts[i] = ofLonger * longer[i]
+    for (let i = 0; i < shorter.length; i++) parts[i] += ofShorter * shorter[i]
+    return { value, parts }
+  }
+
   plus(a: Quantity, b: Quantity): Quantity {
-    return this.linear(a.value + b.value, [
-      [1, a],
-      [1, b],
-    ])
+    return this.pair(a.value + b.value, 1, a, 1, b)
   }
 
   minus(a: Quantity, b: Quantity): Quantity {
-    return this.linear(a.value - b.value, [
-      [1, a],
-      [-1, b],
-    ])
+    return this.pair(a.value - b.value, 1, a, -1, b)
   }
 
   times(a: Quantity, b: Quantity): Quantity {
-    return this.linear(a.value * b.value, [
-      [b.value, a],
-      [a.value, b],
-    ])
+    return this.pair(a.value * b.value, b.value, a, a.value, b)
   }
 
   over(a: Quantity, b: Quantity): Quantity {
     const value = a.value / b.value
-    return this.linear(value, [
-      [1 / b.value, a],
-      [-value / b.value, b],
-    ])
+    return this.pair(value, 1 / b.value, a, -value / b.value, b)
   }
 
   scaled(a: Quantity, factor: number): Quantity {
-    return this.linear(a.value * factor, [[factor, a]])
-  }
-
-  /** The same quantity with an independent error of its own of standard uncertainty `u`. */
-  withOwn(a: Quantity, u: number, dof = Infinity): Quantity {
-    return this.plus(a, this.input(0, u, dof))
+    if (!this.on) return this.exact(a.value * factor)
+    return { value: a.value * factor, parts: a.parts.map((part) => factor * part) }
   }
 
   /** Combined standard uncertainty, and the effective degrees of freedom (Welch–Satterthwaite, GUM G.4.1). */
