@@ -1,6 +1,6 @@
 import { ensureClient } from './client-build.mjs'
 import { openDatabase } from './database.mjs'
-import { ensureDemo } from './demo.mjs'
+import { demoAccountLines, ensureDemo } from './demo.mjs'
 import { migrate } from './migrations.mjs'
 import { freePort } from './ports.mjs'
 import { SetUpProblem, endWith, step } from './problem.mjs'
@@ -31,7 +31,8 @@ export async function startProduct(settings, { reload }) {
   step(`Starting ${services.map(({ name }) => name).join(', ')}`)
   for (const service of services) await onStop(keepRunning(service, giveUp).stop)
   await untilReady(settings.port)
-  console.log(welcome(settings, mail?.inboxPort, ''))
+  const accounts = settings.production ? [] : await demoAccountLines(urls)
+  console.log(welcome(settings, mail?.inboxPort, accounts))
 }
 
 /**
