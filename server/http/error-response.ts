@@ -21,6 +21,7 @@ export const answerError: ErrorRequestHandler = (error: unknown, req, res, next)
   if (named.status >= 500) req.log.error({ err: error }, 'request failed')
   if (res.headersSent) return next(error)
   const { code, message, details } = named
+  if (typeof details?.retryAfterS === 'number') res.set('Retry-After', String(details.retryAfterS))
   const body: ErrorBody = { error: details ? { code, message, details } : { code, message } }
   res.status(named.status).json(body)
 }

@@ -5,6 +5,14 @@ import type { Logger } from 'pino'
 import { pinoHttp } from 'pino-http'
 import { describeError, scrub } from '../integrations/log.ts'
 
+interface LoggedRequest {
+  id: string
+  method: string
+  url: string
+  /** Express' own: `url` is cut on the way through routers. */
+  originalUrl?: string
+}
+
 /** Gives every request an id (sent back as `X-Request-Id`) and one line in the log when it is answered. */
 export function requestLog(logger: Logger): RequestHandler {
   return pinoHttp({
@@ -16,15 +24,15 @@ export function requestLog(logger: Logger): RequestHandler {
     },
     // Bodies and query strings carry names and notes; headers carry the cookie: none of them is logged.
     serializers: {
-      req: (req: { id: string; method: string; url: string }) => ({
-        id: req.id,
-        method: req.method,
-        path: scrub(req.url.split('?')[0] ?? ''),
+      req: ({ id, method, url, originalUrl }: LoggedRequest) => ({
+        id,
+        method,
+        path: scrub((originalUrl ?? url).split('?')[0] ?? ''),
       }),
       res: (res: { statusCode: number }) => ({ status: res.statusCode }),
       err: describeError,
     },
     customLogLevel: (_req, res, error) => (error || res.statusCode >= 500 ? 'error' : 'info'),
-    wrapSerializers: true,
+    wrapSerializers: false,
   })
 }
