@@ -43,7 +43,15 @@ export interface Coverage {
   widthRatio: number
   /** The stratum that is covered worst. */
   worst: { name: string; covered: number; trials: number }
-  strata: Record<string, { covered: number; trials: number }>
+  strata: Record<string, Stratum>
+}
+
+/** A kind of trials: how well its intervals hold, and how wide they are. */
+export interface Stratum {
+  trials: number
+  covered: number
+  sd: number
+  widthRatio: number
 }
 
 const test: Test = { protocol: 'cmj', side: 'both', externalLoadKg: 0, boxHeightM: null, arms: 'hips' }
@@ -72,19 +80,31 @@ function strataOf(outcomes: Outcome[]): Coverage['strata'] {
       groups.set(key, [...(groups.get(key) ?? []), outcome])
     }
   }
-  return Object.fromEntries(
-    [...groups].map(([name, part]) => [name, { covered: share(part), trials: part.length }]),
+  return Object.fromEntries([...groups].map(([name, part]) => [name, stratumOf(part)]))
+}
+
+function stratumOf(part: Outcome[]): Stratum {
+  return { trials: part.length, covered: share(part), sd: spread(part).sd, widthRatio: widthRatio(part) }
+}
+
+function spread(part: Outcome[]): { bias: number; sd: number } {
+  const bias = part.reduce((sum, { error }) => sum + error, 0) / part.length
+  const variance = part.reduce((sum, { error }) => sum + (error - bias) ** 2, 0) / (part.length - 1)
+  return { bias, sd: Math.sqrt(variance) }
+}
+
+const medianUOf = (part: Outcome[]): number =>
+  quantile(
+    part.map(({ U }) => U),
+    0.5,
   )
+
+function widthRatio(part: Outcome[]): number {
+  const errors = part.map(({ error }) => Math.abs(error))
+  return medianUOf(part) / quantile(errors, 0.95)
 }
 
 function coverageOf({ outcomes, missing, withoutU, clean, cleanWithoutU }: Tally, trials: number): Coverage {
-  const errors = outcomes.map((outcome) => outcome.error)
-  const bias = errors.reduce((sum, error) => sum + error, 0) / errors.length
-  const variance = errors.reduce((sum, error) => sum + (error - bias) ** 2, 0) / (errors.length - 1)
-  const medianU = quantile(
-    outcomes.map((outcome) => outcome.U),
-    0.5,
-  )
   const strata = strataOf(outcomes)
   const [worst] = Object.entries(strata).sort(([, a], [, b]) => a.covered - b.covered)
   return {
@@ -93,10 +113,9 @@ function coverageOf({ outcomes, missing, withoutU, clean, cleanWithoutU }: Tally
     missing: missing / trials,
     withoutU: withoutU / trials,
     cleanWithoutU: cleanWithoutU / Math.max(1, clean),
-    bias,
-    sd: Math.sqrt(variance),
-    medianU,
-    widthRatio: medianU / quantile(errors.map(Math.abs), 0.95),
+    ...spread(outcomes),
+    medianU: medianUOf(outcomes),
+    widthRatio: widthRatio(outcomes),
     worst: { name: worst?.[0] ?? '', covered: worst?.[1].covered ?? NaN, trials: worst?.[1].trials ?? 0 },
     strata,
   }
@@ -168,11 +187,23 @@ export function coverageTable(coverage: Record<CoveredMetric, Coverage>): string
   return [head, ...rows].map((row) => row.map((cell, i) => cell.padEnd(widths[i] ?? 0)).join('  ')).join('\n')
 }
 
+/** A row a stratum of one figure. */
+export function strataTable({ strata }: Coverage): string {
+  return Object.entries(strata)
+    .sort(([a], [b]) => a.localeCompare(b, 'en'))
+    .map(([name, { trials, covered, sd, widthRatio: ratio }]) => {
+      const columns = [name.padEnd(18), `${trials}`.padStart(5), percent(covered).padStart(8)]
+      return [...columns, sd.toPrecision(3).padStart(8), ratio.toFixed(2).padStart(6)].join('  ')
+    })
+    .join('\n')
+}
+
 /** The coverage benchmark: 2,000 trials unless told otherwise. */
 export function benchCoverage(count = 2000): { table: string; coverage: Record<CoveredMetric, Coverage> } {
   const coverage = measureCoverage(count)
-  return {
-    table: `Coverage of U over ${count} synthetic countermovement jumps\n${coverageTable(coverage)}`,
-    coverage,
-  }
+  const title = `Coverage of U over ${count} synthetic countermovement jumps`
+  const strata = COVERED_METRICS.map(
+    (metric) => `${metric}: trials, covered, SD, U / 95 % of errors\n${strataTable(coverage[metric])}`,
+  )
+  return { table: [title, coverageTable(coverage), ...strata].join('\n\n'), coverage }
 }

@@ -35,6 +35,9 @@ export interface Heading {
 
 const NO_UNIT: HeadingUnit = { family: 'none' }
 
+/** A heading longer than this is none; it also bounds the work of the patterns below. */
+const LONGEST_HEADING = 200
+
 /** The unit that a piece of text is, if it is nothing but a unit. */
 export function unitOf(text: string): HeadingUnit {
   const key = text.trim().replace(/\s+/gu, '').toLowerCase()
@@ -102,8 +105,8 @@ function quantityOf(words: string[], unit: HeadingUnit, foot: Heading['foot']): 
 
 /** Reads a column heading; `unitBelow` is the text of a row of units under it, if there is one. */
 export function readHeading(cell: string, unitBelow = ''): Heading {
-  const name = cell.replace(/\s+/gu, ' ').trim()
-  const below = unitOf(unitBelow.replace(/[()[\]{}<>]/gu, ''))
+  const name = cell.slice(0, LONGEST_HEADING).replace(/\s+/gu, ' ').trim()
+  const below = unitOf(unitBelow.slice(0, LONGEST_HEADING).replace(/[()[\]{}<>]/gu, ''))
   const own = bracketedUnit(name) ?? trailingUnit(name)
   const unit = own.unit.family === 'none' ? below : own.unit
   const words = wordsOf(own.unit.family === 'none' ? name : own.rest)

@@ -3,6 +3,7 @@ import { ReadFault } from '../errors.ts'
 import { MAX_SAMPLES } from '../limits.ts'
 import { shown } from '../safe-text.ts'
 import { cellKind } from './numbers.ts'
+import type { CellKind } from './numbers.ts'
 import { lineEndFor } from './rows.ts'
 import type { NumberColumns } from './scan-numbers.ts'
 
@@ -13,6 +14,12 @@ export interface ParsedNumbers {
   firstUnreadable: { line: number; column: number; seen: string } | null
   /** Lines of text after the last row of numbers. */
   linesAfter: { count: number; first: string }
+}
+
+/** As `cellKind`, and a number beyond what a double holds is no number. */
+function finiteKind(text: string): CellKind {
+  const kind = cellKind(text)
+  return kind === 'number' && !Number.isFinite(Number(text)) ? 'text' : kind
 }
 
 /** Collects rows while Papa Parse steps through a body. */
@@ -42,7 +49,7 @@ class RowCollector {
     this.line++
     if (cells.length === 1 && (cells[0] === '' || cells[0] === '\r')) return
     const texts = this.wanted.map((index) => (cells[index] ?? '').trim())
-    const kinds = texts.map(cellKind)
+    const kinds = texts.map(finiteKind)
     if (!kinds.includes('number') && cells.some((cell) => cellKind(cell) === 'text')) {
       this.strays.push({ line: this.line, text: cells.join(' ') })
       return

@@ -70,6 +70,7 @@ describe('scanNumbers', () => {
     ['a decimal comma in another delimiter', '1;2,5\n'],
     ['a lone sign', '1,-\n'],
     ['an exponent without figures', '1,2e\n'],
+    ['a number beyond what a double holds', '1,1e999\n'],
     ['a hexadecimal number', '1,0x10\n'],
   ])('hands %s back to the general reader', (_, text) => {
     expect(scanNumbers(encode(text), 0, text.includes(';') ? ';' : ',', [0, 1])).toBeNull()

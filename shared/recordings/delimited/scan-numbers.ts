@@ -15,6 +15,9 @@ const POWERS = Float64Array.from({ length: 23 }, (_, exponent) => Number(`1e${ex
 /** Digits that always stay below 2^53. */
 const SAFE_DIGITS = 15
 
+/** Characters of the longest number that is read. */
+const LONGEST_NUMBER = 400
+
 /** Reads one file's body of plain numbers byte by byte; stops at whatever else it meets. */
 class BodyScanner {
   private readonly bytes: Uint8Array
@@ -119,7 +122,7 @@ class BodyScanner {
     if (isBlank) this.value = NaN
     else if (digits > SAFE_DIGITS || end > mantissaEnd) this.value = this.slowly(start, end)
     else this.value = (sign === MINUS ? -mantissa : mantissa) / (POWERS[-scale] ?? 1)
-    return true
+    return isBlank || Number.isFinite(this.value)
   }
 
   /** The byte after an exponent, or the letter's own place where no exponent follows it. */
@@ -132,7 +135,9 @@ class BodyScanner {
     return at > first ? at : letter
   }
 
+  /** The language's own reading; infinite for what is too long to be a force. */
   private slowly(start: number, end: number): number {
+    if (end - start > LONGEST_NUMBER) return Infinity
     return Number(String.fromCharCode(...this.bytes.subarray(start, end)))
   }
 }
