@@ -3,7 +3,7 @@ type Course = (timeS: number) => number
 
 /** Step of the coarse grid: shorter than any feature of the synthetic forces. */
 const GRID_S = 0.0005
-const HALVINGS = 60
+const HALVINGS = 50
 
 /** Where `course` changes sign between `low` and `high`, which must lie on either side. */
 export function zeroBetween(course: Course, low: number, high: number): number {
@@ -36,8 +36,11 @@ function reversed(timeS: number | null): number | null {
 
 /** The greatest value between two instants and where it is. */
 export function greatest(course: Course, from: number, to: number): { timeS: number; value: number } {
-  let best = from
-  for (let t = from; t <= to; t += GRID_S) if (course(t) > course(best)) best = t
+  let [best, height] = [from, -Infinity]
+  for (let t = from; t <= to; t += GRID_S) {
+    const value = course(t)
+    if (value > height) [best, height] = [t, value]
+  }
   let [low, high] = [Math.max(from, best - GRID_S), Math.min(to, best + GRID_S)]
   for (let i = 0; i < HALVINGS; i++) {
     const [a, b] = [low + (high - low) / 3, high - (high - low) / 3]

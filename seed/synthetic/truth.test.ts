@@ -2,7 +2,7 @@ import { describe, expect, it } from 'vitest'
 import { makeJump } from './jump.ts'
 import type { JumpOptions, LandingShape, PushShape } from './options.ts'
 import { integral } from './search.ts'
-import { truthOf } from './truth.ts'
+import { footTruthOf, truthOf } from './truth.ts'
 
 /**
  * A jump whose figures were worked out apart from this code, by closed form and by quadrature: 80 kg at standard
@@ -149,8 +149,9 @@ describe('options of the landing', () => {
 
   it('split the force between the feet phase by phase', () => {
     const shares = { stance: 0.5, unweighting: 0.48, braking: 0.45, propulsion: 0.47, landing: 0.6 }
-    const { left, right, metrics } = truthOf(makeJump({ shares }))
-    const peak = metrics.landingPeakForce ?? NaN
+    const jump = makeJump({ shares })
+    const [left, right] = [footTruthOf(jump, 'left'), footTruthOf(jump, 'right')]
+    const peak = truthOf(jump).metrics.landingPeakForce ?? NaN
     expect(left.landingPeakForce).toBeCloseTo(0.6 * peak, 6)
     expect(right.landingPeakForce).toBeCloseTo(0.4 * peak, 6)
     expect((left.propulsionImpulse ?? 0) / (right.propulsionImpulse ?? 1)).toBeCloseTo(0.47 / 0.53, 1)

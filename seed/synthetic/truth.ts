@@ -7,9 +7,6 @@ import type { TrueEvents } from './true-events.ts'
 export interface Truth {
   events: TrueEvents
   metrics: Record<string, number>
-  /** Figures of each foot by metric key. */
-  left: Record<string, number>
-  right: Record<string, number>
   ledger: { phase: string; startS: number; endS: number; netImpulse: number }[]
 }
 
@@ -99,7 +96,12 @@ function landingFigures({ motion, force, options }: Jump, events: TrueEvents): F
   }
 }
 
-function footFigures(jump: Jump, events: TrueEvents, foot: 'left' | 'right'): Figures {
+/** A foot's own figures by metric key, over the phases of both feet together. */
+export function footTruthOf(
+  jump: Jump,
+  foot: 'left' | 'right',
+  events: TrueEvents = trueEvents(jump),
+): Figures {
   const share = (timeS: number): number =>
     foot === 'left' ? jump.leftShare(timeS) : 1 - jump.leftShare(timeS)
   const force = (timeS: number): number => jump.force(timeS) * share(timeS)
@@ -149,8 +151,6 @@ export function truthOf(jump: Jump): Truth {
       ...pushFigures(jump, events),
       ...(landed ? landingFigures(jump, events) : {}),
     },
-    left: footFigures(jump, events, 'left'),
-    right: footFigures(jump, events, 'right'),
     ledger: ledgerOf(jump, events),
   }
 }
