@@ -3,6 +3,7 @@ import { createApp } from './app.ts'
 import { loadConfig } from './config/config.ts'
 import { createDatabase } from './db/database.ts'
 import type { Deps } from './deps.ts'
+import { removeExpiredTries } from './http/rate-limits.ts'
 import { createLog } from './integrations/log.ts'
 import { stopOnSignal } from './integrations/stop-on-signal.ts'
 
@@ -10,6 +11,7 @@ const config = loadConfig('web')
 const log = createLog(config.logLevel)
 const db = createDatabase(config, (error) => log.warn({ err: error }, 'an idle database connection broke'))
 const deps: Deps = { config, db, log, clock: () => new Date() }
+removeExpiredTries(db.pool)
 
 const server = createServer(await createApp(deps))
 server.once('error', (error) => {

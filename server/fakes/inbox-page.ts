@@ -1,5 +1,5 @@
 import { createServer, type Server } from 'node:http'
-import type { CaughtMail } from './mail-catcher.ts'
+import type { CaughtMail } from './caught-mail.ts'
 
 /** A page that lists the caught mails, newest first, with their links; `/mails.json` for programs. */
 export function createInbox(mails: readonly CaughtMail[]): Server {

@@ -3,18 +3,8 @@ import type { Server } from 'node:http'
 import type { AddressInfo } from 'node:net'
 import { simpleParser } from 'mailparser'
 import { SMTPServer } from 'smtp-server'
+import type { CaughtMail } from './caught-mail.ts'
 import { createInbox } from './inbox-page.ts'
-
-/** A mail as it arrived. */
-export interface CaughtMail {
-  to: string
-  from: string
-  subject: string
-  text: string
-  html: string
-  messageId: string
-  receivedAt: Date
-}
 
 export interface MailCatcher {
   smtpUrl: string

@@ -1,6 +1,7 @@
 import { asc, isNull } from 'drizzle-orm'
 import { outbox } from '../../../server/db/schema/identity.ts'
-import { startMailCatcher, type CaughtMail, type MailCatcher } from '../../../server/fakes/mail-catcher.ts'
+import type { CaughtMail } from '../../../server/fakes/caught-mail.ts'
+import { startMailCatcher, type MailCatcher } from '../../../server/fakes/mail-catcher.ts'
 import { sendOutboxMail } from '../../../server/modules/mail/mail.jobs.ts'
 import type { Harness } from './harness.ts'
 

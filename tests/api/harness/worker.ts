@@ -1,4 +1,3 @@
-import { fileURLToPath } from 'node:url'
 import { allJobs } from '../../../server/jobs/all-jobs.ts'
 import { runJobs, type RunOptions } from '../../../server/jobs/run-jobs.ts'
 import { createThreads, type ThreadLimits } from '../../../server/jobs/threads/threads.ts'
@@ -9,11 +8,9 @@ export interface WorkerOptions {
   threads?: Partial<ThreadLimits>
 }
 
-const filename = fileURLToPath(new URL('./thread.mjs', import.meta.url))
-
 /** The worker as it runs, inside the test: all jobs, in the worker's role. */
 export async function startWorker({ workerDeps }: Harness, options: WorkerOptions = {}) {
-  const threads = createThreads({ threads: 1, filename, ...options.threads })
+  const threads = createThreads({ threads: 1, ...options.threads })
   const running = await runJobs({ ...workerDeps, threads }, allJobs, { idleMs: 25, ...options.run })
   return {
     counts: running.counts,
