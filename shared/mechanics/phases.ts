@@ -22,9 +22,9 @@ export function phasesOf(events: JumpEvents): PhaseSpan[] {
     spans.push({ phase, from: last, to })
     last = to
   }
-  if (minimumVelocity && zeroVelocity) {
+  if (minimumVelocity && zeroVelocity !== null) {
     add('unweighting', minimumVelocity.position)
-    add('braking', zeroVelocity.position)
+    add('braking', zeroVelocity)
   }
   add('propulsion', takeoff.position)
   if (!touchdown) return spans

@@ -249,7 +249,7 @@ export const settingDefinitions = {
     effect: 'A less steady stance is kept',
   },
   onsetVelocityCaution: {
-    value: 0.02,
+    value: 0.03,
     unit: 'm/s',
     source: own,
     effect: 'More movement before the jump passes',

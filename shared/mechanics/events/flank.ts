@@ -1,5 +1,5 @@
 import type { Settings } from '../settings.ts'
-import { weightedNoise, type Noise } from '../signal/noise.ts'
+import { estimateNoise, weightedNoise, type Noise } from '../signal/noise.ts'
 
 /** Which way force runs through the threshold: falling at takeoff, rising at touchdown. */
 export type FlankDirection = 'falling' | 'rising'
@@ -133,12 +133,63 @@ function solve3(m: Float64Array, g: number[]): number[] | null {
 }
 
 const window = new Float64Array(512)
+const residuals = new Float64Array(512)
+
+/** Where the samples of a flank lie in a record: u runs from the flight into the contact. */
+interface FlankWindow {
+  force: Float64Array
+  firstContact: number
+  step: 1 | -1
+  outside: number
+  longest: number
+}
+
+/** Fills the window with the samples around the edge, as far into the contact as `level` asks; `null` past the record. */
+function fillWindow(
+  { force, firstContact, step, outside, longest }: FlankWindow,
+  level: number,
+): number | null {
+  let inside = 0
+  for (; inside < longest; inside++) {
+    const i = firstContact + step * inside
+    if (i < 0 || i >= force.length) return null
+    if (inside >= fewestFlankSamples && force[i] > level) break
+  }
+  const count = inside + outside
+  for (let u = 0; u < count; u++) {
+    const i = firstContact + step * (u - outside)
+    window[u] = i >= 0 && i < force.length ? force[i] : 0
+  }
+  return count
+}
+
+/** Noise about the fitted flank: the plate's own, or what the fit leaves over where that is more (ringing, misfit). */
+function noiseAbout(flank: Flank, count: number, noise: Noise): Noise {
+  const rms = Math.sqrt(Math.max(0, flank.misfit) / Math.max(1, count - 3))
+  if (rms <= noise.sd) return noise
+  for (let u = 0; u < count; u++) {
+    const x = Math.max(0, u - flank.foot)
+    residuals[u] = window[u] - x * (flank.rise + flank.bend * x)
+  }
+  return { ...estimateNoise(residuals, 0, count), sd: rms }
+}
+
+/** The crossing by a straight line through the samples on both sides of the edge, good to about a sample. */
+function straightCrossing({ force, firstContact, step }: FlankWindow, target: number): Crossing {
+  const inside = force[firstContact]
+  const rise = inside - force[Math.max(0, Math.min(force.length - 1, firstContact - step))]
+  const back = rise > 0 ? Math.max(0, Math.min(1, (inside - target) / rise)) : 0
+  return { position: firstContact - step * back, positionU: 1, slope: step * Math.max(rise, 1e-3) }
+}
+
+/** Misfit beyond which the fit is made anew over a longer flank, so that ringing averages out. */
+const ringing = 1.5
 
 /**
  * Places the crossing of the event force between samples. `edge` is the first sample of the flight (falling) or of
  * the contact (rising) at the noise-adapted threshold. The model is what physics asks for: nothing at all in flight,
  * and from the foot of the flank on a force that rises with a slope and a bend; its foot, slope and bend are fitted
- * by least squares to the samples around. Force must be zeroed.
+ * by least squares to the samples around. Force must be zeroed. `null` where the flank leaves the record.
  */
 export function fitFlank(
   force: Float64Array,
@@ -148,31 +199,36 @@ export function fitFlank(
   dt: number,
   settings: Settings,
 ): Crossing | null {
-  const step = direction === 'falling' ? -1 : 1
-  const firstContact = direction === 'falling' ? edge - 1 : edge
-  const longest = Math.min(256, Math.max(fewestFlankSamples, Math.round(settings.flankLimitS / dt)))
-  const level = settings.eventForceN + settings.flankNoise * noise.sd
-  let inside = 0
-  for (; inside < longest; inside++) {
-    const i = firstContact + step * inside
-    if (i < 0 || i >= force.length) return null
-    if (inside >= fewestFlankSamples && force[i] > level) break
+  const place: FlankWindow = {
+    force,
+    firstContact: direction === 'falling' ? edge - 1 : edge,
+    step: direction === 'falling' ? -1 : 1,
+    outside: Math.max(8, Math.min(40, Math.round(0.012 / dt))),
+    longest: Math.min(256, Math.max(fewestFlankSamples, Math.round(settings.flankLimitS / dt))),
   }
-  const outside = Math.max(8, Math.min(40, Math.round(0.012 / dt)))
-  const count = inside + outside
-  for (let u = 0; u < count; u++) {
-    const i = firstContact + step * (u - outside)
-    window[u] = i >= 0 && i < force.length ? force[i] : 0
+  const { outside, step } = place
+  const target = settings.eventForceN
+  const fit = (sd: number) => {
+    const count = fillWindow(place, target + settings.flankNoise * sd)
+    if (count === null) return null
+    const earliest = outside - Math.min(outside, 0.01 / dt + 2)
+    return { count, flank: searchFoot(window, count, earliest, outside + 2) }
   }
-  const flank = searchFoot(window, count, outside - Math.min(outside, 0.01 / dt + 2), outside + 2)
-  const distance = reach(flank, settings.eventForceN)
+  let fitted = fit(noise.sd)
+  if (!fitted) return null
+  let about = noiseAbout(fitted.flank, fitted.count, noise)
+  if (about.sd > ringing * noise.sd) {
+    fitted = fit(about.sd) ?? fitted
+    about = noiseAbout(fitted.flank, fitted.count, noise)
+  }
+  const { flank, count } = fitted
+  const distance = reach(flank, target)
   const slope = flank.rise + 2 * flank.bend * distance
-  if (!(slope > 0) || !Number.isFinite(distance)) return null
-  const rms = Math.sqrt(Math.max(0, flank.misfit) / Math.max(1, count - 3))
-  const noisier = rms > noise.sd ? { ...noise, sd: rms } : noise
+  if (!(slope > 0) || !Number.isFinite(distance)) return straightCrossing(place, target)
+  const positionU = crossingNoise(flank, count, distance, slope, about)
   return {
-    position: firstContact + step * (flank.foot + distance - outside),
-    positionU: crossingNoise(flank, count, distance, slope, noisier),
+    position: place.firstContact + step * (flank.foot + distance - outside),
+    positionU: Number.isFinite(positionU) ? positionU : 1,
     slope: step * slope,
   }
 }

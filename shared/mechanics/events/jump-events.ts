@@ -7,7 +7,13 @@ import { findPeak, type Peak } from '../signal/peak.ts'
 import { fitFlank, type Crossing } from './flank.ts'
 import { findOnset, type Onset } from './onset.ts'
 import { findStill } from './still.ts'
-import { extremeVelocity, placeWeightCrossing, risesThroughZero, type Placed } from './turning-points.ts'
+import {
+  extremeVelocity,
+  fallStops,
+  placeWeightCrossing,
+  risesThroughZero,
+  type Placed,
+} from './turning-points.ts'
 import type { Stretch } from './unloaded.ts'
 import { weigh, type Weighing } from './weighing.ts'
 import type { Zero } from './zero.ts'
@@ -18,7 +24,7 @@ export interface JumpEvents {
   takeoff: Crossing
   minimumForce: Peak | null
   minimumVelocity: Placed | null
-  zeroVelocity: Placed | null
+  zeroVelocity: number | null
   touchdown: Crossing | null
   landingPeak: Peak | null
   landingZeroVelocity: number | null
@@ -99,12 +105,12 @@ function placePushEvents(search: JumpSearch, motion: Motion, onset: number, take
   if (!(motion.velocity[lowest] < 0)) return { minimumForce: null, minimumVelocity: null, zeroVelocity: null }
   const moved = movedTo(search, 'minimumVelocity')
   const minimumVelocity =
-    moved === null ? placeWeightCrossing(motion, lowest, zero.total) : { position: moved, positionU: movedU }
+    moved === null ? placeWeightCrossing(motion, lowest, zero.total) : { position: moved, forceU: 0 }
   const zeroAt = movedTo(search, 'zeroVelocity') ?? risesThroughZero(motion, lowest, Math.floor(takeoff))
   return {
     minimumForce: findPeak(signal.total, onset, minimumVelocity.position, -1, zero.total, signal.dt),
     minimumVelocity,
-    zeroVelocity: zeroAt === null ? null : { position: zeroAt, positionU: 0 },
+    zeroVelocity: zeroAt,
   }
 }
 
@@ -112,11 +118,13 @@ function placeLandingEvents(search: JumpSearch, motion: Motion, touchdown: Cross
   const { signal, sums, zero, settings } = search
   if (!touchdown) return { landingPeak: null, landingZeroVelocity: null, still: null }
   const last = signal.length - 1
-  const landingZeroVelocity =
-    movedTo(search, 'landingZeroVelocity') ?? risesThroughZero(motion, touchdown.position, last)
-  const end = landingZeroVelocity ?? Math.min(last, touchdown.position + settings.landingSearchS / signal.dt)
   const still =
     movedTo(search, 'still') ?? findStill(sums, motion.systemWeight, touchdown.position, signal.dt, settings)
+  const stopsBefore = Math.floor(still ?? last)
+  const landingZeroVelocity =
+    movedTo(search, 'landingZeroVelocity') ??
+    fallStops(motion, touchdown.position, stopsBefore, settings.closingFail)
+  const end = landingZeroVelocity ?? Math.min(last, touchdown.position + settings.landingSearchS / signal.dt)
   return {
     landingPeak: findPeak(signal.total, touchdown.position, end, 1, zero.total, signal.dt),
     landingZeroVelocity,

@@ -1,11 +1,11 @@
-import { fitParabola, parabolaCrossing, parabolaNoiseAt, parabolaSlopeAt } from '../signal/local-parabola.ts'
+import { fitParabola, parabolaCrossing, parabolaNoiseAt } from '../signal/local-parabola.ts'
 import type { Motion } from '../signal/motion.ts'
 import type { Noise } from '../signal/noise.ts'
 
-/** An instant placed between samples, with its standard uncertainty from noise in samples. */
+/** Where force passes the weight, with the standard uncertainty of the force there from noise, N. */
 export interface Placed {
   position: number
-  positionU: number
+  forceU: number
 }
 
 /** Where velocity rises through zero in [from, to]; samples, by the acceleration between two of them. `null` if never. */
@@ -36,12 +36,51 @@ export function extremeVelocity({ velocity, first }: Motion, from: number, to: n
   return best
 }
 
-/** Places where force passes the weight around a sample of extreme velocity. */
+/** Spread of the fitted window in standard deviations of the noise: gentle crossings get longer windows. */
+const riseInSd = 6
+const shortestHalfS = 0.006
+const longestHalfS = 0.025
+
+/** Place where force passes the weight around a sample of extreme velocity, by a parabola fitted to the force there. */
 export function placeWeightCrossing(motion: Motion, sample: number, noise: Noise): Placed {
-  const half = Math.max(2, Math.round(0.006 / motion.dt))
-  const fit = fitParabola(motion.force, sample, half)
-  const position = parabolaCrossing(fit, motion.systemWeight, sample, 2 * half) ?? sample
-  const slope = Math.abs(parabolaSlopeAt(fit, position))
-  const positionU = Math.min(4 * half, parabolaNoiseAt(fit, position, noise) / slope)
-  return { position, positionU: Number.isFinite(positionU) ? positionU : 4 * half }
+  const { force, dt, systemWeight } = motion
+  const shortest = Math.max(2, Math.round(shortestHalfS / dt))
+  const slope = Math.abs(fitParabola(force, sample, shortest).slope)
+  const half = Math.max(shortest, Math.min((riseInSd * noise.sd) / slope || 0, longestHalfS / dt))
+  const fit = fitParabola(force, sample, half)
+  const position = parabolaCrossing(fit, systemWeight, sample, 2 * half) ?? sample
+  return { position, forceU: parabolaNoiseAt(fit, position, noise) }
+}
+
+/**
+ * Where velocity comes to zero after touchdown: where it rises through zero, or, where an error of the integral keeps
+ * it below, where it comes nearest. `null` if it stays beyond `tolerance` (m/s).
+ */
+export function fallStops(motion: Motion, touchdown: number, last: number, tolerance: number): number | null {
+  const crossing = risesThroughZero(motion, touchdown, last)
+  if (crossing !== null) return crossing
+  const nearest = extremeVelocity(motion, touchdown, last, 1)
+  return Math.abs(motion.velocity[nearest]) <= tolerance ? nearest : null
+}
+
+/**
+ * How far around a position (samples) a curve stays within ±`band` of zero, `curve` being its distance from where it
+ * is sought: what an error of that size in the curve can move the position by. The longer of the two sides, for a
+ * curve that bends; at most `longest`.
+ */
+export function staysWithin(
+  curve: (sample: number) => number,
+  position: number,
+  band: number,
+  longest: number,
+): number {
+  const centre = Math.round(position)
+  const side = (step: 1 | -1) => {
+    let k = 1
+    while (k < longest && Math.abs(curve(centre + step * k)) <= band) k++
+    const outside = Math.abs(curve(centre + step * k))
+    const inside = Math.abs(curve(centre + step * (k - 1)))
+    return outside > band && inside < band ? k - 1 + (band - inside) / (outside - inside) : k
+  }
+  return Math.max(side(1), side(-1))
 }

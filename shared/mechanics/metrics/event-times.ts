@@ -1,4 +1,6 @@
 import type { Crossing } from '../events/flank.ts'
+import { staysWithin } from '../events/turning-points.ts'
+import { meanOver } from '../signal/running-mean.ts'
 import type { Quantity } from '../uncertainty/budget.ts'
 import { at, velocityOf, type JumpModel } from './jump-model.ts'
 
@@ -31,24 +33,35 @@ function onsetTime({ budget, events, signal, weighingError }: JumpModel): Quanti
   ])
 }
 
+/** Longest time that an ill-defined instant is taken to be unsure by, s. */
+const unsureS = 0.5
+/** Half the running mean over which force is compared with the weight, s. */
+const smoothedS = 0.006
+
+/** Where force passes the weight: an error of force or weight moves it as far as the force stays within that error. */
 function weightCrossingTime(model: JumpModel): Quantity | null {
   const { budget, events, signal, motion, weighingError } = model
   if (!events.minimumVelocity) return null
-  const { position, positionU } = events.minimumVelocity
-  const i = Math.max(1, Math.min(signal.length - 2, Math.round(position)))
-  const slope = (motion.force[i + 1] - motion.force[i - 1]) / (2 * signal.dt)
-  return budget.linear(position * signal.dt, [
-    [1, budget.input(0, positionU * signal.dt)],
-    [slope > 0 ? 1 / slope : 0, weighingError],
-  ])
+  const { position, forceU } = events.minimumVelocity
+  const error = budget.pair(0, 1, budget.input(0, forceU), 1, weighingError)
+  const u = budget.combined(error).u
+  if (!(u > 0)) return budget.exact(position * signal.dt)
+  const half = Math.max(1, Math.round(smoothedS / signal.dt))
+  const distance = (i: number) => meanOver(model.sums, i - half, i + half + 1) - motion.systemWeight
+  const stays = staysWithin(distance, position, u, unsureS / signal.dt) * signal.dt
+  return budget.linear(position * signal.dt, [[stays / u, error]])
 }
 
-/** Where velocity is zero: an error of the velocity moves it by that over the acceleration. */
+/** Where velocity is zero: an error of the velocity moves it as far as the velocity stays within that error. */
 function zeroVelocityTime(model: JumpModel, position: number): Quantity {
   const { budget, motion, signal } = model
-  const instant = at(model, position)
-  const acceleration = ((instant.force - motion.systemWeight) * motion.gravity) / motion.systemWeight
-  return budget.linear(position * signal.dt, [[-1 / acceleration, velocityOf(model, instant)]])
+  if (!budget.on) return budget.exact(position * signal.dt)
+  const velocity = velocityOf(model, at(model, position))
+  const u = budget.combined(velocity).u
+  const { velocity: v } = at(model, position)
+  const distance = (i: number) => (motion.velocity[i] ?? Infinity) - v
+  const stays = staysWithin(distance, position, u, unsureS / signal.dt) * signal.dt
+  return budget.linear(position * signal.dt, [[u > 0 ? -stays / u : 0, velocity]])
 }
 
 /** Times of a trial's events. */
@@ -60,7 +73,7 @@ export function eventTimes(model: JumpModel): EventTimes {
     takeoff: crossingTime(model, events.takeoff),
     touchdown: touchdown && crossingTime(model, touchdown),
     minimumVelocity: weightCrossingTime(model),
-    zeroVelocity: zeroVelocity && zeroVelocityTime(model, zeroVelocity.position),
+    zeroVelocity: zeroVelocity === null ? null : zeroVelocityTime(model, zeroVelocity),
     landingPeak:
       landingPeak && budget.input(landingPeak.position * signal.dt, landingPeak.positionU * signal.dt),
     landingZeroVelocity: landingZeroVelocity === null ? null : zeroVelocityTime(model, landingZeroVelocity),

@@ -14,7 +14,7 @@ export function impulseFigures(model: JumpModel, takeoffVelocity: Quantity, into
   const net = budget.times(systemMass, takeoffVelocity)
   put(into, 'netImpulse', net)
   const downward = downwardVelocityOf(model)
-  if (!downward || !events.zeroVelocity)
+  if (!downward || events.zeroVelocity === null)
     return miss(into, ['unweightingImpulse', 'brakingImpulse', 'propulsionImpulse'], reasons.noDip)
   const unweighting = budget.times(systemMass, downward)
   put(into, 'unweightingImpulse', unweighting)

@@ -88,7 +88,7 @@ function boundariesOf(events: JumpEvents): number[] {
   return [
     onset.position,
     minimumVelocity?.position,
-    zeroVelocity?.position,
+    zeroVelocity,
     takeoff.position,
     touchdown?.position,
     landingZeroVelocity,

@@ -1,5 +1,5 @@
 import { forceKeys, type ForceKey } from '../catalogue/force.ts'
-import { fitParabola, parabolaAt, parabolaNoiseAt } from '../signal/local-parabola.ts'
+import { fitParabola, parabolaAt, parabolaNoiseAt, parabolaSlopeAt } from '../signal/local-parabola.ts'
 import { findPeak, type Peak } from '../signal/peak.ts'
 import type { Quantity } from '../uncertainty/budget.ts'
 import type { EventTimes } from './event-times.ts'
@@ -21,11 +21,14 @@ function greatest(model: JumpModel, from: number, to: number): Quantity {
   return peakForceOf(model, findPeak(motion.force, from, to, 1, zero.total, signal.dt))
 }
 
-/** Force at an instant within the movement, by a parabola over some milliseconds around it. */
-function smoothForceAt(model: JumpModel, position: number): Quantity {
-  const { motion, zero, signal } = model
+/** Force at an instant within the movement, by a parabola over some milliseconds; the instant itself is unsure. */
+function smoothForceAt(model: JumpModel, position: number, time: Quantity): Quantity {
+  const { budget, motion, zero, signal } = model
   const fit = fitParabola(motion.force, position, Math.max(2, Math.round(0.006 / signal.dt)))
-  return forceOf(model, parabolaAt(fit, position), position, parabolaNoiseAt(fit, position, zero.total))
+  const value = parabolaAt(fit, position)
+  const slope = parabolaSlopeAt(fit, position) / signal.dt
+  const read = forceOf(model, value, position, parabolaNoiseAt(fit, position, zero.total))
+  return budget.pair(value, 1, read, slope, budget.minus(time, budget.exact(time.value)))
 }
 
 /** Mean force over a phase: weight plus change of momentum over time. */
@@ -49,7 +52,7 @@ function allForces(
   if (
     !minimumForce ||
     !minimumVelocity ||
-    !zeroVelocity ||
+    zeroVelocity === null ||
     !downward ||
     !times.minimumVelocity ||
     !times.zeroVelocity
@@ -62,10 +65,10 @@ function allForces(
   return {
     peakForce,
     minimumForce: peakForceOf(model, minimumForce),
-    forceAtZeroVelocity: smoothForceAt(model, zeroVelocity.position),
-    peakBrakingForce: greatest(model, minimumVelocity.position, zeroVelocity.position),
+    forceAtZeroVelocity: smoothForceAt(model, zeroVelocity, times.zeroVelocity),
+    peakBrakingForce: greatest(model, minimumVelocity.position, zeroVelocity),
     meanBrakingForce: meanForce(model, momentumDown, brakingTime),
-    peakPropulsionForce: greatest(model, zeroVelocity.position, takeoff.position),
+    peakPropulsionForce: greatest(model, zeroVelocity, takeoff.position),
     meanPropulsionForce: meanForce(model, momentumUp, propulsionTime),
   }
 }

@@ -68,7 +68,7 @@ function ratesOfForce(model: JumpModel, brakingTime: Quantity): { braking: Quant
   const read = (position: number) => forceAt(filtered, position - first)
   const u = filteredNoise(model)
   const lowest = events.minimumVelocity?.position ?? 0
-  const deepest = events.zeroVelocity?.position ?? 0
+  const deepest = events.zeroVelocity ?? 0
   const rise = budget.minus(
     forceOf(model, read(deepest), deepest, u),
     forceOf(model, read(lowest), lowest, u),
@@ -95,7 +95,7 @@ function ratesOfForce(model: JumpModel, brakingTime: Quantity): { braking: Quant
 
 function peakVelocityOf(model: JumpModel): Quantity {
   const { motion, events, zero } = model
-  const from = events.zeroVelocity?.position ?? events.onset.position
+  const from = events.zeroVelocity ?? events.onset.position
   const fastest = extremeVelocity(motion, from, events.takeoff.position, 1)
   return velocityOf(model, at(model, placeWeightCrossing(motion, fastest, zero.total).position))
 }
@@ -121,7 +121,7 @@ export function pushFigures(
   put(into, 'peakVelocity', peakVelocityOf(model))
   const { minimumVelocity, zeroVelocity, takeoff } = events
   const downward = downwardVelocityOf(model)
-  if (!minimumVelocity || !zeroVelocity || !downward || !times.minimumVelocity || !times.zeroVelocity)
+  if (!minimumVelocity || zeroVelocity === null || !downward || !times.minimumVelocity || !times.zeroVelocity)
     return miss(into, dipKeys, reasons.noDip)
 
   const brakingTime = budget.minus(times.zeroVelocity, times.minimumVelocity)
@@ -131,7 +131,7 @@ export function pushFigures(
   put(into, 'propulsionTime', propulsionTime)
   put(into, 'peakDownwardVelocity', downward)
 
-  const deepest = at(model, zeroVelocity.position)
+  const deepest = at(model, zeroVelocity)
   const depth = displacementOf(model, deepest)
   const way = budget.minus(displacementOf(model, at(model, minimumVelocity.position)), depth)
   const force = forceOf(model, deepest.force, deepest.position, model.zero.total.sd / 2)
@@ -148,7 +148,7 @@ export function pushFigures(
   const work = budget.plus(kinetic, budget.times(systemWeight, rise))
   put(into, 'propulsionWork', work)
   putPower(model, into, 'meanPropulsionPower', budget.over(work, propulsionTime))
-  putPower(model, into, 'peakPower', extremePower(model, zeroVelocity.position, takeoff.position, 1))
-  const braking = extremePower(model, minimumVelocity.position, zeroVelocity.position, -1)
+  putPower(model, into, 'peakPower', extremePower(model, zeroVelocity, takeoff.position, 1))
+  const braking = extremePower(model, minimumVelocity.position, zeroVelocity, -1)
   putPower(model, into, 'peakBrakingPower', braking)
 }

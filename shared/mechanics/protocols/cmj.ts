@@ -45,7 +45,7 @@ function eventsOut(events: JumpEvents, signal: Signal): TrialAnalysis['events'] 
     onset: events.onset.position,
     minimumForce: events.minimumForce?.position,
     minimumVelocity: events.minimumVelocity?.position,
-    zeroVelocity: events.zeroVelocity?.position,
+    zeroVelocity: events.zeroVelocity,
     takeoff: events.takeoff.position,
     touchdown: events.touchdown?.position,
     landingPeak: events.landingPeak?.position,
