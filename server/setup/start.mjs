@@ -10,7 +10,11 @@ import { isStopping, stopAll, stopWhenAsked } from './stopping.mjs'
 /** `npm start`: from a fresh clone to the running product. `--dev` does the same and reloads what changes. */
 async function start() {
   checkNode()
+  const reload = process.argv.includes('--dev')
   const settings = readSettings(process.env)
+  if (reload && settings.production) {
+    throw new SetUpProblem('npm run dev is for development: unset NODE_ENV, or use npm start.')
+  }
   const { holder } = await holdLock(localFolder(), 'start')
   if (holder) throw new SetUpProblem(`Underfoot already runs from this folder, as process ${holder}.`)
   stopWhenAsked({ exitCode: 0 })
@@ -19,7 +23,7 @@ async function start() {
   await ensurePackages()
   // Only now are the packages there that the rest is built on.
   const { startProduct } = await import('./product.mjs')
-  await startProduct(settings, { reload: process.argv.includes('--dev') })
+  await startProduct(settings, { reload })
 }
 
 start().catch(async (error) => {
