@@ -16,6 +16,13 @@ describe('sparkline(preview, width, height)', () => {
     expect(sparkline(preview, 100, 36)?.standingY).toBe(18)
   })
 
+  it('shows the movement and little of the standing before and after it', () => {
+    const still = new Array<number>(50).fill(500)
+    const jump = [300, 1000, 0, 0, 1500]
+    const path = sparkline([...still, ...jump, ...still], 100, 36)?.path
+    expect(path?.split('L')).toHaveLength(jump.length + 2 * Math.ceil(0.06 * 105))
+  })
+
   it('draws a record of nothing but zeros along the foot', () => {
     expect(sparkline([0, 0], 10, 36)?.path).toBe('M0,35L10,35')
   })

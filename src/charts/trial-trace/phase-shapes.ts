@@ -1,10 +1,11 @@
 import { area } from 'd3'
+import type { Phase } from '../../../shared/mechanics/types.ts'
 import { decimate } from './decimate.ts'
 import { valueAt } from './value-at.ts'
 
 /** One stretch of the Impulse ledger on the trace. */
 export interface TracePhase {
-  phase: string
+  phase: Phase
   startS: number
   endS: number
   /** N·s */
@@ -12,7 +13,7 @@ export interface TracePhase {
 }
 
 export interface PhaseShape {
-  phase: string
+  phase: Phase
   netImpulse: number
   /** Closed paths between the force and the weight: above it the push lifts or slows, below it lets sink. */
   above: string

@@ -1,9 +1,10 @@
 import { useId } from 'react'
+import type { Phase } from '../../../shared/mechanics/types.ts'
 import { formatSigned } from '../../lib/format-signed.ts'
 import type { PhaseShape } from './phase-shapes.ts'
 
 /** Phases that stop a fall stand darker than those beside them, so that neighbours can be told apart. */
-const dark = new Set(['braking', 'landing'])
+const dark = new Set<Phase>(['braking', 'landing'])
 
 /** The phases' areas between force and weight: solid where the push lifts or slows, hatched where it lets sink. */
 export function TracePhases({ shapes }: { shapes: PhaseShape[] }) {

@@ -1,7 +1,7 @@
 import { describe, expect, it } from 'vitest'
 import { jumpView } from './trace-view.ts'
 
-const phase = (startS: number, endS: number) => ({ phase: 'flight', startS, endS, netImpulse: 0 })
+const phase = (startS: number, endS: number) => ({ phase: 'flight' as const, startS, endS, netImpulse: 0 })
 
 describe('jumpView(phases, duration)', () => {
   it('shows the jump with half a second on either side', () => {

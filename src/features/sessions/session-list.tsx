@@ -30,7 +30,7 @@ export function SessionList() {
         />
         <SelectField
           label="Squad"
-          className="w-full sm:w-56"
+          className="sm:w-56"
           value={state.squad}
           onChange={(event) => change({ squad: event.target.value, page: '1' })}
         >

@@ -17,7 +17,7 @@ interface Props {
   acts: CellActs
 }
 
-/** Athletes down, their trials across, the means of what is included at the right. */
+/** Athletes down, the means of what is included beside them, then their trials across. */
 export function SheetTable({ caption, rows, columns, acts }: Props) {
   const cursor = useSheetCursor(rows.map((row) => row.trials.length))
   const numbers = Array.from({ length: columns }, (_, i) => i + 1)
@@ -36,17 +36,17 @@ export function SheetTable({ caption, rows, columns, acts }: Props) {
             <th scope="col" className="figure">
               {metricHead(massMetric)}
             </th>
-            {numbers.map((n) => (
-              <th key={n} scope="col">
-                Trial {n}
-              </th>
-            ))}
             <th scope="col" className="figure">
               Mean of {metricHead(cellMetric).toLowerCase()}
             </th>
             <th scope="col" className="figure">
               Mean of {metricHead(landingMetric).replace(/^L/, 'l')}
             </th>
+            {numbers.map((n) => (
+              <th key={n} scope="col">
+                Trial {n}
+              </th>
+            ))}
           </tr>
         </thead>
         <tbody onKeyDown={cursor.onKeyDown}>
@@ -80,6 +80,8 @@ function AthleteRow({ row: { athlete, trials }, index, columns, cursor, acts }: 
     <tr>
       <th scope="row">{athlete.name}</th>
       <MeanCell metricKey={massMetric} mean={athlete.means[massMetric]} plain />
+      <MeanCell metricKey={cellMetric} mean={athlete.means[cellMetric]} />
+      <MeanCell metricKey={landingMetric} mean={athlete.means[landingMetric]} plain />
       {trials.map((trial, i) => (
         <TrialCell
           key={trial.id}
@@ -95,8 +97,6 @@ function AthleteRow({ row: { athlete, trials }, index, columns, cursor, acts }: 
           {trials.length === 0 ? 'no trial yet' : ''}
         </td>
       )}
-      <MeanCell metricKey={cellMetric} mean={athlete.means[cellMetric]} />
-      <MeanCell metricKey={landingMetric} mean={athlete.means[landingMetric]} plain />
     </tr>
   )
 }

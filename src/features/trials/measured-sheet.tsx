@@ -1,24 +1,34 @@
+import { useState } from 'react'
 import type { Analysis } from '../../../shared/contracts/trials.ts'
 import { catalogue, isMetricKey } from '../../../shared/mechanics/catalogue.ts'
+import type { MetricGroup } from '../../../shared/mechanics/types.ts'
 import { CautionLine } from '../../components/caution-line.tsx'
 import { Sheet } from '../../components/sheet.tsx'
 import { FigureText } from '../results/figure-text.tsx'
 import { measuredGroups, type MeasuredFigure } from './measured-groups.ts'
 
+/** A phone begins with these; the other groups are a tap away. At the desk all stand open. */
+const openOnPhone = new Set<MetricGroup>(['jump', 'landing'])
+
 /** Every figure of the trial, by group; what a failed check takes away is struck, what is missing says why. */
 export function MeasuredSheet({ analysis }: { analysis: Analysis }) {
+  const [atDesk] = useState(
+    () => typeof matchMedia === 'undefined' || matchMedia('(min-width: 40rem)').matches,
+  )
   return (
     <Sheet title="Measured" titleAside="± is how sure the plate is of this one trial, for about 95 %">
       <div className="gap-x-8 sm:columns-2 xl:columns-3">
         {measuredGroups(analysis).map(({ group, words, figures }) => (
-          <div key={group} className="pb-4">
-            <h3 className="break-after-avoid border-b border-ink text-small text-ink-2">{words}</h3>
+          <details key={group} className="pb-4" open={atDesk || openOnPhone.has(group)}>
+            <summary className="cursor-pointer break-after-avoid border-b border-ink text-small text-ink-2">
+              <h3 className="inline">{words}</h3>
+            </summary>
             <dl>
               {figures.map((measured) => (
                 <MeasuredRow key={measured.metric.key} {...measured} />
               ))}
             </dl>
-          </div>
+          </details>
         ))}
       </div>
       <Missing missing={analysis.missing} />
@@ -29,21 +39,19 @@ export function MeasuredSheet({ analysis }: { analysis: Analysis }) {
 
 function MeasuredRow({ metric, figure, withheldBecause }: MeasuredFigure) {
   return (
-    <div className="break-inside-avoid border-b border-rule-2 py-1">
-      <div className="flex items-baseline justify-between gap-4">
-        <dt className={withheldBecause ? 'text-ink-2' : undefined}>{metric.name}</dt>
-        <dd>
-          {withheldBecause ? (
-            <s className="text-ink-2">
-              <span className="sr-only">withheld: </span>
-              <FigureText metricKey={metric.key} figure={figure} unit />
-            </s>
-          ) : (
+    <div className="grid break-inside-avoid grid-cols-[1fr_auto] items-baseline gap-x-4 border-b border-rule-2 py-1">
+      <dt className={withheldBecause ? 'text-ink-2' : undefined}>{metric.name}</dt>
+      <dd>
+        {withheldBecause ? (
+          <s className="text-ink-2">
+            <span className="sr-only">withheld: </span>
             <FigureText metricKey={metric.key} figure={figure} unit />
-          )}
-        </dd>
-      </div>
-      {withheldBecause && <dd className="text-small text-ink-2">{withheldBecause}</dd>}
+          </s>
+        ) : (
+          <FigureText metricKey={metric.key} figure={figure} unit />
+        )}
+      </dd>
+      {withheldBecause && <dd className="col-span-full text-small text-ink-2">{withheldBecause}</dd>}
     </div>
   )
 }

@@ -54,14 +54,15 @@ function WhatItMeans({ analysis }: { analysis: Analysis }) {
     <Sheet title="What was measured">
       <dl>
         {keys.map((key) => (
-          <div key={key} className="border-b border-rule-2 py-2">
-            <div className="flex items-baseline justify-between gap-4">
-              <dt className="font-semibold">{catalogue[key].name}</dt>
-              <dd>
-                <FigureText metricKey={key} figure={analysis.metrics[key]!} unit />
-              </dd>
-            </div>
-            <dd className="text-ink-2">{catalogue[key].athleteSentence}</dd>
+          <div
+            key={key}
+            className="grid grid-cols-[1fr_auto] items-baseline gap-x-4 border-b border-rule-2 py-2"
+          >
+            <dt className="font-semibold">{catalogue[key].name}</dt>
+            <dd>
+              <FigureText metricKey={key} figure={analysis.metrics[key]!} unit />
+            </dd>
+            <dd className="col-span-full text-ink-2">{catalogue[key].athleteSentence}</dd>
           </div>
         ))}
       </dl>

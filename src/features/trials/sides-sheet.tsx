@@ -5,6 +5,7 @@ import { Sheet } from '../../components/sheet.tsx'
 import { formatUncertainty } from '../../lib/format-figure.ts'
 import { formatSigned } from '../../lib/format-signed.ts'
 import { FigureText } from '../results/figure-text.tsx'
+import './sides-sheet.css'
 
 type Sides = NonNullable<Analysis['sides']>
 
@@ -18,7 +19,7 @@ export function SidesSheet({ sides, checks }: { sides: Sides; checks: Analysis['
   return (
     <Sheet title="Left and right" titleAside="difference: right less left, of their mean" flush>
       <div className="overflow-x-auto">
-        <table className="data-table">
+        <table className="data-table sides-table">
           <caption className="sr-only">Figures of the left and the right foot</caption>
           <thead>
             <tr>

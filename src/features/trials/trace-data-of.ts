@@ -3,7 +3,7 @@ import type { Signal } from '../../../shared/mechanics/signal/condition.ts'
 import type { EventName } from '../../../shared/mechanics/types.ts'
 import type { Samples } from '../../api/trials/read-samples.ts'
 import type { TraceChannel, TraceData, TraceEvent } from '../../charts/trial-trace/trace-data.ts'
-import { eventWords, phaseWords } from './event-words.ts'
+import { eventWords } from './event-words.ts'
 import { momentumOf, zeroedSignal } from './zeroed-signal.ts'
 
 /** What the trace of a trial is drawn from; null where the recording holds no force to draw. */
@@ -18,7 +18,7 @@ export function traceDataOf(trial: Trial, samples: Samples): TraceData | null {
     feet: feetOf(signal),
     weight: weightOf(trial),
     momentum: analysis && momentumOf(signal, analysis),
-    phases: (analysis?.ledger?.entries ?? []).map((entry) => ({ ...entry, phase: phaseWords[entry.phase] })),
+    phases: analysis?.ledger?.entries ?? [],
     events: eventsOf(trial),
   }
 }

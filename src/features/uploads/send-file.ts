@@ -2,9 +2,15 @@ import type { Upload } from '../../../shared/contracts/uploads.ts'
 import { isApiError } from '../../api/api-error.ts'
 import { chunkOf, chunkSize, stillToSend } from './chunk-plan.ts'
 
-/** The operations that a file goes up by. */
+export interface Announcement {
+  fileName: string
+  sizeBytes: number
+  idempotencyKey: string
+}
+
+/** The operations that a file goes up by. `start` takes its own place among requests. */
 export interface Transport {
-  start: (file: { fileName: string; sizeBytes: number; idempotencyKey: string }) => Promise<Upload>
+  start: (file: Announcement) => Promise<Upload>
   send: (uploadId: string, n: number, bytes: Blob) => Promise<void>
   finish: (uploadId: string, idempotencyKey: string) => Promise<Upload>
   newKey: () => string
@@ -35,7 +41,7 @@ export async function sendFile(
   slot: Slot,
   onProgress: () => void,
 ): Promise<void> {
-  const uploadId = way.uploadId ?? (await announce(way, transport, slot))
+  const uploadId = way.uploadId ?? (await announce(way, transport))
   onProgress()
   try {
     await sendPieces(way, uploadId, transport, slot, onProgress)
@@ -53,9 +59,9 @@ export async function sendFile(
 
 type Slot = <T>(work: () => Promise<T>) => Promise<T>
 
-async function announce(way: FileOnItsWay, transport: Transport, slot: Slot): Promise<string> {
+async function announce(way: FileOnItsWay, transport: Transport): Promise<string> {
   const start = { fileName: way.file.name, sizeBytes: way.file.size, idempotencyKey: way.startKey }
-  const upload = await slot(() => patiently(() => transport.start(start), transport))
+  const upload = await patiently(() => transport.start(start), transport)
   way.uploadId = upload.id
   way.sameFile = true
   return upload.id

@@ -90,16 +90,37 @@ describe('createUploadQueue(transport)', () => {
     const transport = takingTransport()
     let under = 0
     let most = 0
-    transport.send.mockImplementation(async () => {
+    const counted = async () => {
       most = Math.max(most, ++under)
       await Promise.resolve()
       under--
+    }
+    transport.send.mockImplementation(counted)
+    transport.start.mockImplementation(async ({ fileName }) => {
+      await counted()
+      return upload(fileName)
     })
     const queue = createUploadQueue(transport)
     queue.add(Array.from({ length: 12 }, (_, i) => file(`${i}.csv`, 3 * MIB)))
     await settled(queue)
     expect(transport.send).toHaveBeenCalledTimes(36)
     expect(most).toBe(4)
+  })
+
+  it('announces the files in the order of the drop', async () => {
+    const transport = takingTransport()
+    const ends: (() => void)[] = []
+    transport.start.mockImplementation(
+      ({ fileName }) => new Promise((resolve) => ends.push(() => resolve(upload(fileName)))),
+    )
+    const queue = createUploadQueue(transport)
+    queue.add(['1.csv', '2.csv', '3.csv'].map((name) => file(name, 10)))
+    for (let n = 0; n < 3; n++) {
+      await vi.waitFor(() => expect(ends).toHaveLength(n + 1))
+      ends[n]!()
+    }
+    await settled(queue)
+    expect(transport.start.mock.calls.map(([{ fileName }]) => fileName)).toEqual(['1.csv', '2.csv', '3.csv'])
   })
 
   it('keeps one file’s failure to itself', async () => {

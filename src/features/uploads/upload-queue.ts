@@ -1,6 +1,6 @@
 import type { Upload } from '../../../shared/contracts/uploads.ts'
 import { refusalOfSize } from './file-size-sentence.ts'
-import { receivedBytes, sendFile, type FileOnItsWay, type Transport } from './send-file.ts'
+import { receivedBytes, sendFile, type Announcement, type FileOnItsWay, type Transport } from './send-file.ts'
 import { slots } from './slots.ts'
 
 /** `refused`: not sent at all. `queued`: not announced yet. `failed`: may be tried again. */
@@ -41,7 +41,13 @@ export function createUploadQueue(transport: Transport): UploadQueue {
   const entries = new Map<string, Entry>()
   const listeners = new Set<() => void>()
   const requestSlot = slots(atOnce)
+  const announceSlot = slots(1)
   const fileSlot = slots(atOnce)
+  /** One announcement at a time, so that the server has the files in the order of the drop. */
+  const inOrder = {
+    ...transport,
+    start: (file: Announcement) => announceSlot(() => requestSlot(() => transport.start(file))),
+  }
   let snapshot: readonly QueuedFile[] = []
 
   const publish = () => {
@@ -61,7 +67,7 @@ export function createUploadQueue(transport: Transport): UploadQueue {
     update(key, { stage: 'sending', error: null })
     const onProgress = () => update(key, { sentBytes: receivedBytes(way), uploadId: way.uploadId })
     try {
-      await sendFile(way, transport, requestSlot, onProgress)
+      await sendFile(way, inOrder, requestSlot, onProgress)
       update(key, { stage: 'sent', sentBytes: way.file.size })
     } catch (error) {
       update(key, { stage: 'failed', error, uploadId: way.uploadId })
