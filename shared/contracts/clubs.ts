@@ -6,11 +6,12 @@ import { Protocol } from './tests.ts'
 
 const { min: lowest, max: highest } = limits.landingPeakBodyWeights
 const limitSentence = `Give a limit of ${lowest} to ${highest} body weights, or leave it empty`
-const Limit = z.number(limitSentence).min(lowest, limitSentence).max(highest, limitSentence)
+/** Peak landing force, body weights. */
+export const LandingPeakLimit = z.number(limitSentence).min(lowest, limitSentence).max(highest, limitSentence)
 
 export const ClubSettings = z.strictObject({
   /** Peak landing force in body weights by protocol; none is set until the club sets one. */
-  landingPeakLimits: z.partialRecord(Protocol, Limit),
+  landingPeakLimits: z.partialRecord(Protocol, LandingPeakLimit),
   version: Version,
 })
 export type ClubSettings = z.infer<typeof ClubSettings>

@@ -22,8 +22,8 @@ export function TopBar({ me }: { me: Me }) {
       <div className="mx-auto flex max-w-[90rem] flex-wrap items-end gap-x-7 px-4 md:px-8">
         <Wordmark clubName={me.club.name} />
         {items.length > 1 && (
-          <nav aria-label="Pages" className="order-last w-full overflow-x-auto md:order-none md:w-auto">
-            <ul className="flex gap-x-6">
+          <nav aria-label="Pages" className="order-last w-full md:order-none md:w-auto">
+            <ul className="flex flex-wrap gap-x-6">
               {items.map((item) => (
                 <li key={item.path}>
                   <NavLink to={item.path} className={navLinkClass}>

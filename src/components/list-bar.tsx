@@ -6,7 +6,7 @@ import type { Column } from './table.tsx'
 /** The controls over a list: search, filters, and how many are shown. */
 export function ListBar({ children, count }: { children: ReactNode; count: string }) {
   return (
-    <div className="no-print flex flex-wrap items-end gap-x-4 gap-y-3 pb-4">
+    <div className="no-print grid grid-cols-2 items-end gap-x-4 gap-y-3 pb-4 *:first:col-span-2 sm:flex sm:flex-wrap">
       {children}
       <p role="status" className="ms-auto text-ink-2">
         {count}
@@ -27,7 +27,7 @@ export function SortField<Row>({ columns, value, onChange }: SortFieldProps<Row>
   return (
     <SelectField
       label="Sort by"
-      className="w-full sm:hidden"
+      className="sm:hidden"
       value={value}
       onChange={(event) => onChange(event.target.value)}
     >

@@ -11,7 +11,7 @@ export function Loading({ what }: { what: string }) {
     return () => clearTimeout(timer)
   }, [])
   return (
-    <p role="status" className="px-3 py-6 text-ink-2">
+    <p role="status" className="py-6 text-ink-2">
       <span className={late ? undefined : 'invisible'}>Loading {what}…</span>
     </p>
   )

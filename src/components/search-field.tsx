@@ -18,7 +18,7 @@ export function SearchField({ label, value, onChange }: SearchFieldProps) {
     if (element && element !== document.activeElement) element.value = value
   }, [value])
   return (
-    <Field label={label} className="w-full sm:w-64">
+    <Field label={label} className="sm:w-64">
       {(control) => (
         <input
           {...control}

@@ -53,7 +53,7 @@ export const errorWording: Record<AnyErrorCode, ErrorWording> = {
   },
   'token-invalid': {
     title: 'This link no longer works',
-    advice: 'It was used already, was withdrawn or has run out. Ask for a new one.',
+    advice: 'Ask for a new one.',
   },
   'email-taken': {
     title: 'Somebody of the club has this e-mail address already',

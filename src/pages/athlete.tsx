@@ -21,14 +21,17 @@ export function AthletePage() {
   const profile = useAthlete(athleteId)
   const squads = useSquads()
   return (
-    <QueryState query={profile} what="the athlete">
-      {({ athlete, results }) => (
-        <>
-          <AthleteHead athlete={athlete} squads={squads.data} />
-          <AthleteResults results={results} />
-        </>
-      )}
-    </QueryState>
+    <>
+      {profile.isError && !profile.data && <PageHead title="Athlete" />}
+      <QueryState query={profile} what="the athlete">
+        {({ athlete, results }) => (
+          <>
+            <AthleteHead athlete={athlete} squads={squads.data} />
+            <AthleteResults results={results} />
+          </>
+        )}
+      </QueryState>
+    </>
   )
 }
 

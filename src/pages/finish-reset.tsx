@@ -30,7 +30,7 @@ export function FinishResetPage() {
           </QueryState>
         )}
         {isApiError(reset.error, 'token-invalid') && (
-          <p className="px-3 pb-3">
+          <p className="pb-3">
             <Link to={paths.reset}>Ask for a new link</Link>
           </p>
         )}

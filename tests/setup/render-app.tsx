@@ -16,7 +16,7 @@ export function renderApp(path: string, me: Me | null) {
   const { session, handlers } = meHandlers(me)
   server.use(...handlers)
   const router = createMemoryRouter(routes, { initialEntries: [path] })
-  const user = userEvent.setup()
+  const user = userEvent.setup({ delay: null })
   const view = render(
     <StrictMode>
       <Providers>

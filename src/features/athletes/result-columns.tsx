@@ -14,7 +14,11 @@ export function resultColumns(): Column<ResultPoint>[] {
     {
       key: 'date',
       head: 'Date',
-      cell: ({ date, sessionId }) => <Link to={pathOf.session(sessionId)}>{formatDateShort(date)}</Link>,
+      cell: ({ date, sessionId }) => (
+        <Link to={pathOf.session(sessionId)} className="whitespace-nowrap">
+          {formatDateShort(date)}
+        </Link>
+      ),
       compare: (a, b) => compareText(a.date, b.date),
     },
     { key: 'session', head: 'Session', cell: ({ sessionTitle }) => sessionTitle },

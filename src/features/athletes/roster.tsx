@@ -47,7 +47,7 @@ export function Roster({ athletes, squads }: { athletes: Athlete[]; squads: Squa
         <SearchField label="Search by name" value={list.search} onChange={(search) => setList({ search })} />
         <SelectField
           label="Squad"
-          className="w-full sm:w-44"
+          className="sm:w-44"
           value={list.squad}
           onChange={(event) => setList({ squad: event.target.value })}
         >
@@ -60,7 +60,7 @@ export function Roster({ athletes, squads }: { athletes: Athlete[]; squads: Squa
         </SelectField>
         <SelectField
           label="Show"
-          className="w-full sm:w-36"
+          className="sm:w-36"
           value={list.show}
           onChange={(event) => setList({ show: event.target.value })}
         >

@@ -1,7 +1,7 @@
 import { zodResolver } from '@hookform/resolvers/zod'
 import { useForm } from 'react-hook-form'
 import { z } from 'zod'
-import { ClubSettings } from '../../../shared/contracts/clubs.ts'
+import { ClubSettings, LandingPeakLimit } from '../../../shared/contracts/clubs.ts'
 import { Protocol, protocolNames } from '../../../shared/contracts/tests.ts'
 import { useChangeClubSettings } from '../../api/clubs/change-club-settings.ts'
 import { useAnnounce } from '../../components/announcer.tsx'
@@ -18,7 +18,7 @@ import { useFormError } from '../../lib/use-form-error.ts'
 import { useStaleRow } from '../../lib/use-stale-row.ts'
 import { settingsStaleFields } from './settings-stale-fields.ts'
 
-const FormSchema = z.strictObject({ landingPeakLimits: ClubSettings.shape.landingPeakLimits })
+const FormSchema = z.strictObject({ landingPeakLimits: z.record(Protocol, LandingPeakLimit.nullable()) })
 type FormValues = z.infer<typeof FormSchema>
 
 /** The club's own limits, one a protocol; an empty field is no limit. */
@@ -29,16 +29,16 @@ export function SettingsForm({ settings }: { settings: ClubSettings }) {
   const { opened, newer, version, catchStale, takeTheirs, startFrom } = useStaleRow(settings, ClubSettings)
   const form = useForm<FormValues>({
     resolver: zodResolver(FormSchema),
-    defaultValues: { landingPeakLimits: opened.landingPeakLimits },
+    defaultValues: valuesOf(opened),
   })
   const { errors, isDirty } = form.formState
 
   const save = form.handleSubmit(async (values) => {
     setRefusal(null)
     try {
-      const saved = await change.mutateAsync({ body: { ...values, version } })
+      const saved = await change.mutateAsync({ body: { landingPeakLimits: limitsOf(values), version } })
       startFrom(saved)
-      form.reset({ landingPeakLimits: saved.landingPeakLimits })
+      form.reset(valuesOf(saved))
       announce({ text: 'The limits are saved. The Landing watch lists by them from now on.' })
     } catch (error) {
       try {
@@ -62,7 +62,7 @@ export function SettingsForm({ settings }: { settings: ClubSettings }) {
           fields={settingsStaleFields}
           busy={change.isPending}
           onTakeTheirs={() => {
-            if (newer) form.reset({ landingPeakLimits: newer.landingPeakLimits })
+            if (newer) form.reset(valuesOf(newer))
             takeTheirs()
           }}
         />
@@ -76,9 +76,7 @@ export function SettingsForm({ settings }: { settings: ClubSettings }) {
             autoComplete="off"
             className="max-w-80"
             error={errors.landingPeakLimits?.[protocol]?.message}
-            {...form.register(`landingPeakLimits.${protocol}`, {
-              setValueAs: (typed) => parseDecimal(typed) ?? undefined,
-            })}
+            {...form.register(`landingPeakLimits.${protocol}`, { setValueAs: parseDecimal })}
           />
         ))}
         <CautionLine />
@@ -89,4 +87,14 @@ export function SettingsForm({ settings }: { settings: ClubSettings }) {
       <LeaveGuard dirty={isDirty && !change.isPending} />
     </Sheet>
   )
+}
+
+/** In the form an absent limit is an empty field. */
+function valuesOf({ landingPeakLimits }: ClubSettings): FormValues {
+  const limits = Protocol.options.map((protocol) => [protocol, landingPeakLimits[protocol] ?? null])
+  return { landingPeakLimits: Object.fromEntries(limits) as FormValues['landingPeakLimits'] }
+}
+
+function limitsOf({ landingPeakLimits }: FormValues): ClubSettings['landingPeakLimits'] {
+  return Object.fromEntries(Object.entries(landingPeakLimits).filter(([, limit]) => limit !== null))
 }

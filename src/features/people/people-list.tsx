@@ -37,7 +37,7 @@ export function PeopleList({ people }: { people: Person[] }) {
         />
         <SelectField
           label="Role"
-          className="w-full sm:w-40"
+          className="sm:w-40"
           value={list.role}
           onChange={(event) => setList({ role: event.target.value })}
         >
@@ -50,7 +50,7 @@ export function PeopleList({ people }: { people: Person[] }) {
         </SelectField>
         <SelectField
           label="Show"
-          className="w-full sm:w-36"
+          className="sm:w-36"
           value={list.show}
           onChange={(event) => setList({ show: event.target.value })}
         >

@@ -34,7 +34,7 @@ export function SquadList({ squads, athletes }: { squads: Squad[]; athletes: Ath
         <SearchField label="Search by name" value={list.search} onChange={(search) => setList({ search })} />
         <SelectField
           label="Show"
-          className="w-full sm:w-36"
+          className="sm:w-36"
           value={list.show}
           onChange={(event) => setList({ show: event.target.value })}
         >
