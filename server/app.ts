@@ -1,5 +1,6 @@
 import compression from 'compression'
 import express, { Router, type Express } from 'express'
+import type { Server } from 'node:http'
 import type { Deps } from './deps.ts'
 import { clientFiles } from './http/client-files.ts'
 import { refuseCrossSite } from './http/cross-site.ts'
@@ -12,8 +13,11 @@ import { signInSession } from './http/sign-in-session.ts'
 import { passport } from './modules/account/passport.ts'
 import { routes } from './routes.ts'
 
-/** The web application, from what it is given: nothing of it lives outside `deps`. */
-export async function createApp(deps: Deps): Promise<Express> {
+/**
+ * The web application, from what it is given: nothing of it lives outside `deps`. `server` is what will serve it,
+ * which only Vite in development needs to know.
+ */
+export async function createApp(deps: Deps, server?: Server): Promise<Express> {
   const app = express()
   app.disable('x-powered-by')
   app.set('trust proxy', deps.config.trustedProxies)
@@ -23,7 +27,7 @@ export async function createApp(deps: Deps): Promise<Express> {
   app.use(healthRoutes(deps))
   app.use(compression())
   app.use('/api', api(deps))
-  app.use(await clientFiles(deps.config))
+  app.use(await clientFiles(deps.config, server))
   app.use(answerNotFound)
   app.use(answerError)
   return app

@@ -13,7 +13,8 @@ const db = createDatabase(config, (error) => log.warn({ err: error }, 'an idle d
 const deps: Deps = { config, db, log, clock: () => new Date() }
 removeExpiredTries(db.pool)
 
-const server = createServer(await createApp(deps))
+const server = createServer()
+server.on('request', await createApp(deps, server))
 server.once('error', (error) => {
   log.fatal({ err: error }, `the web server could not listen on ${config.host}:${config.port}`)
   process.exit(1)

@@ -12,6 +12,7 @@ const production = {
   SESSION_SECRET: 'x'.repeat(40),
   SMTP_URL: 'smtp://mail.example.org',
   APP_URL: 'https://underfoot.example.org/',
+  TRUSTED_PROXIES: '1',
 }
 
 describe('configuration', () => {
@@ -41,6 +42,7 @@ describe('configuration', () => {
     ['web', 'SESSION_SECRET', 'short'],
     ['web', 'APP_URL', 'http://underfoot.example.org'],
     ['web', 'CLIENT', 'vite'],
+    ['web', 'TRUSTED_PROXIES', '0'],
     ['worker', 'SMTP_URL', ''],
     ['worker', 'APP_URL', 'http://underfoot.example.org'],
   ] as const)('refuses to start the %s process in production with %s=%j', (role, name, value) => {

@@ -50,6 +50,11 @@ function productionProblems(role: DatabaseRole, settings: Omit<Settings, `${Data
     problems.push('SESSION_SECRET is not set: in production it must be a secret of your own.')
   }
   if (role === 'web' && settings.client === 'vite') problems.push('CLIENT=vite is for development only.')
+  if (role === 'web' && settings.trustedProxies === 0) {
+    problems.push(
+      'TRUSTED_PROXIES must count the proxy that speaks https for us: without it nobody can sign in.',
+    )
+  }
   if (role === 'worker' && !settings.smtpUrl) {
     problems.push('SMTP_URL is not set: in production mail goes to a real server.')
   }
