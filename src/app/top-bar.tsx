@@ -23,7 +23,7 @@ export function TopBar({ me }: { me: Me }) {
         <Wordmark clubName={me.club.name} />
         {items.length > 1 && (
           <nav aria-label="Pages" className="order-last w-full md:order-none md:w-auto">
-            <ul className="flex flex-wrap gap-x-6">
+            <ul className="flex flex-wrap gap-x-4 sm:gap-x-6">
               {items.map((item) => (
                 <li key={item.path}>
                   <NavLink to={item.path} className={navLinkClass}>

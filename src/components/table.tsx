@@ -81,7 +81,7 @@ function HeadCell<Row>({ column, sort, onSort }: HeadCellProps<Row>) {
           onClick={() => onSort({ key: column.key, descending: sorted !== null && !sorted.descending })}
         >
           {column.head}
-          <span aria-hidden="true">{sorted === null ? '' : sorted.descending ? '↓' : '↑'}</span>
+          <span aria-hidden="true">{sorted === null ? '' : sorted.descending ? '\u00a0↓' : '\u00a0↑'}</span>
         </Button>
       )}
     </th>

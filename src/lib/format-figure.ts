@@ -9,7 +9,7 @@ export interface FigureDisplay {
 export function formatNumber(value: number, decimals: number): string {
   const rounded = Math.abs(value).toFixed(decimals)
   const [whole = '', fraction] = rounded.split('.')
-  const grouped = whole.length > 4 ? whole.replace(/\B(?=(\d{3})+$)/g, '\u202f') : whole
+  const grouped = whole.replace(/\B(?=(\d{3})+$)/g, '\u202f')
   const sign = value < 0 && Number(rounded) !== 0 ? '\u2212' : ''
   return sign + grouped + (fraction === undefined ? '' : `.${fraction}`)
 }

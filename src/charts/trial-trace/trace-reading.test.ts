@@ -23,7 +23,7 @@ const view = { startS: 0.1, endS: 1.9 }
 describe('readTrace(data, time)', () => {
   it('reads both feet, each foot and the momentum, between samples', () => {
     expect(readTrace(data, 1.0004).values).toEqual([
-      { label: 'both feet', text: '1000 N' },
+      { label: 'both feet', text: '1\u202f000 N' },
       { label: 'left', text: '600 N' },
       { label: 'right', text: '400 N' },
       { label: 'momentum', text: '−12.3 kg·m/s' },
