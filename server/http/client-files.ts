@@ -30,7 +30,7 @@ export function builtClient(folder: string): Router {
 /** Vite tells the browser of changes over our own server, so that two checkouts can run side by side. */
 async function viteClient(server: Server | undefined): Promise<Router> {
   const { createServer } = await import('vite')
-  const vite = await createServer({ server: { middlewareMode: true, hmr: { server } }, appType: 'spa' })
+  const vite = await createServer({ server: { middlewareMode: true, ws: { server } }, appType: 'spa' })
   const router = Router()
   router.use(vite.middlewares)
   return router
