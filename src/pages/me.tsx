@@ -1,3 +1,4 @@
+import { useClubEvents } from '../api/events/use-club-events.ts'
 import { useMyResults } from '../api/results/get-my-results.ts'
 import { EmptyState } from '../components/empty-state.tsx'
 import { PageHead } from '../components/page-head.tsx'
@@ -7,6 +8,7 @@ import { OwnResults } from '../features/results/own-results.tsx'
 
 export function MePage() {
   const mine = useMyResults()
+  useClubEvents()
   return (
     <>
       <PageHead title="My results" />

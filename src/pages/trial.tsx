@@ -1,4 +1,5 @@
 import { useParams } from 'react-router-dom'
+import { useClubEvents } from '../api/events/use-club-events.ts'
 import { useTrial } from '../api/trials/get-trial.ts'
 import { QueryState } from '../components/query-state.tsx'
 import { OwnTrialView } from '../features/trials/own-trial-view.tsx'
@@ -7,6 +8,7 @@ import { TrialView } from '../features/trials/trial-view.tsx'
 export function TrialPage() {
   const { trialId = '' } = useParams()
   const trial = useTrial(trialId)
+  useClubEvents()
   return (
     <QueryState query={trial} what="the trial">
       {(found) => (found.mayEdit ? <TrialView trial={found} /> : <OwnTrialView trial={found} />)}

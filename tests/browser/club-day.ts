@@ -39,9 +39,14 @@ export async function buildClubDay(product: Product): Promise<void> {
   const config = loadConfig('web', { ...product.env })
   const db = createDatabase(config, () => undefined)
   try {
-    const clubId = await buildClub(db, { name: 'Saltmarsh Athletic Club', timeZone: 'Europe/London', seats: 20 })
+    const clubId = await buildClub(db, {
+      name: 'Saltmarsh Athletic Club',
+      timeZone: 'Europe/London',
+      seats: 20,
+    })
     const squadId = await buildSquad(db, clubId, { name: squadName })
-    for (const role of ['coach', 'physio', 'admin'] as const) await buildMember(db, clubId, [role], people[role])
+    for (const role of ['coach', 'physio', 'admin'] as const)
+      await buildMember(db, clubId, [role], people[role])
     const { id: personId } = await buildMember(db, clubId, ['athlete'], people.athlete)
     for (const name of athleteNames) {
       await buildAthlete(db, clubId, {
@@ -69,7 +74,7 @@ export function jumpFile(name: string, seed: number, jump: Partial<JumpOptions> 
   }
   const varied: Partial<JumpOptions> = {
     massKg: 60 + ((seed * 7) % 30),
-    takeoffVelocity: 2.3 + ((seed * 13) % 10) / 20,
+    takeoffVelocity: 2.3 + ((Math.floor(seed / 3) * 13) % 10) / 20 + (seed % 3) * 0.02,
     landing: seed % 2 === 0 ? 'onePeak' : 'twoPeaks',
     shares: { stance: 0.52, unweighting: 0.51, braking: 0.48, propulsion: 0.49, landing: 0.53 },
     body: { swayVelocity: 0.002, heartbeatN: 2, heartRateHz: 1.1, fidgetN: 0 },

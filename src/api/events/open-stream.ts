@@ -1,4 +1,4 @@
-import { ClubEvent } from '../../../shared/contracts/events.ts'
+import { ClubEvent, getEvents } from '../../../shared/contracts/events.ts'
 
 export interface StreamHandlers {
   onOpen: () => void
@@ -16,7 +16,7 @@ export function openStream(handlers: StreamHandlers): () => void {
   let waitMs = retryMs.first
 
   const open = () => {
-    source = new EventSource('/api/events')
+    source = new EventSource(getEvents.path)
     source.onopen = () => {
       waitMs = retryMs.first
       handlers.onOpen()

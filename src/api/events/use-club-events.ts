@@ -3,6 +3,7 @@ import { useEffect } from 'react'
 import type { ClubEvent } from '../../../shared/contracts/events.ts'
 import { athleteKeys } from '../athletes/athlete-keys.ts'
 import { landingWatchKeys } from '../landing-watch/list-high-landings.ts'
+import { resultKeys } from '../results/get-my-results.ts'
 import { sessionKeys } from '../sessions/session-keys.ts'
 import { trialKeys } from '../trials/trial-keys.ts'
 import { coalesce } from './coalesce.ts'
@@ -31,12 +32,15 @@ export function useClubEvents(): void {
   }, [queryClient])
 }
 
+/** A burst of events, as of a drop of files, reads a sheet twice a second and not ten times. */
+const rest = () => new Promise<void>((resolve) => setTimeout(resolve, 500))
+
 /** What each event makes out of date. */
 export function clubEventHandlers(queryClient: QueryClient): StreamHandlers {
   const refresh = (...keys: (readonly unknown[])[]) =>
-    coalesce(() => Promise.all(keys.map((queryKey) => queryClient.invalidateQueries({ queryKey }))))
+    coalesce(() => Promise.all(keys.map((queryKey) => queryClient.invalidateQueries({ queryKey }))), rest)
   const refreshes: Record<ClubEvent['kind'], () => Promise<void>> = {
-    session: refresh(sessionKeys.all, trialKeys.all, landingWatchKeys.all),
+    session: refresh(sessionKeys.all, trialKeys.all, landingWatchKeys.all, resultKeys.all),
     athletes: refresh(athleteKeys.all, sessionKeys.all),
   }
   return {

@@ -2,7 +2,7 @@ import { queryOptions, useQuery } from '@tanstack/react-query'
 import { getMyResults } from '../../../shared/contracts/results.ts'
 import { call } from '../client.ts'
 
-export const resultKeys = { mine: ['results', 'mine'] } as const
+export const resultKeys = { all: ['results'], mine: ['results', 'mine'] } as const
 
 export function myResultsQuery() {
   return queryOptions({

@@ -62,7 +62,7 @@ export function resultsGeometry(
       y: y(figure.value),
       bar: figure.U === null ? null : { top: y(figure.value + figure.U), bottom: y(figure.value - figure.U) },
     })),
-    valueTicks: y.ticks(4).map((value) => ({ value, y: y(value) })),
+    valueTicks: y.ticks(3).map((value) => ({ value, y: y(value) })),
     dateTicks: dates
       .map((date, i) => ({ x: x(date), text: texts[i]! }))
       .filter((tick, i) => i === 0 || tick.text !== texts[i - 1]),

@@ -26,7 +26,7 @@ export function layOutTrace(width: number, eventTiers: number): TraceLayout {
   return {
     width,
     height: momentumBottom + 30,
-    plot: { left: narrow ? 42 : 58, right: width - (narrow ? 62 : 100) },
+    plot: { left: narrow ? 40 : 58, right: width - (narrow ? 34 : 100) },
     eventsY,
     force: { top: forceTop, bottom: forceBottom },
     momentum: { top: momentumTop, bottom: momentumBottom },

@@ -90,7 +90,7 @@ function labelPlace(
   const [, forceN] = points.reduce((near, point) =>
     Math.abs(point[0] - centreS) < Math.abs(near[0] - centreS) ? point : near,
   )
-  const y = scales.force(weightN + (forceN - weightN) * 0.45)
+  const y = scales.force(weightN + (forceN - weightN) * 0.35)
   return {
     x: scales.time(centreS),
     y,

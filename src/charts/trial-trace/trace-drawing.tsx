@@ -28,7 +28,7 @@ export const TraceDrawing = memo(function TraceDrawing({ data, view, layout, sca
       <TraceAxes layout={layout} scales={scales} withMomentum={data.momentum !== null} />
       <TracePhases shapes={shapes} />
       <TraceLines data={data} view={view} layout={layout} scales={scales} />
-      <PhaseFigures shapes={shapes} right={layout.plot.right} />
+      <PhaseFigures shapes={shapes} layout={layout} />
       <TraceEvents events={events} layout={layout} />
       <TakeoffMomentum data={data} scales={scales} />
     </g>

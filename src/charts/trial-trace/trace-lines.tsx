@@ -58,48 +58,65 @@ export function TraceLines({ data, view, layout, scales }: Props) {
 }
 
 function EndLabels({ data, view, layout, scales }: Props) {
-  const lines = [
-    ...(data.weight
-      ? [
-          {
-            key: 'weight',
-            y: scales.force(data.weight.valueN),
-            text: data.weight.label,
-            className: 'fill-ink-2',
-          },
-        ]
-      : []),
-    ...data.feet.map((foot) => ({
-      key: foot.key,
-      y: scales.force(valueAt(foot.values, data.sampleRateHz, view.endS)),
-      text: foot.label,
-      className: `font-semibold ${footLine[foot.key].fill}`,
-    })),
-  ]
-  const places = spreadLabels(
-    lines.map((label) => label.y),
-    data.weight ? 20 : 15,
-    layout.force.top,
-    layout.force.bottom,
-  )
-  const x = layout.plot.right + 6
+  const feet = data.feet.map((foot) => ({
+    key: foot.key,
+    y: scales.force(valueAt(foot.values, data.sampleRateHz, view.endS)),
+    text: foot.label,
+    className: `font-semibold ${footLine[foot.key].fill}`,
+  }))
+  const weightY = data.weight && !layout.narrow ? [scales.force(data.weight.valueN)] : []
+  const wanted = [...weightY, ...feet.map((foot) => foot.y)]
+  const places = spreadLabels(wanted, weightY.length > 0 ? 20 : 15, layout.force.top, layout.force.bottom)
+  const footPlaces = places.slice(weightY.length)
   return (
     <g stroke="none" className="text-[12.5px]">
-      {lines.map((label, i) => (
-        <text
-          key={label.key}
-          x={x}
-          y={places[i]! + (label.key === 'weight' ? -1 : 4)}
-          className={label.className}
-        >
-          {label.text}
-          {label.key === 'weight' && data.weight && (
-            <tspan x={x} dy="14" className="fill-ink">
-              {formatNumber(data.weight.valueN, 1)} N
-            </tspan>
-          )}
+      <WeightLabel
+        data={data}
+        layout={layout}
+        scales={scales}
+        y={weightY.length > 0 ? places[0] : undefined}
+      />
+      {feet.map((foot, i) => (
+        <text key={foot.key} x={layout.plot.right + 6} y={footPlaces[i]! + 4} className={foot.className}>
+          {foot.text}
         </text>
       ))}
     </g>
+  )
+}
+
+interface WeightLabelProps {
+  data: TraceData
+  layout: TraceLayout
+  scales: DrawnScales
+  y: number | undefined
+}
+
+/** At the line's end; on a phone, where there is no room beside the plot, over it. */
+function WeightLabel({ data: { weight }, layout, scales, y }: WeightLabelProps) {
+  if (!weight) return null
+  const newtons = `${formatNumber(weight.valueN, 1)} N`
+  if (y === undefined) {
+    return (
+      <text
+        x={layout.plot.right}
+        y={scales.force(weight.valueN) - 12}
+        textAnchor="end"
+        className="fill-ink-2 stroke-sheet"
+        strokeWidth="4"
+        paintOrder="stroke"
+      >
+        {weight.label} {newtons}
+      </text>
+    )
+  }
+  const x = layout.plot.right + 6
+  return (
+    <text x={x} y={y - 1} className="fill-ink-2">
+      {weight.label}
+      <tspan x={x} dy="14" className="fill-ink">
+        {newtons}
+      </tspan>
+    </text>
   )
 }

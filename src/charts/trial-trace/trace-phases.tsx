@@ -1,6 +1,7 @@
 import { useId } from 'react'
 import type { Phase } from '../../../shared/mechanics/types.ts'
 import { formatSigned } from '../../lib/format-signed.ts'
+import type { TraceLayout } from './lay-out.ts'
 import type { PhaseShape } from './phase-shapes.ts'
 
 /** Phases that stop a fall stand darker than those beside them, so that neighbours can be told apart. */
@@ -26,8 +27,11 @@ export function TracePhases({ shapes }: { shapes: PhaseShape[] }) {
   )
 }
 
-/** The net impulse of each phase, written in its area, or beside it where the area is too narrow. */
-export function PhaseFigures({ shapes, right }: { shapes: PhaseShape[]; right: number }) {
+/**
+ * The net impulse of each phase, written in its area, or beside it where the area is too narrow. On a phone there
+ * is no room beside: those that do not fit are left to the ledger.
+ */
+export function PhaseFigures({ shapes, layout }: { shapes: PhaseShape[]; layout: TraceLayout }) {
   return (
     <g className="fill-ink text-[13px] font-semibold">
       {shapes.map((shape) => {
@@ -35,11 +39,12 @@ export function PhaseFigures({ shapes, right }: { shapes: PhaseShape[]; right: n
         const text = formatSigned(shape.netImpulse, 0)
         const width = text.length * 7.5 + 6
         const inside = shape.label.room >= width && shape.label.height >= 18
+        if (!inside && layout.narrow) return null
         const beside = shape.label.x + shape.label.room / 2 + 6
         return (
           <text
             key={shape.phase}
-            x={inside ? shape.label.x : Math.min(beside, right - width)}
+            x={inside ? shape.label.x : Math.min(beside, layout.plot.right - width)}
             y={shape.label.y + 4}
             textAnchor={inside ? 'middle' : 'start'}
             className="stroke-sheet"

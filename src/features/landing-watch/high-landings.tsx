@@ -34,7 +34,7 @@ export function HighLandings({ watch, days }: { watch: Watch; days: number }) {
       <p className="text-ink-2">The club’s limits: {limits}.</p>
       <Landings title="Above the limit" landings={verified}>
         <EmptyState title={`No landing of the last ${days} days is above the club’s limits`}>
-          Landings of published and unpublished sessions are looked at as they come in.
+          A landing is looked at as soon as its recording is analysed, published or not.
         </EmptyState>
       </Landings>
       {unverified.length > 0 && (

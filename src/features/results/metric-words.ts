@@ -1,11 +1,15 @@
 import { catalogue, isMetricKey } from '../../../shared/mechanics/catalogue.ts'
 import { formatUncertainty, formatValue } from '../../lib/format-figure.ts'
 
-/** A metric's name with its display unit, for the head of a column: "Jump height, cm". */
+/** Where the unit is body weights it says "per body weight" already, and a head is short. */
+const saidByUnit = /,? per body weight$/
+
+/** A metric's name with its display unit, for the head of a column: "Jump height, cm", "Landing peak force, BW". */
 export function metricHead(metricKey: string): string {
   if (!isMetricKey(metricKey)) return metricKey
   const { name, display } = catalogue[metricKey]
-  return display.unit === '' ? name : `${name}, ${display.unit}`
+  const short = display.unit.startsWith('BW') ? name.replace(saidByUnit, '') : name
+  return display.unit === '' ? short : `${short}, ${display.unit}`
 }
 
 /** "34.5 ± 0.6 cm" as plain text. */
@@ -14,4 +18,9 @@ export function figureWords(metricKey: string, figure: { value: number; U: numbe
   const { display } = catalogue[metricKey]
   const parts = [formatValue(figure.value, display), formatUncertainty(figure.U, display), display.unit]
   return parts.filter(Boolean).join(' ')
+}
+
+/** The same of a mean: "Mean jump height, cm". */
+export function meanHead(metricKey: string): string {
+  return `Mean ${metricHead(metricKey).replace(/^\p{Lu}(?=\p{Ll})/u, (letter) => letter.toLowerCase())}`
 }

@@ -1,6 +1,7 @@
 import type { MeanFigure } from '../../../shared/contracts/results.ts'
+import { ScrollRegion } from '../../components/scroll-region.tsx'
 import { FigureText } from '../results/figure-text.tsx'
-import { metricHead } from '../results/metric-words.ts'
+import { meanHead, metricHead } from '../results/metric-words.ts'
 import { cellMetric } from './cell-words.ts'
 import type { SheetRow } from './sheet-rows.ts'
 import './sheet-table.css'
@@ -22,12 +23,7 @@ export function SheetTable({ caption, rows, columns, acts }: Props) {
   const cursor = useSheetCursor(rows.map((row) => row.trials.length))
   const numbers = Array.from({ length: columns }, (_, i) => i + 1)
   return (
-    <div
-      className="overflow-x-auto border-t-2 border-ink bg-sheet"
-      role="region"
-      aria-label={caption}
-      tabIndex={0}
-    >
+    <ScrollRegion label={caption} className="border-t-2 border-ink bg-sheet">
       <table className="data-table sheet-table">
         <caption className="sr-only">{caption}</caption>
         <thead>
@@ -37,10 +33,10 @@ export function SheetTable({ caption, rows, columns, acts }: Props) {
               {metricHead(massMetric)}
             </th>
             <th scope="col" className="figure">
-              Mean of {metricHead(cellMetric).toLowerCase()}
+              {meanHead(cellMetric)}
             </th>
             <th scope="col" className="figure">
-              Mean of {metricHead(landingMetric).replace(/^L/, 'l')}
+              {meanHead(landingMetric)}
             </th>
             {numbers.map((n) => (
               <th key={n} scope="col">
@@ -62,7 +58,7 @@ export function SheetTable({ caption, rows, columns, acts }: Props) {
           ))}
         </tbody>
       </table>
-    </div>
+    </ScrollRegion>
   )
 }
 

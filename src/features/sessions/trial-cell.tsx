@@ -34,7 +34,6 @@ export function TrialCell({ trial, athleteName, n, focus, acts }: Props) {
       <Link
         {...focus}
         to={pathOf.trial(id)}
-        aria-label={cellName(athleteName, n, trial)}
         aria-keyshortcuts="x m"
         className="flex min-h-11 items-center gap-2 px-2 no-underline"
         onKeyDown={(event) => {
@@ -43,8 +42,11 @@ export function TrialCell({ trial, athleteName, n, focus, acts }: Props) {
           if (event.key === 'm') acts.move(acted)
         }}
       >
+        <span className="sr-only">{cellName(athleteName, n, trial)}</span>
         <Sparkline preview={trial.preview} quiet={trial.setAside !== null} />
-        <CellFigures trial={trial} />
+        <span aria-hidden="true">
+          <CellFigures trial={trial} />
+        </span>
       </Link>
       <span className="cell-acts no-print">
         <Button
@@ -64,7 +66,10 @@ export function TrialCell({ trial, athleteName, n, focus, acts }: Props) {
 }
 
 function CellFigures({ trial: { setAside, analysis } }: { trial: SheetTrial }) {
-  if (setAside) return <span className="text-small text-ink-2">set aside: {setAside.reason}</span>
+  if (setAside)
+    return (
+      <span className="line-clamp-2 text-small leading-tight text-ink-2">set aside: {setAside.reason}</span>
+    )
   if (!analysis) return <span className="text-small text-ink-2">being analysed</span>
   const height = analysis.metrics[cellMetric]
   const words = checkWords(analysis)

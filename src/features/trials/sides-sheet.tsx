@@ -1,6 +1,7 @@
 import type { Analysis } from '../../../shared/contracts/trials.ts'
 import { catalogue, metricKeys, type MetricKey } from '../../../shared/mechanics/catalogue.ts'
 import { CautionLine } from '../../components/caution-line.tsx'
+import { ScrollRegion } from '../../components/scroll-region.tsx'
 import { Sheet } from '../../components/sheet.tsx'
 import { formatUncertainty } from '../../lib/format-figure.ts'
 import { formatSigned } from '../../lib/format-signed.ts'
@@ -18,7 +19,7 @@ export function SidesSheet({ sides, checks }: { sides: Sides; checks: Analysis['
   const keys = metricKeys.filter((key) => sides.left[key] && sides.right[key])
   return (
     <Sheet title="Left and right" titleAside="difference: right less left, of their mean" flush>
-      <div className="overflow-x-auto">
+      <ScrollRegion label="Figures of the left and the right foot">
         <table className="data-table sides-table">
           <caption className="sr-only">Figures of the left and the right foot</caption>
           <thead>
@@ -42,7 +43,7 @@ export function SidesSheet({ sides, checks }: { sides: Sides; checks: Analysis['
             ))}
           </tbody>
         </table>
-      </div>
+      </ScrollRegion>
       <div className="px-3 py-2">
         <CautionLine />
       </div>

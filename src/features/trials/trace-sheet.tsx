@@ -44,7 +44,7 @@ function Trace({ trial, samples }: { trial: Trial; samples: Samples }) {
   return (
     <div className="flex flex-col gap-2">
       <TrialTrace data={drawn} view={view} summaryId={summaryId} />
-      <p id={summaryId} className="max-w-prose text-small text-ink-2">
+      <p id={summaryId} className="max-w-3xl text-small text-ink-2">
         {traceSummary(trial)}
       </p>
       <div className="flex flex-wrap items-start gap-x-6 text-small">

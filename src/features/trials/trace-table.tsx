@@ -1,12 +1,13 @@
 import type { TraceData } from '../../charts/trial-trace/trace-data.ts'
 import { readTrace } from '../../charts/trial-trace/trace-reading.ts'
+import { ScrollRegion } from '../../components/scroll-region.tsx'
 
 /** The trace at each event, as a table. */
 export function TraceTable({ data }: { data: TraceData }) {
   const rows = data.events.map((event) => ({ ...event, reading: readTrace(data, event.timeS) }))
   const heads = readTrace(data, 0).values.map((value) => value.label)
   return (
-    <div className="overflow-x-auto">
+    <ScrollRegion label="Force and momentum at each event">
       <table className="data-table">
         <caption className="sr-only">Force and momentum at each event</caption>
         <thead>
@@ -36,6 +37,6 @@ export function TraceTable({ data }: { data: TraceData }) {
           ))}
         </tbody>
       </table>
-    </div>
+    </ScrollRegion>
   )
 }

@@ -69,7 +69,7 @@ function Place({ error }: { error: NonNullable<Upload['error']> }) {
   const parts = [
     error.line !== undefined ? `line ${error.line}` : '',
     error.column !== undefined ? `column ${error.column}` : '',
-    error.seen !== undefined ? `“${error.seen}”` : '',
+    error.seen !== undefined && !error.sentence.includes(error.seen) ? `“${error.seen}”` : '',
   ].filter(Boolean)
   return parts.length === 0 ? null : <span className="text-ink-2">({parts.join(', ')}) </span>
 }

@@ -1,5 +1,6 @@
 import { useQueryClient, type QueryClient } from '@tanstack/react-query'
 import { useEffect, useSyncExternalStore } from 'react'
+import { streamHealth } from '../../api/events/stream-health.ts'
 import { finishUpload } from '../../api/uploads/finish-upload.ts'
 import { sendChunk } from '../../api/uploads/send-chunk.ts'
 import { startUpload } from '../../api/uploads/start-upload.ts'
@@ -18,13 +19,17 @@ function queueOf(queryClient: QueryClient, sessionId: string): UploadQueue {
 }
 
 function newQueue(queryClient: QueryClient, sessionId: string): UploadQueue {
-  const refresh = () => queryClient.invalidateQueries({ queryKey: sessionKeys.all }, { cancelRefetch: false })
+  /** Where the club's events are heard they say the same, and gathered. */
+  const refresh = () => {
+    if (streamHealth.isOpen()) return
+    void queryClient.invalidateQueries({ queryKey: sessionKeys.all }, { cancelRefetch: false })
+  }
   return createUploadQueue({
     start: (file) => startUpload({ sessionId, ...file }),
     send: sendChunk,
     finish: async (uploadId, key) => {
       const upload = await finishUpload(uploadId, key)
-      void refresh()
+      refresh()
       return upload
     },
     newKey: () => crypto.randomUUID(),
