@@ -2,6 +2,9 @@ import tailwindcss from '@tailwindcss/vite'
 import react from '@vitejs/plugin-react'
 import { defineConfig } from 'vitest/config'
 
+/** ms; a machine that does five things at once must not fail a test that a quiet one passes. */
+const patience = { testTimeout: 30_000, hookTimeout: 30_000 }
+
 /** Test files by what they need to run; `npm test` runs each project and adds up the counts. */
 const unitTests = ['shared/**/*.test.ts', 'server/**/*.test.ts', 'seed/**/*.test.ts']
 
@@ -19,13 +22,14 @@ export default defineConfig({
   server: { strictPort: true },
   test: {
     projects: [
-      { test: { name: 'unit', environment: 'node', include: unitTests } },
-      { test: { name: 'guards', environment: 'node', include: ['tests/guards/**/*.test.ts'] } },
+      { test: { name: 'unit', environment: 'node', include: unitTests, ...patience } },
+      { test: { name: 'guards', environment: 'node', include: ['tests/guards/**/*.test.ts'], ...patience } },
       {
         test: {
           name: 'reference',
           environment: 'node',
           include: ['tests/reference/**/*.test.ts', 'tests/cases/*.test.ts'],
+          ...patience,
         },
       },
       {
@@ -34,8 +38,7 @@ export default defineConfig({
           environment: 'node',
           include: ['tests/api/**/*.test.ts'],
           globalSetup: ['tests/setup/cluster.ts'],
-          hookTimeout: 30_000,
-          testTimeout: 30_000,
+          ...patience,
         },
       },
       {
@@ -45,6 +48,7 @@ export default defineConfig({
           environment: 'jsdom',
           include: ['src/**/*.test.{ts,tsx}'],
           setupFiles: ['tests/setup/client.ts'],
+          ...patience,
         },
       },
       {

@@ -1,16 +1,20 @@
 import { randomBytes } from 'node:crypto'
-import { rmSync } from 'node:fs'
+import { readdirSync, rmSync, statSync } from 'node:fs'
 import { tmpdir } from 'node:os'
 import { join } from 'node:path'
 import { makeCluster, startCluster } from './cluster.mjs'
 import { databaseUrl } from './database-urls.mjs'
 import { migrate } from './migrations.mjs'
+import { runningServer } from './postgres-server.mjs'
 import { SetUpProblem } from './problem.mjs'
 import { forEachRole, makeDatabase, makeRoles } from './roles.mjs'
 import { serverUserFor } from './server-user.mjs'
 
 /** The migrated, empty database that each test file gets a clone of. */
 export const templateDatabase = 'underfoot_template'
+
+const folderPrefix = 'underfoot-test-'
+const forsakenMs = 3_600_000
 
 /** Tests may lose everything at a power cut: waiting for the disk would only make them slow. */
 const settings = { fsync: 'off', synchronous_commit: 'off', full_page_writes: 'off', max_connections: '200' }
@@ -26,7 +30,8 @@ const settings = { fsync: 'off', synchronous_commit: 'off', full_page_writes: 'o
  * @returns {Promise<{ cluster: TestCluster, stop: () => Promise<void> }>}
  */
 export async function startTestCluster() {
-  const folder = join(tmpdir(), `underfoot-test-${randomBytes(6).toString('hex')}`)
+  dropForsaken()
+  const folder = join(tmpdir(), `${folderPrefix}${randomBytes(6).toString('hex')}`)
   const log = `${folder}.log`
   const user = serverUserFor(folder)
   if (!user) throw new SetUpProblem(`The database server's user cannot write to ${tmpdir()}.`)
@@ -46,6 +51,17 @@ export async function startTestCluster() {
   } catch (error) {
     await stop()
     throw error
+  }
+}
+
+/** Removes the files of runs that were killed: theirs is no server any more, and they are not just beginning. */
+function dropForsaken() {
+  for (const name of readdirSync(tmpdir()).filter((name) => name.startsWith(folderPrefix))) {
+    const path = join(tmpdir(), name)
+    const found = statSync(path, { throwIfNoEntry: false })
+    if (!found || Date.now() - found.mtimeMs < forsakenMs || runningServer(path.replace(/\.log$/, '')))
+      continue
+    rmSync(path, { recursive: true, force: true })
   }
 }
 
