@@ -38,7 +38,8 @@ export async function answerOnce(
   try {
     response = await run()
   } catch (error) {
-    await deps.db.inClub(ctx, (tx) => releaseKey(tx, ctx, claim.key))
+    // Where even this fails the key stays taken, which is safe; the first error is the one to tell.
+    await deps.db.inClub(ctx, (tx) => releaseKey(tx, ctx, claim.key)).catch(() => undefined)
     throw error
   }
   await deps.db.inClub(ctx, (tx) => completeKey(tx, ctx, claim.key, response))

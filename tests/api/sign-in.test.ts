@@ -62,6 +62,24 @@ describe('signing in', () => {
     expect(cookie).toContain('SameSite=Lax')
   })
 
+  it('in production sends the cookie over https alone, and tells browsers to keep to https', async () => {
+    const production = await startHarness({
+      NODE_ENV: 'production',
+      SESSION_SECRET: 'a secret of forty characters, only here.',
+      APP_URL: 'https://underfoot.example.org',
+      SMTP_URL: 'smtp://127.0.0.1:9',
+      TRUSTED_PROXIES: '1',
+    })
+    const person = await buildMember(production.db, await buildClub(production.db), ['coach'])
+    const { headers } = await production.client().send(signIn, {
+      body: { email: person.email, password: builtPassword },
+      headers: { 'X-Forwarded-Proto': 'https' },
+    })
+    await production.stop()
+    expect(String(headers['set-cookie'])).toContain('Secure')
+    expect(headers['strict-transport-security']).toMatch(/max-age=\d{8}/)
+  })
+
   it('gives the session a new id, so that one planted before is worth nothing', async () => {
     const person = await buildMember(harness.db, clubId, ['coach'])
     const browser = await harness.signedIn(person)

@@ -23,7 +23,9 @@ passport.serializeUser((caller, done) => {
 // A membership that is gone or inactive is `false`: the person is signed out at this very request.
 passport.deserializeUser(
   (req: Request, kept: unknown, done: (error: unknown, user?: Caller | false) => void) => {
-    findCaller(depsOf(req), SignedIn.parse(kept)).then((caller) => done(null, caller ?? false), done)
+    const signedIn = SignedIn.safeParse(kept)
+    if (!signedIn.success) return done(null, false)
+    findCaller(depsOf(req), signedIn.data).then((caller) => done(null, caller ?? false), done)
   },
 )
 
