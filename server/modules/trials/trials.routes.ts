@@ -5,7 +5,8 @@ import * as trials from './trials.service.ts'
 export const trialRoutes: Route[] = [
   implement(getTrial, ({ deps, ctx, params }) => trials.getTrial(deps, ctx, params.trialId)),
   implement(getSamples, async ({ deps, ctx, params, res }) => {
-    res.type('application/octet-stream').send(await trials.getSamples(deps, ctx, params.trialId))
+    const samples = await trials.getSamples(deps, ctx, params.trialId)
+    res.type('application/octet-stream').send(samples)
     return handled
   }),
   implement(changeTrial, ({ deps, ctx, params, body }) => trials.change(deps, ctx, params.trialId, body)),
