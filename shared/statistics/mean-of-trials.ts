@@ -1,4 +1,4 @@
-import { studentT } from '../mechanics/uncertainty/student-t.ts'
+import { studentT } from './distributions/student-t.ts'
 
 /** One trial's figure: its expanded uncertainty for about 95 %, and the part of it that differs from trial to trial. */
 export interface TrialFigure {

@@ -1,5 +1,5 @@
 import type { Figure } from '../types.ts'
-import { studentT } from './student-t.ts'
+import { studentT } from '../../statistics/distributions/student-t.ts'
 
 /**
  * A value with what each input quantity contributes to its standard uncertainty: `parts[i]` is the sensitivity

@@ -1,5 +1,6 @@
 import { describe, expect, it } from 'vitest'
 import { studentT } from './student-t.ts'
+import { tQuantile } from './t-quantile.ts'
 
 describe('studentT', () => {
   // Quantiles by SciPy 1.17: two-sided coverage 0.95 and 0.99.
@@ -23,6 +24,25 @@ describe('studentT', () => {
     expect(Math.abs(studentT(0.99, dof) / t99 - 1)).toBeLessThan(4e-5)
   })
 
+  it.each([
+    [0.6827, 1e-9],
+    [0.95, 1e-9],
+    [0.99, 1e-8],
+    [0.999, 1e-6],
+  ])(
+    'at a coverage of %f keeps to the exact quantile, whole degrees of freedom or not',
+    (coverage, limit) => {
+      for (let dof = 1; dof < 1e5; dof *= 1.031) {
+        expect(Math.abs(studentT(coverage, dof) / tQuantile((1 + coverage) / 2, dof) - 1)).toBeLessThan(limit)
+      }
+    },
+  )
+
+  it('is not wide between one and two degrees of freedom (SciPy 1.17)', () => {
+    expect(studentT(0.95, 1.1)).toBeCloseTo(10.2768012862812, 7)
+    expect(studentT(0.95, 1.5)).toBeCloseTo(6.016663104427928, 7)
+  })
+
   it('comes to the normal distribution where nothing is statistical', () => {
     expect(studentT(0.95, Infinity)).toBeCloseTo(1.959964, 6)
     expect(studentT(0.95, NaN)).toBeCloseTo(1.959964, 6)
@@ -40,5 +60,11 @@ describe('studentT', () => {
 
   it('takes fewer than one degree of freedom as one', () => {
     expect(studentT(0.95, 0.3)).toBeCloseTo(12.7062, 3)
+  })
+
+  it('answers for one coverage after another', () => {
+    const [first, second, again] = [studentT(0.95, 6), studentT(0.99, 6), studentT(0.95, 6)]
+    expect(second).toBeGreaterThan(first)
+    expect(again).toBe(first)
   })
 })
