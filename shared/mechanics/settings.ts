@@ -209,7 +209,7 @@ export const settingDefinitions = {
     effect: 'Wider U, same URepeat',
   },
   driftU: {
-    value: 0.1,
+    value: 0.05,
     unit: 'N/s, standard uncertainty',
     source: `${own}: residual drift of a plate that has warmed up`,
     effect: 'Wider intervals of weight and velocity',

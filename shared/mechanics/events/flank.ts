@@ -1,5 +1,6 @@
 import type { Settings } from '../settings.ts'
 import { estimateNoise, weightedNoise, type Noise } from '../signal/noise.ts'
+import { crossingWeights, flankForce, flankSlope, reachOf, searchFoot, type Flank } from './flank-model.ts'
 
 /** Which way force runs through the threshold: falling at takeoff, rising at touchdown. */
 export type FlankDirection = 'falling' | 'rising'
@@ -14,127 +15,6 @@ export interface Crossing {
   slope: number
 }
 
-/** Force that leaves zero at `foot` as rise·x + bend·x², x samples inside the contact. */
-interface Flank {
-  foot: number
-  rise: number
-  bend: number
-  misfit: number
-}
-
-const fewestFlankSamples = 5
-const weights = new Float64Array(512)
-
-/** Best rise and bend for a given foot, by least squares, the rise not negative; y(u) runs from the flight into contact. */
-function fitAtFoot(y: Float64Array, count: number, foot: number, into: Flank): void {
-  let s2 = 0
-  let s3 = 0
-  let s4 = 0
-  let t1 = 0
-  let t2 = 0
-  let yy = 0
-  for (let u = 0; u < count; u++) {
-    const value = y[u]
-    yy += value * value
-    const x = u - foot
-    if (x <= 0) continue
-    const xx = x * x
-    s2 += xx
-    s3 += xx * x
-    s4 += xx * xx
-    t1 += value * x
-    t2 += value * xx
-  }
-  const determinant = s2 * s4 - s3 * s3
-  let rise = determinant > 1e-9 * s2 * s4 ? (t1 * s4 - t2 * s3) / determinant : s2 > 0 ? t1 / s2 : 0
-  let bend = determinant > 1e-9 * s2 * s4 ? (t2 * s2 - t1 * s3) / determinant : 0
-  if (rise < 0) {
-    rise = 0
-    bend = s4 > 0 ? t2 / s4 : 0
-  }
-  into.foot = foot
-  into.rise = rise
-  into.bend = bend
-  into.misfit = yy - 2 * (rise * t1 + bend * t2) + rise * rise * s2 + 2 * rise * bend * s3 + bend * bend * s4
-}
-
-/** Searches the foot of the flank: every half sample first, then by golden section. */
-function searchFoot(y: Float64Array, count: number, from: number, to: number): Flank {
-  const trial: Flank = { foot: 0, rise: 0, bend: 0, misfit: Infinity }
-  let best = from
-  let least = Infinity
-  for (let foot = from; foot <= to; foot += 0.5) {
-    fitAtFoot(y, count, foot, trial)
-    if (trial.misfit < least) {
-      least = trial.misfit
-      best = foot
-    }
-  }
-  const golden = (Math.sqrt(5) - 1) / 2
-  let a = best - 0.5
-  let b = best + 0.5
-  for (let step = 0; step < 14; step++) {
-    const left = b - golden * (b - a)
-    const right = a + golden * (b - a)
-    fitAtFoot(y, count, left, trial)
-    const atLeft = trial.misfit
-    fitAtFoot(y, count, right, trial)
-    if (atLeft < trial.misfit) b = right
-    else a = left
-  }
-  fitAtFoot(y, count, (a + b) / 2, trial)
-  return trial
-}
-
-/** Distance from the foot at which the flank reaches `force`. */
-function reach(flank: Flank, force: number): number {
-  const root = flank.rise * flank.rise + 4 * flank.bend * force
-  return (2 * force) / (flank.rise + Math.sqrt(Math.max(0, root)))
-}
-
-/** Standard uncertainty of the crossing from the noise of the samples, by the linearised fit. */
-function crossingNoise(flank: Flank, count: number, distance: number, slope: number, noise: Noise): number {
-  const bound = flank.rise === 0
-  const m = new Float64Array(9)
-  for (let u = 0; u < count; u++) {
-    const x = u - flank.foot
-    if (x <= 0) continue
-    const j = [bound ? 0 : x, x * x, -(flank.rise + 2 * flank.bend * x)]
-    for (let r = 0; r < 3; r++) for (let c = 0; c < 3; c++) m[3 * r + c] += j[r] * j[c]
-  }
-  if (bound) m[0] = 1
-  const g = [bound ? 0 : -distance / slope, -(distance * distance) / slope, 1]
-  const solution = solve3(m, g)
-  if (!solution) return Infinity
-  for (let u = 0; u < count; u++) {
-    const x = u - flank.foot
-    weights[u] =
-      x <= 0
-        ? 0
-        : (bound ? 0 : solution[0] * x) +
-          solution[1] * x * x -
-          solution[2] * (flank.rise + 2 * flank.bend * x)
-  }
-  return weightedNoise(weights, count, noise)
-}
-
-/** Solves the symmetric 3 × 3 system; `null` where it is singular. */
-function solve3(m: Float64Array, g: number[]): number[] | null {
-  const [a, b, c, , e, f, , , i] = m
-  const cofactors = [e * i - f * f, c * f - b * i, b * f - c * e]
-  const determinant = a * cofactors[0] + b * cofactors[1] + c * cofactors[2]
-  if (!(Math.abs(determinant) > 1e-14 * Math.abs(a * e * i))) return null
-  const inverse = [cofactors[0], cofactors[1], cofactors[2], a * i - c * c, b * c - a * f, a * e - b * b]
-  return [
-    (inverse[0] * g[0] + inverse[1] * g[1] + inverse[2] * g[2]) / determinant,
-    (inverse[1] * g[0] + inverse[3] * g[1] + inverse[4] * g[2]) / determinant,
-    (inverse[2] * g[0] + inverse[4] * g[1] + inverse[5] * g[2]) / determinant,
-  ]
-}
-
-const window = new Float64Array(512)
-const residuals = new Float64Array(512)
-
 /** Where the samples of a flank lie in a record: u runs from the flight into the contact. */
 interface FlankWindow {
   force: Float64Array
@@ -143,6 +23,32 @@ interface FlankWindow {
   outside: number
   longest: number
 }
+
+/** A fitted flank with the number of samples it was fitted to, and the noise about it inside the contact. */
+interface Fitted {
+  flank: Flank
+  count: number
+  noise: Noise
+  /** Ringing of the plate about the flank, N; 0 where there is none. */
+  ringing: number
+}
+
+const fewestFlankSamples = 5
+const room = 512
+const window = new Float64Array(room)
+const weights = new Float64Array(room)
+const residuals = new Float64Array(room)
+
+/** Residuals beyond so many times the plate's noise are no noise of the plate but misfit or ringing. */
+const beyondNoise = 1.5
+/** A third power is taken where it leaves less than this part of the second power's squared residuals. */
+const worthThirdPower = 0.2
+
+/**
+ * Ringing begins with the contact and is no noise that averages out: the crossing may be wrong by this part of the way in
+ * which the flank rises by the ringing's root mean square.
+ */
+const ringingShare = 1
 
 /** Fills the window with the samples around the edge, as far into the contact as `level` asks; `null` past the record. */
 function fillWindow(
@@ -163,15 +69,39 @@ function fillWindow(
   return count
 }
 
-/** Noise about the fitted flank: the plate's own, or what the fit leaves over where that is more (ringing, misfit). */
+/** Noise about the flank inside the contact: the plate's own, or what the fit leaves over where that is more. */
 function noiseAbout(flank: Flank, count: number, noise: Noise): Noise {
-  const rms = Math.sqrt(Math.max(0, flank.misfit) / Math.max(1, count - 3))
-  if (rms <= noise.sd) return noise
-  for (let u = 0; u < count; u++) {
-    const x = Math.max(0, u - flank.foot)
-    residuals[u] = window[u] - x * (flank.rise + flank.bend * x)
+  const first = Math.max(0, Math.ceil(flank.foot))
+  let squares = 0
+  for (let u = first; u < count; u++) {
+    residuals[u] = window[u] - flankForce(flank, u - flank.foot)
+    squares += residuals[u] * residuals[u]
   }
-  return { ...estimateNoise(residuals, 0, count), sd: rms }
+  const rms = Math.sqrt(squares / Math.max(1, count - first - 2))
+  return rms > noise.sd ? { ...estimateNoise(residuals, first, count), sd: rms } : noise
+}
+
+function fit(place: FlankWindow, level: number, highest: number, noise: Noise, dt: number): Fitted | null {
+  const count = fillWindow(place, level)
+  if (count === null) return null
+  const { outside } = place
+  const earliest = outside - Math.min(outside, Math.floor(0.01 / dt) + 2)
+  const flank = searchFoot(window, count, earliest, outside + 2, highest)
+  return { flank, count, noise: noiseAbout(flank, count, noise), ringing: 0 }
+}
+
+/**
+ * A rise with slope and bend; where that leaves more than noise, a third power if it explains the rest, else ringing,
+ * and a longer stretch of the flank is taken so that it averages out.
+ */
+function bestFit(place: FlankWindow, noise: Noise, dt: number, settings: Settings): Fitted | null {
+  const level = (sd: number) => settings.eventForceN + settings.flankNoise * sd
+  const simple = fit(place, level(noise.sd), 2, noise, dt)
+  if (!simple || simple.noise.sd <= beyondNoise * noise.sd) return simple
+  const bent = fit(place, level(noise.sd), 3, noise, dt)
+  if (bent && bent.flank.misfit < worthThirdPower * simple.flank.misfit) return bent
+  const long = fit(place, level(simple.noise.sd), 2, noise, dt) ?? simple
+  return { ...long, ringing: long.noise.sd }
 }
 
 /** The crossing by a straight line through the samples on both sides of the edge, good to about a sample. */
@@ -182,14 +112,11 @@ function straightCrossing({ force, firstContact, step }: FlankWindow, target: nu
   return { position: firstContact - step * back, positionU: 1, slope: step * Math.max(rise, 1e-3) }
 }
 
-/** Misfit beyond which the fit is made anew over a longer flank, so that ringing averages out. */
-const ringing = 1.5
-
 /**
  * Places the crossing of the event force between samples. `edge` is the first sample of the flight (falling) or of
  * the contact (rising) at the noise-adapted threshold. The model is what physics asks for: nothing at all in flight,
- * and from the foot of the flank on a force that rises with a slope and a bend; its foot, slope and bend are fitted
- * by least squares to the samples around. Force must be zeroed. `null` where the flank leaves the record.
+ * and from the foot of the flank on a force that rises smoothly; foot and rise are fitted by least squares to the
+ * samples around. Force must be zeroed. `null` where the flank leaves the record.
  */
 export function fitFlank(
   force: Float64Array,
@@ -207,28 +134,18 @@ export function fitFlank(
     longest: Math.min(256, Math.max(fewestFlankSamples, Math.round(settings.flankLimitS / dt))),
   }
   const { outside, step } = place
-  const target = settings.eventForceN
-  const fit = (sd: number) => {
-    const count = fillWindow(place, target + settings.flankNoise * sd)
-    if (count === null) return null
-    const earliest = outside - Math.min(outside, 0.01 / dt + 2)
-    return { count, flank: searchFoot(window, count, earliest, outside + 2) }
-  }
-  let fitted = fit(noise.sd)
+  const fitted = bestFit(place, noise, dt, settings)
   if (!fitted) return null
-  let about = noiseAbout(fitted.flank, fitted.count, noise)
-  if (about.sd > ringing * noise.sd) {
-    fitted = fit(about.sd) ?? fitted
-    about = noiseAbout(fitted.flank, fitted.count, noise)
-  }
   const { flank, count } = fitted
-  const distance = reach(flank, target)
-  const slope = flank.rise + 2 * flank.bend * distance
-  if (!(slope > 0) || !Number.isFinite(distance)) return straightCrossing(place, target)
-  const positionU = crossingNoise(flank, count, distance, slope, about)
+  const distance = reachOf(flank, settings.eventForceN, count)
+  const slope = distance === null ? 0 : flankSlope(flank, distance)
+  if (distance === null || !(slope > 0)) return straightCrossing(place, settings.eventForceN)
+  const known = crossingWeights(flank, count, distance, weights)
+  const fromNoise = known ? weightedNoise(weights, count, fitted.noise) : 1
+  const lifted = reachOf(flank, settings.eventForceN + fitted.ringing, count) ?? count
   return {
     position: place.firstContact + step * (flank.foot + distance - outside),
-    positionU: Number.isFinite(positionU) ? positionU : 1,
+    positionU: Math.hypot(fromNoise, ringingShare * (lifted - distance)),
     slope: step * slope,
   }
 }

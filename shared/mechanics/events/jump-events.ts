@@ -82,7 +82,7 @@ function placeCrossing(search: JumpSearch, name: 'takeoff' | 'touchdown'): Cross
 function weighBeforeOnset(search: JumpSearch, takeoff: number): { weighing: Weighing; onset: Onset } | null {
   const { signal, sums, zero, start, gravity, settings } = search
   const attempt = (to: number) => {
-    const weighing = weigh(signal.total, sums, { from: start, to }, gravity, signal.dt, settings)
+    const weighing = weigh(signal.total, sums, { from: start, to }, gravity, zero.total, signal.dt, settings)
     if (!weighing || !(weighing.systemWeight > settings.smallestLoadN)) return null
     const limits = { earliest: start, takeoff: Math.floor(takeoff) }
     return {

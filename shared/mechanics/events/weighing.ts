@@ -1,5 +1,5 @@
 import type { Settings } from '../settings.ts'
-import { effectiveSamples, estimateNoise } from '../signal/noise.ts'
+import { effectiveSamples, estimateNoise, type Noise } from '../signal/noise.ts'
 import { meanOver, type RunningSums } from '../signal/running-mean.ts'
 import type { Stretch } from './unloaded.ts'
 
@@ -14,7 +14,7 @@ export interface Weighing {
   /** Standard error of the mean from noise, N, and its degrees of freedom. */
   noiseU: number
   noiseDof: number
-  /** Standard uncertainty from slow sway, N, and its degrees of freedom; system mass still to be known where NaN. */
+  /** Standard uncertainty that slow sway adds, N, and its degrees of freedom. */
   swayU: number
   swayDof: number
 }
@@ -118,6 +118,7 @@ export function weigh(
   sums: RunningSums,
   limits: Stretch,
   gravity: number,
+  plateNoise: Noise,
   dt: number,
   settings: Settings,
 ): Weighing | null {
@@ -135,8 +136,11 @@ export function weigh(
   const noiseU = noise.sd * Math.sqrt(noise.inflation / blocksInWindow)
   const noiseDof = Math.max(1, effectiveSamples(noise) - 1)
 
-  const mass = systemWeight / gravity
-  let swayU = (mass * settings.swayVelocityChange) / (width * dt)
+  // What stance wavers more than the empty plates is the body's own: at least what a slow sway would add.
+  const plateU = plateNoise.sd * Math.sqrt(plateNoise.inflation / width)
+  const bodyVariance = Math.max(0, noiseU * noiseU - plateU * plateU)
+  const slowest = ((systemWeight / gravity) * settings.swayVelocityChange) / (width * dt)
+  let swayU = Math.sqrt(Math.max(0, slowest * slowest - bodyVariance))
   let swayDof = Infinity
   if ((stance.to - stance.from) * dt >= settings.swayFromMeansS) {
     const means = blockMeans(sums, stance, width)

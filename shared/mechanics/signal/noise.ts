@@ -23,7 +23,6 @@ export function estimateNoise(force: Float64Array, from: number, to: number): No
   const mean = samples > 0 ? sum / samples : 0
   let squares = 0
   for (let i = from; i < to; i++) squares += (force[i] - mean) * (force[i] - mean)
-  const sd = samples > 1 ? Math.sqrt(squares / (samples - 1)) : 0
   const lags = Math.min(longestLag, samples >> 2)
   const correlation = new Float64Array(Math.max(1, lags))
   correlation[0] = 1
@@ -37,6 +36,11 @@ export function estimateNoise(force: Float64Array, from: number, to: number): No
     correlation[lag] = rho
     inflation += 2 * rho
   }
+  // Correlated samples hug their own mean, which hides a part 1/n_eff of their variance and of every ρ;
+  // the sum of the ρ is left as published, its truncation to positive ones makes up for it.
+  const hidden = Math.min(0.5, inflation / Math.max(1, samples))
+  const sd = samples > 1 ? Math.sqrt(squares / (samples * (1 - hidden))) : 0
+  for (let k = 1; k < lag; k++) correlation[k] += hidden * (1 - correlation[k])
   return { mean, sd, correlation: correlation.subarray(0, lag), inflation, samples }
 }
 
