@@ -7,49 +7,51 @@ import { eventChannel, type Notice } from './notify.ts'
 
 const NoticeSchema = ClubEvent.extend({ clubId: Id, audience: z.enum(['staff', 'everybody']) })
 
-/** Pause before listening again after the connection was lost. */
-const againMs = 1000
-
 export interface Listener {
   onNotice(notice: Notice): void
-  /** Notices may have been missed: the connection was lost, and is there again. */
-  onGap(): void
+  /** The connection is gone: notices may be missed from now on. */
+  onLost(): void
+}
+
+interface Connection {
+  client: pg.Client
+  ready: Promise<unknown>
 }
 
 /**
  * What changed in any club, by one LISTEN connection a process, outside the pool. It is open while somebody
- * listens, and comes back by itself when it is lost.
+ * listens. When it is lost, so is everybody who listened: their browsers come again and open the next one, and
+ * refetch what they show.
  */
 export function createClubEvents({ config, log }: Pick<Deps, 'config' | 'log'>) {
   const listeners = new Set<Listener>()
-  let client: pg.Client | null = null
+  let connection: Connection | null = null
 
-  async function open(isAgain: boolean): Promise<void> {
-    const opening = new pg.Client({
+  function connect(): Connection {
+    const client = new pg.Client({
       connectionString: config.databaseUrl,
       application_name: 'underfoot-events',
       keepAlive: true,
     })
-    client = opening
-    opening.on('error', () => undefined)
-    opening.on('end', () => lost(opening))
-    opening.on('notification', ({ payload }) => tell(payload))
-    try {
-      await opening.connect()
-      await opening.query(`listen ${eventChannel}`)
-      if (isAgain) for (const listener of listeners) listener.onGap()
-    } catch (error) {
+    const opened = { client, ready: client.connect().then(() => client.query(`listen ${eventChannel}`)) }
+    client.on('notification', ({ payload }) => tell(payload))
+    client.on('error', () => undefined).on('end', () => lose(opened))
+    opened.ready.catch((error: unknown) => {
       log.warn({ err: error }, 'cannot listen for events')
-      lost(opening)
-    }
+      lose(opened)
+    })
+    return opened
   }
 
-  function lost(which: pg.Client): void {
-    if (client !== which) return
-    client = null
-    which.end().catch(() => undefined)
-    if (listeners.size > 0)
-      setTimeout(() => listeners.size > 0 && !client && void open(true), againMs).unref()
+  function lose(lost: Connection): void {
+    if (connection !== lost) return
+    close()
+    for (const listener of [...listeners]) listener.onLost()
+  }
+
+  function close(): void {
+    connection?.client.end().catch(() => undefined)
+    connection = null
   }
 
   function tell(payload: string | undefined): void {
@@ -58,17 +60,15 @@ export function createClubEvents({ config, log }: Pick<Deps, 'config' | 'log'>) 
   }
 
   return {
-    /** Listens until the returned function is called. */
-    listen(listener: Listener): () => void {
+    /** Listens until `stop`; from `ready` on nothing is missed. */
+    listen(listener: Listener): { ready: Promise<unknown>; stop: () => void } {
       listeners.add(listener)
-      if (!client) void open(false)
-      return () => {
+      connection ??= connect()
+      const stop = () => {
         listeners.delete(listener)
-        const unused = listeners.size === 0 ? client : null
-        if (!unused) return
-        client = null
-        unused.end().catch(() => undefined)
+        if (listeners.size === 0) close()
       }
+      return { ready: connection.ready, stop }
     },
   }
 }

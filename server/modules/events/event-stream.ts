@@ -1,4 +1,4 @@
-import type { Request, Response } from 'express'
+import type { Response } from 'express'
 import type { ClubEvent } from '../../../shared/contracts/events.ts'
 import type { Caller } from '../../http/caller.ts'
 import type { ClubEvents } from './club-events.ts'
@@ -11,14 +11,12 @@ const heartbeatMs = 20_000
 /** A stream ends after this time and the browser asks anew: whoever lost their place hears no more. */
 const longestMs = 10 * 60_000
 
-/** Answers with server-sent events: ids of what changed in the caller's club, for as long as the browser listens. */
-export function streamEvents(events: ClubEvents, ctx: Caller, req: Request, res: Response): void {
-  res.writeHead(200, {
-    'Content-Type': 'text/event-stream',
-    // `no-transform` keeps the compression, which would hold events back, away.
-    'Cache-Control': 'no-store, no-transform',
-    'X-Accel-Buffering': 'no',
-  })
+/**
+ * Answers with server-sent events: ids of what changed in the caller's club, for as long as the browser listens.
+ * The answer begins when the server hears: what the browser reads after that beginning is never older than an
+ * event that it missed.
+ */
+export async function streamEvents(events: ClubEvents, ctx: Caller, res: Response): Promise<void> {
   const gathered = new Map<string, ClubEvent>()
   let gathering: NodeJS.Timeout | undefined
   const flush = () => {
@@ -30,21 +28,33 @@ export function streamEvents(events: ClubEvents, ctx: Caller, req: Request, res:
     gathered.set(`${kind}/${id}`, { kind, id })
     gathering ??= setTimeout(flush, gatherMs)
   }
-  const stopListening = events.listen({
+  const { ready, stop } = events.listen({
     onNotice: (notice) => mayHear(ctx, notice) && add(notice),
-    // After a gap the browser is sent to ask anew, and refetches everything on its screen.
-    onGap: () => res.end(),
+    // The browser asks anew, and refetches everything on its screen.
+    onLost: () => res.headersSent && res.end(),
+  })
+  res.on('close', () => {
+    stop()
+    clearTimeout(gathering)
+  })
+  await ready
+  begin(res)
+}
+
+function begin(res: Response): void {
+  res.writeHead(200, {
+    'Content-Type': 'text/event-stream',
+    // `no-transform` keeps the compression, which would hold events back, away.
+    'Cache-Control': 'no-store, no-transform',
+    'X-Accel-Buffering': 'no',
   })
   res.write('retry: 1000\n\n')
   const heartbeat = setInterval(() => res.write(':\n\n'), heartbeatMs)
   const longest = setTimeout(() => res.end(), longestMs)
   res.on('close', () => {
-    stopListening()
     clearInterval(heartbeat)
     clearTimeout(longest)
-    clearTimeout(gathering)
   })
-  req.socket.setNoDelay(true)
 }
 
 const mayHear = (ctx: Caller, { clubId, audience }: Notice) =>

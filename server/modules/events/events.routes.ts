@@ -7,10 +7,10 @@ import { streamEvents } from './event-stream.ts'
 const eventsOf = new WeakMap<object, ClubEvents>()
 
 export const eventRoutes: Route[] = [
-  implement(getEvents, ({ deps, ctx, req, res }) => {
+  implement(getEvents, async ({ deps, ctx, res }) => {
     const events = eventsOf.get(deps) ?? createClubEvents(deps)
     eventsOf.set(deps, events)
-    streamEvents(events, ctx, req, res)
-    return Promise.resolve(handled)
+    await streamEvents(events, ctx, res)
+    return handled
   }),
 ]
