@@ -92,7 +92,12 @@ export function SelectField({
   )
 }
 
-export function Tick({ label, hint, className, ...input }: FieldWords & ComponentProps<'input'>) {
+export function Tick({
+  label,
+  hint,
+  className,
+  ...input
+}: Omit<FieldWords, 'error'> & ComponentProps<'input'>) {
   const id = useId()
   return (
     <div className={classNames('flex items-start gap-2', className)}>

@@ -8,7 +8,7 @@ export function ListBar({ children, count }: { children: ReactNode; count: strin
   return (
     <div className="no-print grid grid-cols-2 items-end gap-x-4 gap-y-3 pb-4 *:first:col-span-2 sm:flex sm:flex-wrap">
       {children}
-      <p role="status" className="ms-auto text-ink-2">
+      <p role="status" className="ms-auto text-ink-2 max-sm:col-start-2">
         {count}
       </p>
     </div>

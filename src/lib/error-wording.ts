@@ -53,7 +53,7 @@ export const errorWording: Record<AnyErrorCode, ErrorWording> = {
   },
   'token-invalid': {
     title: 'This link no longer works',
-    advice: 'Ask for a new one.',
+    advice: 'A new link for a password comes from the sign-in page, a new invitation from your club’s admin.',
   },
   'email-taken': {
     title: 'Somebody of the club has this e-mail address already',
