@@ -44,9 +44,8 @@ export const landingColumns: Column<HighLanding>[] = [
     label: 'Trial',
     cell: (landing) => (
       <Link to={pathOf.trial(landing.trialId)}>
-        Open the trial
+        Open the trial{' '}
         <span className="sr-only">
-          {' '}
           of {landing.athlete.name}, {formatDateShort(landing.date)}
         </span>
       </Link>

@@ -34,8 +34,7 @@ function SessionLine({ result }: { result: ResultPoint }) {
       <p className="flex flex-wrap gap-x-4">
         {result.trialIds.map((trialId, i) => (
           <Link key={trialId} to={pathOf.trial(trialId)} className="py-1.5">
-            Jump {i + 1}
-            <span className="sr-only"> of {date}</span>
+            Jump {i + 1} <span className="sr-only">of {date}</span>
           </Link>
         ))}
       </p>

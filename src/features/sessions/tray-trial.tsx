@@ -46,7 +46,7 @@ export function TrayTrial({ trial, athletes }: { trial: SheetTrial; athletes: re
             ))}
           </select>
           <Button type="submit" busy={busy} disabled={chosen === ''}>
-            Put<span className="sr-only"> {fileName} on this athlete</span>
+            Put <span className="sr-only">{fileName} on this athlete</span>
           </Button>
         </span>
       </form>

@@ -57,8 +57,7 @@ function SideRow({ metricKey, sides, struck }: { metricKey: MetricKey; sides: Si
   return (
     <tr className={struck ? 'text-ink-2 line-through' : undefined}>
       <th scope="row">
-        {name}
-        {struck && <span className="sr-only"> (withheld by a failed check)</span>}
+        {name} {struck && <span className="sr-only">(withheld by a failed check)</span>}
       </th>
       <td className="figure">
         <FigureText metricKey={metricKey} figure={sides.left[metricKey]!} unit />

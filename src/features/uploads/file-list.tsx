@@ -49,13 +49,12 @@ function FileRow({ row, queue }: { row: FileProgress; queue: UploadQueue }) {
       )}
       {row.canRetry && (
         <Button look="word" onClick={() => queue.retry(row.key)}>
-          Try again<span className="sr-only"> {row.fileName}</span>
+          Try again <span className="sr-only">{row.fileName}</span>
         </Button>
       )}
       {row.canRemove && (
         <Button look="word" onClick={() => queue.remove(row.key)}>
-          {row.problem ? 'Dismiss' : 'Cancel'}
-          <span className="sr-only"> {row.fileName}</span>
+          {row.problem ? 'Dismiss' : 'Cancel'} <span className="sr-only">{row.fileName}</span>
         </Button>
       )}
     </li>

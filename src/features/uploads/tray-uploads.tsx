@@ -78,7 +78,7 @@ function Place({ error }: { error: NonNullable<Upload['error']> }) {
 function Original({ upload }: { upload: Upload }) {
   return (
     <a href={originalAddress(upload.id)} download>
-      Download the original<span className="sr-only"> of {upload.fileName}</span>
+      Download the original <span className="sr-only">of {upload.fileName}</span>
     </a>
   )
 }

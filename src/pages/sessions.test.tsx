@@ -1,0 +1,159 @@
+import { screen, waitFor, within } from '@testing-library/react'
+import { describe, expect, test } from 'vitest'
+import { changeSession, createSession, getSession, listSessions } from '../../shared/contracts/sessions.ts'
+import { listSquads } from '../../shared/contracts/squads.ts'
+import { expectNoAxeFaults } from '../../tests/setup/axe.ts'
+import { answer, refuse } from '../../tests/setup/msw/answer.ts'
+import { aSquad } from '../../tests/setup/msw/club-rows.ts'
+import { idOf } from '../../tests/setup/msw/ids.ts'
+import { aMe } from '../../tests/setup/msw/me.ts'
+import { aSession, aSheet } from '../../tests/setup/msw/measured.ts'
+import { server } from '../../tests/setup/msw/server.ts'
+import { pageTitled, renderApp } from '../../tests/setup/render-app.tsx'
+
+const squads = [
+  aSquad(1, { name: 'Senior squad', athleteIds: [idOf('athlete', 1)] }),
+  aSquad(2, { name: 'Old', archived: true }),
+]
+
+/** A server with these sessions, twenty a page. */
+function serve(titles: string[]) {
+  const asked: unknown[] = []
+  const kept = { sessions: titles.map((title, i) => aSession({ id: idOf('session', i + 1), title })) }
+  server.use(
+    answer(listSquads, () => ({ squads })),
+    answer(listSessions, ({ query }) => {
+      asked.push(query)
+      const found = kept.sessions.filter(({ title }) => title.includes(query.search ?? ''))
+      const pages = Math.max(1, Math.ceil(found.length / 20))
+      const sessions = found.slice((query.page - 1) * 20, query.page * 20)
+      return { sessions, page: query.page, pages, total: found.length }
+    }),
+  )
+  return { asked, kept }
+}
+
+describe('the list of sessions', () => {
+  test('shows each with its trials, what waits in the Tray and whether it is published', async () => {
+    const { kept } = serve(['November jumps', 'October jumps'])
+    kept.sessions[0] = { ...kept.sessions[0]!, inTray: 2 }
+    kept.sessions[1] = { ...kept.sessions[1]!, publishedAt: '2026-10-12T17:00:00.000Z' }
+    renderApp('/sessions', aMe(['coach']))
+    const first = await screen.findByRole('row', { name: /November jumps/ })
+    expect(first).toHaveTextContent('2 in the Tray')
+    expect(first).toHaveTextContent('not published')
+    expect(screen.getByRole('row', { name: /October jumps/ })).not.toHaveTextContent('not published')
+    await expectNoAxeFaults()
+  })
+
+  test('search, squad and page are held in the address and asked of the server', async () => {
+    const { asked } = serve(Array.from({ length: 25 }, (_, i) => `Jumps ${i + 1}`))
+    const { user, address } = renderApp('/sessions', aMe(['coach']))
+    await user.click(await screen.findByRole('button', { name: 'Older' }))
+    expect(await screen.findByText('Page 2 of 2')).toBeVisible()
+    expect(address()).toBe('/sessions?page=2')
+    await user.selectOptions(screen.getByLabelText('Squad'), 'Senior squad')
+    await user.type(screen.getByLabelText('Search title or place'), 'Jumps 25')
+    await waitFor(() => expect(screen.getAllByRole('row')).toHaveLength(2))
+    expect(address()).toBe(`/sessions?squad=${idOf('squad', 1)}&search=Jumps+25`)
+    expect(asked.at(-1)).toEqual({ search: 'Jumps 25', squadId: idOf('squad', 1), page: 1 })
+  })
+
+  test('a search that finds nothing says so and offers all of them again', async () => {
+    serve(['November jumps'])
+    const { user } = renderApp('/sessions?search=ski', aMe(['coach']))
+    expect(await screen.findByText('No session matches')).toBeVisible()
+    await user.click(screen.getByRole('button', { name: 'Show all sessions' }))
+    expect(await screen.findByRole('link', { name: 'November jumps' })).toBeVisible()
+  })
+
+  test('a club without sessions is told what to do first', async () => {
+    serve([])
+    renderApp('/sessions', aMe(['coach']))
+    expect(await screen.findByText('No sessions yet')).toBeVisible()
+    await expectNoAxeFaults()
+  })
+
+  test('a failure offers a retry', async () => {
+    serve(['November jumps'])
+    server.use(refuse(listSessions, 'internal', 500, 'The list could not be read.'))
+    renderApp('/sessions', aMe(['coach']))
+    expect(await screen.findByText('The list could not be read.')).toBeVisible()
+    expect(screen.getByRole('button', { name: 'Try again' })).toBeVisible()
+  })
+})
+
+describe('a new session', () => {
+  test('is made for the squads chosen and opens as its sheet; the list has it', async () => {
+    const { kept } = serve([])
+    server.use(
+      answer(createSession, ({ body }) => {
+        expect(body).toMatchObject({
+          title: 'November jumps',
+          place: null,
+          note: null,
+          squadIds: [idOf('squad', 1)],
+        })
+        kept.sessions = [aSession({ title: body.title, date: body.date })]
+        return kept.sessions[0]!
+      }),
+      answer(getSession, () => aSheet({ trials: [], uploads: [] })),
+    )
+    const { user, address, router } = renderApp('/sessions', aMe(['coach']))
+    await screen.findByText('No sessions yet')
+    await router.navigate('/sessions/new')
+    await pageTitled('New session')
+    expect(screen.queryByLabelText('Old')).not.toBeInTheDocument()
+    await user.click(await screen.findByRole('button', { name: 'Make the session' }))
+    expect(await screen.findByText('Give the session a title')).toBeVisible()
+    expect(screen.getByText('Choose at least one squad')).toBeVisible()
+    await expectNoAxeFaults()
+    await user.type(screen.getByLabelText('Title'), 'November jumps')
+    await user.click(screen.getByLabelText('Senior squad'))
+    await user.click(screen.getByRole('button', { name: 'Make the session' }))
+    await pageTitled('November jumps')
+    expect(address()).toBe(`/sessions/${idOf('session', 1)}`)
+    await router.navigate('/sessions')
+    expect(await screen.findByRole('link', { name: 'November jumps' })).toBeVisible()
+  })
+
+  test('what the server refuses stands at the form, and what was typed stays', async () => {
+    serve([])
+    server.use(
+      refuse(createSession, 'invalid-request', 400, 'Some of it cannot be used.', {
+        title: 'Too odd a title',
+      }),
+    )
+    const { user } = renderApp('/sessions/new', aMe(['coach']))
+    await user.type(await screen.findByLabelText('Title'), 'Odd')
+    await user.click(screen.getByLabelText('Senior squad'))
+    await user.click(screen.getByRole('button', { name: 'Make the session' }))
+    expect(await screen.findByText('Too odd a title')).toBeVisible()
+    expect(screen.getByLabelText('Title')).toHaveValue('Odd')
+  })
+})
+
+describe('editing a session', () => {
+  test('saves title, date, place and note; sheet and list are fresh', async () => {
+    const { kept } = serve(['November jumps'])
+    let sheet = aSheet()
+    server.use(
+      answer(getSession, () => sheet),
+      answer(changeSession, ({ body: { version, ...change } }) => {
+        expect(version).toBe(1)
+        sheet = { ...sheet, session: { ...sheet.session, ...change, version: 2 } }
+        kept.sessions = [aSession({ title: change.title, version: 2 })]
+        return kept.sessions[0]!
+      }),
+    )
+    const { user, router } = renderApp(`/sessions/${idOf('session', 1)}`, aMe(['coach']))
+    await user.click(await screen.findByRole('button', { name: 'Edit' }))
+    const dialog = screen.getByRole('dialog', { name: 'Edit the session' })
+    await user.clear(within(dialog).getByLabelText('Title'))
+    await user.type(within(dialog).getByLabelText('Title'), 'Winter jumps')
+    await user.click(within(dialog).getByRole('button', { name: 'Save' }))
+    await pageTitled('Winter jumps')
+    await router.navigate('/sessions')
+    expect(await screen.findByRole('link', { name: 'Winter jumps' })).toBeVisible()
+  })
+})
