@@ -112,6 +112,21 @@ function straightCrossing({ force, firstContact, step }: FlankWindow, target: nu
   return { position: firstContact - step * back, positionU: 1, slope: step * Math.max(rise, 1e-3) }
 }
 
+/** A step: within one interval force leaps by this many times the event force, and by thrice what it does next. */
+const stepInEventForces = 20
+
+/** Force that leaps between two samples (a landing on a rigid stop, a clamped record) crosses anywhere between them. */
+function stepCrossing({ force, firstContact, step }: FlankWindow, eventForce: number): Crossing | null {
+  const outside = firstContact - step
+  const next = firstContact + step
+  if (outside < 0 || next < 0 || outside >= force.length || next >= force.length) return null
+  const leap = force[firstContact] - force[outside]
+  const isStep =
+    leap > stepInEventForces * eventForce && leap > 3 * Math.abs(force[next] - force[firstContact])
+  if (!isStep) return null
+  return { position: firstContact - step / 2, positionU: 1 / Math.sqrt(12), slope: step * leap }
+}
+
 /**
  * Places the crossing of the event force between samples. `edge` is the first sample of the flight (falling) or of
  * the contact (rising) at the noise-adapted threshold. The model is what physics asks for: nothing at all in flight,
@@ -134,6 +149,8 @@ export function fitFlank(
     longest: Math.min(256, Math.max(fewestFlankSamples, Math.round(settings.flankLimitS / dt))),
   }
   const { outside, step } = place
+  const leap = stepCrossing(place, settings.eventForceN)
+  if (leap) return leap
   const fitted = bestFit(place, noise, dt, settings)
   if (!fitted) return null
   const { flank, count } = fitted
