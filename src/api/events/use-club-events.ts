@@ -5,6 +5,7 @@ import { athleteKeys } from '../athletes/athlete-keys.ts'
 import { landingWatchKeys } from '../landing-watch/list-high-landings.ts'
 import { resultKeys } from '../results/get-my-results.ts'
 import { sessionKeys } from '../sessions/session-keys.ts'
+import { squadKeys } from '../squads/squad-keys.ts'
 import { trialKeys } from '../trials/trial-keys.ts'
 import { coalesce } from './coalesce.ts'
 import { openStream, type StreamHandlers } from './open-stream.ts'
@@ -40,8 +41,9 @@ export function clubEventHandlers(queryClient: QueryClient): StreamHandlers {
   const refresh = (...keys: (readonly unknown[])[]) =>
     coalesce(() => Promise.all(keys.map((queryKey) => queryClient.invalidateQueries({ queryKey }))), rest)
   const refreshes: Record<ClubEvent['kind'], () => Promise<void>> = {
-    session: refresh(sessionKeys.all, trialKeys.all, landingWatchKeys.all, resultKeys.all),
-    athletes: refresh(athleteKeys.all, sessionKeys.all),
+    session: refresh(sessionKeys.all, trialKeys.all, landingWatchKeys.all, resultKeys.all, athleteKeys.all),
+    // Names, squads and the club's limits: all that shows athletes or holds them against a limit.
+    athletes: refresh(athleteKeys.all, sessionKeys.all, trialKeys.all, landingWatchKeys.all, squadKeys.all),
   }
   return {
     onOpen: () => {
