@@ -20,7 +20,9 @@ export async function ensurePackages() {
   if (packagesMatchLock()) return
   step('Installing the packages of package-lock.json (about a minute)')
   // Development packages are needed to build the client, so NODE_ENV=production must not drop them.
-  const { code, output } = await run('npm', ['ci', '--include=dev', '--no-audit', '--no-fund'])
+  // None of them needs a script of its own to run, and so none gets to.
+  const flags = ['--include=dev', '--ignore-scripts', '--no-audit', '--no-fund']
+  const { code, output } = await run('npm', ['ci', ...flags])
   if (code !== 0)
     throw new SetUpProblem(`The packages could not be installed. npm says:\n${lastLines(output)}`)
 }
@@ -34,16 +36,16 @@ export function packagesMatchLock(folder = checkout) {
   const installed = readPackages(join(folder, 'node_modules/.package-lock.json'))
   if (!wanted) throw new SetUpProblem('package-lock.json is missing or damaged: check it out again.')
   if (!installed) return false
-  return Object.entries(wanted).every(([path, { version, integrity, optional }]) => {
-    if (path === '') return true
+  return Object.entries(wanted).every(([path, { version, integrity, optional, extraneous }]) => {
     const found = installed[path]
-    return found ? found.version === version && found.integrity === integrity : optional === true
+    if (path === '' || (!found && (optional || extraneous))) return true
+    return found?.version === version && found?.integrity === integrity
   })
 }
 
 /**
  * @param {string} file
- * @returns {Record<string, { version?: string, integrity?: string, optional?: boolean }> | undefined}
+ * @returns {Record<string, { version?: string, integrity?: string, optional?: boolean, extraneous?: boolean }> | undefined}
  */
 function readPackages(file) {
   try {

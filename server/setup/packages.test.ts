@@ -7,6 +7,7 @@ import { packagesMatchLock } from './packages.mjs'
 const wanted = {
   '': { name: 'underfoot' },
   'node_modules/a': { version: '1.0.0', integrity: 'sha512-a' },
+  'node_modules/left-over': { version: '3.0.0', integrity: 'sha512-c', extraneous: true },
   'node_modules/only-elsewhere': { version: '2.0.0', integrity: 'sha512-b', optional: true },
 }
 let folder: string
@@ -26,7 +27,7 @@ describe('installed packages', () => {
     expect(packagesMatchLock(folder)).toBe(false)
   })
 
-  it('are current where each of the lock file is there, but for those of other platforms', () => {
+  it('are current where each of the lock file is there, but for those of other platforms and those nothing asks for', () => {
     install({ 'node_modules/a': wanted['node_modules/a'] })
     expect(packagesMatchLock(folder)).toBe(true)
   })

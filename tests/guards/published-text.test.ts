@@ -35,6 +35,10 @@ describe('what the project publishes', () => {
     expect(unlocked.map(([path]) => path)).toEqual([])
   })
 
+  it('locks no package that nothing asks for', () => {
+    expect(linesThatMatch(['package-lock.json'], /"extraneous"/)).toEqual([])
+  })
+
   it('pins every package to one version, and the lock file agrees', () => {
     const read = (file: string) => JSON.parse(readFileSync(file, 'utf8')) as Manifest
     const { dependencies, devDependencies } = read('package.json')
