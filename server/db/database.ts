@@ -24,6 +24,8 @@ export interface Database {
   pool: pg.Pool
   /** A short transaction on one club's rows. Database statements only: no hash, no network call, no stream inside. */
   inClub<T>(ctx: ClubContext, work: (tx: Tx) => Promise<T>): Promise<T>
+  /** The same for reading: all its statements see the club as it was at one moment. */
+  atOneMoment<T>(ctx: ClubContext, work: (tx: Tx) => Promise<T>): Promise<T>
   /** A short transaction on people, clubs, invitations and mail, that sees no club data. */
   inIdentity<T>(work: (tx: Tx) => Promise<T>): Promise<T>
   close(): Promise<void>
@@ -48,13 +50,17 @@ export function createDatabase(options: DatabaseOptions, onIdleError: (error: Er
   })
   pool.on('error', onIdleError)
   const database = drizzle(pool)
+  const asClub =
+    <T>(ctx: ClubContext, work: (tx: Tx) => Promise<T>) =>
+    async (tx: Tx) => {
+      await setClub(tx, ctx)
+      return work(tx)
+    }
   return {
     pool,
-    inClub: (ctx, work) =>
-      database.transaction(async (tx) => {
-        await setClub(tx, ctx)
-        return work(tx)
-      }),
+    inClub: (ctx, work) => database.transaction(asClub(ctx, work)),
+    atOneMoment: (ctx, work) =>
+      database.transaction(asClub(ctx, work), { isolationLevel: 'repeatable read', accessMode: 'read only' }),
     inIdentity: (work) =>
       database.transaction(async (tx) => {
         await tx.execute(sql`set local role underfoot_identity`)

@@ -11,7 +11,10 @@ export interface RunOptions {
   maintenanceSeconds: number
 }
 
-const usual: RunOptions = { atOnce: 8, idleMs: 150, maintenanceSeconds }
+/** Pause after the queue could not be read, so that a database that is away does not fill the log. */
+const afterFaultMs = 1000
+
+const usual: RunOptions = { atOnce: 8, idleMs: 200, maintenanceSeconds }
 
 export interface RunningJobs {
   /** Jobs that ended well, and that failed, since the start. */
@@ -73,7 +76,7 @@ async function work({ boss, deps, job, settings, counts, signal }: Work): Promis
     const fetched = await fetchJobs(boss, job.queue, settings.atOnce - atWork.size).catch(
       (error: unknown) => {
         deps.log.error({ err: error, queue: job.queue }, 'the queue cannot be read')
-        return []
+        return pause(afterFaultMs, [])
       },
     )
     for (const one of fetched) {

@@ -7,6 +7,8 @@ import {
   type SessionSummary,
 } from '../../shared/contracts/sessions.ts'
 import { changeSquad, listSquads } from '../../shared/contracts/squads.ts'
+import { workerContext } from '../../server/db/database.ts'
+import { sessions } from '../../server/db/schema/sessions.ts'
 import { buildAthlete, buildSquad } from '../../seed/builders/athlete.ts'
 import { buildClub } from '../../seed/builders/club.ts'
 import { buildMember } from '../../seed/builders/person.ts'
@@ -132,5 +134,19 @@ describe('the list of sessions', () => {
       'Page 2',
       'Page 1',
     ])
+  })
+})
+
+describe('what is read at one moment', () => {
+  it('does not change between two statements, whatever others write', async () => {
+    const ctx = workerContext(clubId)
+    const seen = await harness.db.atOneMoment(ctx, async (tx) => {
+      const countNow = async () => (await tx.select({ id: sessions.id }).from(sessions)).length
+      const before = await countNow()
+      await make({ title: 'Meanwhile' })
+      return [before, await countNow()]
+    })
+    expect(seen[1]).toBe(seen[0])
+    expect(await titles({ search: 'Meanwhile' })).toHaveLength(1)
   })
 })

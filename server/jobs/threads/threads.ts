@@ -6,7 +6,8 @@ import type * as tasks from './tasks.ts'
 
 /** Reading and computing, away from the thread that talks to the database. */
 export interface Threads {
-  readFile: typeof tasks.readFile
+  /** The file is fetched when its turn has come: no more files are in memory than there are threads. */
+  readFile(fetch: () => Promise<tasks.ReadFile>): ReturnType<typeof tasks.readFile>
   analyseSamples: typeof tasks.analyseSamples
   /** Starts every thread and compiles its way through a recording. */
   warm(): Promise<void>
@@ -50,12 +51,18 @@ export function createThreads(limits: Partial<ThreadLimits> = {}): Threads {
   })
   // The clock of a piece of work starts with the work: waiting for a thread is nobody's fault.
   const slots = createSlots(threads)
-  const run = (name: string) => (task: unknown) =>
-    slots(() => pool.run(task, { name, signal: AbortSignal.timeout(timeLimitMs) }).catch(throwNamed))
+  const run = async (name: string, task: unknown, transferList: ArrayBuffer[] = []) =>
+    pool.run(task, { name, transferList, signal: AbortSignal.timeout(timeLimitMs) }).catch(throwNamed)
   return {
-    readFile: run('readFile') as Threads['readFile'],
-    analyseSamples: run('analyseSamples') as Threads['analyseSamples'],
-    warm: async () => void (await Promise.all(Array.from({ length: threads }, () => run('warmUp')(null)))),
+    readFile: (fetch) =>
+      slots(async () => {
+        const file = await fetch()
+        return run('readFile', file, [file.bytes.buffer as ArrayBuffer])
+      }),
+    analyseSamples: (task) => slots(() => run('analyseSamples', task)),
+    warm: async () => {
+      await Promise.all(Array.from({ length: threads }, () => slots(() => run('warmUp', null))))
+    },
     close: () => pool.close({ force: true }),
   }
 }

@@ -12,7 +12,7 @@ import { requireSession, requireSummary } from './sessions.service.ts'
 /** The Session sheet: everything of a session in one answer, as one moment. */
 export function sheet(deps: Deps, ctx: Caller, sessionId: string): Promise<SessionSheet> {
   const { clubId } = ctx
-  return deps.db.inClub(ctx, async (tx) => {
+  return deps.db.atOneMoment(ctx, async (tx) => {
     const summary = await requireSummary(tx, ctx, sessionId)
     const { note } = await requireSession(tx, ctx, sessionId)
     const means = await meansOfSession(tx, ctx, sessionId)

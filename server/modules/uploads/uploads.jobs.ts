@@ -19,8 +19,7 @@ export const readUploadJob = defineJob('read-upload', async (deps, { clubId, upl
   const ctx = workerContext(clubId)
   const upload = await deps.db.inClub(ctx, (tx) => findUpload(tx, clubId, uploadId))
   if (upload?.state !== 'waiting') return
-  const bytes = await wholeFile(deps, ctx, upload)
-  const result = await readInThread(deps, upload, bytes)
+  const result = await readInThread(deps, upload, () => wholeFile(deps, ctx, upload))
   await deps.db.inClub(ctx, async (tx) => {
     if (result.ok) await keepTrial(tx, clubId, upload, result)
     else await settle(tx, clubId, upload, { state: 'refused', error: result.error })
@@ -39,9 +38,9 @@ async function refuse(deps: Deps, clubId: string, uploadId: string, error: ReadE
   })
 }
 
-async function readInThread({ threads }: JobDeps, { fileName }: UploadRow, bytes: Uint8Array) {
+async function readInThread({ threads }: JobDeps, { fileName }: UploadRow, fetch: () => Promise<Uint8Array>) {
   try {
-    return await threads.readFile({ bytes, fileName })
+    return await threads.readFile(async () => ({ fileName, bytes: await fetch() }))
   } catch (error) {
     if (error instanceof ThreadEnded) return { ok: false as const, error: readingEnded(error) }
     throw error
