@@ -11,7 +11,7 @@ import {
   trueEvents,
   weight,
   type Sampling,
-} from './closed-form-cmj.ts'
+} from '../setup/closed-form-cmj.ts'
 
 const options: AnalyseOptions = { gravity: standardGravity, calibrationU: {} }
 const truth = trueEvents()

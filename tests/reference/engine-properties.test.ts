@@ -4,8 +4,8 @@ import { analyse } from '../../shared/mechanics/analyse.ts'
 import { catalogue, metricKeys, type MetricKey } from '../../shared/mechanics/catalogue.ts'
 import type { AnalyseOptions, Recording, TrialAnalysis } from '../../shared/mechanics/types.ts'
 import { standardGravity } from '../../shared/units/gravity.ts'
-import { sampled, type Sampling } from './closed-form-cmj.ts'
-import { whiteNoise } from './white-noise.ts'
+import { sampled, type Sampling } from '../setup/closed-form-cmj.ts'
+import { whiteNoise } from '../setup/white-noise.ts'
 
 const options: AnalyseOptions = { gravity: standardGravity, calibrationU: { left: 0.005, right: 0.005 } }
 

@@ -17,7 +17,7 @@ export function comesToStay(
   let since = -1
   for (let i = Math.ceil(from); i <= last; i++) {
     const distance = Math.abs(meanOver(sums, i - half, i + half + 1) - weight)
-    if (distance > band) since = -1
+    if (!(distance <= band)) since = -1
     else {
       if (since < 0) since = i
       if (i - since >= hold) return placed(sums, weight, band, since, half)

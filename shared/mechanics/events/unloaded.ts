@@ -86,8 +86,9 @@ export function findUnloaded(
   const load = stanceLevel - level
   const threshold = level + Math.max(settings.eventForceN, settings.unloadedSd * sd)
   const nearZero = Math.abs(level) < 0.15 * load || Math.abs(stanceLevel) < 0.15 * load
-  const flat = sd < 0.02 * load
-  if (threshold > level + load / 2 || (!nearZero && !flat)) return null
+  // A large offset is believed only of a flat trace; the bottom of a slow squat lies higher still.
+  const offset = Math.abs(level) < 0.4 * load && sd < 0.02 * load
+  if (threshold > level + load / 2 || (!nearZero && !offset)) return null
 
   const gap = Math.round(settings.shortestContactS / dt)
   const shortest = settings.eventPersistenceS / dt

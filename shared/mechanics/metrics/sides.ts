@@ -5,7 +5,7 @@ import { phasesOf } from '../phases.ts'
 import { grossImpulse } from '../signal/gross-impulse.ts'
 import { integratedNoise, type Noise } from '../signal/noise.ts'
 import { findPeak } from '../signal/peak.ts'
-import type { Quantity } from '../uncertainty/budget.ts'
+import type { Budget, Quantity } from '../uncertainty/budget.ts'
 import { isSide, type JumpModel, type PlateInputs } from './jump-model.ts'
 import { findRise, greatestSlope } from './loading-rate.ts'
 import { miss, put, type Measured, type Outcome } from './measured.ts'
@@ -182,7 +182,7 @@ export function lagFigures(model: JumpModel, [left, right]: [Foot, Foot], into: 
  * BMC Sports Sci Med Rehabil 13:115). `null` where both feet carry nothing.
  */
 export function asymmetryOf(
-  { budget }: JumpModel,
+  budget: Budget,
   left: Quantity,
   right: Quantity,
   withoutU: boolean,
@@ -215,7 +215,7 @@ export function sidesOf(model: JumpModel, feet: [Foot, Foot]): Sides {
     enter(sides.right, key, b)
     if (!('quantity' in a) || !('quantity' in b)) continue
     const withoutU = a.withoutU !== undefined || b.withoutU !== undefined
-    const asymmetry = asymmetryOf(model, a.quantity, b.quantity, withoutU)
+    const asymmetry = asymmetryOf(model.budget, a.quantity, b.quantity, withoutU)
     if (asymmetry) sides.asymmetry[key] = asymmetry
   }
   return sides

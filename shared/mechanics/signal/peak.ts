@@ -21,7 +21,7 @@ function extremeSample(force: Float64Array, from: number, to: number, sign: 1 | 
 }
 
 function vertex(fit: Parabola, sign: 1 | -1): number {
-  const x = sign * fit.bend < 0 ? -fit.slope / (2 * fit.bend) : 0
+  const x = sign * fit.bend < 0 ? -fit.slope / (2 * fit.bend) : Math.sign(sign * fit.slope) * fit.half
   return fit.centre + Math.max(-fit.half, Math.min(fit.half, x))
 }
 
