@@ -5,7 +5,7 @@ import { Test } from './tests.ts'
 
 /**
  * A mean over a session's included trials. `U` is the larger of what the plate says of the mean and what the
- * trials' own spread says of it (null with neither).
+ * spread from trial to trial says of it, pooled over the session's athletes (null with neither).
  */
 export const MeanFigure = z.strictObject({
   value: z.number(),

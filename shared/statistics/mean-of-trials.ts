@@ -1,4 +1,5 @@
 import { studentT } from './distributions/student-t.ts'
+import type { PooledSpread } from './pooled-spread.ts'
 
 /** One trial's figure: its expanded uncertainty for about 95 %, and the part of it that differs from trial to trial. */
 export interface TrialFigure {
@@ -19,13 +20,13 @@ const COVERAGE = 0.95
 /**
  * The mean of a session's trials, with the larger of two uncertainties that answer different questions and are
  * never added up: how well the plate knows the mean, and how well so few of the athlete's trials know it.
- * null without a trial.
+ * `spread` is what trials of the session vary within an athlete, null where nobody has two. null without a trial.
  */
-export function meanOfTrials(figures: readonly TrialFigure[]): Mean | null {
+export function meanOfTrials(figures: readonly TrialFigure[], spread: PooledSpread | null): Mean | null {
   const n = figures.length
   if (n === 0) return null
   const value = figures.reduce((sum, figure) => sum + figure.value, 0) / n
-  const known = [plateU(figures), spreadU(figures, value)].filter((U) => U !== null)
+  const known = [plateU(figures), spreadU(n, spread)].filter((U) => U !== null)
   return { value, U: known.length > 0 ? Math.max(...known) : null, trials: n }
 }
 
@@ -45,10 +46,7 @@ function plateU(figures: readonly TrialFigure[]): number | null {
   return Math.hypot(Math.sqrt(repeat) / n, same / n)
 }
 
-/** What the trials' own spread says of the mean: t·s/√n (GUM 4.2 and G.3); null from one trial. */
-function spreadU(figures: readonly TrialFigure[], mean: number): number | null {
-  const n = figures.length
-  if (n < 2) return null
-  const squares = figures.reduce((sum, { value }) => sum + (value - mean) ** 2, 0)
-  return studentT(COVERAGE, n - 1) * Math.sqrt(squares / (n - 1) / n)
+/** What the spread from trial to trial says of a mean of n: t·s/√n (GUM 4.2 and G.3). */
+function spreadU(n: number, spread: PooledSpread | null): number | null {
+  return spread && (studentT(COVERAGE, spread.degreesOfFreedom) * spread.sd) / Math.sqrt(n)
 }

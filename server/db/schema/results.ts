@@ -46,3 +46,25 @@ export const sessionResults = club.table(
     ),
   ],
 )
+
+/**
+ * How much trials of a session vary within an athlete, pooled over its athletes, by metric: [SD, degrees of
+ * freedom]. Rebuilt with the results of its edition; says nothing of any one athlete, so that an athlete's own
+ * page can carry it without a look at anyone else's rows.
+ */
+export const trialSpreads = club.table(
+  'trial_spreads',
+  {
+    clubId: clubId(),
+    sessionId: uuid('session_id').notNull(),
+    testKey: text('test_key').notNull(),
+    edition: text('edition').notNull(),
+    spreads: jsonb('spreads').$type<Record<string, [number, number]>>().notNull(),
+  },
+  (t) => [
+    primaryKey({ columns: [t.clubId, t.sessionId, t.testKey, t.edition] }),
+    foreignKey({ columns: [t.clubId, t.sessionId], foreignColumns: [sessions.clubId, sessions.id] }),
+    ownClubPolicy('trial_spreads'),
+    staffOrPolicy('trial_spreads', sql`edition = 'published'`),
+  ],
+)

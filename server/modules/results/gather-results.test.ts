@@ -1,7 +1,7 @@
 import { describe, expect, it } from 'vitest'
 import type { TrialCheck } from '../../../shared/mechanics/types.ts'
 import { gatherResults, type IncludedTrial } from './gather-results.ts'
-import { meansOf } from './means.ts'
+import { meansOf, spreadsOf } from './means.ts'
 
 const failed: TrialCheck = {
   key: 'landing-length',
@@ -71,16 +71,34 @@ describe('the results of a session', () => {
 describe('the means of a session’s results', () => {
   it('count the trials whose figure stands', () => {
     const [result] = gatherResults([trial(1), trial(2, { checks: [failed] })])
-    const means = meansOf(result)
+    const means = meansOf(result, {})
     expect(means.takeoffVelocity).toMatchObject({ trials: 2 })
     expect(means.takeoffVelocity.value).toBeCloseTo(2.65, 12)
     expect(means.landingPeakForcePerBodyWeight).toEqual({ value: 4, U: null, trials: 1 })
   })
 
   it('hold no metric that no trial has', () => {
-    expect(Object.keys(meansOf(gatherResults([trial(1)])[0]))).toEqual([
+    expect(Object.keys(meansOf(gatherResults([trial(1)])[0], {}))).toEqual([
       'takeoffVelocity',
       'landingPeakForcePerBodyWeight',
     ])
+  })
+
+  it('carry what the trials of the session vary', () => {
+    const results = [gatherResults([trial(1), trial(2)])[0], gatherResults([trial(3), trial(5)])[0]]
+    const spreads = spreadsOf(results)
+    // Two athletes, two trials each: √((2·0.05² + 2·0.1²)/2).
+    expect(spreads.takeoffVelocity[0]).toBeCloseTo(Math.sqrt(0.0125), 12)
+    expect(spreads.takeoffVelocity[1]).toBe(2)
+    // t(0.975, 2) = 4.303 (NIST/SEMATECH e-Handbook of Statistical Methods, 1.3.6.7.2).
+    expect(meansOf(results[0], spreads).takeoffVelocity.U).toBeCloseTo(
+      (4.303 * Math.sqrt(0.0125)) / Math.SQRT2,
+      3,
+    )
+  })
+
+  it('leave a withheld figure out of the spread', () => {
+    const results = [gatherResults([trial(1), trial(2, { checks: [failed] })])[0]]
+    expect(Object.keys(spreadsOf(results))).toEqual(['takeoffVelocity'])
   })
 })

@@ -2,7 +2,7 @@ import { and, asc, eq, isNotNull, isNull, notInArray, sql } from 'drizzle-orm'
 import type { Test } from '../../../shared/contracts/tests.ts'
 import type { Tx } from '../../db/database.ts'
 import { athletes } from '../../db/schema/people-of-club.ts'
-import { sessionResults } from '../../db/schema/results.ts'
+import { sessionResults, trialSpreads } from '../../db/schema/results.ts'
 import { sessions } from '../../db/schema/sessions.ts'
 import { analyses, publishedTrials, trials } from '../../db/schema/trials.ts'
 import type { GatheredResult, IncludedTrial } from './gather-results.ts'
@@ -131,11 +131,20 @@ export function findResults(
   of: { clubId: string; edition: Edition; athleteId?: string; sessionId?: string },
 ) {
   return tx
-    .select({ result: sessionResults, sessionTitle: sessions.title })
+    .select({ result: sessionResults, sessionTitle: sessions.title, spreads: trialSpreads.spreads })
     .from(sessionResults)
     .innerJoin(
       sessions,
       and(eq(sessions.clubId, sessionResults.clubId), eq(sessions.id, sessionResults.sessionId)),
+    )
+    .leftJoin(
+      trialSpreads,
+      and(
+        eq(trialSpreads.clubId, sessionResults.clubId),
+        eq(trialSpreads.sessionId, sessionResults.sessionId),
+        eq(trialSpreads.testKey, sessionResults.testKey),
+        eq(trialSpreads.edition, sessionResults.edition),
+      ),
     )
     .where(
       and(

@@ -4,6 +4,7 @@ import type { Deps } from '../../deps.ts'
 import type { Caller } from '../../http/caller.ts'
 import { gatherResults } from './gather-results.ts'
 import { meansOf } from './means.ts'
+import { rebuildSpreads } from './spreads.ts'
 import {
   athleteName,
   athletesEverPinned,
@@ -36,6 +37,7 @@ export async function rebuildWorking(
     const results = gatherResults(await workingTrials(tx, place))
     await replaceResults(tx, { ...place, edition: 'working', sessionDate }, results)
   }
+  await rebuildSpreads(tx, { clubId: ctx.clubId, sessionId, edition: 'working' })
 }
 
 /** Rebuilds what athletes read of a session, after its pins have changed. */
@@ -47,6 +49,7 @@ export async function rebuildPublished(tx: Tx, ctx: ClubContext, sessionId: stri
     const results = gatherResults(await pinnedTrials(tx, place))
     await replaceResults(tx, { ...place, edition: 'published', sessionDate }, results)
   }
+  await rebuildSpreads(tx, { clubId: ctx.clubId, sessionId, edition: 'published' })
 }
 
 /** A session moved to another day takes its results along. */
@@ -81,13 +84,13 @@ export async function meansOfSession(
   const found = await findResults(tx, { clubId: ctx.clubId, edition: 'working', sessionId })
   const means = new Map<string, Record<string, MeanFigure>>()
   // Part of the key of a result is its test; a sheet's row shows the first.
-  for (const { result } of found) {
-    if (!means.has(result.athleteId)) means.set(result.athleteId, meansOf(result))
+  for (const { result, spreads } of found) {
+    if (!means.has(result.athleteId)) means.set(result.athleteId, meansOf(result, spreads ?? {}))
   }
   return means
 }
 
-function pointOf({ result, sessionTitle }: FoundResult): ResultPoint {
+function pointOf({ result, spreads, sessionTitle }: FoundResult): ResultPoint {
   const { protocol, side, externalLoadKg, boxHeightM, arms } = result
   return {
     sessionId: result.sessionId,
@@ -95,6 +98,6 @@ function pointOf({ result, sessionTitle }: FoundResult): ResultPoint {
     sessionTitle,
     test: { protocol, side, externalLoadKg, boxHeightM, arms } as ResultPoint['test'],
     trialIds: result.trialIds,
-    means: meansOf(result),
+    means: meansOf(result, spreads ?? {}),
   }
 }
