@@ -83,8 +83,8 @@ function SheetFoot({ empty }: { empty: boolean }) {
       </p>
       <p className="text-small text-ink-2">
         ± is how sure the figure is, for about 95 %: of a trial, what the plate and the weighing say; of a
-        mean, the larger of that and what the trials’ own spread says. How much an athlete differs from day to
-        day is not in it.
+        mean, the larger of that and what trials differ by from one to the next. How much an athlete differs
+        from day to day is not in it.
       </p>
       <CautionLine />
     </div>

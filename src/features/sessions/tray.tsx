@@ -21,7 +21,7 @@ export function Tray({ trials, uploads, athletes, files, queue }: Props) {
   const waiting = uploads.filter((upload) => needsPerson(upload) && !underWay.has(upload.id))
   const count = readCount(uploads, files)
   return (
-    <section aria-label="Tray" className="mb-4 border border-dashed border-edge bg-sheet px-4 py-2">
+    <section aria-label="Tray" className="no-print mb-4 border border-dashed border-edge bg-sheet px-4 py-2">
       <div className="flex flex-wrap items-center justify-between gap-x-6 gap-y-1">
         <h2 className="text-panel font-semibold">
           Tray{' '}
