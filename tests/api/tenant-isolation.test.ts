@@ -41,6 +41,8 @@ async function fillTheRest(): Promise<void> {
     const key = { key: randomUUID(), route: 'POST /', requestHash: Buffer.alloc(32) }
     await tx.insert(records.idempotencyKeys).values({ clubId, personId, ...key })
     await tx.insert(results.sessionResults).values(resultRow(own, athleteId, 'working'))
+    const spread = { testKey: 'cmj/both/0kg/-/hips', edition: 'working', spreads: {} }
+    await tx.insert(results.trialSpreads).values({ clubId, sessionId, ...spread })
   })
 }
 
