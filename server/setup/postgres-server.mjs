@@ -1,4 +1,4 @@
-import { existsSync, readFileSync } from 'node:fs'
+import { readFileSync } from 'node:fs'
 import { join } from 'node:path'
 import { pause } from './pause.mjs'
 
@@ -9,11 +9,23 @@ const stopSeconds = 10
  * @param {string} folder of the cluster
  */
 export function runningServer(folder) {
-  const file = join(folder, 'postmaster.pid')
-  if (!existsSync(file)) return undefined
-  const lines = readFileSync(file, 'utf8').split('\n')
+  const lines = readPidFile(folder)
   const pid = Number(lines[0])
-  return isServerOf(pid, folder) ? { pid, port: Number(lines[3]) } : undefined
+  return pid && isServerOf(pid, folder) ? { pid, port: Number(lines[3]) } : undefined
+}
+
+/**
+ * The lines of the pid file; none where there is none. A server that stops removes it between two looks, so it
+ * is read without asking first.
+ * @param {string} folder
+ */
+function readPidFile(folder) {
+  try {
+    return readFileSync(join(folder, 'postmaster.pid'), 'utf8').split('\n')
+  } catch (error) {
+    if (/** @type {NodeJS.ErrnoException} */ (error).code === 'ENOENT') return []
+    throw error
+  }
 }
 
 /**
