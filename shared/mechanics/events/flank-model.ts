@@ -21,6 +21,7 @@ const products = new Float64Array(4)
 
 /** Moments Σx^q and Σy·x^p of the samples inside the contact; answers Σy² of the whole window. */
 function gather(y: Float64Array, count: number, foot: number, highest: number): number {
+  if (highest === 2) return gatherTwo(y, count, foot)
   moments.fill(0)
   products.fill(0)
   let squares = 0
@@ -36,6 +37,32 @@ function gather(y: Float64Array, count: number, foot: number, highest: number): 
       power *= x
     }
   }
+  return squares
+}
+
+/** The same for the usual case of two powers. */
+function gatherTwo(y: Float64Array, count: number, foot: number): number {
+  let squares = 0
+  let [s1, s2, s3, s4, t1, t2] = [0, 0, 0, 0, 0, 0]
+  for (let u = 0; u < count; u++) {
+    const value = y[u]
+    squares += value * value
+    const x = u - foot
+    if (x <= 0) continue
+    const xx = x * x
+    s1 += x
+    s2 += xx
+    s3 += xx * x
+    s4 += xx * xx
+    t1 += value * x
+    t2 += value * xx
+  }
+  moments[1] = s1
+  moments[2] = s2
+  moments[3] = s3
+  moments[4] = s4
+  products[1] = t1
+  products[2] = t2
   return squares
 }
 
@@ -71,29 +98,45 @@ function fitAtFoot(y: Float64Array, count: number, foot: number, highest: number
 }
 
 const goldenShare = (Math.sqrt(5) - 1) / 2
+/** Ten steps narrow one sample to less than a hundredth. */
+const goldenSteps = 10
 
 /** Searches the foot between two places in the window: every half sample first, then by golden section. */
 export function searchFoot(y: Float64Array, count: number, from: number, to: number, highest: number): Flank {
   const trial: Flank = { foot: 0, lowest: 1, highest, coefficients: new Float64Array(4), misfit: Infinity }
+  const misfitAt = (foot: number) => {
+    fitAtFoot(y, count, foot, highest, trial)
+    return trial.misfit
+  }
   let best = from
   let least = Infinity
   for (let foot = from; foot <= to; foot += 0.5) {
-    fitAtFoot(y, count, foot, highest, trial)
-    if (trial.misfit < least) {
-      least = trial.misfit
+    const misfit = misfitAt(foot)
+    if (misfit < least) {
+      least = misfit
       best = foot
     }
   }
   let a = best - 0.5
   let b = best + 0.5
-  for (let step = 0; step < 12; step++) {
-    const left = b - goldenShare * (b - a)
-    const right = a + goldenShare * (b - a)
-    fitAtFoot(y, count, left, highest, trial)
-    const atLeft = trial.misfit
-    fitAtFoot(y, count, right, highest, trial)
-    if (atLeft < trial.misfit) b = right
-    else a = left
+  let left = b - goldenShare
+  let right = a + goldenShare
+  let atLeft = misfitAt(left)
+  let atRight = misfitAt(right)
+  for (let step = 0; step < goldenSteps; step++) {
+    if (atLeft < atRight) {
+      b = right
+      right = left
+      atRight = atLeft
+      left = b - goldenShare * (b - a)
+      atLeft = misfitAt(left)
+    } else {
+      a = left
+      left = right
+      atLeft = atRight
+      right = a + goldenShare * (b - a)
+      atRight = misfitAt(right)
+    }
   }
   fitAtFoot(y, count, (a + b) / 2, highest, trial)
   return trial

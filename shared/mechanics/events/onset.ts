@@ -1,7 +1,7 @@
 import type { Settings } from '../settings.ts'
 import { fitParabola, parabolaCrossing, parabolaNoiseAt, parabolaSlopeAt } from '../signal/local-parabola.ts'
 import type { Noise } from '../signal/noise.ts'
-import { meanOver, type RunningSums } from '../signal/running-mean.ts'
+import { meanAround, type RunningSums } from '../signal/running-mean.ts'
 import type { Weighing } from './weighing.ts'
 
 /** The beginning of the movement. */
@@ -26,8 +26,8 @@ interface Search {
   half: number
 }
 
-function deviation({ sums, weight, half }: Search, sample: number): number {
-  return meanOver(sums, sample - half, sample + half + 1) - weight
+function deviation(search: Search, sample: number): number {
+  return meanAround(search.sums, sample, search.half) - search.weight
 }
 
 /** First sample of the movement that leads to the flight: the earliest gross deviation without a long pause after it. */

@@ -1,5 +1,5 @@
 import type { Settings } from '../settings.ts'
-import { meanOver, type RunningSums } from '../signal/running-mean.ts'
+import { meanAround, type RunningSums } from '../signal/running-mean.ts'
 
 /**
  * First position (samples) after `from` at which the running mean of the force comes within ±`band` of the weight and
@@ -16,7 +16,7 @@ export function comesToStay(
   const last = sums.length - 1
   let since = -1
   for (let i = Math.ceil(from); i <= last; i++) {
-    const distance = Math.abs(meanOver(sums, i - half, i + half + 1) - weight)
+    const distance = Math.abs(meanAround(sums, i, half) - weight)
     if (!(distance <= band)) since = -1
     else {
       if (since < 0) since = i
@@ -27,8 +27,8 @@ export function comesToStay(
 }
 
 function placed(sums: RunningSums, weight: number, band: number, i: number, half: number): number {
-  const here = Math.abs(meanOver(sums, i - half, i + half + 1) - weight)
-  const before = Math.abs(meanOver(sums, i - 1 - half, i + half) - weight)
+  const here = Math.abs(meanAround(sums, i, half) - weight)
+  const before = Math.abs(meanAround(sums, i - 1, half) - weight)
   return before > band ? i - (band - here) / (before - here) : i
 }
 

@@ -1,5 +1,5 @@
 import type { Settings } from '../settings.ts'
-import type { Plate, Signal } from '../signal/condition.ts'
+import { addUp, type Plate, type Signal } from '../signal/condition.ts'
 import { effectiveSamples, estimateNoise, type Noise } from '../signal/noise.ts'
 import type { Stretch } from './unloaded.ts'
 
@@ -22,12 +22,10 @@ function inner({ from, to }: Stretch, dt: number, settings: Settings): Stretch {
   return { from: from + margin, to: end }
 }
 
-function takeOff(plate: Plate, total: Float64Array, offset: number): void {
+function takeOff(plate: Plate, offset: number): void {
   const { force } = plate
-  for (let i = 0; i < force.length; i++) {
-    force[i] -= offset
-    total[i] -= offset
-  }
+  const { length } = force
+  for (let i = 0; i < length; i++) force[i] -= offset
   plate.offsetN = offset
 }
 
@@ -38,7 +36,8 @@ function takeOff(plate: Plate, total: Float64Array, offset: number): void {
 export function zeroPlates(signal: Signal, unloaded: Stretch, settings: Settings): Zero {
   const stretch = inner(unloaded, signal.dt, settings)
   const plates = signal.plates.map((plate) => estimateNoise(plate.force, stretch.from, stretch.to))
-  signal.plates.forEach((plate, i) => takeOff(plate, signal.total, plates[i].mean))
+  signal.plates.forEach((plate, i) => takeOff(plate, plates[i].mean))
+  addUp(signal.plates, signal.total)
   return {
     centre: (stretch.from + stretch.to - 1) / 2,
     plates,

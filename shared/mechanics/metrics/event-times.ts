@@ -1,6 +1,6 @@
 import type { Crossing } from '../events/flank.ts'
 import { staysWithin } from '../events/turning-points.ts'
-import { meanOver } from '../signal/running-mean.ts'
+import { meanAround } from '../signal/running-mean.ts'
 import type { Quantity } from '../uncertainty/budget.ts'
 import { at, velocityOf, type JumpModel } from './jump-model.ts'
 
@@ -47,7 +47,7 @@ function weightCrossingTime(model: JumpModel): Quantity | null {
   const u = budget.combined(error).u
   if (!(u > 0)) return budget.exact(position * signal.dt)
   const half = Math.max(1, Math.round(smoothedS / signal.dt))
-  const distance = (i: number) => meanOver(model.sums, i - half, i + half + 1) - motion.systemWeight
+  const distance = (i: number) => meanAround(model.sums, i, half) - motion.systemWeight
   const stays = staysWithin(distance, position, u, unsureS / signal.dt) * signal.dt
   return budget.linear(position * signal.dt, [[stays / u, error]])
 }

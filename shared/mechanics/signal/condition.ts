@@ -132,13 +132,13 @@ function conditionPlate(
   return { channel, force, offsetN: 0, flipped, dead, flatTop: range.flatTop, unreadable }
 }
 
-/** Force of all plates together; one plate is its own total, in an array of its own. */
-function addUp(plates: readonly Plate[]): Float64Array {
-  const [first, second] = plates
-  const total = borrow('total', first.force.length)
-  if (second) for (let i = 0; i < total.length; i++) total[i] = first.force[i] + second.force[i]
-  else total.set(first.force)
-  return total
+/** Writes the force of all plates together. */
+export function addUp(plates: readonly Plate[], total: Float64Array): void {
+  const { length } = total
+  const first = plates[0].force
+  if (plates.length === 1) return total.set(first)
+  const second = plates[1].force
+  for (let i = 0; i < length; i++) total[i] = first[i] + second[i]
 }
 
 /**
@@ -172,7 +172,8 @@ export function conditionRecording(recording: Recording, settings: Settings): Co
     )
 
   const conditioned = channels.map((channel, i) => conditionPlate(channel, raws[i], settings))
-  const total = addUp(conditioned)
+  const total = borrow('total', length)
+  addUp(conditioned, total)
   const unreadable = conditioned.reduce((sum, plate) => sum + plate.unreadable, 0)
   return { signal: { sampleRateHz: rate, dt: 1 / rate, length, plates: conditioned, total, unreadable } }
 }

@@ -16,12 +16,13 @@ export function runningSums(force: Float64Array, slot: string): RunningSums {
   const reference = force.length > 0 ? force[0] : 0
   const sums = borrow(slot, force.length + 1)
   sums[0] = 0
+  const { length } = force
   let sum = 0
-  for (let i = 0; i < force.length; i++) {
+  for (let i = 0; i < length; i++) {
     sum += force[i] - reference
     sums[i + 1] = sum
   }
-  return { sums, reference, length: force.length }
+  return { sums, reference, length }
 }
 
 /** Mean of the samples from (inclusive) to (exclusive), cut to the record; `NaN` of none. */
@@ -30,4 +31,12 @@ export function meanOver(running: RunningSums, from: number, to: number): number
   const a = from > 0 ? from : 0
   const b = to < length ? to : length
   return b > a ? reference + (sums[b] - sums[a]) / (b - a) : NaN
+}
+
+/** Mean of the samples up to `half` before and after one, cut to the record. */
+export function meanAround(running: RunningSums, sample: number, half: number): number {
+  const from = sample - half
+  const to = sample + half + 1
+  if (from < 0 || to > running.length) return meanOver(running, from, to)
+  return running.reference + (running.sums[to] - running.sums[from]) / (to - from)
 }
