@@ -6,6 +6,10 @@ describe('the deviance', () => {
     expect(deviance(1e6, 1e6)).toBe(0)
   })
 
+  it('is no number of what is none', () => {
+    expect(deviance(1, NaN)).toBeNaN()
+  })
+
   it('keeps its digits where the two nearly agree: m·(u²/2 − u³/6 + u⁴/12) with u = (x − m)/m', () => {
     for (const u of [1e-6, -1e-6, 1e-9]) {
       const m = 1 / Math.abs(u)

@@ -6,7 +6,7 @@ const CLOSE = 0.1
  * (x − m)·v + 2x·Σ v^(2j+1)/(2j + 1), j ≥ 1 (Loader 2000, Fast and accurate computation of binomial probabilities).
  */
 export function deviance(x: number, m: number): number {
-  if (Math.abs(x - m) >= CLOSE * (x + m)) return x * Math.log(x / m) + m - x
+  if (!(Math.abs(x - m) < CLOSE * (x + m))) return x * Math.log(x / m) + m - x
   const v = (x - m) / (x + m)
   let power = 2 * x * v
   let sum = (x - m) * v
