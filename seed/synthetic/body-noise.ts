@@ -1,4 +1,3 @@
-import type { JumpDesign } from './jump-design.ts'
 import type { Motion } from './motion.ts'
 import type { BodyNoiseOptions } from './options.ts'
 import type { Random } from './random.ts'
@@ -66,41 +65,62 @@ function heartCourse(options: BodyNoiseOptions, massKg: number, random: Random):
   }
 }
 
-/** 0 to 1 over `width` from `start`, with its derivatives: 6u⁵ − 15u⁴ + 10u³. */
-function fade(timeS: number, start: number, width: number): { x: number; v: number; a: number } {
-  const u = (timeS - start) / width
+/** A change of how much of the body's unrest there is, all or none of it, over `widthS` from `atS` on. */
+export interface Fade {
+  atS: number
+  widthS: number
+  by: 1 | -1
+}
+
+/** When the body's unrest is there: fully or not at all at first, then as the fades say, in turn. */
+export interface Unrest {
+  atFirst: 0 | 1
+  fades: readonly Fade[]
+}
+
+/** 0 to 1 over a width of 1, with its derivatives by time: 6u⁵ − 15u⁴ + 10u³. */
+function fade(timeS: number, { atS, widthS }: Fade): { x: number; v: number; a: number } {
+  const u = (timeS - atS) / widthS
   if (u <= 0) return { x: 0, v: 0, a: 0 }
   if (u >= 1) return { x: 1, v: 0, a: 0 }
   return {
     x: u ** 3 * (10 + u * (6 * u - 15)),
-    v: (30 * u ** 2 * (1 - u) ** 2) / width,
-    a: (60 * u * (1 - u) * (1 - 2 * u)) / width ** 2,
+    v: (30 * u ** 2 * (1 - u) ** 2) / widthS,
+    a: (60 * u * (1 - u) * (1 - 2 * u)) / widthS ** 2,
   }
 }
 
+function envelope({ atFirst, fades }: Unrest): Course {
+  return (timeS) => {
+    const e = { x: Number(atFirst), v: 0, a: 0 }
+    for (const change of fades) {
+      const part = fade(timeS, change)
+      e.x += change.by * part.x
+      e.v += change.by * part.v
+      e.a += change.by * part.a
+    }
+    return e
+  }
+}
+
+const still = { x: 0, v: 0, a: 0 }
+
 /**
- * Sway and heartbeat of a standing body as a motion of its own: fading out in the dip, back in while the athlete
- * rises from the landing, so that the jump's own takeoff velocity stays exact.
+ * Sway and heartbeat of a standing body as a motion of its own, which is none while the body jumps, so that the
+ * jump's own takeoff velocity stays exact.
  */
-export function bodyNoise(
-  options: BodyNoiseOptions,
-  massKg: number,
-  design: JumpDesign,
-  random: Random,
-): Motion {
+export function bodyNoise(options: BodyNoiseOptions, massKg: number, unrest: Unrest, random: Random): Motion {
   const waves = swayWaves(options, massKg, random)
   const sway = swayCourse(waves)
   const heart = heartCourse(options, massKg, random)
+  const size = envelope(unrest)
   const isStill = waves.length === 0 && options.heartbeatN === 0
-  const { startS, minimumVelocityS, landingEndS, restS } = design
   const course: Course = (timeS) => {
-    if (isStill || (timeS >= minimumVelocityS && timeS <= landingEndS)) return { x: 0, v: 0, a: 0 }
+    if (isStill) return still
+    const e = size(timeS)
+    if (e.x === 0 && e.v === 0 && e.a === 0) return still
     const [p, q] = [sway(timeS), heart(timeS)]
     const [x, v, a] = [p.x + q.x, p.v + q.v, p.a + q.a]
-    if (timeS <= startS || timeS >= restS) return { x, v, a }
-    const out = fade(timeS, startS, minimumVelocityS - startS)
-    const back = fade(timeS, landingEndS, restS - landingEndS)
-    const e = { x: 1 - out.x + back.x, v: back.v - out.v, a: back.a - out.a }
     return { x: e.x * x, v: e.v * x + e.x * v, a: e.a * x + 2 * e.v * v + e.x * a }
   }
   return {

@@ -36,12 +36,16 @@ function accelerationOf({ pulse, start, width, amplitude }: Component, timeS: nu
   return amplitude * (u <= 1 ? pulse.value(u) : pulse.end)
 }
 
-/** The motion that begins at rest at displacement 0 and follows the sum of the components' accelerations. */
-export function motionOf(components: readonly Component[]): Motion {
-  const sum = (of: typeof velocityOf) => (timeS: number) => {
-    let total = 0
+/** The motion that begins at rest at displacement `originM` and follows the sum of the components' accelerations. */
+export function motionOf(components: readonly Component[], originM = 0): Motion {
+  const sum = (of: typeof velocityOf, origin: number) => (timeS: number) => {
+    let total = origin
     for (const component of components) total += of(component, timeS)
     return total
   }
-  return { acceleration: sum(accelerationOf), velocity: sum(velocityOf), displacement: sum(displacementOf) }
+  return {
+    acceleration: sum(accelerationOf, 0),
+    velocity: sum(velocityOf, 0),
+    displacement: sum(displacementOf, originM),
+  }
 }

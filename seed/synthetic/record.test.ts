@@ -1,6 +1,7 @@
 import { describe, expect, it } from 'vitest'
 import { makeJump } from './jump.ts'
 import type { PlateOptions } from './options.ts'
+import { perform } from './perform.ts'
 import { recordJump } from './record.ts'
 import { seededRandom } from './random.ts'
 
@@ -61,11 +62,55 @@ describe('recordJump', () => {
     const [rung, clean] = [{ ringingN: 80 }, {}].map(
       (left) => recordJump(jump, { plates: 1 }, { left }).channels.single,
     )
-    const touch = Math.ceil(jump.design.touchS * 1000)
+    const touch = Math.ceil((jump.touchesS[0] ?? NaN) * 1000)
     const differences = (rung ?? new Float64Array(0)).map((force, i) => Math.abs(force - (clean?.[i] ?? 0)))
     expect(Math.max(...differences.slice(0, touch))).toBe(0)
     expect(Math.max(...differences.slice(touch, touch + 20))).toBeGreaterThan(40)
     expect(Math.max(...differences.slice(touch + 150))).toBeLessThan(0.01)
+  })
+
+  it('rings after every touch, and only under a foot that strikes', () => {
+    const hops = perform({}, [{ protocol: 'hops', side: 'left' }])
+    const plates = { left: { ringingN: 80 }, right: { ringingN: 80 } }
+    const sampling = { durationS: hops.endS }
+    const [rung, clean] = [plates, {}].map((each) => recordJump(hops, sampling, each).channels)
+    const differences = (rung?.left ?? new Float64Array(0)).map((force, i) =>
+      Math.abs(force - (clean?.left?.[i] ?? NaN)),
+    )
+    const after = (timeS: number): number =>
+      Math.max(...differences.slice(Math.ceil(timeS * 1000), Math.ceil(timeS * 1000) + 10))
+    expect(hops.touchesS).toHaveLength(11)
+    for (const touchS of hops.touchesS) expect(after(touchS)).toBeGreaterThan(30)
+    expect(rung?.right).toStrictEqual(clean?.right)
+  })
+
+  it('passes slow changes of force through its low-pass and holds fast ones back', () => {
+    const jump = makeJump()
+    const [open, filtered] = [0, 30].map(
+      (lowPassHz) => recordJump(jump, { plates: 1 }, { left: { lowPassHz } }).channels.single,
+    )
+    expect(filtered?.[1500]).toBeCloseTo(open?.[1500] ?? NaN, 6)
+    const strikes = (force: Float64Array = new Float64Array(0)): number =>
+      force.findIndex((value, i) => i > 3150 && value > 1500)
+    expect(strikes(filtered) - strikes(open)).toBeCloseTo((1000 * Math.SQRT2) / (2 * Math.PI * 30), -1)
+    expect(strikes(filtered) - strikes(open)).toBeGreaterThan(4)
+    const noise = errorsOf({ whiteNoiseN: 2, lowPassHz: 100 })
+    // White noise of 1,000 Hz through a second-order Butterworth keeps 1.11·fc/(fs/2) of its variance.
+    expect(deviation(noise)).toBeCloseTo(2 * Math.sqrt((1.11 * 100) / 500), 1)
+    expect(lagged(noise, 1)).toBeGreaterThan(0.6)
+  })
+
+  it('keeps only the sum of the two plates where it is told so', () => {
+    const jump = makeJump()
+    const { total, ...others } = recordJump(jump, { plates: 'total' }, { right: { offsetN: 3 } }).channels
+    expect(others).toStrictEqual({})
+    for (const i of [0, 2400, 3200]) expect(total?.[i]).toBeCloseTo(jump.force(i / 1000) + 3, 9)
+  })
+
+  it('begins where it is told on the athlete’s clock', () => {
+    const jump = makeJump()
+    const { single } = recordJump(jump, { plates: 1, startS: 1.00037 }).channels
+    for (const i of [0, 1200, 2300]) expect(single?.[i]).toBeCloseTo(jump.force(1.00037 + i / 1000), 9)
   })
 
   it('reads in steps of the converter', () => {

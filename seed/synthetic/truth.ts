@@ -1,156 +1,199 @@
-import type { Jump } from './jump.ts'
-import { greatest, integral, lastZero } from './search.ts'
-import { trueEvents } from './true-events.ts'
-import type { TrueEvents } from './true-events.ts'
+import type { Trial } from './perform.ts'
+import { hopsFigures, trueContact, trueHops } from './true-contacts.ts'
+import type { TrueContact } from './true-contacts.ts'
+import { contactEvents, landingEvents, pushEvents, trueOnset, trueTakeoff } from './true-events.ts'
+import type { ContactEvents, LandingEvents, PushEvents } from './true-events.ts'
+import {
+  dropFigures,
+  flightFigures,
+  gained,
+  landingFigures,
+  pushFigures,
+  reboundFigures,
+  squatFigures,
+  startFigures,
+  weighingFigures,
+} from './true-figures.ts'
+import type { Figures } from './true-figures.ts'
 
-/** What a perfect engine would say of a jump: instants, figures in SI units by metric key, ledger. */
+/** `arrival` is the first touch after a drop that goes on with a jump. */
+export type TrueEvents = Partial<PushEvents & ContactEvents & LandingEvents & { arrival: number }>
+
+/** What a perfect engine would say of a trial: instants, figures in SI units by metric key, contacts, ledger. */
 export interface Truth {
   events: TrueEvents
-  metrics: Record<string, number>
+  metrics: Figures
+  contacts: TrueContact[]
+  /** Net impulses in N·s from rest to rest. */
   ledger: { phase: string; startS: number; endS: number; netImpulse: number }[]
 }
 
-type Figures = Record<string, number>
+type Mark = readonly [phase: string, startS: number]
 
-/** Slope between the last upward crossings of 20 and 80 % of the peak before it. */
-function loadingRate(
-  force: (timeS: number) => number,
-  touchdown: number,
-  peak: { timeS: number; value: number },
-): number {
-  const crossing = (share: number): number =>
-    lastZero((timeS) => force(timeS) - share * peak.value, peak.timeS, touchdown - 0.005) ?? touchdown
-  return (0.6 * peak.value) / (crossing(0.8) - crossing(0.2))
-}
-
-function jumpFigures({ motion, options }: Jump, events: TrueEvents): Figures {
-  const { massKg, gravity } = options
-  const { onset, takeoff, touchdown } = events
-  const velocity = motion.velocity(takeoff)
-  const height = velocity ** 2 / (2 * gravity)
-  const flightTime = touchdown - takeoff
-  const timeToTakeoff = takeoff - onset
-  return {
-    bodyWeight: massKg * gravity,
-    systemWeight: massKg * gravity,
-    bodyMass: massKg,
-    takeoffVelocity: velocity,
-    jumpHeightImpulse: height,
-    jumpHeightFlight: (gravity * flightTime ** 2) / 8,
-    jumpHeightTotal: height + motion.displacement(takeoff) - motion.displacement(onset),
-    takeoffMomentum: massKg * velocity,
-    flightTime,
-    timeToTakeoff,
-    rsiModified: height / timeToTakeoff,
-    flightPerTakeoffTime: flightTime / timeToTakeoff,
-  }
-}
-
-function pushFigures({ motion, force, options }: Jump, events: TrueEvents): Figures {
-  const { massKg, gravity } = options
-  const { onset, minimumVelocity, zeroVelocity, takeoff } = events
-  const gained = (from: number, to: number): number => massKg * (motion.velocity(to) - motion.velocity(from))
-  const mean = (from: number, to: number): number => gained(from, to) / (to - from) + massKg * gravity
-  const power = (timeS: number): number => force(timeS) * motion.velocity(timeS)
-  const rise = motion.displacement(takeoff) - motion.displacement(zeroVelocity)
-  const work = (massKg * motion.velocity(takeoff) ** 2) / 2 + massKg * gravity * rise
-  return {
-    netImpulse: gained(onset, takeoff),
-    unweightingImpulse: gained(onset, minimumVelocity),
-    brakingImpulse: gained(minimumVelocity, zeroVelocity),
-    propulsionImpulse: gained(zeroVelocity, takeoff),
-    peakForce: greatest(force, onset, takeoff).value,
-    minimumForce: force(events.minimumForce),
-    forceAtZeroVelocity: force(zeroVelocity),
-    peakBrakingForce: greatest(force, minimumVelocity, zeroVelocity).value,
-    meanBrakingForce: mean(minimumVelocity, zeroVelocity),
-    peakPropulsionForce: greatest(force, zeroVelocity, takeoff).value,
-    meanPropulsionForce: mean(zeroVelocity, takeoff),
-    unweightingTime: minimumVelocity - onset,
-    brakingTime: zeroVelocity - minimumVelocity,
-    propulsionTime: takeoff - zeroVelocity,
-    peakVelocity: greatest(motion.velocity, zeroVelocity, takeoff).value,
-    peakDownwardVelocity: motion.velocity(minimumVelocity),
-    countermovementDepth: motion.displacement(zeroVelocity) - motion.displacement(onset),
-    peakPower: greatest(power, zeroVelocity, takeoff).value,
-    meanPropulsionPower: work / (takeoff - zeroVelocity),
-    propulsionWork: work,
-  }
-}
-
-function landingFigures({ motion, force, options }: Jump, events: TrueEvents): Figures {
-  const { touchdown, landingPeak, landingZeroVelocity } = events
-  const peak = { timeS: landingPeak, value: force(landingPeak) }
-  const velocity = motion.velocity(touchdown)
-  return {
-    landingPeakForce: peak.value,
-    timeToLandingPeak: landingPeak - touchdown,
-    landingLoadingRateMean: peak.value / (landingPeak - touchdown),
-    landingLoadingRate2080: loadingRate(force, touchdown, peak),
-    landingVelocity: velocity,
-    landingTime: landingZeroVelocity - touchdown,
-    landingDepth: motion.displacement(landingZeroVelocity) - motion.displacement(touchdown),
-    landingImpulse: -options.massKg * velocity,
-    landingImpulse50: integral(force, touchdown, touchdown + 0.05),
-    landingImpulse100: integral(force, touchdown, touchdown + 0.1),
-  }
-}
-
-/** A foot's own figures by metric key, over the phases of both feet together. */
-export function footTruthOf(
-  jump: Jump,
-  foot: 'left' | 'right',
-  events: TrueEvents = trueEvents(jump),
-): Figures {
-  const share = (timeS: number): number =>
-    foot === 'left' ? jump.leftShare(timeS) : 1 - jump.leftShare(timeS)
-  const force = (timeS: number): number => jump.force(timeS) * share(timeS)
-  const { onset, minimumVelocity, zeroVelocity, takeoff, touchdown, landingZeroVelocity } = events
-  return {
-    unweightingImpulse: integral(force, onset, minimumVelocity),
-    brakingImpulse: integral(force, minimumVelocity, zeroVelocity),
-    propulsionImpulse: integral(force, zeroVelocity, takeoff),
-    peakBrakingForce: greatest(force, minimumVelocity, zeroVelocity).value,
-    peakPropulsionForce: greatest(force, zeroVelocity, takeoff).value,
-    landingPeakForce: greatest(force, touchdown, landingZeroVelocity).value,
-  }
-}
-
-function ledgerOf({ motion, options, design }: Jump, events: TrueEvents): Truth['ledger'] {
-  const marks = [
-    ['unweighting', events.onset],
-    ['braking', events.minimumVelocity],
-    ['propulsion', events.zeroVelocity],
-    ['flight', events.takeoff],
-    ['landing', events.touchdown],
-    ['settling', events.landingZeroVelocity],
-  ] as const
+/** Each phase goes on to the next, the last to rest. */
+function ledgerOf(trial: Trial, marks: readonly Mark[]): Truth['ledger'] {
   return marks.map(([phase, startS], i) => {
-    const endS = marks[i + 1]?.[1] ?? design.restS
-    return {
-      phase,
-      startS,
-      endS,
-      netImpulse: options.massKg * (motion.velocity(endS) - motion.velocity(startS)),
-    }
+    const endS = marks[i + 1]?.[1] ?? trial.marks.restS
+    return { phase, startS, endS, netImpulse: gained(trial, startS, endS) }
   })
 }
 
+const landingMarks = ({ touchdown, landingZeroVelocity }: LandingEvents): Mark[] => [
+  ['landing', touchdown],
+  ['settling', landingZeroVelocity],
+]
+
+/** The landing's figures, unless the athlete left the plates in it. */
+function landed(trial: Trial, events: LandingEvents): Figures {
+  const stays = trial.stepOffS === null || trial.stepOffS > events.landingZeroVelocity
+  return stays ? landingFigures(trial, events) : {}
+}
+
+const firstFlight = ({ marks }: Trial) => {
+  const [flight] = marks.flights
+  if (!flight) throw new RangeError('A jump has a flight.')
+  return flight
+}
+
+function countermovementTruth(trial: Trial): Truth {
+  const push = pushEvents(trial, firstFlight(trial))
+  const landing = landingEvents(trial)
+  const { onset, takeoff } = push
+  const flight = flightFigures(trial, takeoff, landing.touchdown)
+  const { displacement } = trial.motion
+  const lift = displacement(takeoff) - displacement(onset)
+  return {
+    events: { ...push, ...landing },
+    metrics: {
+      ...weighingFigures(trial),
+      ...flight,
+      jumpHeightTotal: (flight.jumpHeightImpulse ?? NaN) + lift,
+      ...startFigures(trial, onset, takeoff, landing.touchdown),
+      ...pushFigures(trial, push),
+      ...landed(trial, landing),
+    },
+    contacts: [],
+    ledger: ledgerOf(trial, [
+      ['unweighting', onset],
+      ['braking', push.minimumVelocity],
+      ['propulsion', push.zeroVelocity],
+      ['flight', takeoff],
+      ...landingMarks(landing),
+    ]),
+  }
+}
+
+function squatTruth(trial: Trial): Truth {
+  const takeoff = trueTakeoff(trial, firstFlight(trial))
+  const onset = trueOnset(trial, takeoff)
+  const landing = landingEvents(trial)
+  return {
+    events: { onset, takeoff, ...landing },
+    metrics: {
+      ...weighingFigures(trial),
+      ...flightFigures(trial, takeoff, landing.touchdown),
+      ...startFigures(trial, onset, takeoff, landing.touchdown),
+      ...squatFigures(trial, onset, takeoff),
+      ...landed(trial, landing),
+    },
+    contacts: [],
+    ledger: ledgerOf(trial, [['propulsion', onset], ['flight', takeoff], ...landingMarks(landing)]),
+  }
+}
+
+/** The momentum of a fall from rest, which ends at the first touch. */
+const arrivalEntry = (trial: Trial, touchdown: number): Truth['ledger'][number] => ({
+  phase: 'arrival',
+  startS: trial.marks.fromS,
+  endS: touchdown,
+  netImpulse: gained(trial, trial.marks.fromS, touchdown),
+})
+
+function dropJumpTruth(trial: Trial): Truth {
+  const arrivalS = trial.marks.arrivalS ?? NaN
+  const rebound = contactEvents(trial, arrivalS, firstFlight(trial))
+  const contact = trueContact(trial, arrivalS, 0)
+  const landing = landingEvents(trial)
+  const { touchdown: arrival, zeroVelocity, takeoff } = rebound
+  const flight = flightFigures(trial, takeoff, landing.touchdown)
+  return {
+    events: { arrival, zeroVelocity, takeoff, ...landing },
+    metrics: {
+      ...weighingFigures(trial),
+      ...flight,
+      jumpHeightTotal: (flight.jumpHeightImpulse ?? NaN) + trial.motion.displacement(takeoff),
+      ...reboundFigures(trial, rebound),
+      ...dropFigures(trial, arrival),
+      rsi: contact.rsi,
+      rsiFlightContact: contact.rsiFlightContact,
+      ...landed(trial, landing),
+    },
+    contacts: [contact],
+    ledger: [
+      arrivalEntry(trial, arrival),
+      ...ledgerOf(trial, [
+        ['braking', arrival],
+        ['propulsion', zeroVelocity],
+        ['flight', takeoff],
+        ...landingMarks(landing),
+      ]),
+    ],
+  }
+}
+
+function dropLandingTruth(trial: Trial): Truth {
+  const landing = landingEvents(trial)
+  return {
+    events: landing,
+    metrics: {
+      ...weighingFigures(trial),
+      ...dropFigures(trial, landing.touchdown),
+      ...landed(trial, landing),
+    },
+    contacts: [],
+    ledger: [arrivalEntry(trial, landing.touchdown), ...ledgerOf(trial, landingMarks(landing))],
+  }
+}
+
+function hopsTruth(trial: Trial): Truth {
+  const takeoff = trueTakeoff(trial, firstFlight(trial))
+  const onset = trueOnset(trial, takeoff)
+  const landing = landingEvents(trial)
+  const contacts = trueHops(trial)
+  const between = contacts.flatMap(({ touchdownS, takeoffS }): Mark[] => [
+    ['contact', touchdownS],
+    ['flight', takeoffS],
+  ])
+  return {
+    events: { onset, takeoff, ...landing },
+    metrics: { ...weighingFigures(trial), ...hopsFigures(contacts), ...landed(trial, landing) },
+    contacts,
+    ledger: ledgerOf(trial, [
+      ['contact', onset],
+      ['flight', takeoff],
+      ...between,
+      ['contact', landing.touchdown],
+    ]),
+  }
+}
+
 /**
- * The truth of a jump by the published definitions, read off the continuous noise-free force and its motion in
+ * The truth of a trial by the published definitions, read off the continuous noise-free force and its motion in
  * closed form; extremes and crossings by search, impulses of a foot by Gauss's rule. Nothing of it comes from a
  * sampled recording. After a step-off the landing's figures are left out.
  */
-export function truthOf(jump: Jump): Truth {
-  const events = trueEvents(jump)
-  const landed = jump.stepOffS === null || jump.stepOffS > events.landingZeroVelocity
-  return {
-    events,
-    metrics: {
-      ...jumpFigures(jump, events),
-      ...pushFigures(jump, events),
-      ...(landed ? landingFigures(jump, events) : {}),
-    },
-    ledger: ledgerOf(jump, events),
+export function truthOf(trial: Trial): Truth {
+  switch (trial.protocol) {
+    case 'cmj':
+    case 'slcmj':
+      return countermovementTruth(trial)
+    case 'sj':
+      return squatTruth(trial)
+    case 'dj':
+      return dropJumpTruth(trial)
+    case 'dropLanding':
+      return dropLandingTruth(trial)
+    case 'hops':
+      return hopsTruth(trial)
   }
 }

@@ -1,21 +1,45 @@
-import { benchCoverage } from '../reference/coverage.ts'
+import { benchCoverage, coverageParts } from '../reference/coverage-bench.ts'
 import { benchPageWeight } from './page-weight.ts'
 import { benchUpload } from './upload.ts'
 
-/** What is measured, by the name that `npm run bench -- <name>` takes. */
-const benches: Record<string, () => void | Promise<void>> = {
-  coverage: () => console.log(benchCoverage().table),
-  'page-weight': benchPageWeight,
-  upload: benchUpload,
+interface Bench {
+  run: (parts: readonly string[]) => void | Promise<void>
+  /** What of it can be measured alone, by name. */
+  parts?: readonly string[]
 }
 
-const asked = process.argv.slice(2)
-const unknown = asked.filter((name) => !(name in benches))
-if (unknown.length > 0) {
-  console.error(`There is no benchmark ${unknown.join(', ')}; there are ${Object.keys(benches).join(', ')}.`)
-  process.exit(1)
+/** What is measured, by the name that `npm run bench -- <name>` takes; parts follow it: `coverage dj hops`. */
+const benches: Record<string, Bench> = {
+  coverage: { run: benchCoverage, parts: coverageParts },
+  'page-weight': { run: benchPageWeight },
+  upload: { run: benchUpload },
 }
-for (const name of asked.length > 0 ? asked : Object.keys(benches)) {
+
+interface Asked {
+  name: string
+  parts: string[]
+}
+
+function readWords(words: readonly string[]): Asked[] {
+  const asked: Asked[] = []
+  for (const word of words) {
+    const last = asked.at(-1)
+    if (word in benches) asked.push({ name: word, parts: [] })
+    else if (last && benches[last.name]?.parts?.includes(word)) last.parts.push(word)
+    else {
+      const names = Object.entries(benches).map(([name, { parts }]) =>
+        parts ? `${name} (${parts.join(', ')})` : name,
+      )
+      console.error(`There is no benchmark ${word}; there are ${names.join(', ')}.`)
+      process.exit(1)
+    }
+  }
+  return asked
+}
+
+const all = Object.keys(benches).map((name): Asked => ({ name, parts: [] }))
+const asked = readWords(process.argv.slice(2))
+for (const { name, parts } of asked.length > 0 ? asked : all) {
   console.log(`\n${name}`)
-  await benches[name]?.()
+  await benches[name]?.run(parts)
 }

@@ -1,125 +1,111 @@
-import { makeJump } from '../../seed/synthetic/jump.ts'
-import type { Jump } from '../../seed/synthetic/jump.ts'
-import type { BodyNoiseOptions, LandingShape, PlateOptions, PushShape } from '../../seed/synthetic/options.ts'
+import { syntheticProtocols } from '../../seed/synthetic/attempts.ts'
+import type { SyntheticProtocol } from '../../seed/synthetic/attempts.ts'
+import { systemKg } from '../../seed/synthetic/options.ts'
+import type { Athlete } from '../../seed/synthetic/options.ts'
+import { perform } from '../../seed/synthetic/perform.ts'
+import type { Trial } from '../../seed/synthetic/perform.ts'
 import { seededRandom } from '../../seed/synthetic/random.ts'
 import type { Random } from '../../seed/synthetic/random.ts'
 import { recordJump } from '../../seed/synthetic/record.ts'
 import type { Recording } from '../../shared/mechanics/types.ts'
+import { drawAttempt } from './coverage-attempts.ts'
+import { drawBody, drawGain, drawPlate, masses, noises } from './coverage-draws.ts'
+import type { Noise } from './coverage-draws.ts'
 
-const RATES = [500, 1000, 2000] as const
-const NOISES = ['clean', 'white', 'slow', 'rough'] as const
-/** kg */
-const MASSES = {
-  light: { from: 45, to: 60 },
-  middle: { from: 60, to: 85 },
-  heavy: { from: 85, to: 120 },
-} as const
-const PUSHES: readonly PushShape[] = ['even', 'early', 'late', 'twoHumps']
-const LANDINGS: readonly LandingShape[] = ['onePeak', 'twoPeaks']
-
-type Noise = (typeof NOISES)[number]
-
-/** Expanded relative uncertainty (k = 2) of the plates' calibration: their gains are drawn from it. */
-export const CALIBRATION_U = 0.005
+const rates = [500, 1000, 2000] as const
+const gravity = 9.80665
+/** Share of trials in which the recording holds a second one. */
+const ACCOMPANIED = 0.15
+/** Share of countermovement jumps with a load. */
+const LOADED = 0.2
 
 /** One drawn trial: what truly happened, what the plates wrote, and where it belongs. */
 export interface CoverageTrial {
-  jump: Jump
+  trial: Trial
   recording: Recording
-  /** By kind: rate, noise, mass, push, landing, plates. */
+  /** The trial's clock at the recording's first sample, s. */
+  startS: number
+  /** By kind: rate, noise, mass, plates, shapes. */
   strata: Record<string, string>
 }
 
-/**
- * Sway of 1 to 3 mm/s and beats of 1 to 3 N are orders of magnitude of quiet standing (from memory); a still body
- * is for the clean stratum only.
- */
-function drawBody(noise: Noise, random: Random): BodyNoiseOptions {
-  const isStill = noise === 'clean'
-  return {
-    swayVelocity: isStill ? 0.0003 : random.between(0.001, 0.003),
-    heartbeatN: isStill ? 0 : random.between(1, 3),
-    heartRateHz: random.between(0.9, 1.5),
-    fidgetN: 0,
-  }
-}
-
-function drawPlate(noise: Noise, random: Random): Partial<PlateOptions> {
-  const gainError = (CALIBRATION_U / 2) * random.normal()
-  const isRough = noise === 'rough'
-  const ringing = {
-    ringingN: random.between(5, 40),
-    ringingHz: random.between(150, 400),
-    ringingDecayS: 0.01,
-  }
-  const byNoise: Record<Noise, Partial<PlateOptions>> = {
-    clean: { whiteNoiseN: 0.3 },
-    white: { whiteNoiseN: random.between(0.8, 2.5), ...ringing },
-    slow: {
-      whiteNoiseN: 0.5,
-      slowNoiseN: random.between(0.5, 2),
-      slowNoiseTimeS: random.between(0.01, 0.1),
-      ...ringing,
-    },
-    rough: {
-      whiteNoiseN: random.between(0.5, 2),
-      slowNoiseN: random.between(0.5, 1.5),
-      slowNoiseTimeS: random.between(0.01, 0.1),
-      ...ringing,
-    },
-  }
-  return {
-    gainError,
-    offsetN: isRough ? random.between(-5, 5) : 0,
-    driftNPerS: isRough ? 0.1 * random.normal() : 0,
-    stepN: isRough ? 0.2 : 0,
-    ...byNoise[noise],
-  }
-}
-
-/** The trial of a number: always the same one. */
-export function coverageTrial(number: number): CoverageTrial {
-  const random = seededRandom(77_000 + number)
-  const rate = random.pick(RATES)
-  const noise = random.pick(NOISES)
+function drawAthlete(
+  protocol: SyntheticProtocol,
+  noise: Noise,
+  random: Random,
+): { athlete: Athlete; strata: Record<string, string> } {
   const mass = random.pick(['light', 'middle', 'heavy'] as const)
-  const push = random.pick(PUSHES)
-  const landing = random.pick(LANDINGS)
-  const plates = random.pick([1, 2] as const)
-  const share = (): number => random.between(0.46, 0.54)
-  const jump = makeJump(
-    {
-      massKg: random.between(MASSES[mass].from, MASSES[mass].to),
-      takeoffVelocity: random.between(1.9, 3.1),
-      depthM: random.between(0.22, 0.42),
-      stanceS: random.between(1.4, 3.2),
-      unweightingS: random.between(0.36, 0.52),
-      pushS: random.between(0.32, 0.46),
-      unloadingS: random.between(0.03, 0.05),
-      push,
-      takeoffEdge: random.pick(['soft', 'steep'] as const),
-      landing,
-      touchdownEdge: random.pick(['soft', 'steep'] as const),
-      landingS: random.between(0.18, 0.32),
-      landsLowerM: random.between(0, 0.04),
-      risingS: random.between(0.7, 1.1),
-      shares: {
-        stance: share(),
-        unweighting: share(),
-        braking: share(),
-        propulsion: share(),
-        landing: share(),
-      },
-      body: drawBody(noise, random),
-    },
-    number,
-  )
-  const durationS = jump.design.restS + random.between(1.5, 2.5)
+  const isLoaded = protocol === 'cmj' && random.next() < LOADED
+  const athlete: Athlete = {
+    massKg: random.between(masses[mass].from, masses[mass].to),
+    loadKg: isLoaded ? 2.5 * Math.round(random.between(4, 24)) : 0,
+    gravity,
+    body: drawBody(noise, random),
+  }
+  return { athlete, strata: protocol === 'cmj' ? { mass, load: isLoaded ? 'some' : 'none' } : { mass } }
+}
+
+/**
+ * The trial of a number: always the same one.
+ * @param mayBeAccompanied whether some recordings hold two trials, of which this is one
+ */
+export function coverageTrial(
+  protocol: SyntheticProtocol,
+  number: number,
+  mayBeAccompanied = false,
+): CoverageTrial {
+  const random = seededRandom(100_000 * (syntheticProtocols.indexOf(protocol) + 1) + number)
+  const rate = random.pick(rates)
+  const noise = random.pick(noises)
+  const plates = random.pick([1, 2, 2, 'total'] as const)
+  const { athlete, strata } = drawAthlete(protocol, noise, random)
+  const slower = Math.sqrt(athlete.massKg / systemKg(athlete))
+  const { attempt, shape } = drawAttempt(protocol, random, slower)
+  const isAccompanied = mayBeAccompanied && random.next() < ACCOMPANIED
+  const isSecond = isAccompanied && random.next() < 0.5
+  const other = drawAttempt(protocol, random, slower).attempt
+  const away = { leavesForS: random.between(2, 4) }
+  const leaves = protocol === 'dj' || protocol === 'dropLanding' || random.next() < 0.5 ? away : {}
+  const pair = isSecond
+    ? [{ ...other, ...leaves }, attempt]
+    : [{ ...attempt, ...(isAccompanied ? leaves : {}) }, ...(isAccompanied ? [other] : [])]
+  const performance = perform(athlete, pair, number)
+  const trial = performance.trials[isSecond ? 1 : 0]
+  if (!trial) throw new RangeError('An attempt makes a trial.')
+  // Any phase of the sample clock against the body's.
+  const startS = random.between(0, 1 / rate)
+  const gainError = drawGain(random)
+  const otherGain = plates === 'total' ? gainError : drawGain(random)
   const recording = recordJump(
-    jump,
-    { sampleRateHz: rate, durationS, plates },
-    { left: drawPlate(noise, random), right: drawPlate(noise, random) },
+    performance,
+    { sampleRateHz: rate, startS, durationS: performance.endS - startS, plates },
+    { left: drawPlate(noise, gainError, random), right: drawPlate(noise, otherGain, random) },
     number,
   )
-  return { jump, recording, strata: { rate: `${rate} Hz`, noise, mass, push, landing, plates: `${plates}` } }
+  const together: Record<string, string> = mayBeAccompanied
+    ? { recording: isAccompanied ? 'two trials' : 'one trial' }
+    : {}
+  return {
+    trial,
+    recording,
+    startS,
+    strata: { rate: `${rate} Hz`, noise, plates: `${plates}`, ...strata, ...shape, ...together },
+  }
+}
+
+/**
+ * A countermovement jump in a clean laboratory: a still athlete on two plates with 3 N of white noise each, 8 s at
+ * 1,000 Hz. The takeoff velocity is then as good as noise and weighing allow.
+ */
+export function laboratoryTrial(number: number): CoverageTrial {
+  const random = seededRandom(900_000 + number)
+  const athlete = { massKg: random.between(50, 110), gravity }
+  const { attempt, shape } = drawAttempt('cmj', random)
+  const stanceS = random.between(1.5, 1.8)
+  const [trial] = perform(athlete, [{ ...attempt, stanceS }], number).trials
+  if (!trial) throw new RangeError('An attempt makes a trial.')
+  const plate = { whiteNoiseN: 3 }
+  const sampling = { sampleRateHz: 1000, durationS: 8 }
+  const recording = recordJump(trial, sampling, { left: plate, right: plate }, number)
+  return { trial, recording, startS: 0, strata: { noise: 'laboratory', ...shape } }
 }
