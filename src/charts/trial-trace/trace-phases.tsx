@@ -40,13 +40,15 @@ export function PhaseFigures({ shapes, layout }: { shapes: PhaseShape[]; layout:
         const width = text.length * 7.5 + 6
         const inside = shape.label.room >= width && shape.label.height >= 18
         if (!inside && layout.narrow) return null
-        const beside = shape.label.x + shape.label.room / 2 + 6
+        // Braking runs into propulsion at its right: the free side is the left.
+        const left = shape.phase === 'braking'
+        const edge = shape.label.x + (shape.label.room / 2 + 6) * (left ? -1 : 1)
         return (
           <text
             key={shape.phase}
-            x={inside ? shape.label.x : Math.min(beside, layout.plot.right - width)}
+            x={inside ? shape.label.x : left ? edge : Math.min(edge, layout.plot.right - width)}
             y={shape.label.y + 4}
-            textAnchor={inside ? 'middle' : 'start'}
+            textAnchor={inside ? 'middle' : left ? 'end' : 'start'}
             className="stroke-sheet"
             strokeWidth="4"
             strokeLinejoin="round"

@@ -76,7 +76,7 @@ export function TrialTrace({
 function Readout({ data, timeS }: { data: TraceData; timeS: number | null }) {
   const reading = timeS === null ? null : readTrace(data, timeS)
   return (
-    <output aria-live="polite" className="flex min-h-6 flex-wrap gap-x-5 text-small text-ink-2">
+    <output aria-live="polite" className="mt-1 flex min-h-6 flex-wrap gap-x-5 text-small text-ink-2">
       {reading ? (
         <>
           <span className="tabular-nums text-ink">{reading.timeS.toFixed(3)} s</span>

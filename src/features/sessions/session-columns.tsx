@@ -27,7 +27,7 @@ export const sessionColumns: Column<SessionSummary>[] = [
     key: 'state',
     head: 'State',
     cell: (session) => (
-      <span className="flex flex-wrap gap-1">
+      <span className="inline-flex flex-wrap gap-1">
         {session.inTray > 0 && <Tag tone="caution">{session.inTray} in the Tray</Tag>}
         {session.publishedAt === null ? <Tag>not published</Tag> : 'published'}
       </span>
