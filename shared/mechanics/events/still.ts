@@ -13,15 +13,21 @@ export function comesToStay(
   hold: number,
   half: number,
 ): number | null {
-  const last = sums.length - 1
+  const { sums: running, reference, length } = sums
+  const width = 2 * half + 1
+  const target = (weight - reference) * width
+  const within = band * width
+  const start = Math.ceil(from)
   let since = -1
-  for (let i = Math.ceil(from); i <= last; i++) {
-    const distance = Math.abs(meanAround(sums, i, half) - weight)
-    if (!(distance <= band)) since = -1
-    else {
-      if (since < 0) since = i
-      if (i - since >= hold) return placed(sums, weight, band, since, half)
-    }
+  for (let i = start; i < length; i++) {
+    // Inside the record the running mean is one subtraction; at its ends it is taken over what is there.
+    const inside = i >= half && i + half < length
+    const distance = inside
+      ? Math.abs(running[i + half + 1] - running[i - half] - target)
+      : Math.abs(meanAround(sums, i, half) - weight) * width
+    if (!(distance <= within)) since = -1
+    else if (since < 0) since = i
+    if (since >= 0 && i - since >= hold) return placed(sums, weight, band, since, half)
   }
   return null
 }

@@ -1,5 +1,5 @@
 import type { Settings } from '../settings.ts'
-import { addUp, type Plate, type Signal } from '../signal/condition.ts'
+import { addUp, type Signal } from '../signal/condition.ts'
 import { effectiveSamples, estimateNoise, type Noise } from '../signal/noise.ts'
 import type { Stretch } from './unloaded.ts'
 
@@ -22,13 +22,6 @@ function inner({ from, to }: Stretch, dt: number, settings: Settings): Stretch {
   return { from: from + margin, to: end }
 }
 
-function takeOff(plate: Plate, offset: number): void {
-  const { force } = plate
-  const { length } = force
-  for (let i = 0; i < length; i++) force[i] -= offset
-  plate.offsetN = offset
-}
-
 /**
  * Takes each plate's zero from an unloaded stretch and subtracts it from the signal (which is the engine's own copy).
  * A plate that was tared with the athlete on it is put right by the same step.
@@ -36,8 +29,12 @@ function takeOff(plate: Plate, offset: number): void {
 export function zeroPlates(signal: Signal, unloaded: Stretch, settings: Settings): Zero {
   const stretch = inner(unloaded, signal.dt, settings)
   const plates = signal.plates.map((plate) => estimateNoise(plate.force, stretch.from, stretch.to))
-  signal.plates.forEach((plate, i) => takeOff(plate, plates[i].mean))
-  addUp(signal.plates, signal.total)
+  addUp(
+    signal.plates,
+    signal.total,
+    plates.map(({ mean }) => mean),
+  )
+  signal.plates.forEach((plate, i) => (plate.offsetN = plates[i].mean))
   return {
     centre: (stretch.from + stretch.to - 1) / 2,
     plates,

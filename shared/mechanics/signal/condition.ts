@@ -47,23 +47,49 @@ function chooseChannels(recording: Recording): ForceChannel[] {
   return right ? ['right'] : []
 }
 
+/** What one pass over a channel tells. */
+interface Survey {
+  unreadable: number
+  least: number
+  greatest: number
+  /** Samples in a row at exactly the greatest value. */
+  flatTop: number
+}
+
 /**
- * Copies a channel, bridging samples that are not finite or beyond `limit` by straight lines; answers how many.
- * A record without one readable sample becomes zeros.
+ * Copies a channel times `sign`, bridging samples that are not finite or beyond `limit` by straight lines. A record
+ * without one readable sample becomes zeros.
  */
-function copyReadable(from: Float64Array, to: Float64Array, limit: number): number {
-  let bad = 0
+function copyReadable(from: Float64Array, to: Float64Array, limit: number, sign: 1 | -1): Survey {
+  const { length } = to
+  let unreadable = 0
   let lastGood = -1
-  for (let i = 0; i < to.length; i++) {
-    const value = from[i]
-    if (value <= limit && value >= -limit) {
-      to[i] = value
-      if (lastGood < i - 1) bridge(to, lastGood, i)
-      lastGood = i
-    } else bad++
+  let least = Infinity
+  let greatest = -Infinity
+  let run = 0
+  let flatTop = 0
+  for (let i = 0; i < length; i++) {
+    const value = sign * from[i]
+    if (!(value <= limit && value >= -limit)) {
+      unreadable++
+      run = 0
+      continue
+    }
+    to[i] = value
+    if (lastGood < i - 1) bridge(to, lastGood, i)
+    lastGood = i
+    if (value < least) least = value
+    if (value > greatest) {
+      greatest = value
+      run = 1
+      flatTop = 1
+    } else if (value === greatest) {
+      run++
+      if (run > flatTop) flatTop = run
+    } else run = 0
   }
   to.fill(lastGood >= 0 ? to[lastGood] : 0, lastGood + 1)
-  return bad
+  return { unreadable, least, greatest, flatTop }
 }
 
 function bridge(force: Float64Array, lastGood: number, nextGood: number): void {
@@ -84,27 +110,6 @@ export function usualLevel(force: Float64Array): number {
   return sorted[count >> 1]
 }
 
-/** Extremes of a record, and for how many samples in a row it stays exactly at the greatest. */
-function extremes(force: Float64Array): { least: number; greatest: number; flatTop: number } {
-  let least = Infinity
-  let greatest = -Infinity
-  let run = 0
-  let flatTop = 0
-  for (let i = 0; i < force.length; i++) {
-    const value = force[i]
-    if (value < least) least = value
-    if (value > greatest) {
-      greatest = value
-      run = 1
-      flatTop = 1
-    } else if (value === greatest) {
-      run++
-      if (run > flatTop) flatTop = run
-    } else run = 0
-  }
-  return { least, greatest, flatTop }
-}
-
 /**
  * Pressing down reads negative where the usual level is below zero and the largest force points the same way:
  * a push and a landing reach further from standing than the empty plate does.
@@ -121,24 +126,22 @@ function conditionPlate(
   settings: Settings,
 ): Plate & { unreadable: number } {
   const force = borrow(`force of ${channel}`, raw.length)
-  const unreadable = copyReadable(raw, force, settings.greatestForceN)
-  let range = extremes(force)
-  const flipped = isNegativeGoing(force, range.least, range.greatest)
-  if (flipped) {
-    for (let i = 0; i < force.length; i++) force[i] = -force[i]
-    range = extremes(force)
-  }
-  const dead = !(range.greatest - range.least > settings.smallestLoadN / 3)
-  return { channel, force, offsetN: 0, flipped, dead, flatTop: range.flatTop, unreadable }
+  let survey = copyReadable(raw, force, settings.greatestForceN, 1)
+  const flipped = isNegativeGoing(force, survey.least, survey.greatest)
+  if (flipped) survey = copyReadable(raw, force, settings.greatestForceN, -1)
+  const dead = !(survey.greatest - survey.least > settings.smallestLoadN / 3)
+  return { channel, force, offsetN: 0, flipped, dead, flatTop: survey.flatTop, unreadable: survey.unreadable }
 }
 
-/** Writes the force of all plates together. */
-export function addUp(plates: readonly Plate[], total: Float64Array): void {
+/** Takes offsets off the plates' force and writes the force of all plates together. */
+export function addUp(plates: readonly Plate[], total: Float64Array, offsets: readonly number[]): void {
   const { length } = total
   const first = plates[0].force
-  if (plates.length === 1) return total.set(first)
-  const second = plates[1].force
-  for (let i = 0; i < length; i++) total[i] = first[i] + second[i]
+  const second = plates.length > 1 ? plates[1].force : null
+  const ofFirst = offsets[0]
+  const ofSecond = offsets[1] ?? 0
+  if (second === null) for (let i = 0; i < length; i++) total[i] = first[i] -= ofFirst
+  else for (let i = 0; i < length; i++) total[i] = (first[i] -= ofFirst) + (second[i] -= ofSecond)
 }
 
 /**
@@ -173,7 +176,7 @@ export function conditionRecording(recording: Recording, settings: Settings): Co
 
   const conditioned = channels.map((channel, i) => conditionPlate(channel, raws[i], settings))
   const total = borrow('total', length)
-  addUp(conditioned, total)
+  addUp(conditioned, total, [0, 0])
   const unreadable = conditioned.reduce((sum, plate) => sum + plate.unreadable, 0)
   return { signal: { sampleRateHz: rate, dt: 1 / rate, length, plates: conditioned, total, unreadable } }
 }

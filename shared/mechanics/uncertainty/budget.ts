@@ -25,10 +25,13 @@ export class Budget {
   private readonly inputs: Input[] = []
   private readonly nothing = new Float64Array(0)
   private readonly coverage: number
+  /** Coverage factor where nothing is statistical. */
+  private readonly normal: number
 
   constructor(on: boolean, coverage: number) {
     this.on = on
     this.coverage = coverage
+    this.normal = studentT(coverage, Infinity)
   }
 
   exact(value: number): Quantity {
@@ -109,11 +112,13 @@ export class Budget {
 
   /** The figure as it leaves the engine. `withoutU` where no honest uncertainty can be given. */
   figure(quantity: Quantity, withoutU = false): Figure {
+    if (!this.on)
+      return { value: quantity.value, U: null, k: this.normal, URepeat: null, kRepeat: this.normal }
     const all = this.combined(quantity)
     const repeat = this.combined(quantity, true)
     const k = studentT(this.coverage, all.dof)
     const kRepeat = studentT(this.coverage, repeat.dof)
-    const none = !this.on || withoutU || !Number.isFinite(all.u)
+    const none = withoutU || !Number.isFinite(all.u)
     return {
       value: quantity.value,
       U: none ? null : k * all.u,
