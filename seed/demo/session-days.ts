@@ -14,7 +14,7 @@ import { isAway, mishapOf, type Recipe, recipeOf } from './stories.ts'
 import type { FileStyle } from '../synthetic/file-styles.ts'
 
 const trialsEach = 2
-const lookEveryMs = 60
+const lookEveryMs = 500
 
 export type MakeFile = (recipe: Recipe, style: FileStyle) => Promise<Uint8Array>
 

@@ -6,7 +6,7 @@ import { analyses, trials, trialSamples, type AnalysisInputs } from '../../db/sc
 export type AnalysisRow = typeof analyses.$inferSelect
 export type NewAnalysis = Omit<typeof analyses.$inferInsert, 'id' | 'supersededAt' | 'createdAt'>
 
-/** A trial with what its analysis is made from, as it stands now. */
+/** A trial with what its analysis is made from, as it stands now; its samples, which never change, are apart. */
 export async function findTrialToAnalyse(tx: Tx, clubId: string, trialId: string) {
   const [row] = await tx
     .select({
@@ -21,7 +21,6 @@ export async function findTrialToAnalyse(tx: Tx, clubId: string, trialId: string
       } satisfies Record<keyof AnalysisInputs['test'], unknown>,
       recordedMassKg: athletes.recordedMassKg,
       channels: trialSamples.channels,
-      samples: trialSamples.bytes,
     })
     .from(trials)
     .innerJoin(trialSamples, and(eq(trialSamples.clubId, trials.clubId), eq(trialSamples.trialId, trials.id)))
@@ -30,6 +29,14 @@ export async function findTrialToAnalyse(tx: Tx, clubId: string, trialId: string
   return row ?? null
 }
 export type TrialRow = NonNullable<Awaited<ReturnType<typeof findTrialToAnalyse>>>
+
+export async function findSamples(tx: Tx, clubId: string, trialId: string): Promise<Buffer> {
+  const [row] = await tx
+    .select({ bytes: trialSamples.bytes })
+    .from(trialSamples)
+    .where(and(eq(trialSamples.clubId, clubId), eq(trialSamples.trialId, trialId)))
+  return row.bytes
+}
 
 /** Until the transaction ends nobody changes the trial, nor analyses it. */
 export async function lockTrial(tx: Tx, clubId: string, trialId: string): Promise<void> {

@@ -2,13 +2,16 @@ import { createHash } from 'node:crypto'
 import type { Analysis } from '../../../shared/contracts/trials.ts'
 import { engineVersion } from '../../../shared/mechanics/version.ts'
 import type { ClubContext, Tx } from '../../db/database.ts'
+import type { AnalysisInputs } from '../../db/schema/trials.ts'
 import type { Deps } from '../../deps.ts'
 import type { JobDeps } from '../../jobs/define-job.ts'
 import { notify } from '../events/notify.ts'
 import { rebuildWorking } from '../results/results.service.ts'
 import {
+  type AnalysisKey,
   findAnalysis,
   findAnalysisId,
+  findSamples,
   findTrialToAnalyse,
   insertAnalysis,
   lockTrial,
@@ -16,7 +19,7 @@ import {
   type TrialRow,
 } from './analyses.queries.ts'
 import { type EngineSaid, toRow, toView } from './analysis-form.ts'
-import { engineOptions, hashInputs, inputsOf } from './inputs.ts'
+import { engineOptions, hashInputs, inputsOf, inputsText } from './inputs.ts'
 import { givenUp, ofOneTrial } from './without-figures.ts'
 
 /** A trial's current analysis, or the pinned one. */
@@ -34,67 +37,67 @@ export async function viewAnalysis(
  * once: the same inputs are the same row, and inputs that changed meanwhile have sent a job of their own.
  */
 export async function analyseTrial(deps: JobDeps, ctx: ClubContext, trialId: string): Promise<void> {
-  const trial = await deps.db.inClub(ctx, (tx) => findTrialToAnalyse(tx, ctx.clubId, trialId))
-  if (!trial) return
-  const known = await deps.db.inClub(ctx, (tx) => keepKnown(tx, ctx, trialId, keyOf(ctx, trialId, trial)))
-  if (known) return
-  const options = engineOptions(inputsOf(trial))
-  const answer = await deps.threads.analyseSamples({ samples: trial.samples, options })
-  await deps.db.inClub(ctx, (tx) => keep(tx, ctx, trialId, { before: trial, said: ofOneTrial(answer) }))
+  const work = await readTrial(deps, ctx, trialId)
+  if (!work) return
+  if (await deps.db.inClub(ctx, (tx) => findAnalysisId(tx, work.key))) {
+    await deps.db.inClub(ctx, (tx) => makeCurrent(tx, work))
+    return
+  }
+  const task = { samples: work.samples, options: engineOptions(work.inputs) }
+  const said = ofOneTrial(await deps.threads.analyseSamples(task))
+  await deps.db.inClub(ctx, (tx) => keep(tx, work, said))
 }
 
-function keyOf({ clubId }: ClubContext, trialId: string, trial: TrialRow) {
-  return { clubId, trialId, engineVersion, inputsHash: hashInputs(inputsOf(trial), trial.samples) }
+/** A trial as it was read, with the key that its analysis will have. */
+interface Work {
+  ctx: ClubContext
+  key: AnalysisKey
+  inputs: AnalysisInputs
+  samples: Buffer
 }
 
-/** True where these inputs were analysed before; that analysis is made current if it is not. */
-async function keepKnown(
-  tx: Tx,
-  ctx: ClubContext,
-  trialId: string,
-  key: ReturnType<typeof keyOf>,
-): Promise<boolean> {
-  await lockTrial(tx, ctx.clubId, trialId)
-  const trial = await findTrialToAnalyse(tx, ctx.clubId, trialId)
-  const analysisId = await findAnalysisId(tx, key)
-  if (!analysisId || !trial || !keyOf(ctx, trialId, trial).inputsHash.equals(key.inputsHash)) return false
-  await restoreAnalysis(tx, ctx.clubId, trialId, analysisId)
-  await tell(tx, ctx, trial)
-  return true
+async function readTrial({ db }: Deps, ctx: ClubContext, trialId: string): Promise<Work | null> {
+  const { clubId } = ctx
+  const read = await db.inClub(ctx, async (tx) => {
+    const trial = await findTrialToAnalyse(tx, clubId, trialId)
+    return trial && { inputs: inputsOf(trial), samples: await findSamples(tx, clubId, trialId) }
+  })
+  if (!read) return null
+  const key = { clubId, trialId, engineVersion, inputsHash: hashInputs(read.inputs, read.samples) }
+  return { ctx, key, ...read }
+}
+
+/** Locks the trial; null where it is not any more what it was when it was read. */
+async function lockUnchanged(tx: Tx, { key, inputs }: Work): Promise<TrialRow | null> {
+  await lockTrial(tx, key.clubId, key.trialId)
+  const now = await findTrialToAnalyse(tx, key.clubId, key.trialId)
+  return now && inputsText(inputsOf(now)) === inputsText(inputs) ? now : null
+}
+
+/** Makes an analysis that was made before of the same inputs the current one, if it is not. */
+async function makeCurrent(tx: Tx, work: Work): Promise<void> {
+  const trial = await lockUnchanged(tx, work)
+  const analysisId = trial && (await findAnalysisId(tx, work.key))
+  if (!analysisId) return
+  await restoreAnalysis(tx, work.key.clubId, work.key.trialId, analysisId)
+  await tell(tx, work.ctx, trial)
 }
 
 /** Writes the analysis, unless the trial has changed since it was read, or another run wrote it first. */
-async function keep(
-  tx: Tx,
-  ctx: ClubContext,
-  trialId: string,
-  { before, said }: { before: TrialRow; said: EngineSaid },
-): Promise<void> {
-  await lockTrial(tx, ctx.clubId, trialId)
-  const now = await findTrialToAnalyse(tx, ctx.clubId, trialId)
-  const key = keyOf(ctx, trialId, before)
-  if (!now || !keyOf(ctx, trialId, now).inputsHash.equals(key.inputsHash)) return
-  if (await findAnalysisId(tx, key)) return
-  await insertAnalysis(tx, { ...key, inputs: inputsOf(before), ...toRow(said) })
-  await tell(tx, ctx, now)
+async function keep(tx: Tx, work: Work, said: EngineSaid, key = work.key): Promise<void> {
+  const trial = await lockUnchanged(tx, work)
+  if (!trial || (await findAnalysisId(tx, work.key)) || (await findAnalysisId(tx, key))) return
+  await insertAnalysis(tx, { ...key, inputs: work.inputs, ...toRow(said) })
+  await tell(tx, work.ctx, trial)
 }
 
 /** Says of a trial that its analysis failed every time, so that its sheet does not wait for ever. */
 export async function giveUpAnalysing(deps: Deps, ctx: ClubContext, trialId: string): Promise<void> {
-  await deps.db.inClub(ctx, async (tx) => {
-    await lockTrial(tx, ctx.clubId, trialId)
-    const trial = await findTrialToAnalyse(tx, ctx.clubId, trialId)
-    if (!trial) return
-    const key = keyOf(ctx, trialId, trial)
-    // Another hash than the inputs' own: these inputs are still free to be analysed by a better engine.
-    const failed = {
-      ...key,
-      inputsHash: createHash('sha256').update('given up').update(key.inputsHash).digest(),
-    }
-    if ((await findAnalysisId(tx, key)) || (await findAnalysisId(tx, failed))) return
-    await insertAnalysis(tx, { ...failed, inputs: inputsOf(trial), ...toRow(givenUp) })
-    await tell(tx, ctx, trial)
-  })
+  const work = await readTrial(deps, ctx, trialId)
+  if (!work) return
+  // Another hash than the inputs' own: these inputs are still free to be analysed by a better engine.
+  const inputsHash = createHash('sha256').update('given up').update(work.key.inputsHash).digest()
+  await deps.db.inClub(ctx, (tx) => keep(tx, work, givenUp, { ...work.key, inputsHash }))
 }
 
 async function tell(tx: Tx, ctx: ClubContext, { sessionId, athleteId }: TrialRow): Promise<void> {

@@ -29,11 +29,11 @@ export function inputsOf({ test, recordedMassKg, channels }: TrialToAnalyse): An
 
 /** SHA-256 over the inputs and the stored samples: the same again is the same analysis. */
 export function hashInputs(inputs: AnalysisInputs, samples: Uint8Array): Buffer {
-  return createHash('sha256')
-    .update(JSON.stringify(sorted(inputs)))
-    .update(samples)
-    .digest()
+  return createHash('sha256').update(inputsText(inputs)).update(samples).digest()
 }
+
+/** The inputs as one text, whatever order their keys were built or read back in. */
+export const inputsText = (inputs: AnalysisInputs): string => JSON.stringify(sorted(inputs))
 
 export function engineOptions(inputs: AnalysisInputs): AnalyseOptions {
   return {
