@@ -86,7 +86,8 @@ async function makeCurrent(tx: Tx, work: Work): Promise<void> {
 /** Writes the analysis, unless the trial has changed since it was read, or another run wrote it first. */
 async function keep(tx: Tx, work: Work, said: EngineSaid, key = work.key): Promise<void> {
   const trial = await lockUnchanged(tx, work)
-  if (!trial || (await findAnalysisId(tx, work.key)) || (await findAnalysisId(tx, key))) return
+  if (!trial || (await findAnalysisId(tx, work.key))) return
+  if (key !== work.key && (await findAnalysisId(tx, key))) return
   await insertAnalysis(tx, { ...key, inputs: work.inputs, ...toRow(said) })
   await tell(tx, work.ctx, trial)
 }
