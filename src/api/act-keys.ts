@@ -9,7 +9,7 @@ export interface ActKeys {
 }
 
 /** 128 random bits. Not `randomUUID`, which a browser only has on https: a club may run this inside its own walls. */
-function randomKey(): string {
+export function randomKey(): string {
   return Array.from(crypto.getRandomValues(new Uint8Array(16)), (byte) =>
     byte.toString(16).padStart(2, '0'),
   ).join('')

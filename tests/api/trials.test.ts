@@ -2,6 +2,7 @@ import { afterAll, beforeAll, describe, expect, it } from 'vitest'
 import { getAthlete } from '../../shared/contracts/athletes.ts'
 import { getSession, type SheetTrial } from '../../shared/contracts/sessions.ts'
 import { changeTrial, getTrial } from '../../shared/contracts/trials.ts'
+import { finishUpload } from '../../shared/contracts/uploads.ts'
 import { onDatabase } from '../../server/setup/database-urls.mjs'
 import { buildAthlete } from '../../seed/builders/athlete.ts'
 import { refusalOf } from './harness/api-client.ts'
@@ -10,6 +11,7 @@ import {
   dropFile,
   jumpFile,
   newSession,
+  sendFile,
   settledSheet,
   startTestingDay,
   type TestingDay,
@@ -50,6 +52,18 @@ const means = async (sessionId: string, athleteId: string) => {
   const { athletes } = await day.coach.call(getSession, { params: { sessionId } })
   return athletes.find((athlete) => athlete.athleteId === athleteId)?.means ?? {}
 }
+
+describe('trials on the sheet', () => {
+  it('stand in the order in which their files were dropped, whichever was read first', async () => {
+    const session = await newSession(day.coach, day.squadId)
+    const first = await sendFile(day.coach, session.id, 'ostrow_mara_1.csv', jumpFile(90))
+    await dropFile(day.coach, session.id, 'ostrow_mara_2.csv', jumpFile(91))
+    await settledSheet(day.coach, session.id)
+    await day.coach.call(finishUpload, { params: { uploadId: first.id } })
+    const { trials } = await settledSheet(day.coach, session.id)
+    expect(trials.map(({ fileName }) => fileName)).toEqual(['ostrow_mara_1.csv', 'ostrow_mara_2.csv'])
+  })
+})
 
 describe('a trial in the Tray', () => {
   it('goes on an athlete by hand, counts in the mean, and is checked against that athlete’s mass', async () => {

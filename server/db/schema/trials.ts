@@ -66,6 +66,8 @@ export const trials = club.table(
     endS: doublePrecision('end_s').notNull(),
     /** Total force for a sparkline, whole newtons, evenly over the trial. */
     preview: jsonb('preview').$type<number[]>().notNull(),
+    /** When its file was dropped: the order on the sheet, whichever file a worker happened to read first. */
+    droppedAt: moment('dropped_at').notNull().defaultNow(),
     version: rowVersion(),
     createdAt: createdAt(),
   },

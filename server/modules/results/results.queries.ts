@@ -40,7 +40,7 @@ const included = {
   metricUncertainties: analyses.metricUncertainties,
   checks: analyses.checks,
 }
-const inOrder = [asc(trials.createdAt), asc(trials.ordinal), asc(trials.id)]
+const inOrder = [asc(trials.droppedAt), asc(trials.ordinal), asc(trials.id)]
 
 /** The trials that count on the sheet: on the athlete, analysed, not set aside. */
 export function workingTrials(tx: Tx, { clubId, sessionId, athleteId }: Place): Promise<IncludedTrial[]> {

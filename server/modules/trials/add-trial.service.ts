@@ -9,7 +9,7 @@ import { insertTrial } from './trials.queries.ts'
 export async function addTrial(
   tx: Tx,
   clubId: string,
-  upload: { id: string; sessionId: string; fileName: string },
+  upload: { id: string; sessionId: string; fileName: string; createdAt: Date },
   read: FileRead,
 ): Promise<void> {
   const { protocol, candidates } = await candidatesOf(tx, clubId, upload.sessionId)
@@ -26,6 +26,7 @@ export async function addTrial(
       startS: 0,
       endS: (read.sampleCount - 1) / read.sampleRateHz,
       preview: read.preview,
+      droppedAt: upload.createdAt,
     },
     {
       sampleRateHz: read.sampleRateHz,

@@ -34,7 +34,7 @@ const columns = {
 const sheetOrder = [
   sql`${athletes.nameKey} asc nulls last`,
   asc(trials.athleteId),
-  asc(trials.createdAt),
+  asc(trials.droppedAt),
   asc(trials.ordinal),
   asc(trials.id),
 ]
@@ -154,7 +154,7 @@ export function ownOrderOf(
         eq(trials.sessionId, sessionId),
       ),
     )
-    .orderBy(asc(trials.createdAt), asc(trials.ordinal), asc(trials.id))
+    .orderBy(asc(trials.droppedAt), asc(trials.ordinal), asc(trials.id))
 }
 
 export async function findSamples(tx: Tx, clubId: string, trialId: string) {

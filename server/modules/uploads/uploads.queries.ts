@@ -55,6 +55,7 @@ export interface UploadRow {
   state: Upload['state']
   reading: Reading | null
   sizeBytes: number
+  createdAt: Date
 }
 
 export async function findUpload(tx: Tx, clubId: string, uploadId: string): Promise<UploadRow | null> {
@@ -67,6 +68,7 @@ export async function findUpload(tx: Tx, clubId: string, uploadId: string): Prom
       state: sql<Upload['state']>`${uploads.state}`,
       reading: uploads.reading,
       sizeBytes: files.sizeBytes,
+      createdAt: uploads.createdAt,
     })
     .from(uploads)
     .innerJoin(files, and(eq(files.clubId, uploads.clubId), eq(files.id, uploads.fileId)))

@@ -74,11 +74,11 @@ function Landings({ title, aside, landings, children }: LandingsProps) {
   )
 }
 
-/** "Countermovement jump 4.0 BW"; null where none is set. */
+/** "Countermovement jump 4.25 BW"; null where none is set. */
 function limitWords(limits: Watch['limits']): string | null {
   const words = Protocol.options.flatMap((protocol) => {
     const limit = limits[protocol]
-    return limit === undefined ? [] : [`${protocolNames[protocol]} ${formatNumber(limit, 1)} BW`]
+    return limit === undefined ? [] : [`${protocolNames[protocol]} ${formatNumber(limit, 2)} BW`]
   })
   return words.join(', ') || null
 }

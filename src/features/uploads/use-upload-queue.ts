@@ -1,5 +1,6 @@
 import { useQueryClient, type QueryClient } from '@tanstack/react-query'
 import { useEffect, useSyncExternalStore } from 'react'
+import { randomKey } from '../../api/act-keys.ts'
 import { streamHealth } from '../../api/events/stream-health.ts'
 import { finishUpload } from '../../api/uploads/finish-upload.ts'
 import { sendChunk } from '../../api/uploads/send-chunk.ts'
@@ -32,7 +33,7 @@ function newQueue(queryClient: QueryClient, sessionId: string): UploadQueue {
       refresh()
       return upload
     },
-    newKey: () => crypto.randomUUID(),
+    newKey: randomKey,
     wait: (ms) => new Promise((resolve) => setTimeout(resolve, ms)),
   })
 }

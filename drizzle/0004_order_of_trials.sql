@@ -1,0 +1,1 @@
+ALTER TABLE "club"."trials" ADD COLUMN "dropped_at" timestamp with time zone DEFAULT now() NOT NULL;
