@@ -3,7 +3,7 @@ import { invertShare } from './invert-share.ts'
 import { checkProbability } from './probability.ts'
 
 /**
- * Quantile of the χ² distribution: the value below which a share p lies. `dof` above 0, finite, whole or not.
+ * Quantile of the χ² distribution: the value below which a share p lies. `dof` at least 0.1, finite, whole or not.
  * χ² is twice a gamma variate of shape dof/2; solved for its logarithm.
  */
 export function chiSquaredQuantile(p: number, dof: number): number {

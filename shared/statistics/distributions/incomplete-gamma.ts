@@ -8,15 +8,19 @@ export function gammaLogDensity(a: number, x: number): number {
   return Math.sqrt(a / (2 * Math.PI)) * Math.exp(-stirlingError(a) - deviance(a, x))
 }
 
-/** Lower share by the series Σ xⁿ/((a + 1)…(a + n)) (Abramowitz, Stegun 1964, 6.5.29): fast for x below a + 1. */
+/** Terms that a million degrees of freedom, and a hundred times as many, do not need. */
+const MOST_TERMS = 100_000
+
+/** Lower share by the series Σ xⁿ/((a + 1)…(a + n)) (Abramowitz, Stegun 1964, 6.5.29): fast for x below a + 1. NaN where it does not settle. */
 function lowerSeries(a: number, x: number): number {
   let term = 1
   let sum = 1
-  for (let n = 1; term > sum * Number.EPSILON; n++) {
+  let n = 1
+  for (; term > sum * Number.EPSILON && n < MOST_TERMS; n++) {
     term *= x / (a + n)
     sum += term
   }
-  return (gammaLogDensity(a, x) / a) * sum
+  return n < MOST_TERMS ? (gammaLogDensity(a, x) / a) * sum : NaN
 }
 
 /** Upper share by the continued fraction (DLMF 8.9.2, even part): fast for x above a + 1. */

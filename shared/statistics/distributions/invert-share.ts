@@ -5,9 +5,9 @@ const FAR_BELOW = 1e-30
 /**
  * Solves share(u) = target for a rising share with density d(share)/du, by Newton's method on the logarithms.
  * Where the density is log-concave so is the share (Bagnoli, Bergstrom 2005, Econ Theory 26:445–469): the logarithm is
- * concave, so that after the first step Newton’s method comes from below and cannot miss. That first step may reach
- * too far below; then it is halved. `target` at most ½, for the smaller share keeps its
- * digits.
+ * concave, so that after the first step Newton's method comes from below and cannot miss. That first step may reach too
+ * far down; then it is halved. `target` is at most ½, for the smaller share keeps its digits. NaN where
+ * the share is, and where the density vanishes.
  */
 export function invertShare(
   target: number,
@@ -19,8 +19,9 @@ export function invertShare(
   let here = share(u)
   for (let n = 0; n < MOST_STEPS; n++) {
     let step = (Math.log(target / here) * here) / density(u)
+    if (!Number.isFinite(step)) return NaN
     let next = share(u + step)
-    while (next < target * FAR_BELOW) {
+    while (next < target * FAR_BELOW && step !== 0) {
       step /= 2
       next = share(u + step)
     }

@@ -106,6 +106,13 @@ describe('every quantile', () => {
     }
   })
 
+  it('answers at once for degrees of freedom beyond all sense, with a number or with none', () => {
+    for (const dof of [0.1, 1e12, 1e300, Infinity]) {
+      const answers = [tQuantile(0.3, dof), chiSquaredQuantile(0.3, dof), fQuantile(0.3, dof, dof)]
+      for (const answer of answers) expect(Number.isNaN(answer) || Number.isFinite(answer)).toBe(true)
+    }
+  })
+
   it.each([0, 1, -0.1, 1.1, NaN, Infinity])('refuses %d as a probability', (p) => {
     expect(() => normalQuantile(p)).toThrow(RangeError)
     expect(() => tQuantile(p, 3)).toThrow(RangeError)
@@ -113,7 +120,7 @@ describe('every quantile', () => {
     expect(() => fQuantile(p, 3, 3)).toThrow(RangeError)
   })
 
-  it.each([0, -1, NaN])('refuses %d degrees of freedom', (dof) => {
+  it.each([0, 0.09, -1, NaN])('refuses %d degrees of freedom', (dof) => {
     expect(() => tQuantile(0.9, dof)).toThrow(RangeError)
     expect(() => chiSquaredQuantile(0.9, dof)).toThrow(RangeError)
     expect(() => fQuantile(0.9, dof, 3)).toThrow(RangeError)

@@ -7,7 +7,7 @@ import { checkProbability } from './probability.ts'
 const SERIES_FROM = 1e5
 
 /**
- * Quantile of Student's t distribution: the value below which a share p lies. `dof` above 0, whole or not, may be
+ * Quantile of Student's t distribution: the value below which a share p lies. `dof` at least 0.1, whole or not, may be
  * infinite. t² is an F variate with 1 and dof degrees of freedom.
  */
 export function tQuantile(p: number, dof: number): number {
