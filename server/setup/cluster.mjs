@@ -37,12 +37,16 @@ import { lastLines, run } from './run.mjs'
 
 const startSeconds = 30
 
-/** Loopback only, and no socket file: a long checkout path would be longer than a socket's name may be. */
+/**
+ * Loopback only, and no socket file: a long checkout path would be longer than a socket's name may be. The log of
+ * changes is kept short: at its default of 1 GB it would weigh more than the demo club itself (230 MB).
+ */
 const fixedSettings = {
   listen_addresses: '127.0.0.1',
   unix_socket_directories: '',
   timezone: 'UTC',
   log_timezone: 'UTC',
+  max_wal_size: '128MB',
 }
 
 /** @param {Cluster} cluster */
