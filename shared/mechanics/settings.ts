@@ -59,6 +59,30 @@ export const settingDefinitions = {
     source: `${own}: the flank is fitted up to eventForceN plus so much`,
     effect: 'Less noise and more bend in the placing of takeoff and touchdown',
   },
+  flankMisfitSd: {
+    value: 1.5,
+    unit: 'SD of the unloaded plate',
+    source: `${own}: what a flank's fit may leave over before a bend or ringing is looked for`,
+    effect: 'More misfit is taken for noise',
+  },
+  flankThirdPower: {
+    value: 0.2,
+    unit: 'of the squared misfit',
+    source: `${own}: below it the third power explains the flank, above it the plate rings`,
+    effect: 'Ringing is more often taken for a bend',
+  },
+  flankRinging: {
+    value: 1,
+    unit: 'of the way that the flank takes to rise by the ringing',
+    source: `${own}: ringing begins with the contact and does not average out`,
+    effect: 'Wider intervals of times and landing figures on ringing plates',
+  },
+  flankStep: {
+    value: 20,
+    unit: 'event forces within one sample interval',
+    source: `${own}: a leap that leaves no flank to fit`,
+    effect: 'Fewer crossings are placed in the middle of an interval',
+  },
   flightMarginS: {
     value: 0.03,
     unit: 's',
@@ -84,6 +108,12 @@ export const settingDefinitions = {
     unit: 's',
     source: `${own}: block means before the autocorrelation`,
     effect: 'Faster and coarser count of independent samples',
+  },
+  noiseInflationKept: {
+    value: 0.6,
+    unit: 'of the inflation to the first ρ ≤ 0',
+    source: `${own}: a heartbeat pays back in its second half what it added in its first`,
+    effect: 'Wider intervals of weight and velocity where the stance swings',
   },
   onsetFraction: {
     value: 0.025,
@@ -122,6 +152,34 @@ export const settingDefinitions = {
     source: `${own}: for finding only, the crossing is fitted to unfiltered force`,
     effect: 'Less noise and less detail where the onset is searched',
   },
+  onsetFitShare: {
+    value: 0.6,
+    unit: 'of the way to the gross deviation',
+    source: `${own}: as far as the flank keeps its shape`,
+    effect: 'Less noise and more bend in the placing of the onset',
+  },
+  onsetFitLongestS: { value: 0.025, unit: 's', source: own, effect: 'The same, for slow movements' },
+  onsetGentleStart: {
+    value: 0.7,
+    unit: 'of the mean slope to the gross deviation',
+    source: `${own}: a start in proportion to t² has two thirds there; a steeper one may be noise`,
+    effect: 'Narrower interval of the onset',
+  },
+  crossingRiseSd: {
+    value: 6,
+    unit: 'SD of the unloaded plate',
+    source: `${own}: rise of force over the window in which its crossing of the weight is fitted`,
+    effect: 'Less noise and more bend in the end of unweighting',
+  },
+  crossingShortestS: { value: 0.006, unit: 's', source: own, effect: 'The same, for steep crossings' },
+  crossingLongestS: { value: 0.025, unit: 's', source: own, effect: 'The same, for gentle crossings' },
+  peakFallSd: {
+    value: 4,
+    unit: 'SD of the unloaded plate',
+    source: `${own}: fall of force from the peak to the ends of the window in which it is fitted`,
+    effect: 'Less noise and more rounding of peaks',
+  },
+  peakWidestS: { value: 0.015, unit: 's', source: own, effect: 'The same, for flat peaks' },
   stillWindowS: {
     value: 1,
     unit: 's',

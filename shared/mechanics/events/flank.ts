@@ -1,5 +1,5 @@
 import type { Settings } from '../settings.ts'
-import { estimateNoise, weightedNoise, type Noise } from '../signal/noise.ts'
+import { allowForShortness, estimateNoise, weightedNoise, type Noise } from '../signal/noise.ts'
 import { crossingWeights, flankForce, flankSlope, reachOf, searchFoot, type Flank } from './flank-model.ts'
 
 /** Which way force runs through the threshold: falling at takeoff, rising at touchdown. */
@@ -39,17 +39,6 @@ const window = new Float64Array(room)
 const weights = new Float64Array(room)
 const residuals = new Float64Array(room)
 
-/** Residuals beyond so many times the plate's noise are no noise of the plate but misfit or ringing. */
-const beyondNoise = 1.5
-/** A third power is taken where it leaves less than this part of the second power's squared residuals. */
-const worthThirdPower = 0.2
-
-/**
- * Ringing begins with the contact and is no noise that averages out: the crossing may be wrong by this part of the way in
- * which the flank rises by the ringing's root mean square.
- */
-const ringingShare = 1
-
 /** Fills the window with the samples around the edge, as far into the contact as `level` asks; `null` past the record. */
 function fillWindow(
   { force, firstContact, step, outside, longest }: FlankWindow,
@@ -78,7 +67,7 @@ function noiseAbout(flank: Flank, count: number, noise: Noise): Noise {
     squares += residuals[u] * residuals[u]
   }
   const rms = Math.sqrt(squares / Math.max(1, count - first - 2))
-  return rms > noise.sd ? { ...estimateNoise(residuals, first, count), sd: rms } : noise
+  return rms > noise.sd ? { ...allowForShortness(estimateNoise(residuals, first, count)), sd: rms } : noise
 }
 
 function fit(place: FlankWindow, level: number, highest: number, noise: Noise, dt: number): Fitted | null {
@@ -97,9 +86,9 @@ function fit(place: FlankWindow, level: number, highest: number, noise: Noise, d
 function bestFit(place: FlankWindow, noise: Noise, dt: number, settings: Settings): Fitted | null {
   const level = (sd: number) => settings.eventForceN + settings.flankNoise * sd
   const simple = fit(place, level(noise.sd), 2, noise, dt)
-  if (!simple || simple.noise.sd <= beyondNoise * noise.sd) return simple
+  if (!simple || simple.noise.sd <= settings.flankMisfitSd * noise.sd) return simple
   const bent = fit(place, level(noise.sd), 3, noise, dt)
-  if (bent && bent.flank.misfit < worthThirdPower * simple.flank.misfit) return bent
+  if (bent && bent.flank.misfit < settings.flankThirdPower * simple.flank.misfit) return bent
   const long = fit(place, level(simple.noise.sd), 2, noise, dt) ?? simple
   return { ...long, ringing: long.noise.sd }
 }
@@ -112,17 +101,14 @@ function straightCrossing({ force, firstContact, step }: FlankWindow, target: nu
   return { position: firstContact - step * back, positionU: 1, slope: step * Math.max(rise, 1e-3) }
 }
 
-/** A step: within one interval force leaps by this many times the event force, and by thrice what it does next. */
-const stepInEventForces = 20
-
 /** Force that leaps between two samples (a landing on a rigid stop, a clamped record) crosses anywhere between them. */
-function stepCrossing({ force, firstContact, step }: FlankWindow, eventForce: number): Crossing | null {
+function stepCrossing({ force, firstContact, step }: FlankWindow, settings: Settings): Crossing | null {
   const outside = firstContact - step
   const next = firstContact + step
   if (outside < 0 || next < 0 || outside >= force.length || next >= force.length) return null
   const leap = force[firstContact] - force[outside]
   const isStep =
-    leap > stepInEventForces * eventForce && leap > 3 * Math.abs(force[next] - force[firstContact])
+    leap > settings.flankStep * settings.eventForceN && leap > 3 * Math.abs(force[next] - force[firstContact])
   if (!isStep) return null
   return { position: firstContact - step / 2, positionU: 1 / Math.sqrt(12), slope: step * leap }
 }
@@ -149,7 +135,7 @@ export function fitFlank(
     longest: Math.min(256, Math.max(fewestFlankSamples, Math.round(settings.flankLimitS / dt))),
   }
   const { outside, step } = place
-  const leap = stepCrossing(place, settings.eventForceN)
+  const leap = stepCrossing(place, settings)
   if (leap) return leap
   const fitted = bestFit(place, noise, dt, settings)
   if (!fitted) return null
@@ -162,7 +148,7 @@ export function fitFlank(
   const lifted = reachOf(flank, settings.eventForceN + fitted.ringing, count) ?? count
   return {
     position: place.firstContact + step * (flank.foot + distance - outside),
-    positionU: Math.hypot(fromNoise, ringingShare * (lifted - distance)),
+    positionU: Math.hypot(fromNoise, settings.flankRinging * (lifted - distance)),
     slope: step * slope,
   }
 }

@@ -100,15 +100,25 @@ function weighBeforeOnset(search: JumpSearch, takeoff: number): { weighing: Weig
 }
 
 function placePushEvents(search: JumpSearch, motion: Motion, onset: number, takeoff: number) {
-  const { zero, signal } = search
+  const { zero, signal, settings } = search
   const lowest = extremeVelocity(motion, onset, takeoff, -1)
   if (!(motion.velocity[lowest] < 0)) return { minimumForce: null, minimumVelocity: null, zeroVelocity: null }
   const moved = movedTo(search, 'minimumVelocity')
   const minimumVelocity =
-    moved === null ? placeWeightCrossing(motion, lowest, zero.total) : { position: moved, forceU: 0 }
+    moved === null
+      ? placeWeightCrossing(motion, lowest, zero.total, settings)
+      : { position: moved, forceU: 0 }
   const zeroAt = movedTo(search, 'zeroVelocity') ?? risesThroughZero(motion, lowest, Math.floor(takeoff))
   return {
-    minimumForce: findPeak(signal.total, onset, minimumVelocity.position, -1, zero.total, signal.dt),
+    minimumForce: findPeak(
+      signal.total,
+      onset,
+      minimumVelocity.position,
+      -1,
+      zero.total,
+      signal.dt,
+      settings,
+    ),
     minimumVelocity,
     zeroVelocity: zeroAt,
   }
@@ -126,7 +136,7 @@ function placeLandingEvents(search: JumpSearch, motion: Motion, touchdown: Cross
     fallStops(motion, touchdown.position, stopsBefore, settings.closingFail)
   const end = landingZeroVelocity ?? Math.min(last, touchdown.position + settings.landingSearchS / signal.dt)
   return {
-    landingPeak: findPeak(signal.total, touchdown.position, end, 1, zero.total, signal.dt),
+    landingPeak: findPeak(signal.total, touchdown.position, end, 1, zero.total, signal.dt, settings),
     landingZeroVelocity,
     still,
   }

@@ -60,16 +60,6 @@ function leaveOfQuiet(
   return { crossing, fromQuiet: crossing - earliest >= persistence / 2 }
 }
 
-/** The parabola is fitted over this part of the way to the gross deviation, where the flank keeps its shape, at most. */
-const reachShare = 0.6
-const longestReachS = 0.025
-
-/**
- * A movement that begins with force in proportion to t² passes the onset threshold with two thirds of its mean slope
- * to the gross deviation; a steeper slope there may be the noise that made it cross, and is not trusted in full.
- */
-const gentleStart = 0.7
-
 /** Samples from the crossing to the gross deviation. */
 function wayToGross(search: Search, crossing: number, latest: number, gross: number): number {
   let i = crossing
@@ -115,12 +105,12 @@ export function findOnset(
   const sign = deviation(search, crossing) >= 0 ? 1 : -1
   const target = weight + sign * threshold
   const way = wayToGross(search, crossing, limits.takeoff, gross)
-  const reach = Math.max(4, Math.min(reachShare * way, longestReachS / dt))
+  const reach = Math.max(4, Math.min(settings.onsetFitShare * way, settings.onsetFitLongestS / dt))
   let fit = fitParabola(force, crossing, reach)
   let position = parabolaCrossing(fit, target, crossing, 1.5 * reach) ?? crossing
   fit = fitParabola(force, position, reach)
   position = parabolaCrossing(fit, target, position, reach) ?? position
-  const gentlest = (gentleStart * Math.max(0, gross - threshold)) / Math.max(1, way)
+  const gentlest = (settings.onsetGentleStart * Math.max(0, gross - threshold)) / Math.max(1, way)
   const fitted = Math.abs(parabolaSlopeAt(fit, position))
   const slope = sign * (gentlest > 0 ? Math.min(fitted, gentlest) : fitted)
   const positionU = Math.min(reach, parabolaNoiseAt(fit, position, noise) / Math.abs(slope))

@@ -1,3 +1,4 @@
+import type { Settings } from '../settings.ts'
 import { fitParabola, parabolaCrossing, parabolaNoiseAt } from '../signal/local-parabola.ts'
 import type { Motion } from '../signal/motion.ts'
 import type { Noise } from '../signal/noise.ts'
@@ -36,17 +37,20 @@ export function extremeVelocity({ velocity, first }: Motion, from: number, to: n
   return best
 }
 
-/** Spread of the fitted window in standard deviations of the noise: gentle crossings get longer windows. */
-const riseInSd = 6
-const shortestHalfS = 0.006
-const longestHalfS = 0.025
-
 /** Place where force passes the weight around a sample of extreme velocity, by a parabola fitted to the force there. */
-export function placeWeightCrossing(motion: Motion, sample: number, noise: Noise): Placed {
+export function placeWeightCrossing(
+  motion: Motion,
+  sample: number,
+  noise: Noise,
+  settings: Settings,
+): Placed {
   const { force, dt, systemWeight } = motion
-  const shortest = Math.max(2, Math.round(shortestHalfS / dt))
+  const shortest = Math.max(2, Math.round(settings.crossingShortestS / dt))
   const slope = Math.abs(fitParabola(force, sample, shortest).slope)
-  const half = Math.max(shortest, Math.min((riseInSd * noise.sd) / slope || 0, longestHalfS / dt))
+  const half = Math.max(
+    shortest,
+    Math.min((settings.crossingRiseSd * noise.sd) / slope || 0, settings.crossingLongestS / dt),
+  )
   const fit = fitParabola(force, sample, half)
   const position = parabolaCrossing(fit, systemWeight, sample, 2 * half) ?? sample
   return { position, forceU: parabolaNoiseAt(fit, position, noise) }

@@ -1,6 +1,6 @@
 import type { Settings } from '../settings.ts'
 import { addUp, type Signal } from '../signal/condition.ts'
-import { effectiveSamples, estimateNoise, type Noise } from '../signal/noise.ts'
+import { allowForShortness, effectiveSamples, estimateNoise, type Noise } from '../signal/noise.ts'
 import type { Stretch } from './unloaded.ts'
 
 /** What the unloaded plates say: zero and noise. */
@@ -28,7 +28,8 @@ function inner({ from, to }: Stretch, dt: number, settings: Settings): Stretch {
  */
 export function zeroPlates(signal: Signal, unloaded: Stretch, settings: Settings): Zero {
   const stretch = inner(unloaded, signal.dt, settings)
-  const plates = signal.plates.map((plate) => estimateNoise(plate.force, stretch.from, stretch.to))
+  const noiseOf = (force: Float64Array) => allowForShortness(estimateNoise(force, stretch.from, stretch.to))
+  const plates = signal.plates.map((plate) => noiseOf(plate.force))
   addUp(
     signal.plates,
     signal.total,
@@ -38,7 +39,7 @@ export function zeroPlates(signal: Signal, unloaded: Stretch, settings: Settings
   return {
     centre: (stretch.from + stretch.to - 1) / 2,
     plates,
-    total: signal.plates.length === 1 ? plates[0] : estimateNoise(signal.total, stretch.from, stretch.to),
+    total: signal.plates.length === 1 ? plates[0] : noiseOf(signal.total),
     offsetU: plates.map((noise) => noise.sd / Math.sqrt(effectiveSamples(noise))),
     offsetDof: plates.map((noise) => Math.max(1, effectiveSamples(noise) - 1)),
   }

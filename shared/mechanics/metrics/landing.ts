@@ -49,6 +49,7 @@ function firstPeak(model: JumpModel, touchdown: number, peak: Peak): Peak {
         1,
         zero.total,
         signal.dt,
+        model.settings,
       )
     }
   }

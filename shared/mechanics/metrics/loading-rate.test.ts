@@ -9,7 +9,7 @@ const sampled = (f: (tS: number) => number, durationS = 0.15) =>
   Float64Array.from({ length: Math.round(durationS / dt) }, (_, i) => f((i - 10) * dt))
 /** Published check: half-sine of 2400 N and 0.1 s. */
 const halfSine = sampled((t) => (t > 0 && t < 0.1 ? 2400 * Math.sin((Math.PI * t) / 0.1) : 0))
-const peakOf = (force: Float64Array) => findPeak(force, 10, force.length - 1, 1, noise, dt)
+const peakOf = (force: Float64Array) => findPeak(force, 10, force.length - 1, 1, noise, dt, defaultSettings)
 
 function rate(force: Float64Array): number {
   const peak = peakOf(force)

@@ -18,7 +18,7 @@ function peakForceOf(model: JumpModel, peak: Peak): Quantity {
 
 function greatest(model: JumpModel, from: number, to: number): Quantity {
   const { motion, zero, signal } = model
-  return peakForceOf(model, findPeak(motion.force, from, to, 1, zero.total, signal.dt))
+  return peakForceOf(model, findPeak(motion.force, from, to, 1, zero.total, signal.dt, model.settings))
 }
 
 /** Force at an instant within the movement, by a parabola over some milliseconds; the instant itself is unsure. */

@@ -39,7 +39,7 @@ function extremePower(model: JumpModel, from: number, to: number, sign: 1 | -1):
   let speed = 0
   for (let i = first; i <= last; i++) speed = Math.max(speed, Math.abs(motion.velocity[i]))
   const noise = { ...zero.total, sd: zero.total.sd * speed }
-  const peak = findPeak(power, from - first, to - first, sign, noise, signal.dt)
+  const peak = findPeak(power, from - first, to - first, sign, noise, signal.dt, model.settings)
   const instant = at(model, peak.position + first)
   const force = peak.value / instant.velocity
   return budget.linear(peak.value, [
@@ -97,7 +97,10 @@ function peakVelocityOf(model: JumpModel): Quantity {
   const { motion, events, zero } = model
   const from = events.zeroVelocity ?? events.onset.position
   const fastest = extremeVelocity(motion, from, events.takeoff.position, 1)
-  return velocityOf(model, at(model, placeWeightCrossing(motion, fastest, zero.total).position))
+  return velocityOf(
+    model,
+    at(model, placeWeightCrossing(motion, fastest, zero.total, model.settings).position),
+  )
 }
 
 function putPower(

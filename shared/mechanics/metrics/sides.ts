@@ -111,7 +111,7 @@ function loadingRates(model: JumpModel, foot: Foot, landingEnd: number, into: Me
     )
   const { force } = foot.plate
   const start = foot.touchdown.position
-  const peak = findPeak(force, start, landingEnd, 1, foot.noise, signal.dt)
+  const peak = findPeak(force, start, landingEnd, 1, foot.noise, signal.dt, model.settings)
   const peakU = peak.valueU / peak.value
   const toPeak = peak.position - start
   const toPeakU = Math.hypot(peak.positionU, foot.touchdown.positionU) / toPeak
@@ -151,7 +151,7 @@ export function footFigures(model: JumpModel, foot: Foot): Measured {
     put(into, keys.gross, gross)
     if (keys.mean) put(into, keys.mean, budget.scaled(gross, 1 / ((to - from) * signal.dt)))
     if (keys.peak) {
-      const peak = findPeak(foot.plate.force, from, to, 1, foot.noise, signal.dt)
+      const peak = findPeak(foot.plate.force, from, to, 1, foot.noise, signal.dt, model.settings)
       put(into, keys.peak, footForce(model, foot, peak.value, peak.valueU))
     }
     if (phase === 'landing') loadingRates(model, foot, to, into)

@@ -36,12 +36,20 @@ export function estimateNoise(force: Float64Array, from: number, to: number): No
     correlation[lag] = rho
     inflation += 2 * rho
   }
-  // Correlated samples hug their own mean, which hides a part 1/n_eff of their variance and of every ρ;
-  // the sum of the ρ is left as published, its truncation to positive ones makes up for it.
-  const hidden = Math.min(0.5, inflation / Math.max(1, samples))
-  const sd = samples > 1 ? Math.sqrt(squares / (samples * (1 - hidden))) : 0
-  for (let k = 1; k < lag; k++) correlation[k] += hidden * (1 - correlation[k])
+  const sd = samples > 1 ? Math.sqrt(squares / (samples - 1)) : 0
   return { mean, sd, correlation: correlation.subarray(0, lag), inflation, samples }
+}
+
+/**
+ * Noise of a stretch that is short beside its correlation: correlated samples hug their own mean, which hides a part
+ * 1/n_eff of their variance and of every ρ. The sum of the ρ is left as published; that it stops at the first ρ ≤ 0
+ * makes up for it.
+ */
+export function allowForShortness(noise: Noise): Noise {
+  const { inflation, samples, sd, correlation } = noise
+  const hidden = Math.min(0.5, inflation / Math.max(1, samples))
+  const whole = correlation.map((rho) => rho + hidden * (1 - rho))
+  return { ...noise, sd: sd * Math.sqrt((1 - 1 / Math.max(2, samples)) / (1 - hidden)), correlation: whole }
 }
 
 /** Number of independent samples that a mean over the stretch is worth, at least 1. */

@@ -1,5 +1,6 @@
 import { describe, expect, it } from 'vitest'
 import { whiteNoise } from '../../../tests/setup/white-noise.ts'
+import { defaultSettings } from '../settings.ts'
 import { findPeak } from './peak.ts'
 
 const dt = 0.001
@@ -12,7 +13,7 @@ const hump = (widthS: number, height: number) =>
 
 describe('findPeak', () => {
   it.each([0.03, 0.06, 0.2])('finds height and place of a smooth peak of %f s between samples', (widthS) => {
-    const peak = findPeak(hump(widthS, 3000), 90, 390, 1, noiseOf(0), dt)
+    const peak = findPeak(hump(widthS, 3000), 90, 390, 1, noiseOf(0), dt, defaultSettings)
     expect(Math.abs(peak.value / 3000 - 1)).toBeLessThan(2e-4)
     expect(peak.position).toBeCloseTo(100.37 + widthS / 2 / dt, 1)
   })
@@ -24,7 +25,7 @@ describe('findPeak', () => {
     let u = 0
     for (let k = 0; k < 800; k++) {
       const force = hump(0.2, 3000).map((newton) => newton + 4 * noise())
-      const peak = findPeak(force, 90, 390, 1, noiseOf(4), dt)
+      const peak = findPeak(force, 90, 390, 1, noiseOf(4), dt, defaultSettings)
       errors.push(peak.value - 3000)
       largest.push(Math.max(...force) - 3000)
       u += peak.valueU / 800
@@ -51,12 +52,17 @@ describe('findPeak', () => {
 
   it('reads a force that only rises at the end of the stretch', () => {
     const ramp = Float64Array.from({ length: 100 }, (_, i) => 10 * i)
-    expect(findPeak(ramp, 20, 60.5, 1, noiseOf(0), dt).position).toBeCloseTo(60.5, 6)
-    expect(findPeak(ramp, 20, 60.5, 1, noiseOf(0), dt).value).toBeCloseTo(605, 6)
+    expect(findPeak(ramp, 20, 60.5, 1, noiseOf(0), dt, defaultSettings).position).toBeCloseTo(60.5, 6)
+    expect(findPeak(ramp, 20, 60.5, 1, noiseOf(0), dt, defaultSettings).value).toBeCloseTo(605, 6)
   })
 
   it('answers a finite figure for a flat and for a tiny stretch', () => {
-    expect(findPeak(new Float64Array(50).fill(7), 10, 40, 1, noiseOf(1), dt).value).toBeCloseTo(7, 9)
-    expect(findPeak(Float64Array.of(1, 2, 1), 0, 2, 1, noiseOf(0), dt).value).toBeCloseTo(2, 9)
+    expect(
+      findPeak(new Float64Array(50).fill(7), 10, 40, 1, noiseOf(1), dt, defaultSettings).value,
+    ).toBeCloseTo(7, 9)
+    expect(findPeak(Float64Array.of(1, 2, 1), 0, 2, 1, noiseOf(0), dt, defaultSettings).value).toBeCloseTo(
+      2,
+      9,
+    )
   })
 })

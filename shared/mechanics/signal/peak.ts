@@ -1,3 +1,4 @@
+import { defaultSettings, type Settings } from '../settings.ts'
 import { fitParabola, parabolaNoiseAt, parabolaSlopeNoise, type Parabola } from './local-parabola.ts'
 import type { Noise } from './noise.ts'
 
@@ -9,10 +10,6 @@ export interface Peak {
   valueU: number
   positionU: number
 }
-
-/** Part of the noise by which the fitted window may fall away from the peak: more averages better, less bends less. */
-const fallInSd = 4
-const widestS = 0.015
 
 function extremeSample(force: Float64Array, from: number, to: number, sign: 1 | -1): number {
   let best = from
@@ -30,13 +27,19 @@ function heightAt(fit: Parabola, position: number): number {
   return fit.level + x * (fit.slope + x * fit.bend)
 }
 
-/** Half-width at which the curve has fallen `fallInSd` standard deviations from its peak. */
-function halfWidth(force: Float64Array, centre: number, noise: Noise, dt: number): number {
-  const widest = Math.max(1, Math.round(widestS / dt))
+/** Half-width at which the curve has fallen the settings' part of the noise from its peak. */
+function halfWidth(
+  force: Float64Array,
+  centre: number,
+  noise: Noise,
+  dt: number,
+  settings: Settings = defaultSettings,
+): number {
+  const widest = Math.max(1, Math.round(settings.peakWidestS / dt))
   let half = Math.min(widest, Math.max(2, Math.round(0.004 / dt)))
   for (let pass = 0; pass < 3; pass++) {
     const bend = Math.abs(fitParabola(force, centre, half).bend)
-    const wanted = Math.sqrt((fallInSd * noise.sd) / Math.max(bend, 1e-9))
+    const wanted = Math.sqrt((settings.peakFallSd * noise.sd) / Math.max(bend, 1e-9))
     half = Math.max(1, Math.min(widest, Math.round(wanted)))
   }
   return half
@@ -54,11 +57,12 @@ export function findPeak(
   sign: 1 | -1,
   noise: Noise,
   dt: number,
+  settings: Settings = defaultSettings,
 ): Peak {
   const a = Math.max(0, Math.ceil(from))
   const b = Math.min(force.length - 1, Math.floor(to))
   let centre = extremeSample(force, a, Math.max(a, b), sign)
-  const half = halfWidth(force, centre, noise, dt)
+  const half = halfWidth(force, centre, noise, dt, settings)
   let fit = fitParabola(force, centre, half)
   for (let pass = 0; pass < 2; pass++) {
     centre = Math.max(a, Math.min(b, Math.round(vertex(fit, sign))))
