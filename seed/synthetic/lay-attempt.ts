@@ -78,16 +78,16 @@ function finish(
 }
 
 function standingStart(fromS: number, pushed: Pushed, { stance, ...shares }: LeftShares): Start {
-  const { startS, dipEndS } = pushed
+  const { startS, pushFromS } = pushed
   return {
     fromS,
     startS,
     arrivalS: null,
-    fades: [{ atS: startS, widthS: dipEndS - startS, by: -1 }],
+    fades: [{ atS: startS, widthS: pushFromS - startS, by: -1 }],
     shares: [
       { atS: fromS, to: stance },
       { atS: startS, to: shares.unweighting },
-      { atS: dipEndS, to: shares.braking },
+      { atS: pushFromS, to: shares.braking },
       { atS: lowestOf(pushed), to: shares.propulsion },
     ],
   }

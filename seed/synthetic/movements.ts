@@ -11,21 +11,24 @@ import { areaOf, contactParts, landingParts, place, pushParts } from './shapes.t
 export interface Pushed {
   course: Course
   startS: number
-  /** End of the dip, or the start where there is none. */
-  dipEndS: number
+  /** The push upward begins. */
+  pushFromS: number
   /** The total force begins to go from weight to zero. */
   unloadingS: number
   /** The total force reaches zero. */
   liftOffS: number
 }
 
-/** A push that leaves at the wanted velocity after a dip of the downward acceleration `dip`. */
-function layPush(
-  course: Course,
-  gravity: number,
-  options: PushOptions,
-  dip: { amplitude: number; durationS: number },
-): Pushed {
+interface Dip {
+  /** Greatest downward acceleration, m/s²; 0 for none. */
+  amplitude: number
+  durationS: number
+  /** Share of the dip after which the push begins. */
+  pushesFrom: number
+}
+
+/** A push that leaves at the wanted velocity, after a dip or from rest. */
+function layPush(course: Course, gravity: number, options: PushOptions, dip: Dip): Pushed {
   const { pushS, unloadingS, takeoffVelocity } = options
   const unload = options.takeoffEdge === 'steep' ? steepEnd : softRise
   const parts = pushParts[options.push]
@@ -37,29 +40,29 @@ function layPush(
     dip.amplitude === 0
       ? []
       : [{ pulse: raisedCosine, start: startS, width: dip.durationS, amplitude: -dip.amplitude }]
-  const dipped = goOn(course, dips.length === 0 ? 0 : dip.durationS, dips)
+  const dipped = goOn(course, dips.length === 0 ? 0 : dip.pushesFrom * dip.durationS, dips)
   const pushed = goOn(dipped, pushS, place(parts, dipped.timeS, pushS, upward))
   const unloading = { pulse: unload, start: pushed.timeS, width: unloadingS, amplitude: -gravity }
   const left = goOn(pushed, unloadingS, [unloading])
   return {
     course: left,
     startS,
-    dipEndS: dipped.timeS,
+    pushFromS: dipped.timeS,
     unloadingS: pushed.timeS,
     liftOffS: left.timeS,
   }
 }
 
 /** The deepest point of a push with a dip. */
-export const lowestOf = ({ course, dipEndS, unloadingS }: Pushed): number =>
-  zeroBetween(motionOfCourse(course).velocity, dipEndS, unloadingS)
+export const lowestOf = ({ course, pushFromS, unloadingS }: Pushed): number =>
+  zeroBetween(motionOfCourse(course).velocity, pushFromS, unloadingS)
 
 /** Greatest downward acceleration of a dip, as a fraction of g: the feet stay loaded. */
 const DEEPEST_DIP = 0.93
 
 /** Dip and push of the wanted depth: the dip's acceleration by bisection, at most what keeps the feet loaded. */
 export function counterMove(course: Course, gravity: number, options: PushOptions & DipOptions): Pushed {
-  const dipOf = (amplitude: number) => ({ amplitude, durationS: options.unweightingS })
+  const dipOf = (amplitude: number) => ({ amplitude, durationS: options.unweightingS, pushesFrom: 1 })
   const depthOf = (amplitude: number): number => {
     const pushed = layPush(beginAt(0), gravity, options, dipOf(amplitude))
     return -motionOfCourse(pushed.course).displacement(lowestOf(pushed))
@@ -73,11 +76,15 @@ export function counterMove(course: Course, gravity: number, options: PushOption
   return layPush(course, gravity, options, dipOf((low + high) / 2))
 }
 
+/** A small dip goes over into the push without a rest between them. */
+const SQUAT_PUSHES_FROM = 0.75
+
 /** A push out of the held squat, after a small dip or none. */
 export function squatPush(course: Course, gravity: number, options: SquatPushOptions): Pushed {
   return layPush(course, gravity, options, {
     amplitude: options.dipFraction * gravity,
     durationS: options.dipS,
+    pushesFrom: SQUAT_PUSHES_FROM,
   })
 }
 

@@ -7,8 +7,8 @@ import { firstZero, greatest, lastZero, least } from './search.ts'
 const CONTACT_N = 10
 /** No force made here needs longer between zero and that. */
 const EDGE_S = 0.2
-/** Deviation from weight that begins the movement, how long quiet must last before it, and the lead. */
-const ONSET = { deviation: 0.025, quietS: 0.1, leadS: 0.03 }
+/** Deviations from weight that are movement and that begin it, how long quiet lasts before it, and the lead. */
+const ONSET = { movement: 0.1, deviation: 0.025, quietS: 0.1, leadS: 0.03 }
 
 /** The instants of the definitions on the continuous, noise-free force. Seconds on the athlete's clock. */
 export interface PushEvents {
@@ -48,14 +48,18 @@ export function trueTouchdown({ force }: Trial, touchS: number): number {
 }
 
 /**
- * 30 ms before the force leaves ±2.5 % of weight for good: the end of the last 100 ms before takeoff that stayed
- * within. (No jump made here rests within 2.5 % for 100 ms once it is under way.)
+ * 30 ms before the force leaves ±2.5 % of weight: backwards from the first deviation of 10 % that leads to the
+ * flight, to the end of the last 100 ms that stayed within.
  */
 export function trueOnset(trial: Trial, takeoff: number): number {
   const weight = weightOf(trial)
-  const { fromS } = trial.marks
-  const inside = (timeS: number): number => ONSET.deviation * weight - Math.abs(trial.force(timeS) - weight)
-  let end = takeoff
+  const { fromS, startS } = trial.marks
+  const within =
+    (deviation: number) =>
+    (timeS: number): number =>
+      deviation * weight - Math.abs(trial.force(timeS) - weight)
+  const inside = within(ONSET.deviation)
+  let end = firstZero(within(ONSET.movement), startS ?? fromS, takeoff) ?? takeoff
   for (;;) {
     const leaves = lastZero(inside, end, fromS)
     if (leaves === null) throw new RangeError('The jump has no quiet stance before it.')

@@ -136,3 +136,14 @@ describe('a loaded jump', () => {
     expect(ratio('takeoffVelocity')).toBeCloseTo(1, 2)
   })
 })
+
+describe('the onset', () => {
+  it('is that of the dip, even where the force rests at weight before the push', () => {
+    const jump = makeJump({ push: 'late', takeoffVelocity: 1.8, depthM: 0.2, pushS: 0.55, unweightingS: 0.5 })
+    const { minimumVelocity = NaN, onset = NaN } = truthOf(jump).events
+    const weight = 75 * 9.80665
+    for (let timeS = minimumVelocity - 0.05; timeS < minimumVelocity + 0.05; timeS += 0.005)
+      expect(Math.abs(jump.force(timeS) - weight)).toBeLessThan(0.025 * weight)
+    expect(onset - (jump.marks.startS ?? NaN)).toBeLessThan(0.05)
+  })
+})

@@ -1,4 +1,5 @@
 import { benchCoverage, coverageParts } from '../reference/coverage-bench.ts'
+import { benchEngine } from './engine.ts'
 import { benchPageWeight } from './page-weight.ts'
 import { benchUpload } from './upload.ts'
 
@@ -11,6 +12,7 @@ interface Bench {
 /** What is measured, by the name that `npm run bench -- <name>` takes; parts follow it: `coverage dj hops`. */
 const benches: Record<string, Bench> = {
   coverage: { run: benchCoverage, parts: coverageParts },
+  engine: { run: benchEngine },
   'page-weight': { run: benchPageWeight },
   upload: { run: benchUpload },
 }

@@ -1,7 +1,7 @@
 import type { GivenAttempt, SyntheticProtocol } from '../../seed/synthetic/attempts.ts'
 import type { ContactShape } from '../../seed/synthetic/options.ts'
 import type { Random } from '../../seed/synthetic/random.ts'
-import { drawLanding, drawPush, drawShares } from './coverage-draws.ts'
+import { drawCounterMove, drawLanding, drawShares, drawSquatPush, gravity } from './coverage-draws.ts'
 
 const contacts: readonly ContactShape[] = ['spring', 'round', 'impact', 'early']
 
@@ -19,33 +19,30 @@ const frameOf = (random: Random) => ({
 
 /** @param slower share of the velocity that a load leaves */
 function drawCmj(random: Random, slower: number): DrawnAttempt {
-  const push = drawPush(random, slower * random.between(1.9, 3.1))
-  const landing = drawLanding(random)
-  const depth = { depthM: random.between(0.22, 0.42), unweightingS: random.between(0.36, 0.52) }
+  const push = drawCounterMove(random, slower * random.between(1.9, 3.1))
+  const landing = drawLanding(random, push.takeoffVelocity)
   const lower = { landsLowerM: random.between(0, 0.04) }
   return {
-    attempt: { protocol: 'cmj', ...frameOf(random), ...push, ...depth, ...landing, ...lower },
+    attempt: { protocol: 'cmj', ...frameOf(random), ...push, ...landing, ...lower },
     shape: { push: push.push, landing: landing.landing },
   }
 }
 
 function drawSlcmj(random: Random): DrawnAttempt {
-  const push = drawPush(random, random.between(1.3, 2.1))
-  const landing = drawLanding(random)
+  const push = drawCounterMove(random, random.between(1.3, 2.1))
+  const landing = drawLanding(random, push.takeoffVelocity)
   const side = random.pick(['left', 'right'] as const)
-  const depth = { depthM: random.between(0.15, 0.3), unweightingS: random.between(0.34, 0.5) }
   const lower = { landsLowerM: random.between(0, 0.03) }
   return {
-    attempt: { protocol: 'slcmj', ...frameOf(random), side, ...push, ...depth, ...landing, ...lower },
+    attempt: { protocol: 'slcmj', ...frameOf(random), side, ...push, ...landing, ...lower },
     shape: { push: push.push, landing: landing.landing, side },
   }
 }
 
 /** A dip is either none or plain: one at the very limit of the onset would make two answers right. */
 function drawSj(random: Random): DrawnAttempt {
-  const takeoffVelocity = random.between(1.8, 2.9)
-  const landing = drawLanding(random)
-  const push = { ...drawPush(random, takeoffVelocity), pushS: random.between(0.7, 0.95) / takeoffVelocity }
+  const push = drawSquatPush(random, random.between(1.8, 2.9))
+  const landing = drawLanding(random, push.takeoffVelocity)
   const dip = random.pick(['none', 'none', 'small'] as const)
   const start = random.pick(['squat', 'squat', 'standing'] as const)
   return {
@@ -75,16 +72,28 @@ function drawDrop(random: Random) {
   }
 }
 
+const arrivalSpeed = (dropHeightM: number): number => Math.sqrt(2 * gravity * dropHeightM)
+
+/** Leaves up to 2 cm lower or 6 cm higher than it came: the mean velocity of an even contact times its length. */
+function drawRebound(random: Random, dropHeightM: number) {
+  const contactS = random.between(0.15, 0.3)
+  return {
+    contactS,
+    takeoffVelocity: Math.min(3.2, arrivalSpeed(dropHeightM) + (2 * random.between(-0.02, 0.06)) / contactS),
+  }
+}
+
 function drawDj(random: Random): DrawnAttempt {
   const contact = random.pick(contacts)
-  const landing = drawLanding(random)
-  const jump = { contactS: random.between(0.15, 0.3), takeoffVelocity: random.between(1.9, 3) }
+  const drop = drawDrop(random)
+  const jump = drawRebound(random, drop.dropHeightM)
+  const landing = drawLanding(random, jump.takeoffVelocity)
   const lower = { landsLowerM: random.between(0, 0.03) }
   return {
     attempt: {
       protocol: 'dj',
       ...frameOf(random),
-      ...drawDrop(random),
+      ...drop,
       ...jump,
       contact,
       ...landing,
@@ -95,10 +104,11 @@ function drawDj(random: Random): DrawnAttempt {
 }
 
 function drawDropLanding(random: Random): DrawnAttempt {
-  const landing = { ...drawLanding(random), landingS: random.between(0.14, 0.3) }
+  const drop = drawDrop(random)
+  const landing = drawLanding(random, arrivalSpeed(drop.dropHeightM))
   const side = random.pick(['both', 'both', 'left', 'right'] as const)
   return {
-    attempt: { protocol: 'dropLanding', ...frameOf(random), ...drawDrop(random), side, ...landing },
+    attempt: { protocol: 'dropLanding', ...frameOf(random), ...drop, side, ...landing },
     shape: { landing: landing.landing, side },
   }
 }
@@ -106,20 +116,20 @@ function drawDropLanding(random: Random): DrawnAttempt {
 /** Now and then one contact is far too long to count; none is so near the limit that two answers are right. */
 function drawHops(random: Random): DrawnAttempt {
   const contact = random.pick(contacts)
-  const height = random.between(1.7, 2.5)
+  const speed = random.between(1.7, 2.5)
   const length = random.between(0.17, 0.22)
   const slow = random.next() < 0.2 ? Math.floor(random.between(0, 10)) : -1
-  const landing = drawLanding(random)
+  const landing = drawLanding(random, speed)
   return {
     attempt: {
       protocol: 'hops',
       ...frameOf(random),
-      ...drawPush(random, height),
+      ...drawCounterMove(random, speed),
       ...landing,
       contacts: Array.from({ length: 10 }, (_, i) => ({
         contactS: i === slow ? random.between(0.28, 0.33) : length + random.between(-0.015, 0.015),
         contact,
-        takeoffVelocity: height + random.between(-0.15, 0.15),
+        takeoffVelocity: speed + random.between(-0.1, 0.1),
       })),
       touchHeightM: random.between(0.04, 0.08),
     },

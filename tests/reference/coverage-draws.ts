@@ -1,6 +1,18 @@
-import type { BodyNoiseOptions, LandingOptions, LeftShares } from '../../seed/synthetic/options.ts'
-import type { PlateOptions, PushShape } from '../../seed/synthetic/options.ts'
+import { beginAt, endOf } from '../../seed/synthetic/course.ts'
+import { counterMove } from '../../seed/synthetic/movements.ts'
+import type {
+  BodyNoiseOptions,
+  DipOptions,
+  LandingOptions,
+  LeftShares,
+  PlateOptions,
+  PushOptions,
+  PushShape,
+} from '../../seed/synthetic/options.ts'
 import type { Random } from '../../seed/synthetic/random.ts'
+
+/** m/s² */
+export const gravity = 9.80665
 
 /** Kinds of disturbance: none to speak of, white, autocorrelated, all at once, and behind the recorder's low-pass. */
 export const noises = ['clean', 'white', 'slow', 'rough', 'filtered'] as const
@@ -75,17 +87,54 @@ export function drawShares(random: Random): LeftShares {
   }
 }
 
-export const drawLanding = (random: Random): LandingOptions => ({
+/**
+ * @param speed at the first touch, m/s: the mean in the landing is about 0.6 of it, and so it takes some time to come
+ * from the toes to below standing
+ */
+export const drawLanding = (random: Random, speed: number): LandingOptions => ({
   landing: random.pick(['onePeak', 'twoPeaks'] as const),
   touchdownEdge: random.pick(edges),
-  landingS: random.between(0.18, 0.32),
+  landingS: random.between(Math.max(0.12, 0.2 / (0.6 * speed)), 0.27),
   risingS: random.between(0.8, 1.2),
 })
 
-export const drawPush = (random: Random, takeoffVelocity: number) => ({
-  takeoffVelocity,
-  pushS: random.between(0.32, 0.46),
+const drawEdges = (random: Random) => ({
   unloadingS: random.between(0.03, 0.05),
   push: random.pick(pushes),
   takeoffEdge: random.pick(edges),
 })
+
+/**
+ * A push out of the squat over 0.28 to 0.4 m (the mean velocity is about half the last one), which is then as long
+ * as that takes.
+ */
+export const drawSquatPush = (random: Random, takeoffVelocity: number) => ({
+  takeoffVelocity,
+  pushS: random.between(0.55, 0.8) / takeoffVelocity,
+  ...drawEdges(random),
+})
+
+/**
+ * Dip and push of a countermovement: higher jumps from deeper dips, and a push as long as it takes to leave the
+ * ground on the toes, 6 to 14 cm above standing.
+ */
+export function drawCounterMove(random: Random, takeoffVelocity: number): PushOptions & DipOptions {
+  const options = {
+    takeoffVelocity,
+    depthM: 0.1 * takeoffVelocity + random.between(0.02, 0.1),
+    unweightingS: random.between(0.36, 0.52),
+    ...drawEdges(random),
+  }
+  const wantedM = random.between(0.06, 0.14)
+  const heightOf = (pushS: number): number =>
+    endOf(counterMove(beginAt(0), gravity, { ...options, pushS }).course).displacement
+  // Secant steps: the height grows almost evenly with the time of the push.
+  let [before, pushS] = [0.3, 0.35]
+  let heightBefore = heightOf(before)
+  for (let i = 0; i < 4; i++) {
+    const height = heightOf(pushS)
+    const next = pushS + ((wantedM - height) * (pushS - before)) / (height - heightBefore)
+    ;[before, heightBefore, pushS] = [pushS, height, next]
+  }
+  return { ...options, pushS }
+}

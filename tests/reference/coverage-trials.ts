@@ -1,5 +1,5 @@
 import { syntheticProtocols } from '../../seed/synthetic/attempts.ts'
-import type { SyntheticProtocol } from '../../seed/synthetic/attempts.ts'
+import type { GivenAttempt, SyntheticProtocol } from '../../seed/synthetic/attempts.ts'
 import { systemKg } from '../../seed/synthetic/options.ts'
 import type { Athlete } from '../../seed/synthetic/options.ts'
 import { perform } from '../../seed/synthetic/perform.ts'
@@ -9,11 +9,10 @@ import type { Random } from '../../seed/synthetic/random.ts'
 import { recordJump } from '../../seed/synthetic/record.ts'
 import type { Recording } from '../../shared/mechanics/types.ts'
 import { drawAttempt } from './coverage-attempts.ts'
-import { drawBody, drawGain, drawPlate, masses, noises } from './coverage-draws.ts'
+import { drawBody, drawGain, drawPlate, gravity, masses, noises } from './coverage-draws.ts'
 import type { Noise } from './coverage-draws.ts'
 
 const rates = [500, 1000, 2000] as const
-const gravity = 9.80665
 /** Share of trials in which the recording holds a second one. */
 const ACCOMPANIED = 0.15
 /** Share of countermovement jumps with a load. */
@@ -45,6 +44,19 @@ function drawAthlete(
   return { athlete, strata: protocol === 'cmj' ? { mass, load: isLoaded ? 'some' : 'none' } : { mass } }
 }
 
+/** Two attempts in a row, between which the athlete stays in quiet stance or leaves the plates. */
+function accompany(
+  attempt: GivenAttempt,
+  other: GivenAttempt,
+  isSecond: boolean,
+  random: Random,
+): GivenAttempt[] {
+  const [first, second] = isSecond ? [other, attempt] : [attempt, other]
+  const fromBox = second.protocol === 'dj' || second.protocol === 'dropLanding'
+  const leaves = fromBox || random.next() < 0.5
+  return [leaves ? { ...first, leavesForS: random.between(2, 4) } : first, second]
+}
+
 /**
  * The trial of a number: always the same one.
  * @param mayBeAccompanied whether some recordings hold two trials, of which this is one
@@ -63,13 +75,10 @@ export function coverageTrial(
   const { attempt, shape } = drawAttempt(protocol, random, slower)
   const isAccompanied = mayBeAccompanied && random.next() < ACCOMPANIED
   const isSecond = isAccompanied && random.next() < 0.5
-  const other = drawAttempt(protocol, random, slower).attempt
-  const away = { leavesForS: random.between(2, 4) }
-  const leaves = protocol === 'dj' || protocol === 'dropLanding' || random.next() < 0.5 ? away : {}
-  const pair = isSecond
-    ? [{ ...other, ...leaves }, attempt]
-    : [{ ...attempt, ...(isAccompanied ? leaves : {}) }, ...(isAccompanied ? [other] : [])]
-  const performance = perform(athlete, pair, number)
+  const attempts = isAccompanied
+    ? accompany(attempt, drawAttempt(protocol, random, slower).attempt, isSecond, random)
+    : [attempt]
+  const performance = perform(athlete, attempts, number)
   const trial = performance.trials[isSecond ? 1 : 0]
   if (!trial) throw new RangeError('An attempt makes a trial.')
   // Any phase of the sample clock against the body's.
