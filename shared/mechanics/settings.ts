@@ -267,7 +267,7 @@ export const settingDefinitions = {
     effect: 'Wider U, same URepeat',
   },
   driftU: {
-    value: 0.05,
+    value: 0.08,
     unit: 'N/s, standard uncertainty',
     source: `${own}: residual drift of a plate that has warmed up`,
     effect: 'Wider intervals of weight and velocity',

@@ -10,6 +10,8 @@ export interface Zero {
   /** Noise of each plate, in the order of the signal's plates, and of the total. */
   plates: Noise[]
   total: Noise
+  /** Degrees of freedom of the noise of the total: its independent samples less one. */
+  noiseDof: number
   /** Standard uncertainty of each plate's zero, N, with degrees of freedom. */
   offsetU: number[]
   offsetDof: number[]
@@ -36,11 +38,14 @@ export function zeroPlates(signal: Signal, unloaded: Stretch, settings: Settings
     plates.map(({ mean }) => mean),
   )
   signal.plates.forEach((plate, i) => (plate.offsetN = plates[i].mean))
+  const total = signal.plates.length === 1 ? plates[0] : noiseOf(signal.total)
+  const dofOf = (noise: Noise) => Math.max(1, effectiveSamples(noise) - 1)
   return {
     centre: (stretch.from + stretch.to - 1) / 2,
     plates,
-    total: signal.plates.length === 1 ? plates[0] : noiseOf(signal.total),
+    total,
+    noiseDof: dofOf(total),
     offsetU: plates.map((noise) => noise.sd / Math.sqrt(effectiveSamples(noise))),
-    offsetDof: plates.map((noise) => Math.max(1, effectiveSamples(noise) - 1)),
+    offsetDof: plates.map(dofOf),
   }
 }

@@ -16,19 +16,19 @@ export interface EventTimes {
 }
 
 /** A crossing of the event force moves with the noise of its fit and with the zero of the plates. */
-export function crossingTime({ budget, signal, plates }: JumpModel, crossing: Crossing): Quantity {
+export function crossingTime({ budget, signal, plates, zero }: JumpModel, crossing: Crossing): Quantity {
   const perNewton = -signal.dt / crossing.slope
   return budget.linear(crossing.position * signal.dt, [
-    [1, budget.input(0, crossing.positionU * signal.dt)],
+    [1, budget.input(0, crossing.positionU * signal.dt, zero.noiseDof)],
     ...plates.map(({ offset }) => [perNewton, offset] as const),
   ])
 }
 
 /** The onset moves with the noise of its fit and, because its threshold is a part of the weight, with the weighing. */
-function onsetTime({ budget, events, signal, weighingError }: JumpModel): Quantity {
+function onsetTime({ budget, events, signal, weighingError, zero }: JumpModel): Quantity {
   const { position, positionU, level, slope } = events.onset
   return budget.linear(position * signal.dt, [
-    [1, budget.input(0, positionU * signal.dt)],
+    [1, budget.input(0, positionU * signal.dt, zero.noiseDof)],
     [(level * signal.dt) / slope, weighingError],
   ])
 }

@@ -135,7 +135,9 @@ export function buildModel(
   const boundaries = boundariesOf(events)
   const noise = boundaries
     .slice(1)
-    .map((to, i) => budget.input(0, integratedNoise(zero.total, (to - boundaries[i]) * dt, dt)))
+    .map((to, i) =>
+      budget.input(0, integratedNoise(zero.total, (to - boundaries[i]) * dt, dt), zero.noiseDof),
+    )
   return {
     signal,
     settings,
@@ -220,7 +222,7 @@ export function displacementOf(model: JumpModel, instant: Instant): Quantity {
     [displacement / g, gravity],
     [tau, model.onsetVelocity],
     [(g / w) * ((tau * tau * tau) / 6 + (sinceZero * tau * tau) / 2), model.drift],
-    [g / w, budget.input(0, own)],
+    [g / w, budget.input(0, own, zero.noiseDof)],
     ...plates.flatMap(({ offset, gain, force, sums }) => {
       const share = gross === 0 ? 0 : grossImpulse(force, sums, motion.start, position, motion.dt) / gross
       return [[(g / w) * ((tau * tau) / 2), offset] as const, [(g / w) * twice * share, gain] as const]
@@ -233,7 +235,7 @@ export function forceOf(model: JumpModel, value: number, position: number, u: nu
   const { budget, plates, zero, signal } = model
   if (!budget.on) return budget.exact(value)
   return budget.linear(value, [
-    [1, budget.input(0, u)],
+    [1, budget.input(0, u, zero.noiseDof)],
     [(position - zero.centre) * signal.dt, model.drift],
     ...plates.flatMap(({ offset, gain, force }) => [
       [1, offset] as const,
