@@ -101,14 +101,18 @@ function weighBeforeOnset(search: JumpSearch, takeoff: number): { weighing: Weig
 
 function placePushEvents(search: JumpSearch, motion: Motion, onset: number, takeoff: number) {
   const { zero, signal, settings } = search
+  const noDip = { minimumForce: null, minimumVelocity: null, zeroVelocity: null }
   const lowest = extremeVelocity(motion, onset, takeoff, -1)
-  if (!(motion.velocity[lowest] < 0)) return { minimumForce: null, minimumVelocity: null, zeroVelocity: null }
+  if (!(motion.velocity[lowest] < 0)) return noDip
   const moved = movedTo(search, 'minimumVelocity')
   const minimumVelocity =
     moved === null
       ? placeWeightCrossing(motion, lowest, zero.total, settings)
       : { position: moved, forceU: 0 }
   const zeroAt = movedTo(search, 'zeroVelocity') ?? risesThroughZero(motion, lowest, Math.floor(takeoff))
+  // A dip of noise alone has its instants out of order, and nothing between them to measure.
+  const lowestAt = minimumVelocity.position
+  if (!(onset < lowestAt && lowestAt < (zeroAt ?? takeoff) && (zeroAt ?? onset) < takeoff)) return noDip
   return {
     minimumForce: findPeak(
       signal.total,
