@@ -98,10 +98,10 @@ function fitAtFoot(y: Float64Array, count: number, foot: number, highest: number
 }
 
 const goldenShare = (Math.sqrt(5) - 1) / 2
-/** Ten steps narrow one sample to less than a hundredth. */
-const goldenSteps = 10
+/** Eleven steps narrow two samples to a hundredth. */
+const goldenSteps = 11
 
-/** Searches the foot between two places in the window: every half sample first, then by golden section. */
+/** Searches the foot between two places in the window: every sample first, then by golden section. */
 export function searchFoot(y: Float64Array, count: number, from: number, to: number, highest: number): Flank {
   const trial: Flank = { foot: 0, lowest: 1, highest, coefficients: new Float64Array(4), misfit: Infinity }
   const misfitAt = (foot: number) => {
@@ -110,17 +110,17 @@ export function searchFoot(y: Float64Array, count: number, from: number, to: num
   }
   let best = from
   let least = Infinity
-  for (let foot = from; foot <= to; foot += 0.5) {
+  for (let foot = from; foot <= to; foot++) {
     const misfit = misfitAt(foot)
     if (misfit < least) {
       least = misfit
       best = foot
     }
   }
-  let a = best - 0.5
-  let b = best + 0.5
-  let left = b - goldenShare
-  let right = a + goldenShare
+  let a = best - 1
+  let b = best + 1
+  let left = b - 2 * goldenShare
+  let right = a + 2 * goldenShare
   let atLeft = misfitAt(left)
   let atRight = misfitAt(right)
   for (let step = 0; step < goldenSteps; step++) {
