@@ -1,38 +1,22 @@
-import type { MetricGroup, TrialCheck, Verdict } from '../types.ts'
-
-/** Every group of figures. */
-export const allGroups: MetricGroup[] = [
-  'weighing',
-  'jump',
-  'impulse',
-  'push',
-  'flight',
-  'landing',
-  'sides',
-  'ledger',
-]
-
-/** All that rests on the jump: everything but the weighing. */
-export const allButWeighing = allGroups.filter((group) => group !== 'weighing')
-
-/** What only the time after takeoff can spoil. */
-export const afterTakeoff: MetricGroup[] = ['flight', 'landing', 'ledger']
+import type { TrialCheck, Verdict } from '../types.ts'
+import { checkDefinitions, type CheckKey } from './check-definitions.ts'
 
 /** What is said for each verdict of a check. */
 export interface Wording {
   pass: string
   caution?: string
   fail?: string
-  remedy: string
+  /** Where it is not the check's own. */
+  remedy?: string
 }
 
 /** Puts a check together: the sentence is the verdict's, the remedy is asked for only where something is wrong. */
 export function check(
-  key: string,
+  key: CheckKey,
   verdict: Verdict,
-  affects: MetricGroup[],
   figures: { measured: number | null; limit: number | null; unit: string },
   wording: Wording,
+  affects = checkDefinitions[key].affects,
 ): TrialCheck {
   return {
     key,
@@ -40,7 +24,7 @@ export function check(
     affects,
     ...figures,
     sentence: wording[verdict] ?? wording.fail ?? wording.caution ?? wording.pass,
-    remedy: verdict === 'pass' ? '' : wording.remedy,
+    remedy: verdict === 'pass' ? '' : (wording.remedy ?? checkDefinitions[key].remedy),
   }
 }
 

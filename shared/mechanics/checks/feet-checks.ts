@@ -1,7 +1,8 @@
 import type { TrialCheck } from '../types.ts'
 import type { Foot } from '../metrics/sides.ts'
 import type { JumpModel } from '../metrics/jump-model.ts'
-import { allGroups, check, rounded } from './check.ts'
+import { allGroups } from './affected-groups.ts'
+import { check, rounded } from './check.ts'
 
 /** Longest run, in samples, in which a foot is off its plate within [from, to) while the other is loaded. */
 function longestOff(foot: Foot, model: JumpModel, from: number, to: number): number {
@@ -29,7 +30,6 @@ function bothOn(model: JumpModel, feet: [Foot, Foot]): TrialCheck {
   return check(
     'both-feet',
     fail ? 'fail' : share < settings.footShareCaution ? 'caution' : 'pass',
-    fail ? allGroups : ['sides'],
     { measured: 100 * share, limit: 100 * settings.footShareCaution, unit: '%' },
     {
       pass: `The lighter foot carries ${rounded(100 * share, 0)} % of the weight in stance.`,
@@ -38,8 +38,8 @@ function bothOn(model: JumpModel, feet: [Foot, Foot]): TrialCheck {
         share < settings.footShareFail
           ? `One plate carries only ${rounded(100 * share, 0)} % of the weight: a foot stands beside it.`
           : `A foot was off its plate for ${rounded(1000 * off, 0)} ms before takeoff.`,
-      remedy: 'Place each foot in the middle of its own plate.',
     },
+    fail ? allGroups : ['sides'],
   )
 }
 
@@ -54,14 +54,12 @@ function offInLanding(model: JumpModel, feet: [Foot, Foot]): TrialCheck | null {
   return check(
     'foot-off-landing',
     absent || off > settings.footOffLandingS ? 'fail' : 'pass',
-    ['landing', 'sides', 'ledger'],
     { measured: off, limit: settings.footOffLandingS, unit: 's' },
     {
       pass: 'Both feet stayed on the plates after touchdown.',
       fail: absent
         ? 'One foot did not come down on its plate.'
         : `A foot was off its plate for ${rounded(off, 2)} s during the landing.`,
-      remedy: 'Land with each foot on its own plate; the takeoff figures stand.',
     },
   )
 }

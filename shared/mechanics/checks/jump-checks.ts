@@ -1,7 +1,7 @@
 import type { Ledger, TrialCheck } from '../types.ts'
 import type { Unloaded } from '../events/unloaded.ts'
 import type { JumpModel } from '../metrics/jump-model.ts'
-import { afterTakeoff, allButWeighing, allGroups, check, rounded, verdictOn } from './check.ts'
+import { check, rounded, verdictOn } from './check.ts'
 
 /** What the checks of the jump need beside the model. */
 export interface JumpReadings {
@@ -16,12 +16,10 @@ function oneTakeoff({ unloaded }: JumpReadings): TrialCheck {
   return check(
     'one-takeoff',
     count <= 1 ? 'pass' : 'fail',
-    allButWeighing,
     { measured: count, limit: 1, unit: 'flights' },
     {
       pass: 'There is one jump in the recording.',
       fail: `There are ${count} flights in the recording; the figures are those of the first.`,
-      remedy: 'Record one jump a file, or set this trial aside.',
     },
   )
 }
@@ -34,14 +32,12 @@ function plausible({ settings, events }: JumpModel, { heightImpulseM }: JumpRead
   return check(
     'plausible-jump',
     ok ? 'pass' : 'fail',
-    allButWeighing,
     { measured: heightImpulseM, limit: heightImpulseM < low ? low : high, unit: 'm' },
     {
       pass: 'The trace is that of a countermovement jump.',
       fail: dip
         ? `A jump height of ${rounded(100 * heightImpulseM, 1)} cm is not that of a standing jump.`
         : 'No countermovement was found before the push.',
-      remedy: 'Look at the trace: perhaps this is another test, or the athlete stepped instead of jumping.',
     },
   )
 }
@@ -55,7 +51,6 @@ function heightAgreement({ settings }: JumpModel, readings: JumpReadings): Trial
   return check(
     'height-agreement',
     ok ? 'pass' : far ? 'fail' : 'caution',
-    difference > 0 && !far ? ['flight'] : ['jump', 'impulse', 'push', 'flight', 'landing', 'ledger'],
     {
       measured: difference,
       limit: difference < 0 ? -settings.heightNegativeM : settings.heightAgreementM,
@@ -65,8 +60,8 @@ function heightAgreement({ settings }: JumpModel, readings: JumpReadings): Trial
       pass: 'Height by impulse and height by flight time agree.',
       caution: `Height by flight time is ${rounded(100 * difference, 1)} cm from height by impulse.`,
       fail: `Height by flight time is ${rounded(100 * difference, 1)} cm from height by impulse: one of them is wrong.`,
-      remedy: 'Land with straight legs, stand still before the jump, and check the weighing.',
     },
+    difference > 0 && !far ? ['flight'] : ['jump', 'impulse', 'push', 'flight', 'landing', 'ledger'],
   )
 }
 
@@ -78,7 +73,6 @@ function closing({ motion, settings }: JumpModel, { ledger }: JumpReadings): Tri
     return check(
       'closing-balance',
       'caution',
-      ['ledger'],
       { measured: null, limit: settings.closingCaution, unit: 'm/s' },
       {
         pass: '',
@@ -86,17 +80,16 @@ function closing({ motion, settings }: JumpModel, { ledger }: JumpReadings): Tri
           'The closing balance cannot be tested: the athlete did not stand still for a second after landing.',
         remedy: 'Let the recording run until the athlete has stood still for a second.',
       },
+      ['ledger'],
     )
   return check(
     'closing-balance',
     verdictOn(speed, settings.closingCaution, settings.closingFail),
-    ['jump', 'impulse', 'push', 'landing', 'ledger'],
     { measured: speed, limit: settings.closingCaution, unit: 'm/s' },
     {
       pass: `The momentum account closes to ${rounded(speed, 3)} m/s.`,
       caution: `The momentum account is ${rounded(speed, 3)} m/s off at the end.`,
       fail: `The momentum account is ${rounded(speed, 3)} m/s off at the end: weighing, zero or the record is wrong.`,
-      remedy: 'Check the weighing and that both feet stayed on the plates; repeat the trial.',
     },
   )
 }
@@ -105,12 +98,10 @@ function landedOnPlates({ events }: JumpModel): TrialCheck {
   return check(
     'landing-on-plates',
     events.touchdown ? 'pass' : 'fail',
-    afterTakeoff,
     { measured: events.touchdown ? 1 : 0, limit: 1, unit: 'touchdown' },
     {
       pass: 'The athlete came down on the plates.',
       fail: 'No landing on the plates was found after the takeoff.',
-      remedy: 'Land on the plates; the takeoff figures stand.',
     },
   )
 }
@@ -123,13 +114,11 @@ function landingLength({ events, signal, settings }: JumpModel): TrialCheck | nu
   return check(
     'landing-length',
     verdict,
-    ['landing', 'ledger'],
     { measured: left, limit: settings.landingLengthS, unit: 's' },
     {
       pass: 'The recording goes on long enough after touchdown.',
       caution: `The recording ends ${rounded(left, 2)} s after touchdown.`,
       fail: `The recording ends ${rounded(left, 2)} s after touchdown, before the fall was stopped.`,
-      remedy: 'Let the recording run for three seconds after the landing.',
     },
   )
 }
@@ -141,12 +130,10 @@ function fellAtPlausibleSpeed({ events, motion, settings }: JumpModel): TrialChe
   return check(
     'plausible-landing',
     ok ? 'pass' : 'fail',
-    ['landing', 'sides', 'ledger'],
     { measured: bodyWeights, limit: 1.1, unit: 'BW' },
     {
       pass: 'The landing looks like one.',
       fail: `The landing force reaches only ${rounded(bodyWeights, 2)} times the weight (event force ${settings.eventForceN} N).`,
-      remedy: 'Check that the athlete landed with both feet on the plates.',
     },
   )
 }
@@ -169,12 +156,10 @@ export function deadPlateCheck(deadChannels: string[]): TrialCheck {
   return check(
     'plate-alive',
     deadChannels.length === 0 ? 'pass' : 'fail',
-    allGroups,
     { measured: deadChannels.length, limit: 0, unit: 'plates' },
     {
       pass: 'Every plate reads a changing force.',
       fail: `The ${deadChannels.join(' and ')} plate reads the same all along: not connected, or not stood upon.`,
-      remedy: 'Check the connection of the plate and that each foot stands on its own.',
     },
   )
 }

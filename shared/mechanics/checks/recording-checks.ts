@@ -3,7 +3,7 @@ import type { Unloaded } from '../events/unloaded.ts'
 import type { Zero } from '../events/zero.ts'
 import type { Settings } from '../settings.ts'
 import type { Signal } from '../signal/condition.ts'
-import { allGroups, check, rounded, verdictOn } from './check.ts'
+import { check, rounded, verdictOn } from './check.ts'
 
 function sampleRate(signal: Signal, settings: Settings): TrialCheck {
   const rate = signal.sampleRateHz
@@ -12,13 +12,11 @@ function sampleRate(signal: Signal, settings: Settings): TrialCheck {
   return check(
     'sample-rate',
     verdict,
-    allGroups,
     { measured: rate, limit: settings.lowestSampleRateHz, unit: 'Hz' },
     {
       pass: `Force was sampled ${rounded(rate, 0)} times a second.`,
       caution: `Force was sampled only ${rounded(rate, 0)} times a second; short events are coarse.`,
       fail: `Force was sampled only ${rounded(rate, 0)} times a second, too seldom for a jump.`,
-      remedy: 'Set the plates to 1000 samples a second.',
     },
   )
 }
@@ -28,13 +26,11 @@ function timeBase(recording: Recording, settings: Settings): TrialCheck {
   return check(
     'time-base',
     verdictOn(error, settings.timeBaseLimit, 0.5),
-    allGroups,
     { measured: error, limit: settings.timeBaseLimit, unit: 'sample intervals' },
     {
       pass: 'The time stamps are even.',
       caution: `A time stamp lies ${rounded(error, 2)} of a sample interval off the even time base.`,
       fail: 'The time stamps are uneven: samples were lost or doubled.',
-      remedy: 'Export the recording again, and check the connection of the plates.',
     },
   )
 }
@@ -45,13 +41,11 @@ function gaps(recording: Recording, signal: Signal, settings: Settings): TrialCh
   return check(
     'gaps',
     verdictOn(share, 0, settings.filledLimit),
-    allGroups,
     { measured: filled, limit: Math.floor(settings.filledLimit * signal.length), unit: 'samples' },
     {
       pass: 'No sample is missing.',
       caution: `${filled} samples could not be read and were bridged by straight lines.`,
       fail: `${filled} samples could not be read, too many to bridge.`,
-      remedy: 'Export the recording again; what is missing cannot be measured.',
     },
   )
 }
@@ -62,12 +56,10 @@ function saturation(signal: Signal, settings: Settings): TrialCheck {
   return check(
     'saturation',
     longest < limit ? 'pass' : 'fail',
-    ['push', 'landing', 'sides', 'impulse', 'jump', 'ledger'],
     { measured: longest, limit, unit: 'samples' },
     {
       pass: 'The force stays within the range of the plates.',
       fail: `The force stays at its greatest value for ${longest} samples: the plate's range was exceeded.`,
-      remedy: 'Choose a larger measuring range of the plates.',
     },
   )
 }
@@ -86,7 +78,6 @@ function zeroOffset(signal: Signal, unloaded: Unloaded, settings: Settings): Tri
   return check(
     'zero-offset',
     verdict,
-    allGroups,
     { measured: largest, limit: settings.zeroOffsetCautionN, unit: 'N' },
     {
       pass: `The empty plates read within ${rounded(largest, 1)} N of zero; corrected.`,
@@ -94,7 +85,6 @@ function zeroOffset(signal: Signal, unloaded: Unloaded, settings: Settings): Tri
         ? 'The plates were set to zero with the athlete on them; put right from the flight.'
         : `The empty plates read ${rounded(largest, 1)} N off zero; corrected.`,
       fail: `The empty plates read ${rounded(largest, 1)} N off zero, more than a drift explains.`,
-      remedy: 'Set the plates to zero while nobody stands on them.',
     },
   )
 }
@@ -104,13 +94,11 @@ function plateNoise(zero: Zero, settings: Settings): TrialCheck {
   return check(
     'noise',
     verdictOn(sd, settings.noiseCautionN, settings.noiseFailN),
-    allGroups,
     { measured: sd, limit: settings.noiseCautionN, unit: 'N' },
     {
       pass: `The empty plates waver by ${rounded(sd, 1)} N.`,
       caution: `The empty plates waver by ${rounded(sd, 1)} N; every figure is less sure.`,
       fail: `The empty plates waver by ${rounded(sd, 1)} N, too much to measure a jump.`,
-      remedy: 'Look for a vibrating floor, a loose cable or a plate that touches its frame.',
     },
   )
 }
@@ -120,12 +108,10 @@ function polarity(signal: Signal): TrialCheck {
   return check(
     'polarity',
     turned === 0 ? 'pass' : 'caution',
-    allGroups,
     { measured: turned, limit: 0, unit: 'plates' },
     {
       pass: 'Pressing down reads positive.',
       caution: 'Pressing down read negative; the sign was turned over.',
-      remedy: 'Check the sign of the force columns in the export.',
     },
   )
 }

@@ -1,7 +1,7 @@
 import type { AnalyseOptions, TrialCheck } from '../types.ts'
 import type { JumpModel } from '../metrics/jump-model.ts'
 import { meanOver } from '../signal/running-mean.ts'
-import { allButWeighing, allGroups, check, rounded, verdictOn } from './check.ts'
+import { check, rounded, verdictOn } from './check.ts'
 
 function length({ weighing, signal, settings }: JumpModel): TrialCheck {
   const duration = (weighing.window.to - weighing.window.from) * signal.dt
@@ -9,13 +9,11 @@ function length({ weighing, signal, settings }: JumpModel): TrialCheck {
   return check(
     'weighing-length',
     verdict,
-    allGroups,
     { measured: duration, limit: settings.weighingWindowS, unit: 's' },
     {
       pass: 'The athlete stood still for a second before the jump.',
       caution: `The athlete stood still for only ${rounded(duration, 2)} s before the jump.`,
       fail: `The athlete stood still for only ${rounded(duration, 2)} s before the jump, too short to weigh.`,
-      remedy: 'Start recording, stand still for two seconds, then jump.',
     },
   )
 }
@@ -29,13 +27,11 @@ function steadiness({ weighing, sums, settings }: JumpModel): TrialCheck {
   return check(
     'weighing-steadiness',
     verdictOn(unrest, settings.steadinessCaution, settings.steadinessFail),
-    allGroups,
     { measured: 100 * unrest, limit: 100 * settings.steadinessCaution, unit: '%' },
     {
       pass: `The force wavers by ${rounded(100 * unrest, 1)} % of the weight during the weighing.`,
       caution: `The force wavers by ${rounded(100 * unrest, 1)} % of the weight during the weighing; the weight is less sure.`,
       fail: `The force wavers by ${rounded(100 * unrest, 1)} % of the weight during the weighing: the athlete did not stand still.`,
-      remedy: 'Ask the athlete to stand still for two seconds before the jump.',
     },
   )
 }
@@ -53,7 +49,6 @@ function stillAtOnset({ weighing, sums, events, motion, signal, settings }: Jump
   return check(
     'still-at-onset',
     verdict,
-    allButWeighing,
     { measured: speed, limit: settings.onsetVelocityCaution, unit: 'm/s' },
     {
       pass: 'The athlete was still when the movement began.',
@@ -61,7 +56,6 @@ function stillAtOnset({ weighing, sums, events, motion, signal, settings }: Jump
       fail: events.onset.fromQuiet
         ? `The body already moved at ${rounded(speed, 3)} m/s when the movement began.`
         : 'No quiet stance was found right before the movement.',
-      remedy: 'Ask the athlete to stand still until the jump, without a little bounce before it.',
     },
   )
 }
@@ -71,13 +65,11 @@ function massAgreement({ bodyMass, settings }: JumpModel, recordedMassKg: number
   return check(
     'mass-agreement',
     verdictOn(Math.abs(difference), settings.massCaution, settings.massFail),
-    allGroups,
     { measured: 100 * difference, limit: 100 * settings.massCaution, unit: '%' },
     {
       pass: `The plates weigh ${rounded(bodyMass.value, 1)} kg, which agrees with the recorded mass.`,
       caution: `The plates weigh ${rounded(bodyMass.value, 1)} kg, the athlete's record says ${rounded(recordedMassKg, 1)} kg.`,
       fail: `The plates weigh ${rounded(bodyMass.value, 1)} kg, the athlete's record says ${rounded(recordedMassKg, 1)} kg: perhaps another athlete.`,
-      remedy: 'Check whose trial this is, the external load, and the recorded mass.',
     },
   )
 }

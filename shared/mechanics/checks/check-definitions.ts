@@ -1,0 +1,156 @@
+import type { MetricGroup } from '../types.ts'
+import type { SettingKey } from '../settings.ts'
+import { afterTakeoff, allButWeighing, allGroups } from './affected-groups.ts'
+
+/** What is fixed of a Trial check, whatever a trial says. Screens and Method notes read it, and nothing else names one. */
+export interface CheckDefinition {
+  name: string
+  /** Groups that a failure takes away; where the verdict decides which, the most that it can be. */
+  affects: MetricGroup[]
+  /** What to do about a caution or a failure. */
+  remedy: string
+  /** The limits and windows it goes by. */
+  settings: SettingKey[]
+}
+
+/** Every check that the engine makes, in the order in which a trial lists them. */
+const definitions = {
+  'sample-rate': {
+    name: 'Sample rate',
+    affects: allGroups,
+    remedy: 'Set the plates to 1000 samples a second.',
+    settings: ['lowestSampleRateHz', 'poorestSampleRateHz'],
+  },
+  'time-base': {
+    name: 'Even time base',
+    affects: allGroups,
+    remedy: 'Export the recording again, and check the connection of the plates.',
+    settings: ['timeBaseLimit'],
+  },
+  gaps: {
+    name: 'Missing samples',
+    affects: allGroups,
+    remedy: 'Export the recording again; what is missing cannot be measured.',
+    settings: ['filledLimit'],
+  },
+  saturation: {
+    name: 'Range of the plates',
+    affects: ['push', 'landing', 'sides', 'impulse', 'jump', 'ledger'],
+    remedy: 'Choose a larger measuring range of the plates.',
+    settings: ['saturationSamples'],
+  },
+  polarity: {
+    name: 'Sign of the force',
+    affects: allGroups,
+    remedy: 'Check the sign of the force columns in the export.',
+    settings: [],
+  },
+  'zero-offset': {
+    name: 'Zero of the plates',
+    affects: allGroups,
+    remedy: 'Set the plates to zero while nobody stands on them.',
+    settings: ['zeroOffsetCautionN', 'zeroOffsetFailN'],
+  },
+  noise: {
+    name: 'Noise of the plates',
+    affects: allGroups,
+    remedy: 'Look for a vibrating floor, a loose cable or a plate that touches its frame.',
+    settings: ['noiseCautionN', 'noiseFailN'],
+  },
+  'plate-alive': {
+    name: 'Every plate alive',
+    affects: allGroups,
+    remedy: 'Check the connection of the plate and that each foot stands on its own.',
+    settings: [],
+  },
+  'weighing-length': {
+    name: 'Length of the weighing',
+    affects: allGroups,
+    remedy: 'Start recording, stand still for two seconds, then jump.',
+    settings: ['weighingWindowS', 'shortestWeighingS'],
+  },
+  'weighing-steadiness': {
+    name: 'Steadiness of the weighing',
+    affects: allGroups,
+    remedy: 'Ask the athlete to stand still for two seconds before the jump.',
+    settings: ['steadinessCaution', 'steadinessFail'],
+  },
+  'still-at-onset': {
+    name: 'Still before the movement',
+    affects: allButWeighing,
+    remedy: 'Ask the athlete to stand still until the jump, without a little bounce before it.',
+    settings: ['onsetVelocityCaution', 'onsetVelocityFail'],
+  },
+  'mass-agreement': {
+    name: 'Agreement with the recorded mass',
+    affects: allGroups,
+    remedy: 'Check whose trial this is, the external load, and the recorded mass.',
+    settings: ['massCaution', 'massFail'],
+  },
+  'both-feet': {
+    name: 'Both feet on the plates',
+    affects: allGroups,
+    remedy: 'Place each foot in the middle of its own plate.',
+    settings: ['footShareCaution', 'footShareFail', 'footOffLandingS', 'eventForceN', 'unloadedSd'],
+  },
+  'foot-off-landing': {
+    name: 'Feet on the plates in the landing',
+    affects: ['landing', 'sides', 'ledger'],
+    remedy: 'Land with each foot on its own plate; the takeoff figures stand.',
+    settings: ['footOffLandingS', 'eventForceN', 'unloadedSd'],
+  },
+  'one-takeoff': {
+    name: 'One takeoff',
+    affects: allButWeighing,
+    remedy: 'Record one jump a file, or set this trial aside.',
+    settings: ['longestFlightS', 'eventPersistenceS'],
+  },
+  'plausible-jump': {
+    name: 'A jump of this kind',
+    affects: allButWeighing,
+    remedy: 'Look at the trace: perhaps this is another test, or the athlete stepped instead of jumping.',
+    settings: ['lowestJumpM', 'highestJumpM'],
+  },
+  'height-agreement': {
+    name: 'Height by impulse against height by flight',
+    affects: ['jump', 'impulse', 'push', 'flight', 'landing', 'ledger'],
+    remedy: 'Land with straight legs, stand still before the jump, and check the weighing.',
+    settings: ['heightAgreementM', 'heightNegativeM'],
+  },
+  'landing-on-plates': {
+    name: 'Landing on the plates',
+    affects: afterTakeoff,
+    remedy: 'Land on the plates; the takeoff figures stand.',
+    settings: ['longestFlightS'],
+  },
+  'landing-length': {
+    name: 'Length of the landing',
+    affects: ['landing', 'ledger'],
+    remedy: 'Let the recording run for three seconds after the landing.',
+    settings: ['landingLengthS'],
+  },
+  'plausible-landing': {
+    name: 'A landing like one',
+    affects: ['landing', 'sides', 'ledger'],
+    remedy: 'Check that the athlete landed with both feet on the plates.',
+    settings: [],
+  },
+  'closing-balance': {
+    name: 'Closing balance of the momentum account',
+    affects: ['jump', 'impulse', 'push', 'landing', 'ledger'],
+    remedy: 'Check the weighing and that both feet stayed on the plates; repeat the trial.',
+    settings: ['closingCaution', 'closingFail', 'stillWindowS'],
+  },
+} satisfies Record<string, CheckDefinition>
+
+/** Stable name of a check in data, code and exports. */
+export type CheckKey = keyof typeof definitions
+
+export const checkDefinitions: Readonly<Record<CheckKey, CheckDefinition>> = definitions
+
+export const checkKeys = Object.keys(definitions) as readonly CheckKey[]
+
+/** Whether a word read from outside is a check's key. */
+export function isCheckKey(key: string): key is CheckKey {
+  return Object.hasOwn(definitions, key)
+}
