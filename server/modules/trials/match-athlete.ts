@@ -18,6 +18,9 @@ export function matchAthlete(fileName: string, candidates: readonly Candidate[])
   return named.length === 1 ? named[0].id : null
 }
 
+/** Names of more words are met word by word alone: the ways to write n words together are n factorial. */
+const mostWordsTogether = 6
+
 /** Words of a file name without its extension, each also without the digits glued to it (`ostrow2`). */
 function wordsOf(fileName: string): Set<string> {
   const words = foldName(fileName.replace(/\.[a-z0-9]{1,5}$/iu, '')).split(' ')
@@ -27,7 +30,8 @@ function wordsOf(fileName: string): Set<string> {
 function names(words: ReadonlySet<string>, nameKey: string): boolean {
   const wanted = [...new Set(nameKey.split(' '))].filter((word) => word !== '')
   if (wanted.length === 0) return false
-  const met = new Set([...words].flatMap((word) => piecesOf(word, wanted)))
+  const met =
+    wanted.length > mostWordsTogether ? words : new Set([...words].flatMap((word) => piecesOf(word, wanted)))
   return wanted.every((word) => met.has(word))
 }
 
