@@ -31,10 +31,11 @@ export const pathOf = {
 
 /**
  * Where to go after signing in: the page that asked for it, if it is one of ours. Anything that is not a path on
- * this site (`https://…`, `//…`, `/\…`) is dropped, so that a crafted link cannot lead away.
+ * this site (`https://…`, `//…`, `/\…`) is dropped, so that a crafted link cannot lead away; and so is anything
+ * with a tab or line break, which browsers leave out of an address (WHATWG URL).
  */
 export function safeReturnPath(from: string | null): string {
-  if (from === null || !/^\/(?![/\\])/.test(from) || from.startsWith(paths.signIn)) return paths.home
+  if (from === null || !/^\/(?![/\\])\P{Cc}*$/u.test(from) || from.startsWith(paths.signIn)) return paths.home
   return from
 }
 
