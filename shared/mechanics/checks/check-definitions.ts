@@ -25,7 +25,7 @@ const definitions = {
     name: 'Even time base',
     affects: allGroups,
     remedy: 'Export the recording again, and check the connection of the plates.',
-    settings: ['timeBaseLimit'],
+    settings: ['timeBaseLimit', 'timeBaseFail'],
   },
   gaps: {
     name: 'Missing samples',
@@ -58,7 +58,7 @@ const definitions = {
     settings: ['noiseCautionN', 'noiseFailN'],
   },
   'plate-alive': {
-    name: 'Every plate alive',
+    name: 'Signal of every plate',
     affects: allGroups,
     remedy: 'Check the connection of the plate and that each foot stands on its own.',
     settings: [],
@@ -67,7 +67,7 @@ const definitions = {
     name: 'Length of the weighing',
     affects: allGroups,
     remedy: 'Start recording, stand still for two seconds, then jump.',
-    settings: ['weighingWindowS', 'shortestWeighingS'],
+    settings: ['weighingWindowS', 'shortestWeighingS', 'weighingFailS'],
   },
   'weighing-steadiness': {
     name: 'Steadiness of the weighing',
@@ -96,7 +96,7 @@ const definitions = {
   'foot-off-landing': {
     name: 'Feet on the plates in the landing',
     affects: ['landing', 'sides', 'ledger'],
-    remedy: 'Land with each foot on its own plate; the takeoff figures stand.',
+    remedy: 'Land with each foot on its own plate; figures up to takeoff are not affected.',
     settings: ['footOffLandingS', 'eventForceN', 'unloadedSd'],
   },
   'one-takeoff': {
@@ -106,7 +106,7 @@ const definitions = {
     settings: ['longestFlightS', 'eventPersistenceS'],
   },
   'plausible-jump': {
-    name: 'A jump of this kind',
+    name: 'Plausible countermovement jump',
     affects: allButWeighing,
     remedy: 'Look at the trace: perhaps this is another test, or the athlete stepped instead of jumping.',
     settings: ['lowestJumpM', 'highestJumpM'],
@@ -115,12 +115,12 @@ const definitions = {
     name: 'Height by impulse against height by flight',
     affects: ['jump', 'impulse', 'push', 'flight', 'landing', 'ledger'],
     remedy: 'Land with straight legs, stand still before the jump, and check the weighing.',
-    settings: ['heightAgreementM', 'heightNegativeM'],
+    settings: ['heightAgreementM', 'heightAgreementFailM', 'heightNegativeM', 'heightNegativeFailM'],
   },
   'landing-on-plates': {
     name: 'Landing on the plates',
     affects: afterTakeoff,
-    remedy: 'Land on the plates; the takeoff figures stand.',
+    remedy: 'Land on the plates; figures up to takeoff are not affected.',
     settings: ['longestFlightS'],
   },
   'landing-length': {
@@ -130,10 +130,10 @@ const definitions = {
     settings: ['landingLengthS'],
   },
   'plausible-landing': {
-    name: 'A landing like one',
+    name: 'Plausible landing',
     affects: ['landing', 'sides', 'ledger'],
     remedy: 'Check that the athlete landed with both feet on the plates.',
-    settings: [],
+    settings: ['lowestLandingPeak'],
   },
   'closing-balance': {
     name: 'Closing balance of the momentum account',

@@ -36,7 +36,7 @@ function plausible({ settings, events }: JumpModel, { heightImpulseM }: JumpRead
     {
       pass: 'The trace is that of a countermovement jump.',
       fail: dip
-        ? `A jump height of ${rounded(100 * heightImpulseM, 1)} cm is not that of a standing jump.`
+        ? `A jump height of ${rounded(100 * heightImpulseM, 1)} cm is outside what a standing jump can reach.`
         : 'No countermovement was found before the push.',
     },
   )
@@ -47,7 +47,7 @@ function heightAgreement({ settings }: JumpModel, readings: JumpReadings): Trial
   if (heightFlightM === null) return null
   const difference = heightFlightM - heightImpulseM
   const ok = difference <= settings.heightAgreementM && difference >= -settings.heightNegativeM
-  const far = difference > 2.5 * settings.heightAgreementM || difference < -4 * settings.heightNegativeM
+  const far = difference > settings.heightAgreementFailM || difference < -settings.heightNegativeFailM
   return check(
     'height-agreement',
     ok ? 'pass' : far ? 'fail' : 'caution',
@@ -58,8 +58,8 @@ function heightAgreement({ settings }: JumpModel, readings: JumpReadings): Trial
     },
     {
       pass: 'Height by impulse and height by flight time agree.',
-      caution: `Height by flight time is ${rounded(100 * difference, 1)} cm from height by impulse.`,
-      fail: `Height by flight time is ${rounded(100 * difference, 1)} cm from height by impulse: one of them is wrong.`,
+      caution: `Height by flight time differs from height by impulse by ${rounded(100 * difference, 1)} cm.`,
+      fail: `Height by flight time differs from height by impulse by ${rounded(100 * difference, 1)} cm: one of them is wrong.`,
     },
     difference > 0 && !far ? ['flight'] : ['jump', 'impulse', 'push', 'flight', 'landing', 'ledger'],
   )
@@ -123,17 +123,17 @@ function landingLength({ events, signal, settings }: JumpModel): TrialCheck | nu
   )
 }
 
-function fellAtPlausibleSpeed({ events, motion, settings }: JumpModel): TrialCheck | null {
+function plausibleLanding({ events, motion, settings }: JumpModel): TrialCheck | null {
   if (!events.landingPeak) return null
   const bodyWeights = events.landingPeak.value / motion.systemWeight
-  const ok = bodyWeights > 1.1
+  const ok = bodyWeights > settings.lowestLandingPeak
   return check(
     'plausible-landing',
     ok ? 'pass' : 'fail',
-    { measured: bodyWeights, limit: 1.1, unit: 'BW' },
+    { measured: bodyWeights, limit: settings.lowestLandingPeak, unit: 'BW' },
     {
-      pass: 'The landing looks like one.',
-      fail: `The landing force reaches only ${rounded(bodyWeights, 2)} times the weight (event force ${settings.eventForceN} N).`,
+      pass: 'The landing force is that of a landing.',
+      fail: `The landing force reaches only ${rounded(bodyWeights, 2)} times the weight, too little to stop a fall.`,
     },
   )
 }
@@ -146,12 +146,12 @@ export function jumpChecks(model: JumpModel, readings: JumpReadings): TrialCheck
     heightAgreement(model, readings),
     landedOnPlates(model),
     landingLength(model),
-    fellAtPlausibleSpeed(model),
+    plausibleLanding(model),
     closing(model, readings),
   ].filter((entry) => entry !== null)
 }
 
-/** A foot that carries next to nothing while both should stand. */
+/** A plate whose force never changes: not connected, or nobody on it. */
 export function deadPlateCheck(deadChannels: string[]): TrialCheck {
   return check(
     'plate-alive',
@@ -159,7 +159,7 @@ export function deadPlateCheck(deadChannels: string[]): TrialCheck {
     { measured: deadChannels.length, limit: 0, unit: 'plates' },
     {
       pass: 'Every plate reads a changing force.',
-      fail: `The ${deadChannels.join(' and ')} plate reads the same all along: not connected, or not stood upon.`,
+      fail: `The ${deadChannels.join(' and ')} plate reads the same force throughout: it is not connected, or nobody stood on it.`,
     },
   )
 }

@@ -15,8 +15,8 @@ function sampleRate(signal: Signal, settings: Settings): TrialCheck {
     { measured: rate, limit: settings.lowestSampleRateHz, unit: 'Hz' },
     {
       pass: `Force was sampled ${rounded(rate, 0)} times a second.`,
-      caution: `Force was sampled only ${rounded(rate, 0)} times a second; short events are coarse.`,
-      fail: `Force was sampled only ${rounded(rate, 0)} times a second, too seldom for a jump.`,
+      caution: `Force was sampled only ${rounded(rate, 0)} times a second; short events are timed coarsely.`,
+      fail: `Force was sampled only ${rounded(rate, 0)} times a second, too few for a jump.`,
     },
   )
 }
@@ -25,7 +25,7 @@ function timeBase(recording: Recording, settings: Settings): TrialCheck {
   const error = recording.timeBaseError
   return check(
     'time-base',
-    verdictOn(error, settings.timeBaseLimit, 0.5),
+    verdictOn(error, settings.timeBaseLimit, settings.timeBaseFail),
     { measured: error, limit: settings.timeBaseLimit, unit: 'sample intervals' },
     {
       pass: 'The time stamps are even.',
@@ -82,7 +82,7 @@ function zeroOffset(signal: Signal, unloaded: Unloaded, settings: Settings): Tri
     {
       pass: `The empty plates read within ${rounded(largest, 1)} N of zero; corrected.`,
       caution: tared
-        ? 'The plates were set to zero with the athlete on them; put right from the flight.'
+        ? 'The plates were set to zero with the athlete on them; corrected from the flight.'
         : `The empty plates read ${rounded(largest, 1)} N off zero; corrected.`,
       fail: `The empty plates read ${rounded(largest, 1)} N off zero, more than a drift explains.`,
     },
@@ -111,7 +111,7 @@ function polarity(signal: Signal): TrialCheck {
     { measured: turned, limit: 0, unit: 'plates' },
     {
       pass: 'Pressing down reads positive.',
-      caution: 'Pressing down read negative; the sign was turned over.',
+      caution: 'Pressing down read negative; the sign was reversed.',
     },
   )
 }

@@ -5,7 +5,12 @@ import { check, rounded, verdictOn } from './check.ts'
 
 function length({ weighing, signal, settings }: JumpModel): TrialCheck {
   const duration = (weighing.window.to - weighing.window.from) * signal.dt
-  const verdict = duration >= 0.999 * settings.weighingWindowS ? 'pass' : duration >= 0.5 ? 'caution' : 'fail'
+  const verdict =
+    duration >= 0.999 * settings.weighingWindowS
+      ? 'pass'
+      : duration >= settings.weighingFailS
+        ? 'caution'
+        : 'fail'
   return check(
     'weighing-length',
     verdict,

@@ -1,0 +1,30 @@
+import { own, type SettingDefinition } from './definition.ts'
+
+/** What the uncertainty of every figure rests on. */
+export const uncertaintySettings = {
+  coverage: { value: 0.95, unit: 'probability', source: 'JCGM 100:2008', effect: 'Wider intervals' },
+  swayVelocityChange: {
+    value: 0.003,
+    unit: 'm/s, SD over the weighing window',
+    source: own,
+    effect: 'Wider intervals of weight, velocity and height',
+  },
+  swayFromMeansS: {
+    value: 5,
+    unit: 's',
+    source: `${own}: stance from which sway is estimated by means of one window each`,
+    effect: 'Sway is estimated in fewer recordings',
+  },
+  gravityU: {
+    value: 0.0005,
+    unit: 'm/s², standard uncertainty',
+    source: `${own}: local anomalies of some 0.001 m/s² about the international formula`,
+    effect: 'Wider U, same URepeat',
+  },
+  driftU: {
+    value: 0.08,
+    unit: 'N/s, standard uncertainty',
+    source: `${own}: residual drift of a plate that has warmed up`,
+    effect: 'Wider intervals of weight and velocity',
+  },
+} as const satisfies Record<string, SettingDefinition>
