@@ -1,6 +1,8 @@
+import { MAX_FILE_BYTES } from '../recordings/limits.ts'
+
 /** Limits, each written once: forms, client and server read them here. */
 export const limits = {
-  fileBytes: 64 * 1024 * 1024,
+  fileBytes: MAX_FILE_BYTES,
   chunkBytes: 1024 * 1024,
   filesPerDrop: 300,
   fileNameCharacters: 255,

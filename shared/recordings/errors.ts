@@ -23,7 +23,7 @@ const MIB = 1024 * 1024
 const REMEDIES = {
   'empty-file': 'Export the recording again and check that the file has a size before uploading it.',
   'not-a-recording': EXPORT_TEXT,
-  'too-large': `Split the recording: a file may have ${MAX_FILE_BYTES / MIB} MiB and ${MAX_SAMPLES.toLocaleString('en-GB')} samples.`,
+  'too-large': `Split the recording: a file may have up to ${MAX_FILE_BYTES / MIB} MiB and ${MAX_SAMPLES.toLocaleString('en-GB')} samples.`,
   'unsupported-encoding': 'Save the file as UTF-8 text and upload it again.',
   'no-header': 'Put one line of headings above the numbers, for example: Time (s), Left (N), Right (N).',
   'no-force-column': 'Give the force column a heading that says so, with its unit, for example: Force (N).',

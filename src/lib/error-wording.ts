@@ -10,7 +10,7 @@ export interface ErrorWording {
 /** The client's wording of every code; complete by type, so a new code does not compile without its words. */
 export const errorWording: Record<AnyErrorCode, ErrorWording> = {
   'invalid-request': {
-    title: 'Something in the form needs another look',
+    title: 'Some of the entries are not valid',
     advice: 'Correct what is marked and send it again. Nothing was saved.',
   },
   'not-signed-in': { title: 'You are not signed in', advice: 'Sign in to go on from here.' },
@@ -32,16 +32,16 @@ export const errorWording: Record<AnyErrorCode, ErrorWording> = {
     advice: 'Look at what changed, then decide. Nothing of yours was saved yet.',
   },
   'idempotency-key-missing': {
-    title: 'The page could not mark this as a single act',
-    advice: 'Load the page again and repeat it. Nothing was saved.',
+    title: 'The page could not number this request',
+    advice: 'Load the page again and repeat what you did. Nothing was saved.',
   },
   'idempotency-key-reused': {
     title: 'This was sent before with other content',
     advice: 'Load the page again, check what was saved, and repeat what is missing.',
   },
   'still-running': {
-    title: 'The first try is still at work',
-    advice: 'Wait a few seconds, then try again. It will not be done twice.',
+    title: 'The first request is still being processed',
+    advice: 'Wait a few seconds, then try again. Nothing will be done twice.',
   },
   'too-many-requests': {
     title: 'Too many tries in a short time',

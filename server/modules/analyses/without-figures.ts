@@ -1,16 +1,6 @@
-import type { MetricGroup, Note, RecordingAnalysis } from '../../../shared/mechanics/types.ts'
+import { allGroups } from '../../../shared/mechanics/checks/affected-groups.ts'
+import type { Note, RecordingAnalysis } from '../../../shared/mechanics/types.ts'
 import type { EngineSaid } from './analysis-form.ts'
-
-const everything: MetricGroup[] = [
-  'weighing',
-  'jump',
-  'impulse',
-  'push',
-  'flight',
-  'landing',
-  'sides',
-  'ledger',
-]
 
 /** An analysis without a figure, and the failed check that says why: a sheet never waits for what will not come. */
 function withoutFigures(check: { key: string; sentence: string; remedy: string }, notes: Note[]): EngineSaid {
@@ -19,7 +9,7 @@ function withoutFigures(check: { key: string; sentence: string; remedy: string }
     metrics: {},
     sides: null,
     ledger: null,
-    checks: [{ verdict: 'fail', affects: everything, measured: null, limit: null, unit: '', ...check }],
+    checks: [{ verdict: 'fail', affects: allGroups, measured: null, limit: null, unit: '', ...check }],
     missing: [],
     notes,
   }
