@@ -1,4 +1,4 @@
-import { useEffect, useId, useRef, useState, type ReactNode } from 'react'
+import { useId, useLayoutEffect, useRef, useState, type ReactNode } from 'react'
 import { Button } from './button.tsx'
 
 interface DialogProps {
@@ -9,15 +9,20 @@ interface DialogProps {
   children: ReactNode
 }
 
-/** A native modal dialog, open while mounted. Escape closes it, and the focus goes back to where it was. */
+/**
+ * A native modal dialog, open while mounted. Its form's first control has the focus, or else Close. Escape closes it,
+ * and the focus goes back to where it was.
+ */
 export function Dialog({ title, onClose, dirty = false, children }: DialogProps) {
   const dialog = useRef<HTMLDialogElement>(null)
   const titleId = useId()
   const [asking, setAsking] = useState(false)
 
-  useEffect(() => {
+  // A layout effect: the browser gives the focus back only while the closing dialog is still in the page.
+  useLayoutEffect(() => {
     const element = dialog.current
     element?.showModal()
+    element?.querySelector<HTMLElement>('form :is(button, input, select, textarea):enabled')?.focus()
     return () => element?.close()
   }, [])
 

@@ -121,6 +121,7 @@ describe('the Session sheet', () => {
     screen.getByRole('link', { name: /Mara Ostrow, trial 1/ }).focus()
     await user.keyboard('x')
     const dialog = screen.getByRole('dialog', { name: 'Set aside trial 1 of Mara Ostrow' })
+    expect(within(dialog).getByRole('button', { name: 'Moved while being weighed' })).toHaveFocus()
     await user.click(within(dialog).getByRole('button', { name: 'Set aside' }))
     expect(within(dialog).getByLabelText('Reason')).toHaveAccessibleDescription('Say why')
     await user.click(within(dialog).getByRole('button', { name: 'Stepped off on landing' }))
@@ -130,6 +131,7 @@ describe('the Session sheet', () => {
     ).toBeVisible()
     expect(screen.getByText('2 trials, 1 set aside')).toBeVisible()
     expect(screen.queryByRole('dialog')).not.toBeInTheDocument()
+    expect(screen.getByRole('link', { name: /trial 1, set aside/ })).toHaveFocus()
     await user.click(screen.getByRole('button', { name: 'Undo' }))
     expect(await screen.findByRole('link', { name: /Mara Ostrow, trial 1, 33\.5/ })).toBeVisible()
     expect(kept.sheet.trials[0]!.setAside).toBeNull()
@@ -164,7 +166,7 @@ describe('the Session sheet', () => {
     expect(tray).toHaveTextContent('1 trial without an athlete')
     expect(tray).toHaveTextContent('74.2 ± 0.3 kg, 30.0 ± 0.5 cm')
     await user.selectOptions(screen.getByLabelText('Athlete of plate_7.csv'), 'Tomas Brandvold')
-    await user.click(screen.getByRole('button', { name: 'Put plate_7.csv on this athlete' }))
+    await user.click(screen.getByRole('button', { name: 'Assign plate_7.csv to this athlete' }))
     expect(await screen.findByRole('link', { name: /Tomas Brandvold, trial 1/ })).toBeVisible()
     expect(kept.sheet.trials[0]!.athleteId).toBe(tomas)
     expect(screen.getByText('empty: nothing waits for you')).toBeVisible()
@@ -172,6 +174,14 @@ describe('the Session sheet', () => {
     await pageTitled('Sessions')
     expect(await screen.findByRole('link', { name: 'November jumps' })).toBeVisible()
     expect(screen.queryByText('1 in the Tray')).not.toBeInTheDocument()
+  })
+
+  test('after an assignment the focus is on the choice of the next trial in the Tray', async () => {
+    const { user } = await openSheet(aSheet({ trials: [aSheetTrial(7, 0.3), aSheetTrial(8, 0.31)] }))
+    await user.selectOptions(screen.getByLabelText('Athlete of plate_7.csv'), 'Tomas Brandvold')
+    await user.click(screen.getByRole('button', { name: /Assign plate_7/ }))
+    await screen.findByRole('link', { name: /Tomas Brandvold, trial 1/ })
+    expect(screen.getByLabelText('Athlete of plate_8.csv')).toHaveFocus()
   })
 
   test('the Tray says what was found in a file and what to do, where a duplicate is, and what is not all here', async () => {
@@ -306,7 +316,7 @@ describe('the Session sheet', () => {
 
   test('an empty session says how recordings come in, and has nothing to publish', async () => {
     await openSheet(aSheet({ trials: [], uploads: [] }))
-    expect(screen.getByText('No recordings yet')).toBeVisible()
+    expect(screen.getByText('no recordings yet')).toBeVisible()
     expect(screen.getByRole('button', { name: 'Publish' })).toBeDisabled()
   })
 

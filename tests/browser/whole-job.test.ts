@@ -92,7 +92,7 @@ describe('a coach', () => {
   test('puts the trial in the Tray on an athlete by hand', async () => {
     const { page } = coach
     await page.getByLabel('Athlete of plate_0931.csv').selectOption('Selma Grøndal')
-    await page.getByRole('button', { name: /^Put plate_0931\.csv/ }).click()
+    await page.getByRole('button', { name: /^Assign plate_0931\.csv/ }).click()
     await page.getByRole('link', { name: /^Selma Grøndal, trial 4/ }).waitFor()
     await page.getByText('empty: nothing waits for you').waitFor()
   })

@@ -1,5 +1,8 @@
 /** What a browser has and jsdom has not, as far as the client leans on it. */
 
+/** Where the focus was before a dialog opened. */
+const before = new WeakMap<HTMLDialogElement, Element | null>()
+
 if (!('showModal' in HTMLDialogElement.prototype)) {
   Object.assign(HTMLDialogElement.prototype, {
     show(this: HTMLDialogElement) {
@@ -7,11 +10,15 @@ if (!('showModal' in HTMLDialogElement.prototype)) {
     },
     showModal(this: HTMLDialogElement) {
       this.open = true
+      before.set(this, document.activeElement)
       const first = this.querySelector<HTMLElement>('input, select, textarea, button')
       first?.focus()
     },
     close(this: HTMLDialogElement) {
       this.open = false
+      // As in a browser: a dialog that is out of the page already gives no focus back.
+      const back = this.isConnected ? before.get(this) : null
+      if (back instanceof HTMLElement) back.focus()
     },
   })
 }

@@ -53,7 +53,7 @@ export function SessionSheet({ sheet, files, queue, addFiles }: Props) {
           }}
         />
       )}
-      <SheetFoot empty={sheet.trials.length === 0 && files.length === 0} />
+      {sheet.trials.length > 0 && <SheetFoot />}
       {open?.dialog === 'publish' && (
         <PublishDialog session={sheet.session} counts={counts} onClose={close} />
       )}
@@ -66,15 +66,7 @@ export function SessionSheet({ sheet, files, queue, addFiles }: Props) {
   )
 }
 
-function SheetFoot({ empty }: { empty: boolean }) {
-  if (empty) {
-    return (
-      <EmptyState title="No recordings yet">
-        Drop the plates’ files anywhere on this page, or press Add files. A file whose name holds an athlete’s
-        name goes to that athlete; the others wait in the Tray.
-      </EmptyState>
-    )
-  }
+function SheetFoot() {
   return (
     <div className="flex flex-col gap-1 py-3">
       <p className="no-print hidden text-small text-ink-2 md:block">

@@ -1,4 +1,4 @@
-import { useId, useState } from 'react'
+import { useId, useRef, useState } from 'react'
 import { Link } from 'react-router-dom'
 import type { SheetTrial } from '../../../shared/contracts/sessions.ts'
 import { Button } from '../../components/button.tsx'
@@ -13,10 +13,12 @@ import { cellMetric } from './cell-words.ts'
 export function TrayTrial({ trial, athletes }: { trial: SheetTrial; athletes: readonly AthleteChoice[] }) {
   const { id, version, fileName } = trial
   const [chosen, setChosen] = useState('')
-  const { move, busy, error } = useMoveTrial({ id, version, words: fileName, athleteId: null })
+  const row = useRef<HTMLLIElement>(null)
+  const acted = { id, version, words: fileName, athleteId: null }
+  const { move, busy, error } = useMoveTrial(acted, () => focusNext(row.current))
   const selectId = useId()
   return (
-    <li className="border-b border-rule-2 py-1.5 text-small">
+    <li ref={row} className="border-b border-rule-2 py-1.5 text-small">
       <form
         className="flex flex-wrap items-center gap-x-3 gap-y-1"
         onSubmit={(event) => {
@@ -46,13 +48,20 @@ export function TrayTrial({ trial, athletes }: { trial: SheetTrial; athletes: re
             ))}
           </select>
           <Button type="submit" busy={busy} disabled={chosen === ''}>
-            Put <span className="sr-only">{fileName} on this athlete</span>
+            Assign <span className="sr-only">{fileName} to this athlete</span>
           </Button>
         </span>
       </form>
       <FormError error={error} />
     </li>
   )
+}
+
+/** The row goes with its trial: the focus goes on to the next choice, or to the Tray's list after the last. */
+function focusNext(row: HTMLElement | null) {
+  if (!row?.contains(document.activeElement)) return
+  const next = row.nextElementSibling?.querySelector('select') ?? row.parentElement
+  next?.focus()
 }
 
 /** Mass and height help to tell whose it is. */

@@ -1,7 +1,7 @@
 import type { SheetTrial } from '../../../shared/contracts/sessions.ts'
 import type { Upload } from '../../../shared/contracts/uploads.ts'
 import { FileList } from '../uploads/file-list.tsx'
-import { readCount } from '../uploads/file-progress.ts'
+import { isOnItsWay, readCount } from '../uploads/file-progress.ts'
 import { needsPerson, TrayUpload } from '../uploads/tray-uploads.tsx'
 import type { QueuedFile, UploadQueue } from '../uploads/upload-queue.ts'
 import type { AthleteChoice } from '../trials/move-trial-dialog.tsx'
@@ -17,8 +17,7 @@ interface Props {
 
 /** What is not on an athlete yet, what could not be read, and how far the reading has come. */
 export function Tray({ trials, uploads, athletes, files, queue }: Props) {
-  const underWay = new Set(files.filter((file) => file.stage !== 'sent').map((file) => file.uploadId))
-  const waiting = uploads.filter((upload) => needsPerson(upload) && !underWay.has(upload.id))
+  const waiting = uploads.filter((upload) => needsPerson(upload) && !isOnItsWay(upload, files))
   const count = readCount(uploads, files)
   return (
     <section aria-label="Tray" className="no-print mb-4 border border-dashed border-edge bg-sheet px-4 py-2">
@@ -27,12 +26,15 @@ export function Tray({ trials, uploads, athletes, files, queue }: Props) {
           Tray{' '}
           <span className="text-small font-normal text-ink-2">
             {trials.length + waiting.length === 0
-              ? 'empty: nothing waits for you'
+              ? uploads.length + files.length === 0
+                ? 'no recordings yet'
+                : 'empty: nothing waits for you'
               : inTrayWords(trials.length, waiting.length)}
           </span>
         </h2>
         <ReadProgress read={count.read} of={count.of} />
       </div>
+      {uploads.length + files.length === 0 && <HowToBegin />}
       <FileList files={files} uploads={uploads} queue={queue} />
       {trials.length + waiting.length > 0 && (
         <ul
@@ -49,6 +51,15 @@ export function Tray({ trials, uploads, athletes, files, queue }: Props) {
         </ul>
       )}
     </section>
+  )
+}
+
+function HowToBegin() {
+  return (
+    <p className="max-w-prose border-t border-rule py-2">
+      Drop the plates’ files anywhere on this page, or press Add files. A file whose name holds an athlete’s
+      name goes to that athlete; the others wait here.
+    </p>
   )
 }
 

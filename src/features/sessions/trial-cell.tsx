@@ -1,3 +1,4 @@
+import type { MouseEvent } from 'react'
 import { Link } from 'react-router-dom'
 import type { SheetTrial } from '../../../shared/contracts/sessions.ts'
 import { Sparkline } from '../../charts/sparkline.tsx'
@@ -48,7 +49,7 @@ export function TrialCell({ trial, athleteName, n, focus, acts }: Props) {
           <CellFigures trial={trial} />
         </span>
       </Link>
-      <span className="cell-acts no-print">
+      <span className="cell-acts no-print" onClickCapture={focusCell}>
         <Button
           look="word"
           tabIndex={-1}
@@ -63,6 +64,11 @@ export function TrialCell({ trial, athleteName, n, focus, acts }: Props) {
       </span>
     </td>
   )
+}
+
+/** The words that act go when the pointer does: the focus comes back to the trial itself. */
+function focusCell(event: MouseEvent<HTMLElement>) {
+  event.currentTarget.closest('td')?.querySelector('a')?.focus()
 }
 
 function CellFigures({ trial: { setAside, analysis } }: { trial: SheetTrial }) {

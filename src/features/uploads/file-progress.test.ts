@@ -1,7 +1,7 @@
 import { describe, expect, it } from 'vitest'
 import { ApiError } from '../../api/api-error.ts'
 import { anUpload } from '../../../tests/setup/msw/measured.ts'
-import { fileProgress, readCount } from './file-progress.ts'
+import { fileProgress, isOnItsWay, readCount } from './file-progress.ts'
 import type { QueuedFile } from './upload-queue.ts'
 
 const file = (change: Partial<QueuedFile> = {}): QueuedFile => ({
@@ -63,5 +63,20 @@ describe('readCount(uploads, files)', () => {
 
   it('counts nothing for nothing', () => {
     expect(readCount([], [])).toEqual({ read: 0, of: 0 })
+  })
+})
+
+describe('isOnItsWay(upload, files)', () => {
+  const receiving = anUpload(1, { state: 'receiving', fileName: 'a.csv', sizeBytes: 100 })
+
+  it('knows an upload that the server speaks of before it has answered the announcement', () => {
+    expect(isOnItsWay(receiving, [file({ stage: 'sending' })])).toBe(true)
+    expect(isOnItsWay(receiving, [file({ stage: 'sending', fileName: 'b.csv' })])).toBe(false)
+  })
+
+  it('leaves what another page load began, and what has been sent, to the Tray', () => {
+    expect(isOnItsWay(receiving, [])).toBe(false)
+    expect(isOnItsWay(receiving, [file({ stage: 'sent', uploadId: receiving.id })])).toBe(false)
+    expect(isOnItsWay(receiving, [file({ stage: 'sending', uploadId: 'another' })])).toBe(false)
   })
 })

@@ -74,3 +74,16 @@ export function readCount(
   const settled = uploads.filter((upload) => upload.state !== 'receiving' && upload.state !== 'waiting')
   return { read: settled.length, of: uploads.length + coming.length }
 }
+
+/**
+ * Whether this page is sending an upload itself. The server's word of a new one may come before the answer to its
+ * announcement: then only its name and size tell.
+ */
+export function isOnItsWay(upload: Upload, files: readonly QueuedFile[]): boolean {
+  return files.some(({ stage, uploadId, fileName, sizeBytes }) => {
+    if (stage === 'sent') return false
+    if (uploadId !== null) return uploadId === upload.id
+    const sameFile = fileName === upload.fileName && sizeBytes === upload.sizeBytes
+    return stage === 'sending' && upload.state === 'receiving' && sameFile
+  })
+}
