@@ -23,9 +23,12 @@ export function ResultsDrawing({ geometry, decimals, read }: Props) {
         </g>
       ))}
       {geometry.dateTicks.map((tick) => (
-        <text key={tick.x} x={tick.x} y={geometry.height - 6} textAnchor="middle">
-          {tick.text}
-        </text>
+        <g key={tick.x}>
+          <line x1={tick.x} x2={tick.x} y1={plot.bottom} y2={geometry.height - 4} className="stroke-rule" />
+          <text x={tick.x + 4} y={geometry.height - 6}>
+            {tick.text}
+          </text>
+        </g>
       ))}
       {geometry.points.map((point, i) => (
         <ResultPoint key={i} point={point} newest={i === newest} read={i === read} />

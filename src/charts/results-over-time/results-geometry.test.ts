@@ -44,6 +44,19 @@ describe('resultsGeometry(figures, width, height)', () => {
     expect(resultsGeometry([], 360, 200).points).toEqual([])
   })
 
+  it('keeps every month’s name, which stands right of the month’s beginning, on the picture', () => {
+    const { dateTicks, width } = resultsGeometry(
+      [
+        { date: '2026-01-15', value: 1, U: null },
+        { date: '2026-11-01', value: 2, U: null },
+      ],
+      360,
+      200,
+    )
+    expect(dateTicks.length).toBeGreaterThan(1)
+    for (const { x, text } of dateTicks) expect(x + 4 + 7 * text.length).toBeLessThanOrEqual(width)
+  })
+
   it('names each month once', () => {
     const { dateTicks } = resultsGeometry(
       [

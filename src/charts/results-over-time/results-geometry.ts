@@ -65,9 +65,13 @@ export function resultsGeometry(
     valueTicks: y.ticks(3).map((value) => ({ value, y: y(value) })),
     dateTicks: dates
       .map((date, i) => ({ x: x(date), text: texts[i]! }))
-      .filter((tick, i) => i === 0 || tick.text !== texts[i - 1]),
+      .filter((tick, i) => i === 0 || tick.text !== texts[i - 1])
+      .filter((tick) => tick.x + textLength(tick.text) <= width),
   }
 }
+
+/** Room for a month's name right of its tick, px; a letter of the small size is about 7 wide. */
+const textLength = (text: string) => 4 + 7 * text.length
 
 const dayMs = 86_400_000
 const dayOf = (date: string) => new Date(`${date}T00:00:00Z`)

@@ -21,7 +21,7 @@ export function TraceAxes({
   const momenta = withMomentum ? [-reach, 0, reach] : []
   return (
     <g className="fill-ink-2 text-[12.5px]">
-      <text x={left - 8} y={layout.force.top + 2} textAnchor="end">
+      <text x={left - 8} y={layout.force.top - 12} textAnchor="end">
         N
       </text>
       {forces.map((force) => (
@@ -33,11 +33,9 @@ export function TraceAxes({
             y2={scales.force(force)}
             className="stroke-rule-2"
           />
-          {scales.force(force) > layout.force.top + 16 && (
-            <text x={left - 8} y={scales.force(force) + 4} textAnchor="end">
-              {formatNumber(force, 0)}
-            </text>
-          )}
+          <text x={left - 8} y={scales.force(force) + 4} textAnchor="end">
+            {formatNumber(force, 0)}
+          </text>
         </g>
       ))}
       {withMomentum && (
