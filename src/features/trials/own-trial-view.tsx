@@ -50,6 +50,12 @@ export function OwnTrialView({ trial }: { trial: Trial }) {
 
 function WhatItMeans({ analysis }: { analysis: Analysis }) {
   const keys = told.filter((key) => analysis.metrics[key] && !analysis.withheld.includes(key))
+  if (keys.length === 0)
+    return (
+      <Sheet title="What was measured">
+        <p className="py-2">No figure of this jump was sure enough to be shown. Your coach sees why.</p>
+      </Sheet>
+    )
   return (
     <Sheet title="What was measured">
       <dl>
