@@ -1,9 +1,9 @@
-import { Suspense } from 'react'
+import { Suspense, useState } from 'react'
 import { Navigate, Outlet, ScrollRestoration, useLocation } from 'react-router-dom'
 import { useMe } from '../api/account/get-me.ts'
 import { ErrorState } from '../components/error-state.tsx'
 import { Loading } from '../components/loading.tsx'
-import { signInPathFrom } from '../lib/paths.ts'
+import { paths, signInPathFrom } from '../lib/paths.ts'
 import { SessionEndedDialog } from '../features/account/session-ended-dialog.tsx'
 import { useSessionEnded } from './session-ended.ts'
 import { TopBar } from './top-bar.tsx'
@@ -15,13 +15,16 @@ export function Shell() {
   const location = useLocation()
   const session = useSessionEnded()
   const main = useFocusOnNewPage()
+  const [wasSignedIn, setWasSignedIn] = useState(false)
+  if (me.data && !wasSignedIn) setWasSignedIn(true)
 
   if (me.data === undefined) {
     if (me.isError)
       return <ErrorState error={me.error} onRetry={() => void me.refetch()} retrying={me.isFetching} />
     return <Loading what="your club" />
   }
-  if (me.data === null) return <Navigate to={signInPathFrom(location)} replace />
+  // After a sign-out the page left behind is not for whoever signs in next.
+  if (me.data === null) return <Navigate to={wasSignedIn ? paths.signIn : signInPathFrom(location)} replace />
   return (
     <>
       <TopBar me={me.data} />
