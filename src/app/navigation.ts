@@ -1,15 +1,17 @@
 import type { Role } from '../../shared/contracts/roles.ts'
 import { paths } from '../lib/paths.ts'
 
-interface NavItem {
+export interface NavItem {
   path: string
   words: string
+  /** Pages under another address that belong to this one. */
+  holds?: string
   roles: readonly Role[]
 }
 
 /** In the order of the bar. The first that a person may open is where they start. */
 const items: NavItem[] = [
-  { path: paths.sessions, words: 'Sessions', roles: ['coach', 'physio'] },
+  { path: paths.sessions, words: 'Sessions', holds: '/trials/', roles: ['coach', 'physio'] },
   { path: paths.athletes, words: 'Athletes', roles: ['coach', 'physio'] },
   { path: paths.landingWatch, words: 'Landing watch', roles: ['physio'] },
   { path: paths.people, words: 'People', roles: ['admin'] },

@@ -1,16 +1,17 @@
-import { NavLink } from 'react-router-dom'
+import { NavLink, useLocation } from 'react-router-dom'
 import type { Me } from '../../shared/contracts/account.ts'
 import { useSignOut } from '../api/account/sign-out.ts'
 import { Button } from '../components/button.tsx'
 import { classNames } from '../lib/class-names.ts'
 import { paths } from '../lib/paths.ts'
 import { roleNames } from '../lib/role-names.ts'
-import { navItemsFor } from './navigation.ts'
+import { navItemsFor, type NavItem } from './navigation.ts'
 import { Wordmark } from './wordmark.tsx'
 
 /** Wordmark, club, the pages of one's roles, oneself. */
 export function TopBar({ me }: { me: Me }) {
   const items = navItemsFor(me.roles)
+  const { pathname } = useLocation()
   return (
     <header className="no-print border-b border-rule">
       <a
@@ -26,7 +27,10 @@ export function TopBar({ me }: { me: Me }) {
             <ul className="flex flex-wrap gap-x-4 sm:gap-x-6">
               {items.map((item) => (
                 <li key={item.path}>
-                  <NavLink to={item.path} className={navLinkClass}>
+                  <NavLink
+                    to={item.path}
+                    className={({ isActive }) => navLinkClass(isActive || holds(item, pathname))}
+                  >
                     {item.words}
                   </NavLink>
                 </li>
@@ -45,7 +49,9 @@ export function TopBar({ me }: { me: Me }) {
   )
 }
 
-function navLinkClass({ isActive }: { isActive: boolean }): string {
+const holds = (item: NavItem, pathname: string) => item.holds !== undefined && pathname.startsWith(item.holds)
+
+function navLinkClass(isActive: boolean): string {
   return classNames(
     'block pt-3 pb-2.5 whitespace-nowrap no-underline hover:text-ink',
     isActive ? 'tape-under font-semibold' : 'text-ink-2',
