@@ -28,12 +28,14 @@ interface Stream {
   ended: boolean
 }
 
+async function cookieOf(email: string): Promise<string> {
+  const answer = await harness.client().agent.post('/api/sign-in').send({ email, password: builtPassword })
+  return (answer.headers['set-cookie'] as unknown as string[]).map((line) => line.split(';')[0]).join('; ')
+}
+
 /** Opens the stream as a browser that this person signed in with; the server hears when the answer begins. */
 async function listen({ email }: { email: string }): Promise<Stream> {
-  const answer = await harness.client().agent.post('/api/sign-in').send({ email, password: builtPassword })
-  const cookie = (answer.headers['set-cookie'] as unknown as string[])
-    .map((line) => line.split(';')[0])
-    .join('; ')
+  const cookie = await cookieOf(email)
   const request = get(`${harness.url}/api/events`, { headers: { cookie, 'accept-encoding': 'gzip' } })
   const [response] = (await once(request, 'response')) as [IncomingMessage]
   open.push(response)
@@ -48,6 +50,15 @@ async function listen({ email }: { email: string }): Promise<Stream> {
 
 const rows = (query: string) =>
   onDatabase(harness.database.adminUrl, async (admin) => (await admin.query(query)).rows as unknown[])
+const noConnection = () =>
+  until(
+    () =>
+      rows(
+        `select 1 from pg_stat_activity where datname = current_database() and application_name = 'underfoot-events'`,
+      ),
+    (connections) => connections.length === 0,
+    { what: 'no listening connection' },
+  )
 const tell = (clubId: string, event: ClubEvent, audience?: 'staff' | 'everybody') =>
   harness.db.inClub(workerContext(clubId), (tx) => notify(tx, clubId, event, audience))
 const reached = (stream: Stream, count: number) =>
@@ -108,14 +119,25 @@ describe('the stream of events', () => {
   it('keeps no connection when nobody listens any more', async () => {
     await listen(await buildMember(harness.db, day.clubId, ['coach']))
     open.splice(0).forEach((response) => response.destroy())
+    await noConnection()
+  })
+
+  it('listens for nobody whose browser went away before the answer began', async () => {
+    const { email } = await buildMember(harness.db, day.clubId, ['coach'])
+    const cookie = await cookieOf(email)
+    for (let n = 0; n < 10; n++) {
+      const request = get(`${harness.url}/api/events`, { headers: { cookie } }).on('error', () => undefined)
+      await once(request, 'finish')
+      request.destroy()
+    }
+    const answered = () =>
+      harness.log.filter((line) => line.includes('/api/events') && line.includes('aborted'))
     await until(
-      () =>
-        rows(
-          `select 1 from pg_stat_activity where datname = current_database() and application_name = 'underfoot-events'`,
-        ),
-      (connections) => connections.length === 0,
-      { what: 'no listening connection' },
+      () => Promise.resolve(answered()),
+      (lines) => lines.length >= 10,
+      { what: 'ten requests let go' },
     )
+    await noConnection()
   })
 
   it('is not there for somebody signed out', async () => {

@@ -17,6 +17,8 @@ const longestMs = 10 * 60_000
  * event that it missed.
  */
 export async function streamEvents(events: ClubEvents, ctx: Caller, res: Response): Promise<void> {
+  // Gone before its turn came: nobody would tell when to stop listening.
+  if (res.closed) return
   const gathered = new Map<string, ClubEvent>()
   let gathering: NodeJS.Timeout | undefined
   const flush = () => {
@@ -38,7 +40,7 @@ export async function streamEvents(events: ClubEvents, ctx: Caller, res: Respons
     clearTimeout(gathering)
   })
   await ready
-  begin(res)
+  if (!res.closed) begin(res)
 }
 
 function begin(res: Response): void {
