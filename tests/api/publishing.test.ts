@@ -197,8 +197,21 @@ describe('a published session', () => {
     await setAside('mara_ostrow_1.csv', 'Stumbled', 1)
     await publish()
     expect([await mailsTo(mara), await mailsTo(tomi)]).toEqual([maraBefore + 2, tomiBefore + 1])
+    await closePlace(mara, true)
+    await setAside('mara_ostrow_1.csv', null, 2)
+    await publish()
+    await closePlace(mara, false)
+    expect(await mailsTo(mara), 'with a closed place').toBe(maraBefore + 2)
   })
 })
+
+const closePlace = ({ email }: Own, closed: boolean) =>
+  onDatabase(harness.database.adminUrl, async (admin) => {
+    await admin.query(
+      `update identity.memberships set active = $1 where person_id = (select id from identity.people where email = $2)`,
+      [!closed, email],
+    )
+  })
 
 /** The athlete's recorded mass changes, and the trial is analysed anew with it; returns the newer analysis. */
 async function recomputeWithAnotherMass(fileName: string): Promise<string> {

@@ -1,6 +1,6 @@
 import { and, eq, isNull, isNotNull, sql } from 'drizzle-orm'
 import type { Tx } from '../../db/database.ts'
-import { people } from '../../db/schema/identity.ts'
+import { memberships, people } from '../../db/schema/identity.ts'
 import { athletes } from '../../db/schema/people-of-club.ts'
 import { publications } from '../../db/schema/sessions.ts'
 import { analyses, publishedTrials, trials } from '../../db/schema/trials.ts'
@@ -78,11 +78,19 @@ export async function lastPublisher(tx: Tx, clubId: string, sessionId: string): 
   return row?.name ?? null
 }
 
-/** Addresses of the people who are these athletes. */
+/** Addresses of the people who are these athletes, and whose place in the club is open. */
 export function peopleOfAthletes(tx: Tx, clubId: string, athleteIds: string[]) {
   return tx
     .select({ email: people.email, name: people.name })
     .from(athletes)
     .innerJoin(people, eq(people.id, athletes.personId))
+    .innerJoin(
+      memberships,
+      and(
+        eq(memberships.clubId, athletes.clubId),
+        eq(memberships.personId, athletes.personId),
+        memberships.active,
+      ),
+    )
     .where(and(eq(athletes.clubId, clubId), sql`${athletes.id} = any(${sql.param(athleteIds)}::uuid[])`))
 }
