@@ -2,9 +2,11 @@ import { z } from 'zod'
 import { limits } from './limits.ts'
 
 /** Field schemas that several nouns share. */
-export const Id = z.uuid()
-export const Version = z.number().int().positive()
-export const IsoDate = z.iso.date('Give a date')
+/** In lower case, as the database writes it: the same id is never two texts. */
+export const Id = z.uuid().toLowerCase()
+export const Version = z.int32().positive()
+/** The calendar has no year 0, and neither has the database. */
+export const IsoDate = z.iso.date('Give a date').refine((date) => !date.startsWith('0000'), 'Give a date')
 export const Moment = z.iso.datetime()
 /** Blanks round an address, as pasting leaves them, are taken off before it is judged. */
 export const Email = z

@@ -5,7 +5,7 @@ import { getMe, signIn, signOut } from '../../shared/contracts/account.ts'
 import { createAthlete, listAthletes } from '../../shared/contracts/athletes.ts'
 import { ErrorBody } from '../../shared/contracts/errors.ts'
 import { listSessions } from '../../shared/contracts/sessions.ts'
-import { createSquad } from '../../shared/contracts/squads.ts'
+import { changeSquad, createSquad } from '../../shared/contracts/squads.ts'
 import { onDatabase } from '../../server/setup/database-urls.mjs'
 import { buildClub } from '../../seed/builders/club.ts'
 import { buildMember } from '../../seed/builders/person.ts'
@@ -99,6 +99,24 @@ describe('a refused request', () => {
     expect(ErrorBody.parse((await post('{"email":')).body).error.code).toBe('invalid-request')
     const large = await post(JSON.stringify({ email: 'x'.repeat(300_000), password: 'x' }))
     expect([large.status, ErrorBody.parse(large.body).error.code]).toEqual([413, 'invalid-request'])
+  })
+
+  it.each([
+    ['a null character', { name: 'Mara\0Ostrow' }, 'name'],
+    ['half a character', { name: 'Mara\ud83d' }, 'name'],
+    ['a year that no calendar has', { bornOn: '0000-01-01' }, 'bornOn'],
+  ])('may not hold %s, which the database would choke on', async (_, wrong, field) => {
+    const body = { name: 'Mara Ostrow', bornOn: null, recordedMassKg: null, squadIds: [], ...wrong }
+    const response = await coach.send(createAthlete, { body })
+    expect(response.status).toBe(400)
+    expect(Object.keys(ErrorBody.parse(response.body).error.details ?? {})).toEqual([field])
+  })
+
+  it('may not name a version past all counting, nor search for a null character', async () => {
+    const { id } = await coach.call(createSquad, { body: squad() })
+    const options = { params: { squadId: id }, body: { version: 2 ** 31 } }
+    expect(await coach.refusal(changeSquad, options)).toEqual([400, 'invalid-request'])
+    expect(await coach.refusal(listSessions, { query: { search: 'a\0b' } })).toEqual([400, 'invalid-request'])
   })
 
   it('to a path that the API does not have is a 404 with a code', async () => {

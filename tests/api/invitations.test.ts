@@ -209,11 +209,14 @@ describe('the people of a club', () => {
     await buildMember(harness.db, club, ['admin'], { active: false })
     const browser = await harness.signedIn(last)
     const params = { personId: last.id }
-    for (const change of [{ roles: ['coach'] }, { active: false }]) {
-      expect(await browser.refusal(changePerson, { params, body: { version: 1, ...change } })).toEqual([
-        409,
-        'last-admin',
-      ])
+    for (const personId of [last.id, last.id.toUpperCase()]) {
+      for (const change of [{ roles: ['coach'] }, { active: false }]) {
+        const body = { version: 1, ...change }
+        expect(await browser.refusal(changePerson, { params: { personId }, body })).toEqual([
+          409,
+          'last-admin',
+        ])
+      }
     }
     await browser.call(changePerson, { params, body: { version: 1, roles: ['admin'] } })
   })
