@@ -3,16 +3,12 @@ import { changeAthlete, getAthlete, type Athlete } from '../../../shared/contrac
 import { foldName } from '../../../shared/contracts/names.ts'
 import type { Squad } from '../../../shared/contracts/squads.ts'
 import { useRoles } from '../../api/account/get-me.ts'
-import { Button } from '../../components/button.tsx'
-import { EmptyState } from '../../components/empty-state.tsx'
 import { SelectField } from '../../components/field.tsx'
 import { ListBar, SortField } from '../../components/list-bar.tsx'
+import { ListSheet } from '../../components/list-sheet.tsx'
 import { SearchField } from '../../components/search-field.tsx'
-import { Sheet } from '../../components/sheet.tsx'
-import { Table } from '../../components/table.tsx'
 import { countOf } from '../../lib/count-of.ts'
 import { mayCall } from '../../lib/may-call.ts'
-import { formatSort, parseSort, sortRows } from '../../lib/sort-rows.ts'
 import { useListState } from '../../lib/use-list-state.ts'
 import { ChangeAthleteDialog } from './change-athlete-dialog.tsx'
 import { rosterColumns } from './roster-columns.tsx'
@@ -33,7 +29,7 @@ export function Roster({ athletes, squads }: { athletes: Athlete[]; squads: Squa
     onChange: setChanging,
     onArchive: archive,
   })
-  const shown = sortRows(athletes.filter(fits(list)), columns, parseSort(list.sort))
+  const shown = athletes.filter(fits(list))
 
   return (
     <>
@@ -70,23 +66,18 @@ export function Roster({ athletes, squads }: { athletes: Athlete[]; squads: Squa
         </SelectField>
         <SortField columns={columns} value={list.sort} onChange={(sort) => setList({ sort })} />
       </ListBar>
-      <Sheet flush>
-        {shown.length === 0 ? (
-          <EmptyState
-            title="No athlete fits"
-            action={<Button onClick={() => setList(defaults)}>Show all active athletes</Button>}
-          />
-        ) : (
-          <Table
-            caption="Athletes"
-            columns={columns}
-            rows={shown}
-            rowKey={({ id }) => id}
-            sort={parseSort(list.sort)}
-            onSort={(sort) => setList({ sort: formatSort(sort) })}
-          />
-        )}
-      </Sheet>
+      <ListSheet
+        caption="Athletes"
+        columns={columns}
+        rows={shown}
+        sort={list.sort}
+        onSort={(sort) => setList({ sort })}
+        none={{
+          title: 'No athlete fits',
+          back: 'Show all active athletes',
+          onBack: () => setList(defaults),
+        }}
+      />
       {changing && (
         <ChangeAthleteDialog athlete={changing} squads={current} onClose={() => setChanging(null)} />
       )}

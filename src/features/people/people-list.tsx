@@ -2,16 +2,12 @@ import { useState } from 'react'
 import { foldName } from '../../../shared/contracts/names.ts'
 import type { Person } from '../../../shared/contracts/people.ts'
 import { roles as allRoles, type Role } from '../../../shared/contracts/roles.ts'
-import { Button } from '../../components/button.tsx'
-import { EmptyState } from '../../components/empty-state.tsx'
 import { SelectField } from '../../components/field.tsx'
 import { ListBar, SortField } from '../../components/list-bar.tsx'
+import { ListSheet } from '../../components/list-sheet.tsx'
 import { SearchField } from '../../components/search-field.tsx'
-import { Sheet } from '../../components/sheet.tsx'
-import { Table } from '../../components/table.tsx'
 import { countOf } from '../../lib/count-of.ts'
 import { roleNames } from '../../lib/role-names.ts'
-import { formatSort, parseSort, sortRows } from '../../lib/sort-rows.ts'
 import { useListState } from '../../lib/use-list-state.ts'
 import { ChangeRolesDialog } from './change-roles-dialog.tsx'
 import { DeactivateDialog } from './deactivate-dialog.tsx'
@@ -60,23 +56,18 @@ export function PeopleList({ people }: { people: Person[] }) {
         </SelectField>
         <SortField columns={columns} value={list.sort} onChange={(sort) => setList({ sort })} />
       </ListBar>
-      <Sheet flush>
-        {found.length === 0 ? (
-          <EmptyState
-            title="Nobody fits"
-            action={<Button onClick={() => setList(defaults)}>Show all active people</Button>}
-          />
-        ) : (
-          <Table
-            caption="People"
-            columns={columns}
-            rows={sortRows(found, columns, parseSort(list.sort))}
-            rowKey={({ id }) => id}
-            sort={parseSort(list.sort)}
-            onSort={(sort) => setList({ sort: formatSort(sort) })}
-          />
-        )}
-      </Sheet>
+      <ListSheet
+        caption="People"
+        columns={columns}
+        rows={found}
+        sort={list.sort}
+        onSort={(sort) => setList({ sort })}
+        none={{
+          title: 'Nobody fits',
+          back: 'Show all active people',
+          onBack: () => setList(defaults),
+        }}
+      />
       {changingRoles && <ChangeRolesDialog person={changingRoles} onClose={() => setChangingRoles(null)} />}
       {deactivating && <DeactivateDialog person={deactivating} onClose={() => setDeactivating(null)} />}
     </>

@@ -2,15 +2,11 @@ import { useState } from 'react'
 import type { Athlete } from '../../../shared/contracts/athletes.ts'
 import { foldName } from '../../../shared/contracts/names.ts'
 import type { Squad } from '../../../shared/contracts/squads.ts'
-import { Button } from '../../components/button.tsx'
-import { EmptyState } from '../../components/empty-state.tsx'
 import { SelectField } from '../../components/field.tsx'
 import { ListBar, SortField } from '../../components/list-bar.tsx'
+import { ListSheet } from '../../components/list-sheet.tsx'
 import { SearchField } from '../../components/search-field.tsx'
-import { Sheet } from '../../components/sheet.tsx'
-import { Table } from '../../components/table.tsx'
 import { countOf } from '../../lib/count-of.ts'
-import { formatSort, parseSort, sortRows } from '../../lib/sort-rows.ts'
 import { useListState } from '../../lib/use-list-state.ts'
 import { ChangeSquadDialog } from './change-squad-dialog.tsx'
 import { squadColumns } from './squad-columns.tsx'
@@ -44,23 +40,18 @@ export function SquadList({ squads, athletes }: { squads: Squad[]; athletes: Ath
         </SelectField>
         <SortField columns={columns} value={list.sort} onChange={(sort) => setList({ sort })} />
       </ListBar>
-      <Sheet flush>
-        {found.length === 0 ? (
-          <EmptyState
-            title="No squad fits"
-            action={<Button onClick={() => setList(defaults)}>Show all active squads</Button>}
-          />
-        ) : (
-          <Table
-            caption="Squads"
-            columns={columns}
-            rows={sortRows(found, columns, parseSort(list.sort))}
-            rowKey={({ id }) => id}
-            sort={parseSort(list.sort)}
-            onSort={(sort) => setList({ sort: formatSort(sort) })}
-          />
-        )}
-      </Sheet>
+      <ListSheet
+        caption="Squads"
+        columns={columns}
+        rows={found}
+        sort={list.sort}
+        onSort={(sort) => setList({ sort })}
+        none={{
+          title: 'No squad fits',
+          back: 'Show all active squads',
+          onBack: () => setList(defaults),
+        }}
+      />
       {changing && (
         <ChangeSquadDialog squad={changing} athletes={athletes} onClose={() => setChanging(null)} />
       )}
