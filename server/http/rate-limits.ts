@@ -6,7 +6,7 @@ import { namedError } from './errors.ts'
 const minute = 60
 
 /** Tries allowed in a time, in seconds. Common practice: few for one address, more for one network of many people. */
-export const rateRules = {
+const rateRules = {
   'sign-in-address': { points: 10, duration: 15 * minute },
   'sign-in-network': { points: 100, duration: 15 * minute },
   'password-person': { points: 10, duration: 15 * minute },

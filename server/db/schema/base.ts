@@ -17,7 +17,7 @@ export const currentClub = sql`nullif(current_setting('app.club_id', true), ''):
 /** The person of the running transaction; null for the worker. */
 export const currentPerson = sql`nullif(current_setting('app.person_id', true), '')::uuid`
 /** True where the person (or the worker) may read the whole club's measurements: coach, physio, admin, worker. */
-export const isStaff = sql`coalesce(current_setting('app.capabilities', true), '') ~ '(^|,)staff(,|$)'`
+const isStaff = sql`coalesce(current_setting('app.capabilities', true), '') ~ '(^|,)staff(,|$)'`
 /** True where the person is an admin of the club. */
 export const isAdmin = sql`coalesce(current_setting('app.capabilities', true), '') ~ '(^|,)admin(,|$)'`
 

@@ -4,7 +4,7 @@ import type { Tx } from '../../db/database.ts'
 import { athletes, squadMembers, squads } from '../../db/schema/people-of-club.ts'
 import { sessionAthletes, sessions, sessionSquads } from '../../db/schema/sessions.ts'
 
-export const ofSession = (clubId: string, sessionId: string) =>
+const ofSession = (clubId: string, sessionId: string) =>
   and(eq(sessions.clubId, clubId), eq(sessions.id, sessionId))
 
 /** Inside a subquery Drizzle leaves the outer table's name off its columns, so these are written out. */

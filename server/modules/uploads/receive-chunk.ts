@@ -23,7 +23,8 @@ export async function receiveChunk(req: Request, res: Response): Promise<Buffer>
 /** Whatever multer, or the parser below it, makes of a form is the sender's doing. */
 function asNamed(error: unknown): Error {
   const code = error instanceof multer.MulterError ? error.code : null
-  if (code === 'LIMIT_FILE_SIZE') return chunkInvalid('A part of a file may have 1 MiB.', 413)
+  if (code === 'LIMIT_FILE_SIZE')
+    return chunkInvalid(`A part of a file may have at most ${limits.chunkBytes / 2 ** 20} MiB.`, 413)
   if (code) return chunkInvalid('The form must hold exactly one part, named “chunk”.')
   return chunkInvalid('The form could not be read to its end. Send the part again.')
 }

@@ -1,17 +1,12 @@
-import { limits } from '../../../shared/contracts/limits.ts'
+import { tooLargeError } from '../../../shared/recordings/errors.ts'
 import type { ReadError } from '../../db/schema/uploads.ts'
 import { namedError } from '../../http/errors.ts'
 import type { ThreadEnded } from '../../jobs/threads/threads.ts'
 
-const MIB = 1024 * 1024
-
-export const fileTooLarge = (sizeBytes: number) =>
-  namedError(
-    'file-too-large',
-    413,
-    // Rounded up, so that a file just over the limit is never said to be of the limit's size.
-    `The file has ${Math.ceil((sizeBytes / MIB) * 10) / 10} MiB, and ${limits.fileBytes / MIB} MiB is the most that is taken. Split the recording and upload its parts.`,
-  )
+export const fileTooLarge = (sizeBytes: number) => {
+  const { sentence, remedy } = tooLargeError(sizeBytes)
+  return namedError('file-too-large', 413, `${sentence} ${remedy}`)
+}
 
 export const fileNameInvalid = (fileName: string) =>
   namedError(

@@ -16,7 +16,7 @@ export interface EventTimes {
 }
 
 /** A crossing of the event force moves with the noise of its fit and with the zero of the plates. */
-export function crossingTime({ budget, signal, plates, zero }: JumpModel, crossing: Crossing): Quantity {
+function crossingTime({ budget, signal, plates, zero }: JumpModel, crossing: Crossing): Quantity {
   const perNewton = -signal.dt / crossing.slope
   return budget.linear(crossing.position * signal.dt, [
     [1, budget.input(0, crossing.positionU * signal.dt, zero.noiseDof)],

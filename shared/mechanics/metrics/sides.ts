@@ -138,7 +138,7 @@ function loadingRates(model: JumpModel, foot: Foot, landingEnd: number, into: Me
 }
 
 /** Every figure of one foot, over the phases of the total. */
-export function footFigures(model: JumpModel, foot: Foot): Measured {
+function footFigures(model: JumpModel, foot: Foot): Measured {
   const { signal, budget, weighing } = model
   const into: Measured = new Map()
   const windowS = (weighing.window.to - weighing.window.from) * signal.dt

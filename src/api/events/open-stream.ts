@@ -40,7 +40,7 @@ export function openStream(handlers: StreamHandlers): () => void {
 }
 
 /** null for what this client does not know: a newer server may say more. */
-export function readEvent(data: unknown): ClubEvent | null {
+function readEvent(data: unknown): ClubEvent | null {
   try {
     return ClubEvent.safeParse(JSON.parse(String(data))).data ?? null
   } catch {

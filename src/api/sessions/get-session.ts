@@ -27,7 +27,7 @@ export function useSession(sessionId: string) {
 }
 
 /** Whether files of the sheet are still to be read or trials to be analysed. */
-export function isWorking(sheet: SessionSheet): boolean {
+function isWorking(sheet: SessionSheet): boolean {
   return (
     sheet.uploads.some((upload) => upload.state === 'waiting') ||
     sheet.trials.some((trial) => trial.analysis === null)

@@ -56,7 +56,7 @@ export function ImpulseLedger({ ledger }: { ledger: Ledger }) {
 const closesAtRest = (ledger: Ledger) => ledger.entries.at(-1)?.phase === 'settling'
 
 /** Whether the books close, in a sentence. */
-export function closingSentence({ closing }: Ledger): string {
+function closingSentence({ closing }: Ledger): string {
   const U = formatUncertainty(closing.U, display)
   if (closing.closes === null || U === null) {
     return 'The closing balance cannot be tested: the recording has no quiet stance after the landing.'

@@ -63,7 +63,7 @@ function MoveFromPage({ trial, sessionId, onClose }: MoveFromPageProps) {
 }
 
 /** "trial 2 of Mara Ostrow", or the file's name while it is nobody's. */
-export function trialWords({ athlete, placeInSession, fileName }: Trial): string {
+function trialWords({ athlete, placeInSession, fileName }: Trial): string {
   if (athlete && placeInSession) return `trial ${placeInSession.n} of ${athlete.name}`
   return fileName ?? 'this trial'
 }
