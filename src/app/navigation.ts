@@ -1,4 +1,4 @@
-import type { Role } from '../../shared/contracts/roles.ts'
+import { roles, type Role } from '../../shared/contracts/roles.ts'
 import { paths } from '../lib/paths.ts'
 
 export interface NavItem {
@@ -19,6 +19,7 @@ const items: NavItem[] = [
   { path: paths.seats, words: 'Seats', roles: ['admin'] },
   { path: paths.settings, words: 'Settings', roles: ['physio', 'admin'] },
   { path: paths.me, words: 'My results', roles: ['athlete'] },
+  { path: paths.methods, words: 'Methods', roles },
 ]
 
 export function navItemsFor(held: readonly Role[]): NavItem[] {

@@ -5,6 +5,7 @@ import { Loading } from '../components/loading.tsx'
 import { paths } from '../lib/paths.ts'
 import { HomeRedirect } from './home-redirect.tsx'
 import { NotFoundPage } from './not-found-page.tsx'
+import { OpenFrame } from './open-frame.tsx'
 import { RequireRole } from './require-role.tsx'
 import { RouteError } from './route-error.tsx'
 import { Shell } from './shell.tsx'
@@ -31,6 +32,15 @@ export const routes: RouteObject[] = [
       page(paths.invite, async () => (await import('../pages/invite.tsx')).InvitePage),
       page(paths.reset, async () => (await import('../pages/reset.tsx')).ResetPage),
       page(paths.finishReset, async () => (await import('../pages/finish-reset.tsx')).FinishResetPage),
+    ],
+  },
+  {
+    element: <OpenFrame />,
+    hydrateFallbackElement: <Loading what="the page" />,
+    errorElement: <RouteError framed />,
+    children: [
+      page(paths.methods, async () => (await import('../pages/methods.tsx')).MethodsPage),
+      page(paths.method, async () => (await import('../pages/method-note.tsx')).MethodNotePage),
     ],
   },
   {

@@ -12,10 +12,10 @@ import { server } from '../../tests/setup/msw/server.ts'
 import { pageTitled, renderApp } from '../../tests/setup/render-app.tsx'
 
 const pagesOf: Record<Role, string[]> = {
-  coach: ['Sessions', 'Athletes', 'Squads'],
-  physio: ['Sessions', 'Athletes', 'Landing watch', 'Settings'],
-  admin: ['People', 'Squads', 'Seats', 'Settings'],
-  athlete: [],
+  coach: ['Sessions', 'Athletes', 'Squads', 'Methods'],
+  physio: ['Sessions', 'Athletes', 'Landing watch', 'Settings', 'Methods'],
+  admin: ['People', 'Squads', 'Seats', 'Settings', 'Methods'],
+  athlete: ['My results', 'Methods'],
 }
 
 describe('the shell', () => {
@@ -38,7 +38,7 @@ describe('the shell', () => {
       within(nav)
         .getAllByRole('link')
         .map((link) => link.textContent),
-    ).toEqual(['Sessions', 'Athletes', 'People', 'Squads', 'Seats', 'Settings'])
+    ).toEqual(['Sessions', 'Athletes', 'People', 'Squads', 'Seats', 'Settings', 'Methods'])
   })
 
   test('says that a demo club is invented, and says nothing of the kind of a real one', async () => {

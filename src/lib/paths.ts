@@ -20,6 +20,8 @@ export const paths = {
   squads: '/club/squads',
   seats: '/club/seats',
   settings: '/club/settings',
+  methods: '/methods',
+  method: '/methods/:key',
 } as const
 
 /** Addresses of pages about one thing. */
@@ -27,6 +29,7 @@ export const pathOf = {
   session: (sessionId: string) => generatePath(paths.session, { sessionId }),
   trial: (trialId: string) => generatePath(paths.trial, { trialId }),
   athlete: (athleteId: string) => generatePath(paths.athlete, { athleteId }),
+  method: (key: string) => generatePath(paths.method, { key }),
 }
 
 /**

@@ -171,9 +171,10 @@ describe('a trial, for a coach', () => {
     await openTrial(aTrial({ ...jump, analysis }))
     const measured = screen.getByRole('region', { name: /^Measured/ })
     expect(within(measured).getByText('Stepped off.')).toBeVisible()
-    expect(within(measured).getByText('Landing peak force per body weight').nextSibling).toHaveTextContent(
-      /^withheld:/,
-    )
+    const struck = within(measured).getByRole('link', { name: 'Landing peak force per body weight' })
+    expect(struck).toHaveAttribute('href', '/methods/landingPeakForcePerBodyWeight')
+    expect(struck.closest('dt')!.nextSibling).toHaveTextContent(/^withheld:/)
+    expect(screen.getByRole('link', { name: 'Stepped off.' })).toHaveAttribute('href', `/methods/${fail.key}`)
     expect(measured).toHaveTextContent('1 figure could not be computed')
     expect(measured).toHaveTextContent('Time to stabilisation: The athlete never stood still.')
   })

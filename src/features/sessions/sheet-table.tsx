@@ -1,4 +1,5 @@
 import type { MeanFigure } from '../../../shared/contracts/results.ts'
+import { MethodLink } from '../../components/method-link.tsx'
 import { ScrollRegion } from '../../components/scroll-region.tsx'
 import { FigureText } from '../results/figure-text.tsx'
 import { meanHead, metricHead } from '../results/metric-words.ts'
@@ -30,13 +31,13 @@ export function SheetTable({ caption, rows, columns, acts }: Props) {
           <tr>
             <th scope="col">Athlete</th>
             <th scope="col" className="figure">
-              {metricHead(massMetric)}
+              <MethodLink noteKey={massMetric}>{metricHead(massMetric)}</MethodLink>
             </th>
             <th scope="col" className="figure">
-              {meanHead(cellMetric)}
+              <MethodLink noteKey={cellMetric}>{meanHead(cellMetric)}</MethodLink>
             </th>
             <th scope="col" className="figure">
-              {meanHead(landingMetric)}
+              <MethodLink noteKey={landingMetric}>{meanHead(landingMetric)}</MethodLink>
             </th>
             {numbers.map((n) => (
               <th key={n} scope="col">

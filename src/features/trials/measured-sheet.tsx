@@ -3,6 +3,7 @@ import type { Analysis } from '../../../shared/contracts/trials.ts'
 import { catalogue, isMetricKey } from '../../../shared/mechanics/catalogue.ts'
 import type { MetricGroup } from '../../../shared/mechanics/types.ts'
 import { CautionLine } from '../../components/caution-line.tsx'
+import { MethodLink } from '../../components/method-link.tsx'
 import { Sheet } from '../../components/sheet.tsx'
 import { FigureText } from '../results/figure-text.tsx'
 import { measuredGroups, type MeasuredFigure } from './measured-groups.ts'
@@ -40,7 +41,9 @@ export function MeasuredSheet({ analysis }: { analysis: Analysis }) {
 function MeasuredRow({ metric, figure, withheldBecause }: MeasuredFigure) {
   return (
     <div className="grid break-inside-avoid grid-cols-[1fr_auto] items-baseline gap-x-4 border-b border-rule-2 py-1">
-      <dt className={withheldBecause ? 'text-ink-2' : undefined}>{metric.name}</dt>
+      <dt className={withheldBecause ? 'text-ink-2' : undefined}>
+        <MethodLink noteKey={metric.key}>{metric.name}</MethodLink>
+      </dt>
       <dd>
         {withheldBecause ? (
           <s className="text-ink-2">

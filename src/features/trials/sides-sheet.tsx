@@ -1,6 +1,7 @@
 import type { Analysis } from '../../../shared/contracts/trials.ts'
 import { catalogue, metricKeys, type MetricKey } from '../../../shared/mechanics/catalogue.ts'
 import { CautionLine } from '../../components/caution-line.tsx'
+import { MethodLink } from '../../components/method-link.tsx'
 import { ScrollRegion } from '../../components/scroll-region.tsx'
 import { Sheet } from '../../components/sheet.tsx'
 import { formatUncertainty } from '../../lib/format-figure.ts'
@@ -57,7 +58,8 @@ function SideRow({ metricKey, sides, struck }: { metricKey: MetricKey; sides: Si
   return (
     <tr className={struck ? 'text-ink-2 line-through' : undefined}>
       <th scope="row">
-        {name} {struck && <span className="sr-only">(withheld by a failed check)</span>}
+        <MethodLink noteKey={metricKey}>{name}</MethodLink>{' '}
+        {struck && <span className="sr-only">(withheld by a failed check)</span>}
       </th>
       <td className="figure">
         <FigureText metricKey={metricKey} figure={sides.left[metricKey]!} unit />

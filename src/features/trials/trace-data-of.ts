@@ -4,10 +4,10 @@ import type { EventName } from '../../../shared/mechanics/types.ts'
 import type { Samples } from '../../api/trials/read-samples.ts'
 import type { TraceChannel, TraceData, TraceEvent } from '../../charts/trial-trace/trace-data.ts'
 import { eventWords } from './event-words.ts'
-import { momentumOf, zeroedSignal } from './zeroed-signal.ts'
+import { momentumOf, zeroedSignal, type Traced } from './zeroed-signal.ts'
 
 /** What the trace of a trial is drawn from; null where the recording holds no force to draw. */
-export function traceDataOf(trial: Trial, samples: Samples): TraceData | null {
+export function traceDataOf(trial: Traced & Pick<Trial, 'test'>, samples: Samples): TraceData | null {
   const signal = zeroedSignal(trial, samples)
   if (!signal) return null
   const { analysis } = trial
@@ -29,7 +29,7 @@ function feetOf(signal: Signal): TraceChannel[] {
   )
 }
 
-function weightOf({ analysis, test }: Trial): TraceData['weight'] {
+function weightOf({ analysis, test }: Pick<Trial, 'analysis' | 'test'>): TraceData['weight'] {
   const weight = analysis?.metrics.systemWeight
   if (!weight) return null
   return { valueN: weight.value, label: test.externalLoadKg > 0 ? 'weight, loaded' : 'body weight' }

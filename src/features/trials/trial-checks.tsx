@@ -1,4 +1,5 @@
 import type { Analysis } from '../../../shared/contracts/trials.ts'
+import { MethodLink } from '../../components/method-link.tsx'
 import { Sheet } from '../../components/sheet.tsx'
 import { Tag } from '../../components/tag.tsx'
 import { groupWords } from './event-words.ts'
@@ -33,7 +34,9 @@ export function TrialChecks({ checks, notes }: Pick<Analysis, 'checks' | 'notes'
                 key={check.key}
                 className="flex justify-between gap-4 border-b border-rule-2 py-1 text-small"
               >
-                <span>{check.sentence}</span>
+                <span>
+                  <MethodLink noteKey={check.key}>{check.sentence}</MethodLink>
+                </span>
                 <Measured check={check} />
               </li>
             ))}
@@ -60,7 +63,7 @@ function CheckToLookAt({ check }: { check: Check }) {
           <Tag tone={check.verdict === 'fail' ? 'stop' : 'caution'}>
             {check.verdict === 'fail' ? 'failed' : 'look'}
           </Tag>{' '}
-          {check.sentence}
+          <MethodLink noteKey={check.key}>{check.sentence}</MethodLink>
         </span>
         <Measured check={check} />
       </div>

@@ -5,11 +5,14 @@ import { conditionRecording, type Signal } from '../../../shared/mechanics/signa
 import { integrate } from '../../../shared/mechanics/signal/motion.ts'
 import type { Samples } from '../../api/trials/read-samples.ts'
 
+/** What of a trial its trace is drawn from. */
+export type Traced = Pick<Trial, 'analysis'> & { recording: Pick<Trial['recording'], 'sampleRateHz'> }
+
 /**
  * The forces as the engine takes them: turned the right way up and with the zero of the flight taken off each
  * plate. null where the recording holds no force to draw.
  */
-export function zeroedSignal(trial: Pick<Trial, 'recording' | 'analysis'>, samples: Samples): Signal | null {
+export function zeroedSignal(trial: Traced, samples: Samples): Signal | null {
   const recording = {
     sampleRateHz: trial.recording.sampleRateHz,
     channels: samples,

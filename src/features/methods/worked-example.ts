@@ -1,0 +1,35 @@
+import { analyse } from '../../../shared/mechanics/analyse.ts'
+import { withheldMetrics } from '../../../shared/mechanics/withheld.ts'
+import { readRecording } from '../../../shared/recordings/read-recording.ts'
+import { standardGravity } from '../../../shared/units/gravity.ts'
+import type { Trial } from '../../../shared/contracts/trials.ts'
+import type { Samples } from '../../api/trials/read-samples.ts'
+
+/** Of each plate, expanded (k = 2): what the product takes where no certificate says otherwise. */
+const calibrationU = { left: 0.005, right: 0.005 }
+
+export interface WorkedExample {
+  analysis: NonNullable<Trial['analysis']>
+  test: Trial['test']
+  recording: { sampleRateHz: number }
+  samples: Samples
+}
+
+/** A file's bytes through reader and engine, as the server does it. Throws where the file holds no jump. */
+export function workOut(bytes: Uint8Array, fileName: string): WorkedExample {
+  const read = readRecording(bytes, fileName)
+  if (!read.ok) throw new Error(read.error.sentence)
+  const { recording } = read
+  const { trials, engineVersion } = analyse(recording, { gravity: standardGravity, calibrationU })
+  const [trial] = trials
+  if (!trial) throw new Error('The engine found no jump in the sample recording.')
+  const { test, events, metrics, sides, ledger, checks, missing, notes } = trial
+  const analysis = { id: fileName, engineVersion, gravity: standardGravity, events, metrics, sides, ledger }
+  const withheld = withheldMetrics(trial)
+  return {
+    analysis: { ...analysis, checks, missing, notes, withheld },
+    test,
+    recording: { sampleRateHz: recording.sampleRateHz },
+    samples: recording.channels,
+  }
+}
