@@ -84,6 +84,27 @@ describe('squads and athletes', () => {
     expect(await coach.refusal(changeAthlete, stale)).toEqual([409, 'stale-version'])
   })
 
+  it('let a squad and an athlete of it be changed at the same moment: one is done, the other told', async () => {
+    const squad = await coach.call(createSquad, { body: { name: 'Crossing', athleteIds: [] } })
+    const athlete = await coach.call(createAthlete, { body: athleteForm('Crossing Example') })
+    for (let round = 0; round < 8; round++) {
+      const squadNow = (await coach.call(listSquads)).squads.find(({ id }) => id === squad.id)
+      const athleteNow = (await coach.call(listAthletes)).athletes.find(({ id }) => id === athlete.id)
+      const isIn = squadNow?.athleteIds.length === 1
+      const both = await Promise.all([
+        coach.send(changeSquad, {
+          params: { squadId: squad.id },
+          body: { version: squadNow?.version, athleteIds: isIn ? [] : [athlete.id] },
+        }),
+        coach.send(changeAthlete, {
+          params: { athleteId: athlete.id },
+          body: { version: athleteNow?.version, squadIds: isIn ? [] : [squad.id] },
+        }),
+      ])
+      expect(both.map(({ status }) => status).sort()).toEqual([200, 409])
+    }
+  })
+
   it('answers 404 for an athlete that the club does not have', async () => {
     const nobody = '00000000-0000-4000-8000-000000000000'
     expect(await coach.refusal(createSquad, { body: { name: 'Ghosts', athleteIds: [nobody] } })).toEqual([

@@ -8,7 +8,7 @@ import { notFound, staleVersion } from '../../http/errors.ts'
 import { record } from '../audit/audit.service.ts'
 import { notify } from '../events/notify.ts'
 import { pointsOfAthlete } from '../results/results.service.ts'
-import { setSquadsOfAthlete } from '../squads/squads.service.ts'
+import { lockSquadLists, setSquadsOfAthlete } from '../squads/squads.service.ts'
 import { findAthlete, insertAthlete, selectAthletes, updateAthlete } from './athletes.queries.ts'
 
 export async function listClubAthletes(
@@ -32,6 +32,7 @@ export async function addAthlete(
   { squadIds, ...form }: BodyOf<typeof createAthlete>,
 ): Promise<Athlete> {
   return db.inClub(ctx, async (tx) => {
+    await lockSquadLists(tx, ctx.clubId)
     const id = await insertAthlete(tx, ctx.clubId, { ...form, nameKey: foldName(form.name) })
     await setSquadsOfAthlete(tx, ctx.clubId, id, squadIds)
     return finish(tx, ctx, 'athlete.create', id)
@@ -45,6 +46,7 @@ export async function editAthlete(
   { version, squadIds, archived, ...form }: BodyOf<typeof changeAthlete>,
 ): Promise<Athlete> {
   return db.inClub(ctx, async (tx) => {
+    await lockSquadLists(tx, ctx.clubId)
     const archivedAt = archived === undefined ? undefined : archived ? clock() : null
     const nameKey = form.name === undefined ? undefined : foldName(form.name)
     if (!(await updateAthlete(tx, ctx.clubId, id, version, { ...form, nameKey, archivedAt }))) {

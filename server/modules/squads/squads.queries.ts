@@ -54,6 +54,14 @@ export async function updateSquad(
   return (await named({ squads_name: nameTaken }, update)).length > 0
 }
 
+/**
+ * Makes other changes of who is in which squad of the club wait until the transaction ends. Called first of all:
+ * a squad's change goes on to athletes' rows and an athlete's to squads', so two at once would lock each other up.
+ */
+export async function lockSquadLists(tx: Tx, clubId: string): Promise<void> {
+  await tx.execute(sql`select pg_advisory_xact_lock(hashtextextended(${`squads/${clubId}`}, 0))`)
+}
+
 export interface Membership {
   squadId: string
   athleteId: string

@@ -10,6 +10,7 @@ import {
   countUpVersions,
   findSquad,
   insertSquad,
+  lockSquadLists,
   replaceMembers,
   selectSquads,
   updateSquad,
@@ -25,6 +26,7 @@ export async function addSquad(
   { name, athleteIds }: BodyOf<typeof createSquad>,
 ): Promise<Squad> {
   return db.inClub(ctx, async (tx) => {
+    await lockSquadLists(tx, ctx.clubId)
     const id = await insertSquad(tx, ctx.clubId, name)
     await setAthletes(tx, ctx.clubId, id, athleteIds)
     return finish(tx, ctx, 'squad.create', id)
@@ -38,6 +40,7 @@ export async function editSquad(
   { version, name, athleteIds, archived }: BodyOf<typeof changeSquad>,
 ): Promise<Squad> {
   return db.inClub(ctx, async (tx) => {
+    await lockSquadLists(tx, ctx.clubId)
     const archivedAt = archived === undefined ? undefined : archived ? clock() : null
     if (!(await updateSquad(tx, ctx.clubId, id, version, { name, archivedAt }))) {
       const present = await findSquad(tx, ctx.clubId, id)
@@ -47,6 +50,9 @@ export async function editSquad(
     return finish(tx, ctx, 'squad.change', id)
   })
 }
+
+/** For transactions that go on to `setSquadsOfAthlete`. */
+export { lockSquadLists }
 
 /** Makes `squadIds` the squads of an athlete; the squads' own versions count up. */
 export async function setSquadsOfAthlete(
