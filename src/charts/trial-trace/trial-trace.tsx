@@ -87,7 +87,7 @@ function Readout({ data, timeS }: { data: TraceData; timeS: number | null }) {
           ))}
         </>
       ) : (
-        <span>
+        <span className="no-print">
           Point at the trace, or focus it and use the arrow keys, to read it. Page keys go from event to
           event.
         </span>
