@@ -124,6 +124,7 @@ describe('the Session sheet', () => {
     expect(within(dialog).getByRole('button', { name: 'Moved while being weighed' })).toHaveFocus()
     await user.click(within(dialog).getByRole('button', { name: 'Set aside' }))
     expect(within(dialog).getByLabelText('Reason')).toHaveAccessibleDescription('Say why')
+    expect(within(dialog).getByLabelText('Reason')).toHaveFocus()
     await user.click(within(dialog).getByRole('button', { name: 'Stepped off on landing' }))
     await user.click(within(dialog).getByRole('button', { name: 'Set aside' }))
     expect(

@@ -21,9 +21,12 @@ export function SetAsideDialog({ trial, onClose }: { trial: ActedTrial; onClose:
   const [reason, setReason] = useState('')
   const [refused, setRefused] = useState<string | undefined>()
   const { setAside, busy, error } = useSetAside(trial, onClose)
-  const submit = () => {
+  const submit = (form: HTMLFormElement) => {
     const parsed = changeTrial.body.shape.setAsideReason.safeParse(reason)
-    if (!parsed.success) return setRefused(parsed.error.issues[0]?.message)
+    if (!parsed.success) {
+      form.querySelector('input')?.focus()
+      return setRefused(parsed.error.issues[0]?.message)
+    }
     setAside(parsed.data ?? '')
   }
   return (
@@ -33,7 +36,7 @@ export function SetAsideDialog({ trial, onClose }: { trial: ActedTrial; onClose:
         className="flex flex-col gap-4"
         onSubmit={(event) => {
           event.preventDefault()
-          submit()
+          submit(event.currentTarget)
         }}
       >
         <p>
