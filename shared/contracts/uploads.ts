@@ -52,7 +52,13 @@ export const sendChunk = endpoint({
   method: 'PUT',
   path: '/api/uploads/:uploadId/chunks/:n',
   access: measuringRoles,
-  params: UploadParams.extend({ n: z.coerce.number().int().min(0).max(63) }),
+  params: UploadParams.extend({
+    n: z.coerce
+      .number()
+      .int()
+      .min(0)
+      .max(limits.fileBytes / limits.chunkBytes - 1),
+  }),
   body: z.unknown(),
   response: z.strictObject({ n: z.number().int() }),
   repeat: 'natural',
