@@ -19,6 +19,7 @@ import { Formula } from './formula.tsx'
 import { checksOf } from './note-checks.ts'
 import { metricNotes } from './notes/metric-notes.ts'
 import { SettingsTable } from './settings-table.tsx'
+import { Symbols } from './symbols.tsx'
 import { useWorkedExample } from './use-worked-example.ts'
 
 /** The Method note of a metric: what it is, how it is computed, what it rests on, and an example computed here. */
@@ -42,7 +43,7 @@ export function MetricNoteView({ metricKey }: { metricKey: MetricKey }) {
           <Sheet title="Definition">
             <p className="max-w-prose">{note.definition}</p>
             <Formula tex={note.formula} />
-            <p className="max-w-prose text-small text-ink-2">{note.symbols}.</p>
+            <Symbols text={note.symbols} />
           </Sheet>
           <Sheet title="Where it is read">
             <QueryState query={example} what="the sample recording">
@@ -51,6 +52,7 @@ export function MetricNoteView({ metricKey }: { metricKey: MetricKey }) {
               )}
             </QueryState>
           </Sheet>
+          <TakenAwayBy metricKey={metricKey} />
         </div>
         <div className="flex min-w-0 flex-col gap-5">
           <Sheet title="Worked example">
@@ -75,7 +77,6 @@ export function MetricNoteView({ metricKey }: { metricKey: MetricKey }) {
             {note.withoutU !== undefined && <p className="pt-1">Uncertainty: {note.withoutU}</p>}
             {touchesHealth && <CautionLine />}
           </Sheet>
-          <TakenAwayBy metricKey={metricKey} />
         </div>
       </div>
       <div className="pt-5">
@@ -120,9 +121,9 @@ const feetWords = { also: 'both together, and each', only: 'each; needs two plat
 function TakenAwayBy({ metricKey }: { metricKey: MetricKey }) {
   return (
     <Sheet title="Checks that can take it away">
-      <ul>
+      <ul className="gap-x-8 sm:columns-2">
         {checksOf(metricKey).map((check) => (
-          <li key={check} className="border-b border-rule-2 py-1 last:border-b-0">
+          <li key={check} className="break-inside-avoid border-b border-rule-2 py-1">
             <Link to={pathOf.method(check)}>{checkDefinitions[check].name}</Link>
           </li>
         ))}
