@@ -1,7 +1,7 @@
 import { ensureClient } from './client-build.mjs'
 import { SetUpProblem, step } from './problem.mjs'
 import { ensurePrograms } from './programs.mjs'
-import { onStop } from './stopping.mjs'
+import { isStopping, onStop } from './stopping.mjs'
 import { startTestCluster } from './test-cluster.mjs'
 import { describeResult, reportOf } from './test-report.mjs'
 import { runRunner, runners } from './test-runners.mjs'
@@ -39,6 +39,7 @@ export async function runTests(names) {
   async function work() {
     for (let runner = waiting.shift(); runner; runner = waiting.shift()) {
       const result = await runRunner(runner, env)
+      if (isStopping()) return
       results.push(result)
       if (result.failed > 0) console.log(result.output)
       step(describeResult(result))
