@@ -2,7 +2,7 @@ import { existsSync, readFileSync, writeFileSync } from 'node:fs'
 import { join } from 'node:path'
 import { localFolder } from './paths.mjs'
 import { pause } from './pause.mjs'
-import { beganAt } from './process-table.mjs'
+import { beganAt, killGroup } from './process-table.mjs'
 
 /**
  * Process groups of the product by name, with the moment each began: a number alone may have been given to
@@ -33,19 +33,6 @@ export async function endLeftovers() {
   for (const { pid } of alive) killGroup(pid, 'SIGKILL')
   while (alive.some(({ pid, began }) => beganAt(pid) === began)) await pause()
   write({})
-}
-
-/**
- * Signals a whole process group; one that is gone already is no error.
- * @param {number} pid of its leader
- * @param {NodeJS.Signals} signal
- */
-export function killGroup(pid, signal) {
-  try {
-    process.kill(-pid, signal)
-  } catch {
-    // It ended by itself in the meantime.
-  }
 }
 
 /** @returns {Remembered} */

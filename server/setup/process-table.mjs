@@ -27,3 +27,16 @@ export function beganAt(pid) {
 export function parentOf(pid) {
   return Number(fieldsOf(pid)?.[1])
 }
+
+/**
+ * Signals a whole process group; one that is gone already is no error.
+ * @param {number} pid of its leader
+ * @param {NodeJS.Signals} signal
+ */
+export function killGroup(pid, signal) {
+  try {
+    process.kill(-pid, signal)
+  } catch {
+    // It ended by itself in the meantime.
+  }
+}

@@ -1,10 +1,11 @@
 import { spawn } from 'node:child_process'
 import { closeSync, openSync } from 'node:fs'
 import { join } from 'node:path'
-import { forget, killGroup, remember } from './leftovers.mjs'
+import { forget, remember } from './leftovers.mjs'
 import { endsWithStarter } from './parent-death.mjs'
 import { checkout, localFolder } from './paths.mjs'
 import { step } from './problem.mjs'
+import { killGroup } from './process-table.mjs'
 
 /**
  * One process of the product.

@@ -23,7 +23,7 @@ export function stopAll() {
 }
 
 async function stopEach() {
-  endRunning()
+  await endRunning()
   for (const stop of stops.reverse()) await stop().catch((error) => console.error(error))
 }
 
