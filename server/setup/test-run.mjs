@@ -32,6 +32,7 @@ export async function runTests(names) {
   const waiting = [...chosen]
   const began = Date.now()
   await Promise.all(Array.from({ length: atOnce }, work))
+  if (isStopping()) return false
   const { text, ok } = reportOf(results, (Date.now() - began) / 1000)
   console.log(text)
   return ok
