@@ -40,7 +40,7 @@ describe('the lock of a folder', () => {
       import { holdLock } from '${new URL('lock.mjs', import.meta.url).href}'
       await holdLock(${JSON.stringify(folder)}, 'start')
       console.log('held')
-      setInterval(() => undefined, 1000)`
+      process.stdin.on('end', () => process.exit()).resume() // ends with the test, even a killed one`
     const other = spawn(process.execPath, ['--input-type=module', '-e', program])
     onTestFinished(() => void other.kill('SIGKILL'))
     await once(other.stdout, 'data')

@@ -78,7 +78,7 @@ describe('the private database', () => {
       import { startCluster } from '${new URL('../../server/setup/cluster.mjs', import.meta.url).href}'
       await startCluster(${JSON.stringify(cluster)})
       console.log('started')
-      setInterval(() => undefined, 1000)`
+      process.stdin.on('end', () => process.exit()).resume() // ends with the test, even a killed one`
     const starter = spawn(process.execPath, ['--input-type=module', '-e', program])
     await once(starter.stdout, 'data')
     starter.kill('SIGKILL')
