@@ -2,16 +2,18 @@ import { forceAt } from './motion.ts'
 import type { RunningSums } from './running-mean.ts'
 
 /**
- * Integral of force between two positions in samples, N·s: trapezoid rule with partial first and last intervals.
- * `sums` are the running sums of the same force.
+ * Integral of force from one position in samples to another, N·s: trapezoid rule with partial first and last
+ * intervals; negative backwards. `sums` are the running sums of the same force.
  */
 export function grossImpulse(
   force: Float64Array,
-  { sums, reference }: RunningSums,
+  running: RunningSums,
   from: number,
   to: number,
   dt: number,
 ): number {
+  if (to < from) return -grossImpulse(force, running, to, from, dt)
+  const { sums, reference } = running
   const a = Math.ceil(from)
   const b = Math.floor(to)
   const start = forceAt(force, from)
