@@ -3,7 +3,6 @@ import { findUnloaded } from './events/unloaded.ts'
 import { analyseCmj } from './protocols/cmj.ts'
 import { defaultSettings, type Settings } from './settings.ts'
 import { conditionRecording } from './signal/condition.ts'
-import { runningSums } from './signal/running-mean.ts'
 import { engineVersion } from './version.ts'
 
 const proposed: Test = { protocol: 'cmj', side: 'both', externalLoadKg: 0, boxHeightM: null, arms: 'hips' }
@@ -31,8 +30,7 @@ export function analyse(
   const conditioned = conditionRecording(recording, settings)
   if ('problem' in conditioned) return none([...notes, conditioned.problem])
   const { signal } = conditioned
-  const sums = runningSums(signal.total, 'sums of the total')
-  const unloaded = findUnloaded(signal.total, sums, signal.dt, settings)
+  const unloaded = findUnloaded(signal.total, signal.sums, signal.dt, settings)
   if (!unloaded)
     return none([
       ...notes,
@@ -47,7 +45,7 @@ export function analyse(
       code: 'test-proposed',
       sentence: 'Taken for a countermovement jump, because no test was named.',
     })
-  const outcome = analyseCmj(recording, signal, sums, unloaded, test, options, settings)
+  const outcome = analyseCmj(recording, signal, unloaded, test, options, settings)
   if (!('test' in outcome)) return none([...notes, outcome])
   return { engineVersion, trials: [outcome], notes }
 }

@@ -1,6 +1,6 @@
 import type { Recording, TrialCheck } from '../types.ts'
 import type { Unloaded } from '../events/unloaded.ts'
-import type { Zero } from '../events/zero.ts'
+import type { Zero, ZeroedSignal } from '../events/zero.ts'
 import type { Settings } from '../settings.ts'
 import type { Signal } from '../signal/condition.ts'
 import { check, rounded, verdictOn } from './check.ts'
@@ -69,7 +69,7 @@ export function taredWithAthlete({ level, stanceLevel }: Unloaded): boolean {
   return Math.abs(stanceLevel) < 0.15 * (stanceLevel - level)
 }
 
-function zeroOffset(signal: Signal, unloaded: Unloaded, settings: Settings): TrialCheck {
+function zeroOffset(signal: ZeroedSignal, unloaded: Unloaded, settings: Settings): TrialCheck {
   const tared = taredWithAthlete(unloaded)
   const largest = signal.plates.reduce((most, { offsetN }) => Math.max(most, Math.abs(offsetN)), 0)
   const verdict = tared
@@ -119,7 +119,7 @@ function polarity(signal: Signal): TrialCheck {
 /** Checks of the recording as such. */
 export function recordingChecks(
   recording: Recording,
-  signal: Signal,
+  signal: ZeroedSignal,
   unloaded: Unloaded,
   zero: Zero,
   settings: Settings,

@@ -1,8 +1,6 @@
 import type { AnalyseOptions, EventName } from '../types.ts'
 import type { Settings } from '../settings.ts'
-import type { Signal } from '../signal/condition.ts'
 import { instantAt, integrate, type Motion } from '../signal/motion.ts'
-import type { RunningSums } from '../signal/running-mean.ts'
 import { findPeak, type Peak } from '../signal/peak.ts'
 import { fitFlank, type Crossing } from './flank.ts'
 import { findOnset, type Onset } from './onset.ts'
@@ -16,7 +14,7 @@ import {
 } from './turning-points.ts'
 import type { Stretch } from './unloaded.ts'
 import { weigh, type Weighing } from './weighing.ts'
-import type { Zero } from './zero.ts'
+import type { Zero, ZeroedSignal } from './zero.ts'
 
 /** The events of a countermovement jump and its landing, in samples; `null` where the record does not hold one. */
 export interface JumpEvents {
@@ -39,8 +37,7 @@ export interface LocatedJump {
 
 /** Where the jump is to be looked for. */
 export interface JumpSearch {
-  signal: Signal
-  sums: RunningSums
+  signal: ZeroedSignal
   zero: Zero
   /** First sample on the plates before the jump. */
   start: number
@@ -80,7 +77,8 @@ function placeCrossing(search: JumpSearch, name: 'takeoff' | 'touchdown'): Cross
 
 /** Weighs and finds the onset; weighs again before it where the first weighing ran into the movement. */
 function weighBeforeOnset(search: JumpSearch, takeoff: number): { weighing: Weighing; onset: Onset } | null {
-  const { signal, sums, zero, start, gravity, settings } = search
+  const { signal, zero, start, gravity, settings } = search
+  const { sums } = signal
   const attempt = (to: number) => {
     const weighing = weigh(signal.total, sums, { from: start, to }, gravity, zero.total, signal.dt, settings)
     if (!weighing || !(weighing.systemWeight > settings.smallestLoadN)) return null
@@ -129,11 +127,12 @@ function placePushEvents(search: JumpSearch, motion: Motion, onset: number, take
 }
 
 function placeLandingEvents(search: JumpSearch, motion: Motion, touchdown: Crossing | null) {
-  const { signal, sums, zero, settings } = search
+  const { signal, zero, settings } = search
   if (!touchdown) return { landingPeak: null, landingZeroVelocity: null, still: null }
   const last = signal.length - 1
   const still =
-    movedTo(search, 'still') ?? findStill(sums, motion.systemWeight, touchdown.position, signal.dt, settings)
+    movedTo(search, 'still') ??
+    findStill(signal.sums, motion.systemWeight, touchdown.position, signal.dt, settings)
   const stopsBefore = Math.floor(still ?? last)
   const landingZeroVelocity =
     movedTo(search, 'landingZeroVelocity') ??

@@ -1,13 +1,12 @@
 import type { AnalyseOptions, ForceChannel, Test } from '../types.ts'
 import type { JumpEvents, LocatedJump } from '../events/jump-events.ts'
 import type { Weighing } from '../events/weighing.ts'
-import type { Zero } from '../events/zero.ts'
+import type { Zero, ZeroedSignal } from '../events/zero.ts'
 import type { Settings } from '../settings.ts'
-import type { Signal } from '../signal/condition.ts'
 import { grossImpulse } from '../signal/gross-impulse.ts'
 import { forceAt, instantAt, type Instant, type Motion } from '../signal/motion.ts'
 import { integratedNoise } from '../signal/noise.ts'
-import { runningSums, type RunningSums } from '../signal/running-mean.ts'
+import { meanOver, type RunningSums } from '../signal/running-mean.ts'
 import { Budget, type Quantity } from '../uncertainty/budget.ts'
 
 /** One plate's inputs to the budget. */
@@ -25,7 +24,7 @@ export interface PlateInputs {
 
 /** A trial as the metrics see it: events, motion, and the quantities that everything else is made of. */
 export interface JumpModel {
-  signal: Signal
+  signal: ZeroedSignal
   settings: Settings
   test: Test
   zero: Zero
@@ -59,25 +58,22 @@ export function isSide(channel: ForceChannel): channel is 'left' | 'right' {
 }
 
 function plateInputs(
-  signal: Signal,
-  sums: RunningSums,
+  signal: ZeroedSignal,
   weighing: Weighing,
   zero: Zero,
   options: AnalyseOptions,
   budget: Budget,
 ): PlateInputs[] {
-  const alone = signal.plates.length === 1
-  return signal.plates.map(({ channel, force }, i) => {
-    const plateSums = alone ? sums : runningSums(force, `sums of ${channel}`)
+  return signal.plates.map(({ channel, force, sums }, i) => {
     const calibration = options.calibrationU[channel] ?? 0
     const { from, to } = weighing.window
     return {
       channel,
       force,
-      sums: plateSums,
+      sums,
       offset: budget.input(0, zero.offsetU[i], zero.offsetDof[i]),
       gain: budget.input(0, calibration / 2, Infinity, true),
-      stanceForce: (plateSums.sums[to] - plateSums.sums[from]) / (to - from) + plateSums.reference,
+      stanceForce: meanOver(sums, from, to),
     }
   })
 }
@@ -98,8 +94,7 @@ function boundariesOf(events: JumpEvents): number[] {
 
 /** Sets up the uncertainty budget of a located jump with its independent inputs. */
 export function buildModel(
-  signal: Signal,
-  sums: RunningSums,
+  signal: ZeroedSignal,
   zero: Zero,
   { weighing, motion, events }: LocatedJump,
   test: Test,
@@ -108,7 +103,7 @@ export function buildModel(
 ): JumpModel {
   const budget = new Budget(options.uncertainty !== false, settings.coverage)
   const { dt } = signal
-  const plates = plateInputs(signal, sums, weighing, zero, options, budget)
+  const plates = plateInputs(signal, weighing, zero, options, budget)
   const gravity = budget.input(
     options.gravity,
     options.gravityUncertainty ?? settings.gravityU,
@@ -146,7 +141,7 @@ export function buildModel(
     weighing,
     motion,
     events,
-    sums,
+    sums: signal.sums,
     budget,
     plates,
     gravity,

@@ -6,7 +6,7 @@ import { recordingChecks, taredWithAthlete } from '../checks/recording-checks.ts
 import { weighingChecks } from '../checks/weighing-checks.ts'
 import { locateJump, type JumpEvents } from '../events/jump-events.ts'
 import type { Stretch, Unloaded } from '../events/unloaded.ts'
-import { zeroPlates } from '../events/zero.ts'
+import { zeroPlates, type ZeroedSignal } from '../events/zero.ts'
 import { ledgerOf } from '../ledger.ts'
 import { eventTimes } from '../metrics/event-times.ts'
 import { impulseFigures } from '../metrics/impulse.ts'
@@ -20,7 +20,6 @@ import { findFeet, lagFigures, sidesOf, type Foot } from '../metrics/sides.ts'
 import { restToRestFigures, weighingFigures } from '../metrics/weighing.ts'
 import type { Settings } from '../settings.ts'
 import type { Signal } from '../signal/condition.ts'
-import type { RunningSums } from '../signal/running-mean.ts'
 
 /** The flight to analyse: the first one, or a takeoff after which the athlete did not come back in time. */
 function chooseFlight(unloaded: Unloaded): { flight: Stretch; landed: boolean } | null {
@@ -35,12 +34,12 @@ function startOfStance(unloaded: Unloaded, flight: Stretch, dt: number): number 
   return before.length === 0 ? 0 : (before.at(-1) as Stretch).to + Math.round(0.1 / dt)
 }
 
-function eventTime(position: number | null | undefined, signal: Signal): EventTime | null {
+function eventTime(position: number | null | undefined, signal: ZeroedSignal): EventTime | null {
   if (position === null || position === undefined) return null
   return { timeS: position * signal.dt, sample: Math.round(position) }
 }
 
-function eventsOut(events: JumpEvents, signal: Signal): TrialAnalysis['events'] {
+function eventsOut(events: JumpEvents, signal: ZeroedSignal): TrialAnalysis['events'] {
   const positions = {
     onset: events.onset.position,
     minimumForce: events.minimumForce?.position,
@@ -98,8 +97,7 @@ export type NoTrial = Note
 /** Analyses a recording as one countermovement jump with its landing. */
 export function analyseCmj(
   recording: Recording,
-  signal: Signal,
-  sums: RunningSums,
+  recorded: Signal,
   unloaded: Unloaded,
   test: Test,
   options: AnalyseOptions,
@@ -110,11 +108,9 @@ export function analyseCmj(
     return { code: 'no-trial-found', sentence: 'No takeoff was found: the plates were loaded all along.' }
   const { flight, landed } = chosen
   const tared = taredWithAthlete(unloaded)
-  const zero = zeroPlates(signal, flight, settings)
-  const zeroedSums = { ...sums, reference: signal.total[0] }
+  const { zero, signal } = zeroPlates(recorded, flight, settings)
   const located = locateJump({
     signal,
-    sums: zeroedSums,
     zero,
     start: startOfStance(unloaded, flight, signal.dt),
     flight,
@@ -128,7 +124,7 @@ export function analyseCmj(
       code: 'no-trial-found',
       sentence: 'No quiet stance and takeoff were found. Stand still, jump, and record all of it.',
     }
-  const model = buildModel(signal, zeroedSums, zero, located, test, options, settings)
+  const model = buildModel(signal, zero, located, test, options, settings)
   const feet = findFeet(model)
   const { metrics, missing, notes } = sortOut(model, measureAll(model, feet))
   const ledger = ledgerOf(model, metrics.closingBalance)

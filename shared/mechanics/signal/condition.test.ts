@@ -21,10 +21,20 @@ const jumpLike = Float64Array.from({ length: 1000 }, (_, i) =>
 describe('conditionRecording', () => {
   it('adds up two plates and leaves the recording as it was', () => {
     const left = jumpLike.slice()
-    const signal = signalOf({ left, right: jumpLike })
+    left[3] = NaN
+    const right = jumpLike.map((newton) => -newton)
+    const signal = signalOf({ left, right })
     expect(signal.total[0]).toBe(800)
-    signal.plates[0].force[0] = -1
-    expect(left).toEqual(jumpLike)
+    expect(signal.total[3]).toBe(800)
+    expect(left[3]).toBeNaN()
+    expect(right[0]).toBe(-400)
+  })
+
+  it('counts the longest of several stays at the ceiling', () => {
+    const clipped = jumpLike.slice()
+    clipped[100] = 900
+    clipped[450] = 899
+    expect(signalOf({ single: clipped }).plates[0].flatTop).toBe(50)
   })
 
   it('bridges unreadable samples by straight lines and counts them', () => {

@@ -1,13 +1,12 @@
 import type { ForceChannel, Note, Recording } from '../types.ts'
 import type { Settings } from '../settings.ts'
+import { runningSums, type RunningSums } from './running-mean.ts'
 import { borrow } from './workspace.ts'
 
-/** One plate's force in newtons, a copy that the engine may correct. */
+/** One plate's force in newtons, as recorded: to be read only, it may be the recording's own array. */
 export interface Plate {
   channel: ForceChannel
   force: Float64Array
-  /** Zero offset taken off, N. */
-  offsetN: number
   /** The whole record was turned over because pressing down read negative. */
   flipped: boolean
   /** The record hardly moves: nothing stood on this plate, or it was not connected. */
@@ -17,13 +16,15 @@ export interface Plate {
 }
 
 /** The force of a recording on an even time base, ready for the search of events. */
-export interface Signal {
+export interface Signal<P extends Plate = Plate> {
   sampleRateHz: number
   /** Sample interval, s. */
   dt: number
   length: number
-  plates: Plate[]
+  plates: P[]
   total: Float64Array
+  /** Running sums of the total. */
+  sums: RunningSums
   /** Samples that were no number or beyond any plate, filled by straight lines. */
   unreadable: number
 }
@@ -49,47 +50,59 @@ function chooseChannels(recording: Recording): ForceChannel[] {
 
 /** What one pass over a channel tells. */
 interface Survey {
-  unreadable: number
   least: number
   greatest: number
-  /** Samples in a row at exactly the greatest value. */
-  flatTop: number
+  /** Every sample is a number within the limit. */
+  readable: boolean
+}
+
+function survey(force: Float64Array, limit: number): Survey {
+  const { length } = force
+  let least = Infinity
+  let greatest = -Infinity
+  let sum = 0
+  for (let i = 0; i < length; i++) {
+    const value = force[i]
+    if (value < least) least = value
+    if (value > greatest) greatest = value
+    sum += value
+  }
+  // A sum of readable numbers is a number; NaN passes both comparisons unseen but not the sum.
+  return { least, greatest, readable: least >= -limit && greatest <= limit && !Number.isNaN(sum) }
+}
+
+/** Greatest number of samples in a row at exactly the greatest value. */
+function longestFlatTop(force: Float64Array, greatest: number): number {
+  let longest = 0
+  for (let from = force.indexOf(greatest); from >= 0;) {
+    let to = from + 1
+    while (to < force.length && force[to] === greatest) to++
+    longest = Math.max(longest, to - from)
+    from = force.indexOf(greatest, to)
+  }
+  return longest
 }
 
 /**
- * Copies a channel times `sign`, bridging samples that are not finite or beyond `limit` by straight lines. A record
- * without one readable sample becomes zeros.
+ * Copies a channel, bridging samples that are not finite or beyond `limit` by straight lines. A record without one
+ * readable sample becomes zeros. Answers how many were bridged.
  */
-function copyReadable(from: Float64Array, to: Float64Array, limit: number, sign: 1 | -1): Survey {
+function bridgeUnreadable(from: Float64Array, to: Float64Array, limit: number): number {
   const { length } = to
   let unreadable = 0
   let lastGood = -1
-  let least = Infinity
-  let greatest = -Infinity
-  let run = 0
-  let flatTop = 0
   for (let i = 0; i < length; i++) {
-    const value = sign * from[i]
+    const value = from[i]
     if (!(value <= limit && value >= -limit)) {
       unreadable++
-      run = 0
       continue
     }
     to[i] = value
     if (lastGood < i - 1) bridge(to, lastGood, i)
     lastGood = i
-    if (value < least) least = value
-    if (value > greatest) {
-      greatest = value
-      run = 1
-      flatTop = 1
-    } else if (value === greatest) {
-      run++
-      if (run > flatTop) flatTop = run
-    } else run = 0
   }
   to.fill(lastGood >= 0 ? to[lastGood] : 0, lastGood + 1)
-  return { unreadable, least, greatest, flatTop }
+  return unreadable
 }
 
 function bridge(force: Float64Array, lastGood: number, nextGood: number): void {
@@ -120,33 +133,45 @@ function isNegativeGoing(force: Float64Array, least: number, greatest: number): 
   return usual < -0.1 * (greatest - least) && usual - least > greatest - usual
 }
 
+function turnedOver(force: Float64Array, into: Float64Array): Float64Array {
+  for (let i = 0; i < force.length; i++) into[i] = -force[i]
+  return into
+}
+
 function conditionPlate(
   channel: ForceChannel,
   raw: Float64Array,
   settings: Settings,
 ): Plate & { unreadable: number } {
-  const force = borrow(`force of ${channel}`, raw.length)
-  let survey = copyReadable(raw, force, settings.greatestForceN, 1)
-  const flipped = isNegativeGoing(force, survey.least, survey.greatest)
-  if (flipped) survey = copyReadable(raw, force, settings.greatestForceN, -1)
-  const dead = !(survey.greatest - survey.least > settings.smallestLoadN / 3)
-  return { channel, force, offsetN: 0, flipped, dead, flatTop: survey.flatTop, unreadable: survey.unreadable }
+  let force = raw
+  let unreadable = 0
+  let range = survey(raw, settings.greatestForceN)
+  if (!range.readable) {
+    force = borrow(`bridged force of ${channel}`, raw.length)
+    unreadable = bridgeUnreadable(raw, force, settings.greatestForceN)
+    range = survey(force, settings.greatestForceN)
+  }
+  const flipped = isNegativeGoing(force, range.least, range.greatest)
+  if (flipped) force = turnedOver(force, borrow(`turned force of ${channel}`, raw.length))
+  const dead = !(range.greatest - range.least > settings.smallestLoadN / 3)
+  const flatTop = longestFlatTop(force, flipped ? -range.least : range.greatest)
+  return { channel, force, flipped, dead, flatTop, unreadable }
 }
 
-/** Takes offsets off the plates' force and writes the force of all plates together. */
-export function addUp(plates: readonly Plate[], total: Float64Array, offsets: readonly number[]): void {
-  const { length } = total
+/** The force of all plates together. */
+function totalOf(plates: readonly Plate[]): Float64Array {
   const first = plates[0].force
-  const second = plates.length > 1 ? plates[1].force : null
-  const ofFirst = offsets[0]
-  const ofSecond = offsets[1] ?? 0
-  if (second === null) for (let i = 0; i < length; i++) total[i] = first[i] -= ofFirst
-  else for (let i = 0; i < length; i++) total[i] = (first[i] -= ofFirst) + (second[i] -= ofSecond)
+  if (plates.length === 1) return first
+  const second = plates[1].force
+  const { length } = first
+  const total = borrow('total', length)
+  for (let i = 0; i < length; i++) total[i] = first[i] + second[i]
+  return total
 }
 
 /**
- * Takes the force channels of a recording as copies: bridges unreadable samples and counts them, turns over a
- * plate that reads negative. The recording itself stays as it was.
+ * Takes the force channels of a recording: bridges unreadable samples and counts them, turns over a plate that reads
+ * negative; both in a copy, and the recording itself stays as it was.
  */
 export function conditionRecording(recording: Recording, settings: Settings): Conditioned {
   const rate = recording.sampleRateHz
@@ -174,9 +199,9 @@ export function conditionRecording(recording: Recording, settings: Settings): Co
       `The recording has ${length} samples, too few for a jump. Record the whole trial.`,
     )
 
-  const conditioned = channels.map((channel, i) => conditionPlate(channel, raws[i], settings))
-  const total = borrow('total', length)
-  addUp(conditioned, total, [0, 0])
-  const unreadable = conditioned.reduce((sum, plate) => sum + plate.unreadable, 0)
-  return { signal: { sampleRateHz: rate, dt: 1 / rate, length, plates: conditioned, total, unreadable } }
+  const plates = channels.map((channel, i) => conditionPlate(channel, raws[i], settings))
+  const total = totalOf(plates)
+  const unreadable = plates.reduce((sum, plate) => sum + plate.unreadable, 0)
+  const sums = runningSums(total, 'sums of the total')
+  return { signal: { sampleRateHz: rate, dt: 1 / rate, length, plates, total, sums, unreadable } }
 }

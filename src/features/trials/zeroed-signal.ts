@@ -24,9 +24,9 @@ export function zeroedSignal(trial: Traced, samples: Samples): Signal | null {
   if (!('signal' in conditioned)) return null
   const { signal } = conditioned
   const { takeoff, touchdown } = trial.analysis?.events ?? {}
-  if (takeoff)
-    zeroPlates(signal, { from: takeoff.sample + 1, to: touchdown?.sample ?? signal.length }, defaultSettings)
-  return signal
+  if (!takeoff) return signal
+  const flight = { from: takeoff.sample + 1, to: touchdown?.sample ?? signal.length }
+  return zeroPlates(signal, flight, defaultSettings).signal
 }
 
 /** Momentum of the centre of mass since onset, kg·m/s; null where the trial was not weighed. */
