@@ -27,6 +27,8 @@ export const errorCodes = [
   'chunk-invalid',
   'upload-incomplete',
   'upload-finished',
+  'upload-dismissed',
+  'upload-in-use',
   'nothing-to-publish',
   'athlete-not-in-session',
   'internal',

@@ -5,6 +5,8 @@ export const limits = {
   fileBytes: MAX_FILE_BYTES,
   chunkBytes: 1024 * 1024,
   filesPerDrop: 300,
+  /** A chunk of 1 MiB on a slow line of 10 kB/s takes this long: what is silent for longer has stopped. */
+  arrivingSeconds: 105,
   fileNameCharacters: 255,
   nameCharacters: 120,
   emailCharacters: 254,

@@ -27,6 +27,12 @@ export const Upload = z.strictObject({
   duplicateOf: z.strictObject({ uploadId: Id, sessionId: Id, fileName: z.string() }).nullable(),
   /** Chunks that have arrived, for taking up an upload again. */
   chunksReceived: z.array(z.number().int()),
+  /** When the newest chunk came, or before any the announcement. */
+  lastReceivedAt: Moment,
+  /** True where chunks are still to come and one came within `limits.arrivingSeconds`: somebody is sending it. */
+  arriving: z.boolean(),
+  /** Cleared from the Tray, and by whom; taken back it stands there as before. */
+  dismissed: z.strictObject({ at: Moment, byName: z.string() }).nullable(),
   trials: z.number().int(),
   uploadedByName: z.string(),
   createdAt: Moment,
@@ -69,6 +75,15 @@ export const finishUpload = endpoint({
   path: '/api/uploads/:uploadId/finish',
   access: measuringRoles,
   params: UploadParams,
+  response: Upload,
+})
+/** Clears a file from the Tray that will not become a trial, or takes it back; its bytes are kept either way. */
+export const changeUpload = endpoint({
+  method: 'PATCH',
+  path: '/api/uploads/:uploadId',
+  access: measuringRoles,
+  params: UploadParams,
+  body: z.strictObject({ version: Version, dismissed: z.boolean() }),
   response: Upload,
 })
 /** The original, byte for byte, as an attachment. */

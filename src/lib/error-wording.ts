@@ -89,6 +89,14 @@ export const errorWording: Record<AnyErrorCode, ErrorWording> = {
     title: 'This upload is finished already',
     advice: 'Look for the file in the session. To send another, add it as a new file.',
   },
+  'upload-dismissed': {
+    title: 'This file was dismissed while it was on its way',
+    advice: 'Take it back under “Show dismissed” in the Tray, or try again to send it anew.',
+  },
+  'upload-in-use': {
+    title: 'This file cannot be dismissed now',
+    advice: 'Wait until it is here and read. Trials of it are set aside on the sheet.',
+  },
   'nothing-to-publish': {
     title: 'There is nothing to publish yet',
     advice: 'Put at least one analysed trial on an athlete and leave it included, then publish.',

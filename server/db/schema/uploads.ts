@@ -1,6 +1,7 @@
 import { sql } from 'drizzle-orm'
 import {
   bigint,
+  check,
   foreignKey,
   index,
   integer,
@@ -66,6 +67,7 @@ export const fileChunks = club.table(
     fileId: uuid('file_id').notNull(),
     n: integer('n').notNull(),
     bytes: bytea('bytes').notNull(),
+    receivedAt: moment('received_at').notNull().defaultNow(),
   },
   (t) => [
     primaryKey({ columns: [t.clubId, t.fileId, t.n] }),
@@ -97,6 +99,9 @@ export const uploads = club.table(
     /** The upload that brought the same bytes first. */
     duplicateOf: uuid('duplicate_of'),
     uploadedBy: uuid('uploaded_by').notNull(),
+    /** Cleared from the Tray by a person; the state and the bytes stay, so that it can be taken back. */
+    dismissedAt: moment('dismissed_at'),
+    dismissedBy: uuid('dismissed_by'),
     version: rowVersion(),
     createdAt: createdAt(),
   },
@@ -111,6 +116,11 @@ export const uploads = club.table(
       columns: [t.clubId, t.uploadedBy],
       foreignColumns: [memberships.clubId, memberships.personId],
     }),
+    foreignKey({
+      columns: [t.clubId, t.dismissedBy],
+      foreignColumns: [memberships.clubId, memberships.personId],
+    }),
+    check('uploads_dismissal', sql`(dismissed_at is null) = (dismissed_by is null)`),
     ownClubPolicy('uploads'),
     staffOnlyPolicy('uploads'),
   ],

@@ -20,6 +20,18 @@ export const chunkInvalid = (sentence: string, status = 400) => namedError('chun
 export const uploadFinished = () =>
   namedError('upload-finished', 409, 'This file was finished already; nothing can be added to it.')
 
+export const uploadDismissed = () =>
+  namedError(
+    'upload-dismissed',
+    409,
+    'This file was dismissed before all of it was here. What had arrived is kept.',
+  )
+
+const inUse = (sentence: string) => namedError('upload-in-use', 409, sentence)
+export const stillArriving = (senderName: string) => inUse(`${senderName} is sending this file now.`)
+export const beingRead = () => inUse('This file is being read this moment.')
+export const hasTrials = () => inUse('Trials of this file stand on the sheet. Set those aside instead.')
+
 export const uploadIncomplete = (missing: number[]) =>
   namedError(
     'upload-incomplete',

@@ -1,5 +1,6 @@
-import { and, asc, eq, sql, type SQL } from 'drizzle-orm'
+import { and, asc, eq, isNull, sql, type SQL } from 'drizzle-orm'
 import { alias } from 'drizzle-orm/pg-core'
+import { limits } from '../../../shared/contracts/limits.ts'
 import type { Upload } from '../../../shared/contracts/uploads.ts'
 import type { Tx } from '../../db/database.ts'
 import { people } from '../../db/schema/identity.ts'
@@ -10,6 +11,14 @@ export const ofUpload = (clubId: string, uploadId: string) =>
   and(eq(uploads.clubId, clubId), eq(uploads.id, uploadId))
 
 const first = alias(uploads, 'first')
+const dismissers = alias(people, 'dismissers')
+
+/** Chunks that still come, by the silence since the last: as the database sees it, not by the caller's clock. */
+const lastReceivedAt = sql<Date>`greatest(${uploads.createdAt}, (
+  select max(c.received_at) from club.file_chunks c
+  where c.club_id = ${uploads.clubId} and c.file_id = ${uploads.fileId}))`.mapWith(uploads.createdAt)
+const arriving = sql<boolean>`${uploads.state} = 'receiving' and ${uploads.dismissedAt} is null
+  and now() - ${lastReceivedAt} < make_interval(secs => ${limits.arrivingSeconds})`
 
 /** Uploads in the form that the API answers with, oldest first. */
 export async function viewUploads(tx: Tx, where: SQL | undefined): Promise<Upload[]> {
@@ -24,18 +33,27 @@ export async function viewUploads(tx: Tx, where: SQL | undefined): Promise<Uploa
         select c.n from club.file_chunks c
         where c.club_id = ${uploads.clubId} and c.file_id = ${uploads.fileId} order by c.n
       ) else '{}' end`,
+      lastReceivedAt,
+      arriving,
+      dismissedByName: dismissers.name,
       trials: sql<number>`(select count(*)::int from ${trials}
         where ${trials.clubId} = ${uploads.clubId} and ${trials.uploadId} = ${uploads.id})`,
     })
     .from(uploads)
     .innerJoin(files, and(eq(files.clubId, uploads.clubId), eq(files.id, uploads.fileId)))
     .innerJoin(people, eq(people.id, uploads.uploadedBy))
+    .leftJoin(dismissers, eq(dismissers.id, uploads.dismissedBy))
     .leftJoin(first, and(eq(first.clubId, uploads.clubId), eq(first.id, uploads.duplicateOf)))
     .where(where)
     .orderBy(asc(uploads.createdAt), asc(uploads.id))
-  return rows.map(({ upload, first: duplicateOf, ...row }) => ({
+  return rows.map(({ upload, first: duplicateOf, dismissedByName, ...row }) => ({
     ...row,
     duplicateOf,
+    lastReceivedAt: row.lastReceivedAt.toISOString(),
+    dismissed:
+      upload.dismissedAt && dismissedByName
+        ? { at: upload.dismissedAt.toISOString(), byName: dismissedByName }
+        : null,
     id: upload.id,
     sessionId: upload.sessionId,
     fileName: upload.fileName,
@@ -55,6 +73,8 @@ export interface UploadRow {
   state: Upload['state']
   reading: Reading | null
   sizeBytes: number
+  dismissedAt: Date | null
+  uploadedBy: string
   createdAt: Date
 }
 
@@ -68,6 +88,8 @@ export async function findUpload(tx: Tx, clubId: string, uploadId: string): Prom
       state: sql<Upload['state']>`${uploads.state}`,
       reading: uploads.reading,
       sizeBytes: files.sizeBytes,
+      dismissedAt: uploads.dismissedAt,
+      uploadedBy: uploads.uploadedBy,
       createdAt: uploads.createdAt,
     })
     .from(uploads)
@@ -104,7 +126,7 @@ export interface Step {
   error?: ReadError
 }
 
-/** Takes an upload from one state to the next; false where it is not in that state any more. */
+/** Takes an upload from one state to the next; false where it is not in that state any more, or dismissed. */
 export async function advance(
   tx: Tx,
   clubId: string,
@@ -115,7 +137,27 @@ export async function advance(
   const moved = await tx
     .update(uploads)
     .set({ ...step, version: sql`${uploads.version} + 1` })
-    .where(and(ofUpload(clubId, uploadId), eq(uploads.state, from)))
+    .where(and(ofUpload(clubId, uploadId), eq(uploads.state, from), isNull(uploads.dismissedAt)))
     .returning({ id: uploads.id })
   return moved.length > 0
+}
+
+/** Dismisses an upload, or takes it back, at its version and in its state; false where either has changed. */
+export async function setDismissed(
+  tx: Tx,
+  at: { clubId: string; uploadId: string; version: number; state: Upload['state'] },
+  by: { personId: string; at: Date } | null,
+): Promise<boolean> {
+  const set = await tx
+    .update(uploads)
+    .set({
+      dismissedAt: by?.at ?? null,
+      dismissedBy: by?.personId ?? null,
+      version: sql`${uploads.version} + 1`,
+    })
+    .where(
+      and(ofUpload(at.clubId, at.uploadId), eq(uploads.version, at.version), eq(uploads.state, at.state)),
+    )
+    .returning({ id: uploads.id })
+  return set.length > 0
 }

@@ -1,7 +1,14 @@
 import { Readable } from 'node:stream'
 import { pipeline } from 'node:stream/promises'
-import { finishUpload, getOriginal, sendChunk, startUpload } from '../../../shared/contracts/uploads.ts'
+import {
+  changeUpload,
+  finishUpload,
+  getOriginal,
+  sendChunk,
+  startUpload,
+} from '../../../shared/contracts/uploads.ts'
 import { handled, implement, type Route } from '../../http/implement.ts'
+import { setDismissal } from './dismissal.service.ts'
 import { receiveChunk } from './receive-chunk.ts'
 import * as uploads from './uploads.service.ts'
 
@@ -15,6 +22,7 @@ export const uploadRoutes: Route[] = [
     return { n: params.n }
   }),
   implement(finishUpload, ({ deps, ctx, params }) => uploads.finishUpload(deps, ctx, params.uploadId)),
+  implement(changeUpload, ({ deps, ctx, params, body }) => setDismissal(deps, ctx, params.uploadId, body)),
   implement(getOriginal, async ({ deps, ctx, params, res }) => {
     const { fileName, sizeBytes, chunks } = await uploads.openOriginal(deps, ctx, params.uploadId)
     // `attachment` escapes the name; the type says nothing that a browser would open.

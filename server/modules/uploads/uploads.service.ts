@@ -19,6 +19,7 @@ import {
   chunkInvalid,
   fileNameInvalid,
   fileTooLarge,
+  uploadDismissed,
   uploadFinished,
   uploadIncomplete,
 } from './uploads.errors.ts'
@@ -66,6 +67,7 @@ export async function storeChunk(
   await deps.db.inClub(ctx, async (tx) => {
     const upload = await requireUpload(tx, ctx, uploadId)
     if (upload.state !== 'receiving') throw uploadFinished()
+    if (upload.dismissedAt) throw uploadDismissed()
     const expected = chunkLength(upload.sizeBytes, n)
     if (expected <= 0)
       throw chunkInvalid(`This file has ${chunkCount(upload.sizeBytes)} parts, and no part ${n + 1}.`)
@@ -138,12 +140,12 @@ export async function openOriginal(deps: Deps, ctx: Caller, uploadId: string) {
   return { fileName: upload.fileName, sizeBytes: upload.sizeBytes, chunks: chunksOf(deps, ctx, upload) }
 }
 
-async function view(tx: Tx, ctx: Caller, uploadId: string): Promise<Upload> {
+export async function view(tx: Tx, ctx: Caller, uploadId: string): Promise<Upload> {
   const [upload] = await viewUploads(tx, ofUpload(ctx.clubId, uploadId))
   return upload
 }
 
-async function requireUpload(tx: Tx, ctx: Caller, uploadId: string): Promise<UploadRow> {
+export async function requireUpload(tx: Tx, ctx: Caller, uploadId: string): Promise<UploadRow> {
   const upload = await findUpload(tx, ctx.clubId, uploadId)
   if (!upload) throw notFound('This file')
   return upload
@@ -153,6 +155,7 @@ async function requireUpload(tx: Tx, ctx: Caller, uploadId: string): Promise<Upl
 async function requireComplete(tx: Tx, ctx: Caller, uploadId: string): Promise<UploadRow> {
   const upload = await requireUpload(tx, ctx, uploadId)
   if (upload.state !== 'receiving') return upload
+  if (upload.dismissedAt) throw uploadDismissed()
   const there = new Set(await chunkNumbers(tx, ctx.clubId, upload.fileId))
   const missing = Array.from({ length: chunkCount(upload.sizeBytes) }, (_, n) => n).filter(
     (n) => !there.has(n),

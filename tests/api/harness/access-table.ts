@@ -137,6 +137,11 @@ export const accessTable: Record<string, AccessLine> = {
     elsewhere: 'not-found',
   },
   finishUpload: { may: test, request: ({ uploadId }) => ({ params: { uploadId } }), elsewhere: 'not-found' },
+  changeUpload: {
+    may: test,
+    request: ({ uploadId }) => ({ params: { uploadId }, body: { version: 9, dismissed: true } }),
+    elsewhere: 'not-found',
+  },
   getOriginal: { may: test, request: ({ uploadId }) => ({ params: { uploadId } }), elsewhere: 'not-found' },
 
   getTrial: {
