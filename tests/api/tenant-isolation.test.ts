@@ -42,6 +42,8 @@ async function fillTheRest(): Promise<void> {
     await tx.insert(records.idempotencyKeys).values({ clubId, personId, ...key })
     await tx.insert(results.sessionResults).values(resultRow(own, athleteId, 'working'))
     const spread = { testKey: 'cmj/both/0kg/-/hips', edition: 'working', spreads: {} }
+    const move = { events: {}, stood: {}, movedBy: personId, movedAt: new Date() }
+    await tx.insert(trials.eventMoves).values({ clubId, trialId, ...move })
     await tx.insert(results.trialSpreads).values({ clubId, sessionId, ...spread })
   })
 }
@@ -165,6 +167,17 @@ describe('rows of a club', () => {
       ...(await tx.delete(uploads.files).returning({ id: uploads.files.id })),
     ])
     expect(deleted).toEqual([])
+  })
+
+  it('of moved events are never rewritten', async () => {
+    const rewrite = (db: Database) =>
+      refusal(db, workerContext(own.clubId), (tx) =>
+        tx.update(trials.eventMoves).set({ reason: 'Another reason' }),
+      )
+    expect([await rewrite(harness.db), await rewrite(harness.workerDeps.db)]).toEqual([
+      insufficientPrivilege,
+      insufficientPrivilege,
+    ])
   })
 
   it('of analyses are never rewritten, by web or by worker', async () => {

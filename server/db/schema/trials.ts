@@ -11,6 +11,7 @@ import {
   uniqueIndex,
   uuid,
 } from 'drizzle-orm/pg-core'
+import type { MovedEvents } from '../../../shared/mechanics/events/event-order.ts'
 import type {
   EventName,
   EventTime,
@@ -28,6 +29,7 @@ import {
   moment,
   ownClubPolicy,
   rowVersion,
+  staffOnlyPolicy,
   staffOrPolicy,
 } from './base.ts'
 import { bytea, memberships } from './identity.ts'
@@ -111,6 +113,41 @@ export const trialSamples = club.table(
   ],
 )
 
+/**
+ * Every time that a person moved events of a trial or put them back: all that are moved from then on, and why. Never
+ * changed, but for being superseded by the next; the newest of a trial holds, and holds nothing where it is empty.
+ */
+export const eventMoves = club.table(
+  'event_moves',
+  {
+    clubId: clubId(),
+    id: id(),
+    trialId: uuid('trial_id').notNull(),
+    /** Seconds from the trial's first sample, by event; empty: all back to automatic. */
+    events: jsonb('events').$type<MovedEvents>().notNull(),
+    /** Where the events that this changed stood before, seconds; null where the trial had no such event. */
+    stood: jsonb('stood').$type<Partial<Record<EventName, number | null>>>().notNull(),
+    reason: text('reason'),
+    movedBy: uuid('moved_by').notNull(),
+    movedAt: moment('moved_at').notNull(),
+    supersededAt: moment('superseded_at'),
+  },
+  (t) => [
+    primaryKey({ columns: [t.clubId, t.id] }),
+    index('event_moves_trial').on(t.clubId, t.trialId, t.movedAt),
+    uniqueIndex('event_moves_current')
+      .on(t.clubId, t.trialId)
+      .where(sql`superseded_at is null`),
+    foreignKey({ columns: [t.clubId, t.trialId], foreignColumns: [trials.clubId, trials.id] }),
+    foreignKey({
+      columns: [t.clubId, t.movedBy],
+      foreignColumns: [memberships.clubId, memberships.personId],
+    }),
+    ownClubPolicy('event_moves'),
+    staffOnlyPolicy('event_moves'),
+  ],
+)
+
 /** What went into an analysis besides the samples; its hash makes the job safe to run twice. */
 export interface AnalysisInputs {
   test: { protocol: string; side: string; externalLoadKg: number; boxHeightM: number | null; arms: string }
@@ -118,6 +155,8 @@ export interface AnalysisInputs {
   gravity: number
   calibrationU: Record<string, number>
   settings: string
+  /** Absent where no event was moved, so that the hash is that of a trial that nobody touched. */
+  movedEvents?: MovedEvents
 }
 
 /** One per trial, engine version and inputs. Superseded by a newer one, never changed. */

@@ -1,7 +1,7 @@
 import { and, eq, isNull, ne, sql } from 'drizzle-orm'
 import type { Tx } from '../../db/database.ts'
 import { athletes } from '../../db/schema/people-of-club.ts'
-import { analyses, trials, trialSamples, type AnalysisInputs } from '../../db/schema/trials.ts'
+import { analyses, eventMoves, trials, trialSamples, type AnalysisInputs } from '../../db/schema/trials.ts'
 
 export type AnalysisRow = typeof analyses.$inferSelect
 export type NewAnalysis = Omit<typeof analyses.$inferInsert, 'id' | 'supersededAt' | 'createdAt'>
@@ -21,10 +21,19 @@ export async function findTrialToAnalyse(tx: Tx, clubId: string, trialId: string
       } satisfies Record<keyof AnalysisInputs['test'], unknown>,
       recordedMassKg: athletes.recordedMassKg,
       channels: trialSamples.channels,
+      movedEvents: eventMoves.events,
     })
     .from(trials)
     .innerJoin(trialSamples, and(eq(trialSamples.clubId, trials.clubId), eq(trialSamples.trialId, trials.id)))
     .leftJoin(athletes, and(eq(athletes.clubId, trials.clubId), eq(athletes.id, trials.athleteId)))
+    .leftJoin(
+      eventMoves,
+      and(
+        eq(eventMoves.clubId, trials.clubId),
+        eq(eventMoves.trialId, trials.id),
+        isNull(eventMoves.supersededAt),
+      ),
+    )
     .where(and(eq(trials.clubId, clubId), eq(trials.id, trialId)))
   return row ?? null
 }

@@ -1,4 +1,5 @@
 import { createHash } from 'node:crypto'
+import type { MovedEvents } from '../../../shared/mechanics/events/event-order.ts'
 import { defaultSettings } from '../../../shared/mechanics/settings.ts'
 import type { AnalyseOptions, ForceChannel } from '../../../shared/mechanics/types.ts'
 import { standardGravity } from '../../../shared/units/gravity.ts'
@@ -15,15 +16,18 @@ export interface TrialToAnalyse {
   test: AnalysisInputs['test']
   recordedMassKg: number | null
   channels: readonly string[]
+  /** Events that a person moved; null or empty: none. */
+  movedEvents: MovedEvents | null
 }
 
-export function inputsOf({ test, recordedMassKg, channels }: TrialToAnalyse): AnalysisInputs {
+export function inputsOf({ test, recordedMassKg, channels, movedEvents }: TrialToAnalyse): AnalysisInputs {
   return {
     test,
     recordedMassKg,
     gravity: standardGravity,
     calibrationU: Object.fromEntries(channels.map((channel) => [channel, unknownPlateU])),
     settings: `default-${defaultSettings.version}`,
+    ...(movedEvents && Object.keys(movedEvents).length > 0 ? { movedEvents } : {}),
   }
 }
 
@@ -41,6 +45,7 @@ export function engineOptions(inputs: AnalysisInputs): AnalyseOptions {
     ...(inputs.recordedMassKg === null ? {} : { recordedMassKg: inputs.recordedMassKg }),
     gravity: inputs.gravity,
     calibrationU: inputs.calibrationU as Partial<Record<ForceChannel, number>>,
+    ...(inputs.movedEvents ? { movedEvents: inputs.movedEvents } : {}),
   }
 }
 
