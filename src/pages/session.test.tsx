@@ -9,7 +9,7 @@ import {
 } from '../../shared/contracts/sessions.ts'
 import { listSquads } from '../../shared/contracts/squads.ts'
 import { changeTrial } from '../../shared/contracts/trials.ts'
-import { finishUpload, startUpload } from '../../shared/contracts/uploads.ts'
+import { changeUpload, finishUpload, startUpload } from '../../shared/contracts/uploads.ts'
 import { expectNoAxeFaults } from '../../tests/setup/axe.ts'
 import { answer, neverAnswers, refuse } from '../../tests/setup/msw/answer.ts'
 import { idOf } from '../../tests/setup/msw/ids.ts'
@@ -211,6 +211,7 @@ describe('the Session sheet', () => {
             trials: 0,
             sizeBytes: 2_500_000,
             chunksReceived: [0, 1],
+            lastReceivedAt: '2026-11-12T10:04:00.000Z',
           }),
           anUpload(4, { fileName: 'slow.csv', state: 'waiting', trials: 0 }),
         ],
@@ -222,13 +223,67 @@ describe('the Session sheet', () => {
       'href',
       `/sessions/${idOf('session', 9)}`,
     )
-    expect(tray).toHaveTextContent('2 of 3 parts arrived. Add the same file again to send the rest.')
+    expect(tray).toHaveTextContent(
+      'Stopped at 83 %, 12 Nov 2026, 10:04; sent by Ines Calloway. Add the same file again to send the rest.',
+    )
     expect(within(tray).getByText('2 of 4 files read')).toBeVisible()
     expect(within(tray).getByRole('link', { name: 'Download the original of photo.png' })).toHaveAttribute(
       'href',
       `/api/uploads/${idOf('upload', 1)}/original`,
     )
     await expectNoAxeFaults()
+  })
+
+  test('a file that becomes no trial is dismissed, stays to be found, and can be taken back', async () => {
+    const refused = anUpload(1, {
+      fileName: 'photo.png',
+      state: 'refused',
+      trials: 0,
+      error: { code: 'not-a-recording', sentence: 'The file is a picture.', remedy: 'Export text.' },
+    })
+    const { user, kept } = await openSheet(aSheet({ trials: [], uploads: [refused] }))
+    server.use(
+      answer(changeUpload, ({ params, body }) => {
+        expect(params.uploadId).toBe(refused.id)
+        const before = kept.sheet.uploads[0]!
+        expect(body.version).toBe(before.version)
+        const dismissed = body.dismissed ? { at: '2026-11-12T10:09:00.000Z', byName: 'Ines Calloway' } : null
+        const upload = { ...before, dismissed, version: before.version + 1 }
+        kept.sheet = { ...kept.sheet, uploads: [upload] }
+        return upload
+      }),
+    )
+    const tray = screen.getByRole('region', { name: 'Tray' })
+    await user.click(within(tray).getByRole('button', { name: 'Dismiss photo.png' }))
+    expect(await screen.findByText('Dismissed: photo.png. The file is kept.')).toBeVisible()
+    expect(within(tray).getByText('empty: nothing waits for you')).toBeVisible()
+    await user.click(screen.getByRole('button', { name: 'Undo' }))
+    await user.click(await within(tray).findByRole('button', { name: 'Dismiss photo.png' }))
+    await user.click(await within(tray).findByText('Show 1 dismissed file'))
+    const list = within(tray).getByRole('list', { name: 'Dismissed files' })
+    expect(list).toHaveTextContent('dismissed 12 Nov 2026, 10:09 by Ines Calloway')
+    expect(within(list).getByRole('link', { name: 'Download the original of photo.png' })).toBeVisible()
+    await expectNoAxeFaults()
+    await user.click(within(list).getByRole('button', { name: 'Take back photo.png' }))
+    expect(await within(tray).findByText('The file is a picture.', { exact: false })).toBeVisible()
+    expect(within(tray).queryByRole('list', { name: 'Dismissed files' })).not.toBeInTheDocument()
+  })
+
+  test('a file that a colleague is sending is named, and asks nothing of anybody', async () => {
+    const upload = anUpload(1, {
+      fileName: 'long.csv',
+      state: 'receiving',
+      trials: 0,
+      sizeBytes: 4 * 1024 * 1024,
+      chunksReceived: [0],
+      arriving: true,
+      uploadedByName: 'Tove Lindgard',
+    })
+    await openSheet(aSheet({ trials: [], uploads: [upload] }))
+    const tray = screen.getByRole('region', { name: 'Tray' })
+    expect(tray).toHaveTextContent('long.csv Tove Lindgard is sending it now, 25 % here')
+    expect(within(tray).getByText('empty: nothing waits for you')).toBeVisible()
+    expect(within(tray).queryByRole('button', { name: /Dismiss/ })).not.toBeInTheDocument()
   })
 
   test('files go up and come out on the sheet; one over 64 MiB is refused by itself with the reader’s sentence', async () => {

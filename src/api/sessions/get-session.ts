@@ -26,10 +26,10 @@ export function useSession(sessionId: string) {
   return useQuery(sessionQuery(sessionId))
 }
 
-/** Whether files of the sheet are still to be read or trials to be analysed. */
+/** Whether files of the sheet still arrive or are to be read, or trials to be analysed. */
 function isWorking(sheet: SessionSheet): boolean {
   return (
-    sheet.uploads.some((upload) => upload.state === 'waiting') ||
+    sheet.uploads.some((upload) => upload.state === 'waiting' || upload.arriving) ||
     sheet.trials.some((trial) => trial.analysis === null)
   )
 }

@@ -3,6 +3,7 @@ import { Link } from 'react-router-dom'
 import type { SheetTrial } from '../../../shared/contracts/sessions.ts'
 import { Button } from '../../components/button.tsx'
 import { FormError } from '../../components/form-error.tsx'
+import { focusNextRow } from '../../lib/focus-next-row.ts'
 import { pathOf } from '../../lib/paths.ts'
 import { figureWords } from '../results/metric-words.ts'
 import type { AthleteChoice } from '../trials/move-trial-dialog.tsx'
@@ -15,7 +16,7 @@ export function TrayTrial({ trial, athletes }: { trial: SheetTrial; athletes: re
   const [chosen, setChosen] = useState('')
   const row = useRef<HTMLLIElement>(null)
   const acted = { id, version, words: fileName, athleteId: null }
-  const { move, busy, error } = useMoveTrial(acted, () => focusNext(row.current))
+  const { move, busy, error } = useMoveTrial(acted, () => focusNextRow(row.current))
   const selectId = useId()
   return (
     <li ref={row} className="border-b border-rule-2 py-1.5 text-small">
@@ -55,13 +56,6 @@ export function TrayTrial({ trial, athletes }: { trial: SheetTrial; athletes: re
       <FormError error={error} />
     </li>
   )
-}
-
-/** The row goes with its trial: the focus goes on to the next choice, or to the Tray's list after the last. */
-function focusNext(row: HTMLElement | null) {
-  if (!row?.contains(document.activeElement)) return
-  const next = row.nextElementSibling?.querySelector('select') ?? row.parentElement
-  next?.focus()
 }
 
 /** Mass and height help to tell whose it is. */

@@ -1,8 +1,9 @@
 import type { SheetTrial } from '../../../shared/contracts/sessions.ts'
 import type { Upload } from '../../../shared/contracts/uploads.ts'
+import { DismissedUploads } from '../uploads/dismissed-uploads.tsx'
 import { FileList } from '../uploads/file-list.tsx'
 import { isOnItsWay, readCount } from '../uploads/file-progress.ts'
-import { needsPerson, TrayUpload } from '../uploads/tray-uploads.tsx'
+import { ArrivingUploads, needsPerson, TrayUpload } from '../uploads/tray-uploads.tsx'
 import type { QueuedFile, UploadQueue } from '../uploads/upload-queue.ts'
 import type { AthleteChoice } from '../trials/move-trial-dialog.tsx'
 import { TrayTrial } from './tray-trial.tsx'
@@ -17,7 +18,8 @@ interface Props {
 
 /** What is not on an athlete yet, what could not be read, and how far the reading has come. */
 export function Tray({ trials, uploads, athletes, files, queue }: Props) {
-  const waiting = uploads.filter((upload) => needsPerson(upload) && !isOnItsWay(upload, files))
+  const elsewhere = uploads.filter((upload) => !isOnItsWay(upload, files))
+  const waiting = elsewhere.filter(needsPerson)
   const count = readCount(uploads, files)
   return (
     <section aria-label="Tray" className="no-print mb-4 border border-dashed border-edge bg-sheet px-4 py-2">
@@ -36,6 +38,7 @@ export function Tray({ trials, uploads, athletes, files, queue }: Props) {
       </div>
       {uploads.length + files.length === 0 && <HowToBegin />}
       <FileList files={files} uploads={uploads} queue={queue} />
+      <ArrivingUploads uploads={elsewhere.filter((upload) => upload.arriving)} />
       {trials.length + waiting.length > 0 && (
         <ul
           aria-label="Waiting in the Tray"
@@ -50,6 +53,7 @@ export function Tray({ trials, uploads, athletes, files, queue }: Props) {
           ))}
         </ul>
       )}
+      <DismissedUploads uploads={uploads.filter((upload) => upload.dismissed !== null)} />
     </section>
   )
 }

@@ -1,4 +1,5 @@
 import { limits } from '../../../shared/contracts/limits.ts'
+import type { Upload } from '../../../shared/contracts/uploads.ts'
 
 /** The pieces that a file is sent in; an empty file has none. */
 export function chunkNumbers(sizeBytes: number): number[] {
@@ -21,4 +22,14 @@ export function chunkSize(sizeBytes: number, n: number): number {
 export function stillToSend(sizeBytes: number, received: ReadonlySet<number>, sameFile: boolean): number[] {
   const last = Math.max(-1, ...received)
   return chunkNumbers(sizeBytes).filter((n) => !received.has(n) || (!sameFile && n === last))
+}
+
+/** Whole percent of an upload's bytes that have arrived; never 100 before all have. */
+export function arrivedPercent({
+  sizeBytes,
+  chunksReceived,
+}: Pick<Upload, 'sizeBytes' | 'chunksReceived'>): number {
+  if (sizeBytes === 0) return 100
+  const bytes = chunksReceived.reduce((sum, n) => sum + chunkSize(sizeBytes, n), 0)
+  return Math.floor((100 * bytes) / sizeBytes)
 }

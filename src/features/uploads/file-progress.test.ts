@@ -17,10 +17,10 @@ const file = (change: Partial<QueuedFile> = {}): QueuedFile => ({
 })
 
 describe('fileProgress(file, upload)', () => {
-  it('may be cancelled while it is not announced, and not while it goes up', () => {
+  it('may be cancelled before it goes up and while it does', () => {
     expect(fileProgress(file(), undefined)).toMatchObject({ words: 'in line', canRemove: true, sent: null })
     const sending = file({ stage: 'sending', sentBytes: 40, uploadId: 'u' })
-    expect(fileProgress(sending, undefined)).toMatchObject({ words: 'going up', canRemove: false, sent: 0.4 })
+    expect(fileProgress(sending, undefined)).toMatchObject({ words: 'going up', canRemove: true, sent: 0.4 })
   })
 
   it('shows an empty file as wholly sent, and divides by nothing', () => {
@@ -30,7 +30,7 @@ describe('fileProgress(file, upload)', () => {
   it('says what stopped a file and may be tried again', () => {
     const error = new ApiError('no-answer', 'The server could not be reached.')
     const stopped = fileProgress(file({ stage: 'failed', error, uploadId: 'u' }), undefined)
-    expect(stopped).toMatchObject({ words: 'stopped', canRetry: true, canRemove: false })
+    expect(stopped).toMatchObject({ words: 'stopped', canRetry: true, canRemove: true })
     expect(stopped.problem?.sentence).toBe('The server could not be reached.')
   })
 
@@ -59,6 +59,15 @@ describe('readCount(uploads, files)', () => {
       file({ stage: 'refused' }),
     ]
     expect(readCount(uploads, files)).toEqual({ read: 2, of: 5 })
+  })
+
+  it('leaves out what was dismissed half-way, and counts what was dismissed after it was read', () => {
+    const dismissed = { at: '2026-11-12T11:00:00.000Z', byName: 'Ines Calloway' }
+    const uploads = [
+      anUpload(1, { state: 'receiving', dismissed }),
+      anUpload(2, { state: 'refused', dismissed }),
+    ]
+    expect(readCount(uploads, [])).toEqual({ read: 1, of: 1 })
   })
 
   it('counts nothing for nothing', () => {

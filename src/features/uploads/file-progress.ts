@@ -27,7 +27,7 @@ export function fileProgress(file: QueuedFile, upload: Upload | undefined): File
     sent: stage === 'sending' ? (file.sizeBytes === 0 ? 1 : file.sentBytes / file.sizeBytes) : null,
     problem: problemOf(file, upload),
     canRetry: stage === 'failed',
-    canRemove: stage === 'queued' || stage === 'refused' || (stage === 'failed' && file.uploadId === null),
+    canRemove: stage !== 'sent',
     done:
       stage === 'sent' && upload !== undefined && upload.state !== 'waiting' && upload.state !== 'receiving',
   }
@@ -62,7 +62,7 @@ function problemOf(
   return stage === 'sent' && upload?.error ? upload.error : null
 }
 
-/** "41 of 48 files read", over what the server has and what is still on this page. */
+/** "41 of 48 files read", over what the server has, less what was given up half-way, and what is still on this page. */
 export function readCount(
   uploads: readonly Upload[],
   files: readonly QueuedFile[],
@@ -71,8 +71,9 @@ export function readCount(
   const coming = files.filter(
     (file) => file.stage !== 'refused' && (file.uploadId === null || !announced.has(file.uploadId)),
   )
-  const settled = uploads.filter((upload) => upload.state !== 'receiving' && upload.state !== 'waiting')
-  return { read: settled.length, of: uploads.length + coming.length }
+  const wanted = uploads.filter((upload) => upload.state !== 'receiving' || upload.dismissed === null)
+  const settled = wanted.filter((upload) => upload.state !== 'receiving' && upload.state !== 'waiting')
+  return { read: settled.length, of: wanted.length + coming.length }
 }
 
 /**

@@ -13,6 +13,7 @@ export interface Transport {
   start: (file: Announcement) => Promise<Upload>
   send: (uploadId: string, n: number, bytes: Blob) => Promise<void>
   finish: (uploadId: string, idempotencyKey: string) => Promise<Upload>
+  dismiss: (uploadId: string, version: number, idempotencyKey: string) => Promise<Upload>
   newKey: () => string
   wait: (ms: number) => Promise<void>
 }
@@ -21,10 +22,14 @@ export interface Transport {
 export interface FileOnItsWay {
   file: File
   uploadId: string | null
+  /** Of the upload: it stays the same until all of the file is there. */
+  version: number
   startKey: string
   received: Set<number>
   /** False where the upload was begun on another page load, from a file that may have been another. */
   sameFile: boolean
+  /** Set once a person gave the file up: no further piece is sent. */
+  givenUp: boolean
 }
 
 /** Waits before a piece that got no answer is sent again, ms. */
@@ -45,13 +50,15 @@ export async function sendFile(
   onProgress()
   try {
     await sendPieces(way, uploadId, transport, slot, onProgress)
+    if (way.givenUp) return
     const finishKey = transport.newKey()
     await slot(() => patiently(() => transport.finish(uploadId, finishKey), transport))
   } catch (error) {
     if (isApiError(error, 'upload-finished')) return
     if (isApiError(error, 'upload-incomplete')) way.received.clear()
     const isOther = !way.sameFile && isApiError(error, 'chunk-invalid')
-    if (isOther || isApiError(error, 'not-found')) forget(way, transport)
+    const isGone = isApiError(error, 'not-found') || isApiError(error, 'upload-dismissed')
+    if (isOther || isGone) forget(way, transport)
     if (isOther) return sendFile(way, transport, slot, onProgress)
     throw error
   }
@@ -63,6 +70,7 @@ async function announce(way: FileOnItsWay, transport: Transport): Promise<string
   const start = { fileName: way.file.name, sizeBytes: way.file.size, idempotencyKey: way.startKey }
   const upload = await patiently(() => transport.start(start), transport)
   way.uploadId = upload.id
+  way.version = upload.version
   way.sameFile = true
   return upload.id
 }
@@ -77,7 +85,7 @@ async function sendPieces(
 ): Promise<void> {
   let failure: { error: unknown } | null = null
   const sendOne = async (n: number) => {
-    if (failure) return
+    if (failure || way.givenUp) return
     try {
       await patiently(() => transport.send(uploadId, n, chunkOf(way.file, n)), transport)
       way.received.add(n)
@@ -91,7 +99,7 @@ async function sendPieces(
   if (failure) throw (failure as { error: unknown }).error
 }
 
-/** What the server holds under this upload is not this file, or is gone: the file is announced afresh. */
+/** What the server holds under this upload is not this file, or given up: the file is announced afresh. */
 function forget(way: FileOnItsWay, transport: Transport) {
   way.uploadId = null
   way.startKey = transport.newKey()

@@ -1,24 +1,38 @@
+import { useRef } from 'react'
 import { Link } from 'react-router-dom'
 import type { Upload } from '../../../shared/contracts/uploads.ts'
-import { limits } from '../../../shared/contracts/limits.ts'
-import { originalAddress } from '../../api/uploads/original-address.ts'
+import { useMe } from '../../api/account/get-me.ts'
+import { Button } from '../../components/button.tsx'
+import { FormError } from '../../components/form-error.tsx'
 import { Tag } from '../../components/tag.tsx'
+import { focusNextRow } from '../../lib/focus-next-row.ts'
+import { formatMoment } from '../../lib/format-date.ts'
 import { pathOf } from '../../lib/paths.ts'
+import { arrivedPercent } from './chunk-plan.ts'
+import { OriginalLink } from './original-link.tsx'
+import { useDismissUpload } from './use-dismiss-upload.ts'
 
-/** Files of the session that need a person: refused, here already, without a trial, or not all here. */
+/** Files of the session that need a person: refused, here already, without a trial, or stopped half-way. */
 export function needsPerson(upload: Upload): boolean {
+  if (upload.dismissed || upload.arriving) return false
   if (upload.state === 'read') return upload.trials === 0
   return upload.state !== 'waiting'
 }
 
-/** A file in the Tray: what was found, what to do. */
+/** A file in the Tray: what was found, what to do, and a way to clear it away. */
 export function TrayUpload({ upload }: { upload: Upload }) {
+  const row = useRef<HTMLLIElement>(null)
+  const { dismiss, busy, error } = useDismissUpload(upload, () => focusNextRow(row.current))
   return (
-    <li className="flex flex-col gap-0.5 border-b border-rule-2 py-1.5 text-small">
-      <p>
+    <li ref={row} className="flex flex-col gap-0.5 border-b border-rule-2 py-1.5 text-small">
+      <p className="flex flex-wrap items-baseline gap-x-2">
         <span className="font-semibold break-all">{upload.fileName}</span> <StateTag upload={upload} />
+        <Button look="word" className="ms-auto" busy={busy} onClick={dismiss}>
+          Dismiss <span className="sr-only">{upload.fileName}</span>
+        </Button>
       </p>
       <Explanation upload={upload} />
+      <FormError error={error} />
     </li>
   )
 }
@@ -36,7 +50,7 @@ function Explanation({ upload }: { upload: Upload }) {
     return (
       <p>
         {error.sentence} <Place error={error} />
-        <span className="text-ink-2">{error.remedy}</span> <Original upload={upload} />
+        <span className="text-ink-2">{error.remedy}</span> <OriginalLink upload={upload} />
       </p>
     )
   }
@@ -51,17 +65,26 @@ function Explanation({ upload }: { upload: Upload }) {
     )
   }
   if (upload.state === 'receiving') {
-    const parts = Math.ceil(upload.sizeBytes / limits.chunkBytes)
     return (
       <p>
-        {upload.chunksReceived.length} of {parts} parts arrived. Add the same file again to send the rest.
+        <Stopped upload={upload} /> Add the same file again to send the rest.
       </p>
     )
   }
   return (
     <p>
-      {upload.notes.map((note) => note.sentence).join(' ')} <Original upload={upload} />
+      {upload.notes.map((note) => note.sentence).join(' ')} <OriginalLink upload={upload} />
     </p>
+  )
+}
+
+function Stopped({ upload }: { upload: Upload }) {
+  const timeZone = useMe().data?.club.timeZone ?? 'UTC'
+  return (
+    <>
+      Stopped at {arrivedPercent(upload)} %, {formatMoment(upload.lastReceivedAt, timeZone)}; sent by{' '}
+      {upload.uploadedByName}.
+    </>
   )
 }
 
@@ -74,11 +97,19 @@ function Place({ error }: { error: NonNullable<Upload['error']> }) {
   return parts.length === 0 ? null : <span className="text-ink-2">({parts.join(', ')}) </span>
 }
 
-/** The file as it came is kept, whatever became of it. */
-function Original({ upload }: { upload: Upload }) {
+/** Files that other pages are sending this moment: somebody is at it, and nothing is to be done here. */
+export function ArrivingUploads({ uploads }: { uploads: readonly Upload[] }) {
+  if (uploads.length === 0) return null
   return (
-    <a href={originalAddress(upload.id)} download>
-      Download the original <span className="sr-only">of {upload.fileName}</span>
-    </a>
+    <ul aria-label="Files that others send" className="border-t border-rule text-small">
+      {uploads.map((upload) => (
+        <li key={upload.id} className="py-1">
+          <span className="font-semibold break-all">{upload.fileName}</span>{' '}
+          <span className="text-ink-2">
+            {upload.uploadedByName} is sending it now, {arrivedPercent(upload)} % here
+          </span>
+        </li>
+      ))}
+    </ul>
   )
 }

@@ -43,6 +43,7 @@ function takingTransport() {
     start: vi.fn<Transport['start']>(async () => upload(`u${++uploads}`)),
     send: vi.fn<Transport['send']>(async () => {}),
     finish: vi.fn<Transport['finish']>(async (id) => upload(id, { state: 'waiting' })),
+    dismiss: vi.fn<Transport['dismiss']>(async (id) => upload(id)),
     newKey: () => `key-${++keys}`,
     wait: vi.fn(async () => {}),
   }
@@ -199,7 +200,7 @@ describe('createUploadQueue(transport)', () => {
     expect(queue.files()[0]).toMatchObject({ stage: 'sent', uploadId: 'u1' })
   })
 
-  it('cancels a file that is not announced yet, and none that is on its way', async () => {
+  it('cancels a file that is not announced yet without a word to the server', async () => {
     const transport = takingTransport()
     let release = () => {}
     transport.start.mockImplementation(() => new Promise((resolve) => (release = () => resolve(upload('u')))))
@@ -209,8 +210,58 @@ describe('createUploadQueue(transport)', () => {
       expect(stages(queue)).toEqual(['sending', 'sending', 'sending', 'sending', 'queued']),
     )
     queue.remove(queue.files()[4]!.key)
-    queue.remove(queue.files()[0]!.key)
     expect(queue.files().map((f) => f.fileName)).toEqual(['0.csv', '1.csv', '2.csv', '3.csv'])
+    expect(transport.dismiss).not.toHaveBeenCalled()
     release()
+  })
+
+  it('cancels a file that goes up: no further piece is sent, and the upload is dismissed', async () => {
+    const transport = takingTransport()
+    const sending: (() => void)[] = []
+    transport.send.mockImplementation(() => new Promise((resolve) => sending.push(resolve)))
+    const queue = createUploadQueue(transport)
+    queue.add([file('a.csv', 6 * MIB)])
+    await vi.waitFor(() => expect(sending).toHaveLength(4))
+    queue.remove(queue.files()[0]!.key)
+    expect(queue.files()).toEqual([])
+    for (const end of sending) end()
+    await vi.waitFor(() => expect(transport.dismiss).toHaveBeenCalledOnce())
+    expect(transport.dismiss.mock.calls[0]!.slice(0, 2)).toEqual(['u1', 1])
+    expect(transport.send).toHaveBeenCalledTimes(4)
+    expect(transport.finish).not.toHaveBeenCalled()
+  })
+
+  it('dismisses a file that was cancelled during its announcement as soon as that is answered', async () => {
+    const transport = takingTransport()
+    let release = () => {}
+    transport.start.mockImplementation(() => new Promise((resolve) => (release = () => resolve(upload('u')))))
+    const queue = createUploadQueue(transport)
+    queue.add([file('a.csv', 10)])
+    await vi.waitFor(() => expect(transport.start).toHaveBeenCalledOnce())
+    queue.remove(queue.files()[0]!.key)
+    release()
+    await vi.waitFor(() => expect(transport.dismiss).toHaveBeenCalledOnce())
+    expect(transport.send).not.toHaveBeenCalled()
+  })
+
+  it('announces a file anew when it is tried again after somebody dismissed it', async () => {
+    const transport = takingTransport()
+    transport.send.mockRejectedValueOnce(new ApiError('upload-dismissed', 'Dismissed.'))
+    const queue = createUploadQueue(transport)
+    queue.add([file('a.csv', 10)])
+    await settled(queue)
+    expect(stages(queue)).toEqual(['failed'])
+    queue.retry(queue.files()[0]!.key)
+    await settled(queue)
+    expect(queue.files()[0]).toMatchObject({ stage: 'sent', uploadId: 'u2' })
+  })
+
+  it('does not take up an upload that was dismissed', async () => {
+    const transport = takingTransport()
+    const dismissed = { at: '2026-11-12T10:05:00.000Z', byName: 'Invented Coach' }
+    const queue = createUploadQueue(transport)
+    queue.add([file('a.csv', 100)], [upload('earlier', { dismissed })])
+    await settled(queue)
+    expect(queue.files()[0]).toMatchObject({ stage: 'sent', uploadId: 'u1' })
   })
 })

@@ -24,7 +24,7 @@ export interface UploadQueue {
   /** `begun`: uploads of the session that are not all here and may be taken up again. */
   add: (files: readonly File[], begun?: readonly Upload[]) => void
   retry: (key: string) => void
-  /** Takes a file out that was refused, failed or not announced yet. */
+  /** Takes a file out; what of it has been announced is dismissed. One that was sent stays. */
   remove: (key: string) => void
 }
 
@@ -72,6 +72,14 @@ export function createUploadQueue(transport: Transport): UploadQueue {
     } catch (error) {
       update(key, { stage: 'failed', error, uploadId: way.uploadId })
     }
+    if (way.givenUp) dismiss(way)
+  }
+  /** Where this fails the upload stands in the Tray as one that stopped, and can be dismissed there. */
+  const dismiss = (way: FileOnItsWay) => {
+    const { uploadId, version } = way
+    if (uploadId === null) return
+    way.uploadId = null
+    requestSlot(() => transport.dismiss(uploadId, version, transport.newKey())).catch(() => undefined)
   }
   const enqueue = (key: string) => void fileSlot(() => send(key))
 
@@ -98,16 +106,21 @@ export function createUploadQueue(transport: Transport): UploadQueue {
       enqueue(key)
     },
     remove: (key) => {
-      const stage = entries.get(key)?.view.stage
-      if (stage === 'sending' || stage === undefined) return
+      const entry = entries.get(key)
+      if (!entry || entry.view.stage === 'sent') return
       entries.delete(key)
       publish()
+      entry.way.givenUp = true
+      if (entry.view.stage !== 'sending' || entry.way.uploadId !== null) dismiss(entry.way)
     },
   }
 }
 
 const isSameFile = (upload: Upload, file: File) =>
-  upload.state === 'receiving' && upload.fileName === file.name && upload.sizeBytes === file.size
+  upload.state === 'receiving' &&
+  upload.dismissed === null &&
+  upload.fileName === file.name &&
+  upload.sizeBytes === file.size
 
 function newEntry(file: File, earlier: Upload | undefined, newKey: () => string): Entry {
   const refusal = refusalOfSize(file.size)
@@ -125,9 +138,11 @@ function newEntry(file: File, earlier: Upload | undefined, newKey: () => string)
     way: {
       file,
       uploadId: earlier?.id ?? null,
+      version: earlier?.version ?? 0,
       startKey: newKey(),
       received: new Set(earlier?.chunksReceived),
       sameFile: earlier === undefined,
+      givenUp: false,
     },
   }
 }

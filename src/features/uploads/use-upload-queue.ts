@@ -2,6 +2,7 @@ import { useQueryClient, type QueryClient } from '@tanstack/react-query'
 import { useEffect, useSyncExternalStore } from 'react'
 import { randomKey } from '../../api/act-keys.ts'
 import { streamHealth } from '../../api/events/stream-health.ts'
+import { dismissUpload } from '../../api/uploads/dismiss-upload.ts'
 import { finishUpload } from '../../api/uploads/finish-upload.ts'
 import { sendChunk } from '../../api/uploads/send-chunk.ts'
 import { startUpload } from '../../api/uploads/start-upload.ts'
@@ -30,6 +31,11 @@ function newQueue(queryClient: QueryClient, sessionId: string): UploadQueue {
     send: sendChunk,
     finish: async (uploadId, key) => {
       const upload = await finishUpload(uploadId, key)
+      refresh()
+      return upload
+    },
+    dismiss: async (uploadId, version, key) => {
+      const upload = await dismissUpload(uploadId, version, key)
       refresh()
       return upload
     },
