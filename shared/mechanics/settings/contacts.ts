@@ -1,6 +1,6 @@
 import { own, practice, type SettingDefinition } from './definition.ts'
 
-const harper = 'Harper, Hobbs, Moore 2011, British Association of Sport and Exercise Sciences conference'
+const harper = 'Harper, Hobbs, Moore 2011 (10/5 repeated jumps)'
 
 /** Which contacts count, and what stands in where a drop jump or landing has no quiet stance to weigh in. */
 export const contactSettings = {
