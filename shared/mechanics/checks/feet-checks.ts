@@ -9,11 +9,13 @@ function longestOff(foot: Foot, model: JumpModel, from: number, to: number): num
   const { settings, motion } = model
   const threshold = Math.max(2 * settings.eventForceN, settings.unloadedSd * foot.noise.sd)
   const { force } = foot.plate
-  let run = 0
+  const total = motion.force
+  const end = Math.min(force.length, to)
   let longest = 0
-  for (let i = Math.max(0, Math.ceil(from)); i < Math.min(force.length, to); i++) {
-    run = force[i] < threshold && motion.force[i] > 4 * threshold ? run + 1 : 0
-    if (run > longest) longest = run
+  let since = Math.max(0, Math.ceil(from))
+  for (let i = since; i < end; i++) {
+    if (!(force[i] < threshold && total[i] > 4 * threshold)) since = i + 1
+    else if (i + 1 - since > longest) longest = i + 1 - since
   }
   return longest
 }

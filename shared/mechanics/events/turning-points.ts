@@ -33,7 +33,14 @@ function rootWithin({ velocity, force, systemWeight, gravity, dt }: Motion, i: n
 /** Sample of the least (sign −1) or greatest (sign 1) velocity in [from, to]. */
 export function extremeVelocity({ velocity, first }: Motion, from: number, to: number, sign: 1 | -1): number {
   let best = Math.max(first, Math.ceil(from))
-  for (let i = best; i <= to; i++) if (sign * velocity[i] > sign * velocity[best]) best = i
+  let greatest = sign * velocity[best]
+  for (let i = best + 1; i <= to; i++) {
+    const value = sign * velocity[i]
+    if (value > greatest) {
+      greatest = value
+      best = i
+    }
+  }
   return best
 }
 

@@ -21,11 +21,12 @@ export interface Unloaded {
   offPlate: Stretch[]
 }
 
-/** Start of the window of `width` samples with the least mean. */
+/** Start of the window of `width` samples with the least mean, to a tenth of a window. */
 function lowestWindow(sums: RunningSums, length: number, width: number): number {
+  const step = Math.max(1, Math.floor(width / 10))
   let lowest = 0
   let least = Infinity
-  for (let i = 0; i + width <= length; i++) {
+  for (let i = 0; i + width <= length; i += step) {
     const sum = sums.sums[i + width] - sums.sums[i]
     if (sum < least) {
       least = sum
@@ -50,17 +51,17 @@ function usualLoad(force: Float64Array, level: number, smallestLoad: number): nu
 
 /** Stretches below `threshold`, joined over gaps shorter than `gap` samples. */
 function stretchesBelow(force: Float64Array, threshold: number, gap: number): Stretch[] {
+  const { length } = force
   const found: Stretch[] = []
-  let from = -1
-  for (let i = 0; i <= force.length; i++) {
-    const below = i < force.length && force[i] < threshold
-    if (below && from < 0) from = i
-    if (!below && from >= 0) {
-      const last = found.at(-1)
-      if (last && from - last.to < gap) last.to = i
-      else found.push({ from, to: i })
-      from = -1
-    }
+  let i = 0
+  while (i < length) {
+    while (i < length && !(force[i] < threshold)) i++
+    if (i === length) break
+    const from = i
+    while (i < length && force[i] < threshold) i++
+    const last = found.at(-1)
+    if (last && from - last.to < gap) last.to = i
+    else found.push({ from, to: i })
   }
   return found
 }

@@ -36,36 +36,65 @@ function inner({ from, to }: Stretch, dt: number, settings: Settings): Stretch {
   return { from: from + margin, to: end }
 }
 
-/** Takes an offset off a plate and sums it up, in one pass. */
-function zeroPlate(plate: Plate, offsetN: number): ZeroedPlate {
+const slots = (channel: string, length: number) => ({
+  force: borrow(`force of ${channel}`, length),
+  sums: borrow(`sums of ${channel}`, length + 1),
+})
+
+/** Takes the offset off the only plate and sums it up, in one pass. */
+function zeroOne(signal: Signal, offsetN: number): ZeroedSignal {
+  const [plate] = signal.plates
+  const { length } = signal
   const raw = plate.force
-  const { length } = raw
-  const force = borrow(`force of ${plate.channel}`, length)
-  const sums = borrow(`sums of ${plate.channel}`, length + 1)
+  const { force, sums } = slots(plate.channel, length)
   const reference = raw[0] - offsetN
-  sums[0] = 0
   let sum = 0
+  sums[0] = 0
   for (let i = 0; i < length; i++) {
     const newton = raw[i] - offsetN
     force[i] = newton
     sum += newton - reference
     sums[i + 1] = sum
   }
-  return { ...plate, force, offsetN, sums: { sums, reference, length } }
+  const own = { sums, reference, length }
+  return { ...signal, plates: [{ ...plate, force, offsetN, sums: own }], total: force, sums: own }
 }
 
-/** The total of zeroed plates. Its running sums stay: they count from the first sample. */
-function zeroTotal(
-  signal: Signal,
-  plates: readonly ZeroedPlate[],
-): { total: Float64Array; sums: RunningSums } {
-  if (plates.length === 1) return { total: plates[0].force, sums: plates[0].sums }
+/** The same for two plates, with their total, whose running sums stay: they count from the first sample. */
+function zeroTwo(signal: Signal, offsetOfA: number, offsetOfB: number): ZeroedSignal {
+  const [plateA, plateB] = signal.plates
   const { length } = signal
+  const rawA = plateA.force
+  const rawB = plateB.force
+  const { force: forceA, sums: sumsA } = slots(plateA.channel, length)
+  const { force: forceB, sums: sumsB } = slots(plateB.channel, length)
   const total = borrow('zeroed total', length)
-  const left = plates[0].force
-  const right = plates[1].force
-  for (let i = 0; i < length; i++) total[i] = left[i] + right[i]
-  return { total, sums: { ...signal.sums, reference: total[0] } }
+  const referenceA = rawA[0] - offsetOfA
+  const referenceB = rawB[0] - offsetOfB
+  let sumA = 0
+  let sumB = 0
+  sumsA[0] = 0
+  sumsB[0] = 0
+  for (let i = 0; i < length; i++) {
+    const a = rawA[i] - offsetOfA
+    const b = rawB[i] - offsetOfB
+    forceA[i] = a
+    forceB[i] = b
+    total[i] = a + b
+    sumA += a - referenceA
+    sumB += b - referenceB
+    sumsA[i + 1] = sumA
+    sumsB[i + 1] = sumB
+  }
+  return {
+    ...signal,
+    plates: [
+      { ...plateA, force: forceA, offsetN: offsetOfA, sums: { sums: sumsA, reference: referenceA, length } },
+      { ...plateB, force: forceB, offsetN: offsetOfB, sums: { sums: sumsB, reference: referenceB, length } },
+    ],
+    total,
+    sums: { ...signal.sums, reference: total[0] },
+  }
 }
 
 /**
@@ -80,8 +109,8 @@ export function zeroPlates(
   const { from, to } = inner(unloaded, signal.dt, settings)
   const noiseOf = (force: Float64Array) => allowForShortness(estimateNoise(force, from, to))
   const noises = signal.plates.map(({ force }) => noiseOf(force))
-  const plates = signal.plates.map((plate, i) => zeroPlate(plate, noises[i].mean))
-  const zeroed = { ...signal, plates, ...zeroTotal(signal, plates) }
+  const zeroed =
+    noises.length === 1 ? zeroOne(signal, noises[0].mean) : zeroTwo(signal, noises[0].mean, noises[1].mean)
   const total = noises.length === 1 ? noises[0] : noiseOf(zeroed.total)
   const dofOf = (noise: Noise) => Math.max(1, effectiveSamples(noise) - 1)
   return {

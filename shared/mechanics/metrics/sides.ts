@@ -192,12 +192,9 @@ export function asymmetryOf(
   const value = (200 * (right.value - left.value)) / sum
   const square = sum * sum
   const quantity = budget.pair(value, (400 * left.value) / square, right, (-400 * right.value) / square, left)
-  const figure = budget.figure(quantity, withoutU)
-  return {
-    ...figure,
-    larger: value >= 0 ? 'right' : 'left',
-    zeroWithin: figure.U === null ? null : Math.abs(value) <= figure.U,
-  }
+  const { U, k, URepeat, kRepeat } = budget.figure(quantity, withoutU)
+  const zeroWithin = U === null ? null : Math.abs(value) <= U
+  return { value, U, k, URepeat, kRepeat, larger: value >= 0 ? 'right' : 'left', zeroWithin }
 }
 
 /** Figures of each foot and their asymmetry. */

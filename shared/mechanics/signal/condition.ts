@@ -158,15 +158,24 @@ function conditionPlate(
   return { channel, force, flipped, dead, flatTop, unreadable }
 }
 
-/** The force of all plates together. */
-function totalOf(plates: readonly Plate[]): Float64Array {
+/** The force of all plates together, with its running sums. */
+function totalOf(plates: readonly Plate[]): { total: Float64Array; sums: RunningSums } {
   const first = plates[0].force
-  if (plates.length === 1) return first
+  if (plates.length === 1) return { total: first, sums: runningSums(first, 'sums of the total') }
   const second = plates[1].force
   const { length } = first
   const total = borrow('total', length)
-  for (let i = 0; i < length; i++) total[i] = first[i] + second[i]
-  return total
+  const sums = borrow('sums of the total', length + 1)
+  const reference = first[0] + second[0]
+  let sum = 0
+  sums[0] = 0
+  for (let i = 0; i < length; i++) {
+    const newton = first[i] + second[i]
+    total[i] = newton
+    sum += newton - reference
+    sums[i + 1] = sum
+  }
+  return { total, sums: { sums, reference, length } }
 }
 
 /**
@@ -200,8 +209,6 @@ export function conditionRecording(recording: Recording, settings: Settings): Co
     )
 
   const plates = channels.map((channel, i) => conditionPlate(channel, raws[i], settings))
-  const total = totalOf(plates)
   const unreadable = plates.reduce((sum, plate) => sum + plate.unreadable, 0)
-  const sums = runningSums(total, 'sums of the total')
-  return { signal: { sampleRateHz: rate, dt: 1 / rate, length, plates, total, sums, unreadable } }
+  return { signal: { sampleRateHz: rate, dt: 1 / rate, length, plates, ...totalOf(plates), unreadable } }
 }

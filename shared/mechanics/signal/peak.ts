@@ -13,7 +13,14 @@ export interface Peak {
 
 function extremeSample(force: Float64Array, from: number, to: number, sign: 1 | -1): number {
   let best = from
-  for (let i = from; i <= to; i++) if (sign * force[i] > sign * force[best]) best = i
+  let greatest = sign * force[from]
+  for (let i = from + 1; i <= to; i++) {
+    const value = sign * force[i]
+    if (value > greatest) {
+      greatest = value
+      best = i
+    }
+  }
   return best
 }
 
