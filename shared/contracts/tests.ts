@@ -1,7 +1,10 @@
 import { z } from 'zod'
+import { analysedProtocols } from '../mechanics/protocols/analysed.ts'
+import type { Protocol as AnyProtocol } from '../mechanics/types.ts'
 import { limits } from './limits.ts'
 
-export const Protocol = z.enum(['cmj'])
+/** The tests that are offered: those that the engine analyses. */
+export const Protocol = z.enum(analysedProtocols)
 export const Side = z.enum(['both', 'left', 'right'])
 export const Arms = z.enum(['hips', 'free'])
 
@@ -14,7 +17,27 @@ export const Test = z.strictObject({
 })
 export type Test = z.infer<typeof Test>
 
-export const protocolNames: Record<z.infer<typeof Protocol>, string> = { cmj: 'Countermovement jump' }
+export const protocolNames: Readonly<Record<AnyProtocol, string>> = {
+  cmj: 'Countermovement jump',
+  sj: 'Squat jump',
+  dj: 'Drop jump',
+  slcmj: 'Single-leg countermovement jump',
+  dropLanding: 'Drop landing',
+  hops: 'Repeated hops',
+}
+
+/** The sides on which a test is done, the usual one first. */
+export const protocolSides: Readonly<Record<AnyProtocol, readonly z.infer<typeof Side>[]>> = {
+  cmj: ['both'],
+  sj: ['both'],
+  dj: ['both'],
+  slcmj: ['left', 'right'],
+  dropLanding: ['both', 'left', 'right'],
+  hops: ['both'],
+}
+
+/** The tests that begin on a box. */
+export const protocolsFromBox: readonly AnyProtocol[] = ['dj', 'dropLanding']
 
 /** What makes two results comparable, as one stable text: `cmj/both/0kg/-/hips`. */
 export function testKey(test: Test): string {

@@ -16,9 +16,19 @@ const AsymmetryFigure = Figure.extend({
   larger: z.enum(['left', 'right']),
   zeroWithin: z.boolean().nullable(),
 })
-const Phase = z.enum(['unweighting', 'braking', 'propulsion', 'flight', 'landing', 'settling'])
+const Phase = z.enum([
+  'arrival',
+  'unweighting',
+  'braking',
+  'propulsion',
+  'contact',
+  'flight',
+  'landing',
+  'settling',
+])
 const EventName = z.enum([
   'onset',
+  'arrival',
   'minimumForce',
   'minimumVelocity',
   'zeroVelocity',
@@ -28,7 +38,17 @@ const EventName = z.enum([
   'landingZeroVelocity',
   'still',
 ])
-const MetricGroup = z.enum(['weighing', 'jump', 'impulse', 'push', 'flight', 'landing', 'sides', 'ledger'])
+const MetricGroup = z.enum([
+  'weighing',
+  'jump',
+  'impulse',
+  'push',
+  'contact',
+  'flight',
+  'landing',
+  'sides',
+  'ledger',
+])
 
 export const Analysis = z.strictObject({
   id: Id,

@@ -28,7 +28,8 @@ export interface Recording {
   notes: Note[]
 }
 
-export type Protocol = 'cmj'
+/** Countermovement, squat and drop jump, countermovement jump on one leg, landing from a box, repeated hops. */
+export type Protocol = 'cmj' | 'sj' | 'dj' | 'slcmj' | 'dropLanding' | 'hops'
 export type Side = 'both' | 'left' | 'right'
 export type Arms = 'hips' | 'free'
 
@@ -43,6 +44,7 @@ export interface Test {
 
 export type EventName =
   | 'onset'
+  | 'arrival'
   | 'minimumForce'
   | 'minimumVelocity'
   | 'zeroVelocity'
@@ -58,10 +60,12 @@ export interface EventTime {
   sample: number
 }
 
-export type Phase = 'unweighting' | 'braking' | 'propulsion' | 'flight' | 'landing' | 'settling'
+export type Phase =
+  'arrival' | 'unweighting' | 'braking' | 'propulsion' | 'contact' | 'flight' | 'landing' | 'settling'
 
 /** Metric groups: what a Trial check can take away. */
-export type MetricGroup = 'weighing' | 'jump' | 'impulse' | 'push' | 'flight' | 'landing' | 'sides' | 'ledger'
+export type MetricGroup =
+  'weighing' | 'jump' | 'impulse' | 'push' | 'contact' | 'flight' | 'landing' | 'sides' | 'ledger'
 
 /**
  * A figure with its expanded uncertainty for about 95 % (k · standard uncertainty, Student's t at the
@@ -119,12 +123,34 @@ export interface Sides {
   asymmetry: Record<string, AsymmetryFigure>
 }
 
+/** One contact between two flights, or between a drop and a flight. */
+export interface Contact {
+  touchdownS: number
+  takeoffS: number
+  /** s */
+  contactTime: Figure
+  /** Of the flight that follows, s. */
+  flightTime: Figure
+  /** g·t²/8 of the flight that follows, m. */
+  height: Figure
+  /** Height over contact time, m/s. */
+  rsi: Figure
+  /** Flight time over contact time. */
+  rsiFlightContact: Figure
+  /** N */
+  peakForce: Figure
+  /** Whether the published rule takes it into the score. */
+  counted: boolean
+}
+
 /** Everything the engine says of one trial. Times are seconds from the recording's first sample. */
 export interface TrialAnalysis {
   test: Test
   startS: number
   endS: number
   events: Partial<Record<EventName, EventTime>>
+  /** Of a drop jump or of hops; absent where the test has none. */
+  contacts?: Contact[]
   /** By metric key of the catalogue, in the catalogue's SI unit. */
   metrics: Record<string, Figure>
   /** null with one plate */

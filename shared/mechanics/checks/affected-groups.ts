@@ -6,6 +6,7 @@ export const allGroups: MetricGroup[] = [
   'jump',
   'impulse',
   'push',
+  'contact',
   'flight',
   'landing',
   'sides',

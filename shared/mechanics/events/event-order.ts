@@ -3,6 +3,7 @@ import type { EventName } from '../types.ts'
 /** The events of a trial in the order in which they come. */
 export const eventOrder = [
   'onset',
+  'arrival',
   'minimumForce',
   'minimumVelocity',
   'zeroVelocity',

@@ -20,7 +20,7 @@ export interface Weighing {
 }
 
 /** Start of the window of `width` samples within [from, to) whose samples spread least. */
-function steadiestWindow(force: Float64Array, from: number, to: number, width: number): number {
+export function steadiestWindow(force: Float64Array, from: number, to: number, width: number): number {
   const reference = force[from]
   let sum = 0
   let squares = 0
@@ -46,7 +46,7 @@ function steadiestWindow(force: Float64Array, from: number, to: number, width: n
 }
 
 /** Widens the window by blocks while their means stay at the weight. */
-function quietAround(
+export function quietAround(
   sums: RunningSums,
   window: Stretch,
   limits: Stretch,

@@ -1,4 +1,4 @@
-import type { AnalyseOptions, EventTime, Figure, Note, Recording, Test, TrialAnalysis } from '../types.ts'
+import type { EventTime, Figure, Note, TrialAnalysis } from '../types.ts'
 import { catalogue } from '../catalogue.ts'
 import { jumpChecks, deadPlateCheck } from '../checks/jump-checks.ts'
 import { feetChecks } from '../checks/feet-checks.ts'
@@ -18,8 +18,7 @@ import { pushFigures } from '../metrics/push.ts'
 import { pushForceFigures } from '../metrics/push-forces.ts'
 import { findFeet, lagFigures, sidesOf, type Foot } from '../metrics/sides.ts'
 import { restToRestFigures, weighingFigures } from '../metrics/weighing.ts'
-import type { Settings } from '../settings.ts'
-import type { Signal } from '../signal/condition.ts'
+import type { NoTrial, TrialInput } from './protocol.ts'
 
 /** The flight to analyse: the first one, or a takeoff after which the athlete did not come back in time. */
 function chooseFlight(unloaded: Unloaded): { flight: Stretch; landed: boolean } | null {
@@ -91,18 +90,9 @@ function sortOut(model: JumpModel, outcomes: Measured) {
   return { metrics, missing, notes }
 }
 
-/** Why nothing can be said of a recording as a countermovement jump. */
-export type NoTrial = Note
-
-/** Analyses a recording as one countermovement jump with its landing. */
-export function analyseCmj(
-  recording: Recording,
-  recorded: Signal,
-  unloaded: Unloaded,
-  test: Test,
-  options: AnalyseOptions,
-  settings: Settings,
-): TrialAnalysis | NoTrial {
+/** Analyses a countermovement jump with its landing. */
+export function analyseCmj(input: TrialInput): TrialAnalysis | NoTrial {
+  const { recording, signal: recorded, unloaded, test, options, settings } = input
   const chosen = chooseFlight(unloaded)
   if (!chosen)
     return { code: 'no-trial-found', sentence: 'No takeoff was found: the plates were loaded all along.' }

@@ -3,6 +3,7 @@ import type { EventName, MetricGroup, Phase } from '../../../shared/mechanics/ty
 /** The events of a trial in the order in which they come, as screens name them. */
 export const eventWords: Record<EventName, string> = {
   onset: 'onset',
+  arrival: 'arrival',
   minimumForce: 'least force',
   minimumVelocity: 'fastest down',
   zeroVelocity: 'lowest',
@@ -17,9 +18,11 @@ export const eventWords: Record<EventName, string> = {
 export const tracedEvents: readonly EventName[] = ['onset', 'zeroVelocity', 'takeoff', 'touchdown', 'still']
 
 export const phaseWords: Record<Phase, string> = {
+  arrival: 'Arrival',
   unweighting: 'Unweighting',
   braking: 'Braking',
   propulsion: 'Propulsion',
+  contact: 'Contact',
   flight: 'Flight',
   landing: 'Landing',
   settling: 'Settling',
@@ -29,6 +32,7 @@ export const phaseWords: Record<Phase, string> = {
 export const groupWords: Record<MetricGroup, string> = {
   jump: 'Jump',
   push: 'Push',
+  contact: 'Contact',
   flight: 'Flight',
   landing: 'Landing',
   impulse: 'Impulse',
