@@ -13,7 +13,7 @@ import {
   type Placed,
 } from './turning-points.ts'
 import type { Stretch } from './unloaded.ts'
-import { weigh, type Weighing } from './weighing.ts'
+import { chooseWindow, staysChosen, weighIn, type Weighing } from './weighing.ts'
 import type { Zero, ZeroedSignal } from './zero.ts'
 
 /** The events of a countermovement jump and its landing, in samples; `null` where the record does not hold one. */
@@ -78,23 +78,23 @@ function placeCrossing(search: JumpSearch, name: 'takeoff' | 'touchdown'): Cross
 /** Weighs and finds the onset; weighs again before it where the first weighing ran into the movement. */
 function weighBeforeOnset(search: JumpSearch, takeoff: number): { weighing: Weighing; onset: Onset } | null {
   const { signal, zero, start, gravity, settings } = search
-  const { sums } = signal
+  const { total, sums, dt } = signal
   const attempt = (to: number) => {
-    const weighing = weigh(signal.total, sums, { from: start, to }, gravity, zero.total, signal.dt, settings)
-    if (!weighing || !(weighing.systemWeight > settings.smallestLoadN)) return null
+    const chosen = chooseWindow(total, sums, { from: start, to }, dt, settings)
+    if (!chosen || !(chosen.systemWeight > settings.smallestLoadN)) return null
     const limits = { earliest: start, takeoff: Math.floor(takeoff) }
-    return {
-      weighing,
-      onset: findOnset(signal.total, sums, weighing, limits, zero.total, signal.dt, settings),
-    }
+    return { chosen, to, onset: findOnset(total, sums, chosen, limits, zero.total, dt, settings) }
   }
   const first = attempt(Math.floor(takeoff))
   if (!first) return null
-  const again = attempt(Math.floor(first.onset.position))
-  const result = again ?? first
+  const end = Math.floor(first.onset.position)
+  const last = staysChosen(first.chosen, end, dt, settings) ? { ...first, to: end } : (attempt(end) ?? first)
+  const limits = { from: start, to: last.to }
   const position = movedTo(search, 'onset')
-  if (position !== null) result.onset = { ...result.onset, position, positionU: movedU }
-  return result
+  return {
+    weighing: weighIn(last.chosen, sums, limits, gravity, zero.total, dt, settings),
+    onset: position === null ? last.onset : { ...last.onset, position, positionU: movedU },
+  }
 }
 
 function placePushEvents(search: JumpSearch, motion: Motion, onset: number, takeoff: number) {

@@ -2,7 +2,7 @@ import type { Settings } from '../settings.ts'
 import { fitParabola, parabolaCrossing, parabolaNoiseAt, parabolaSlopeAt } from '../signal/local-parabola.ts'
 import type { Noise } from '../signal/noise.ts'
 import { meanAround, type RunningSums } from '../signal/running-mean.ts'
-import type { Weighing } from './weighing.ts'
+import type { WeighingWindow } from './weighing.ts'
 
 /** The beginning of the movement. */
 export interface Onset {
@@ -38,9 +38,20 @@ function firstGrossDeviation(
   gross: number,
   gap: number,
 ): number {
+  const { sums, weight, half } = search
+  const { sums: running, reference, length } = sums
+  // Inside the record the running mean is one subtraction; a jump's search seldom comes near the ends.
+  const width = 2 * half + 1
+  const target = (weight - reference) * width
+  const asked = gross * width
   let first = takeoff
-  for (let i = takeoff; i >= earliest && first - i <= gap; i--)
-    if (Math.abs(deviation(search, i)) >= gross) first = i
+  for (let i = takeoff; i >= earliest && first - i <= gap; i--) {
+    const inside = i >= half && i + half < length
+    const distance = inside
+      ? running[i + half + 1] - running[i - half] - target
+      : deviation(search, i) * width
+    if (distance >= asked || distance <= -asked) first = i
+  }
   return first
 }
 
@@ -75,7 +86,7 @@ function wayToGross(search: Search, crossing: number, latest: number, gross: num
 export function findOnset(
   force: Float64Array,
   sums: RunningSums,
-  weighing: Weighing,
+  weighing: WeighingWindow,
   limits: { earliest: number; takeoff: number },
   noise: Noise,
   dt: number,

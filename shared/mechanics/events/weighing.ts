@@ -3,14 +3,18 @@ import { effectiveSamples, estimateNoise, type Noise } from '../signal/noise.ts'
 import { meanOver, type RunningSums } from '../signal/running-mean.ts'
 import type { Stretch } from './unloaded.ts'
 
-/** The weighing: what the quiet stance before the jump says of the weight. */
-export interface Weighing {
+/** The stretch that is weighed in. */
+export interface WeighingWindow {
   window: Stretch
-  /** Quiet stance around the window, up to the movement. */
-  stance: Stretch
   systemWeight: number
   /** SD of the samples in the window, N. */
   spread: number
+}
+
+/** The weighing: what the quiet stance before the jump says of the weight. */
+export interface Weighing extends WeighingWindow {
+  /** Quiet stance around the window, up to the movement. */
+  stance: Stretch
   /** Standard error of the mean from noise, N, and its degrees of freedom. */
   noiseU: number
   noiseDof: number
@@ -99,28 +103,44 @@ function paidBack(blocks: Float64Array, noise: Noise, settings: Settings): numbe
 /** Shorter windows that are tried, as parts of the full one, where no full one is steady. */
 const shorter = [1, 0.75, 0.5, 0.35, 0.25]
 
+function unrestOf({ spread, systemWeight }: WeighingWindow): number {
+  return spread / Math.abs(systemWeight)
+}
+
+/** Whether a search that ends at `to` would choose the same window: it is steady, and lies before. */
+export function staysChosen(chosen: WeighingWindow, to: number, dt: number, settings: Settings): boolean {
+  const { window } = chosen
+  const isFull = window.to - window.from === Math.round(settings.weighingWindowS / dt)
+  return isFull && window.to <= to && unrestOf(chosen) <= settings.steadinessCaution
+}
+
 /** The steadiest window of full length, or the longest shorter one that is steady; `null` if all are too short. */
-function chooseWindow(
+export function chooseWindow(
   force: Float64Array,
   sums: RunningSums,
   limits: Stretch,
   dt: number,
   settings: Settings,
-): Stretch | null {
+): WeighingWindow | null {
   const full = Math.round(settings.weighingWindowS / dt)
   const shortest = Math.max(8, settings.shortestWeighingS / dt)
   const available = limits.to - limits.from
-  let steadiest: Stretch | null = null
+  let steadiest: WeighingWindow | null = null
   let least = Infinity
   for (const part of shorter) {
     const width = Math.min(available, Math.round(part * full))
     if (width < shortest) break
     const from = steadiestWindow(force, limits.from, limits.to, width)
     const window = { from, to: from + width }
-    const unrest = spreadOf(force, window) / Math.abs(meanOver(sums, window.from, window.to))
-    if (unrest <= settings.steadinessCaution) return window
+    const chosen = {
+      window,
+      systemWeight: meanOver(sums, from, from + width),
+      spread: spreadOf(force, window),
+    }
+    const unrest = unrestOf(chosen)
+    if (unrest <= settings.steadinessCaution) return chosen
     if (unrest < 0.5 * least) {
-      steadiest = window
+      steadiest = chosen
       least = unrest
     }
   }
@@ -141,10 +161,22 @@ export function weigh(
   dt: number,
   settings: Settings,
 ): Weighing | null {
-  const window = chooseWindow(force, sums, limits, dt, settings)
-  if (!window) return null
+  const chosen = chooseWindow(force, sums, limits, dt, settings)
+  return chosen && weighIn(chosen, sums, limits, gravity, plateNoise, dt, settings)
+}
+
+/** The weighing in a window that was chosen already. */
+export function weighIn(
+  chosen: WeighingWindow,
+  sums: RunningSums,
+  limits: Stretch,
+  gravity: number,
+  plateNoise: Noise,
+  dt: number,
+  settings: Settings,
+): Weighing {
+  const { window, systemWeight } = chosen
   const width = window.to - window.from
-  const systemWeight = meanOver(sums, window.from, window.to)
   const block = Math.max(1, Math.round(settings.noiseBlockS / dt))
   const band = settings.onsetFraction * Math.abs(systemWeight)
   const stance = quietAround(sums, window, limits, systemWeight, band, 4 * block)
@@ -171,5 +203,5 @@ export function weigh(
     swayU = Math.sqrt(Math.max(0, spread * spread - noiseU * noiseU))
     swayDof = means.length - 1
   }
-  return { window, stance, systemWeight, spread: spreadOf(force, window), noiseU, noiseDof, swayU, swayDof }
+  return { ...chosen, stance, noiseU, noiseDof, swayU, swayDof }
 }
