@@ -164,7 +164,8 @@ describe('a recording without a trial comes back empty, with the reason', () => 
 
 describe('a flawed recording is kept, and the failed check takes away what it spoils', () => {
   it('several flights without quiet stance between them: everything but the weighing', () => {
-    const again = (force: Float64Array) => Float64Array.of(...force.subarray(0, 2700), ...force.subarray(1300))
+    const again = (force: Float64Array) =>
+      Float64Array.of(...force.subarray(0, 2700), ...force.subarray(1300))
     const trial = trialOf(recordingOf({ left: again(left), right: again(right) }))
     expect(failed(trial)).toContain('one-takeoff')
     expect(takenAway(trial, 'jump') && takenAway(trial, 'landing')).toBe(true)

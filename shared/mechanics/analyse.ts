@@ -1,5 +1,4 @@
 import { findUnloaded, type Stretch } from './events/unloaded.ts'
-import { isAnalysed } from './protocols/analysed.ts'
 import type { NoTrial } from './protocols/protocol.ts'
 import { protocolTable } from './protocols/table.ts'
 import { defaultSettings, type Settings } from './settings.ts'
@@ -49,9 +48,10 @@ function analyseTrial(
   settings: Settings,
 ): TrialAnalysis | NoTrial {
   const test = options.test ?? proposed
-  if (!isAnalysed(test.protocol))
+  const analyseAs = protocolTable[test.protocol]
+  if (!analyseAs)
     return { code: 'test-unknown', sentence: `The engine does not analyse the test “${test.protocol}”.` }
-  return protocolTable[test.protocol]({ recording, signal, unloaded, test, options, settings })
+  return analyseAs({ recording, signal, unloaded, test, options, settings })
 }
 
 function analyseAll(recording: Recording, options: AnalyseOptions, settings: Settings) {
