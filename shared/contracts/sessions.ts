@@ -60,7 +60,7 @@ export const changeSession = endpoint({
   path: '/api/sessions/:sessionId',
   access: measuringRoles,
   params: SessionParams,
-  body: SessionForm.partial().omit({ squadIds: true, protocol: true }).extend({ version: Version }),
+  body: SessionForm.partial().omit({ protocol: true }).extend({ version: Version }),
   response: SessionSummary,
 })
 
@@ -100,7 +100,11 @@ export const SheetAthlete = z.strictObject({
 
 /** The Session sheet: every athlete of the session, every trial, the Tray, every upload. */
 export const SessionSheet = z.strictObject({
-  session: SessionSummary.extend({ note: z.string().nullable(), publishedByName: z.string().nullable() }),
+  session: SessionSummary.extend({
+    note: z.string().nullable(),
+    squadIds: z.array(Id),
+    publishedByName: z.string().nullable(),
+  }),
   athletes: z.array(SheetAthlete),
   trials: z.array(SheetTrial),
   uploads: z.array(Upload),

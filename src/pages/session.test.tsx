@@ -49,7 +49,7 @@ function serve(sheet: SessionSheet) {
     answer(listSquads, () => ({ squads: [] })),
     answer(listSessions, () => {
       kept.listReads++
-      const { note: _note, publishedByName: _by, ...session } = kept.sheet.session
+      const { note: _note, squadIds: _squads, publishedByName: _by, ...session } = kept.sheet.session
       const inTray = kept.sheet.trials.filter((trial) => trial.athleteId === null).length
       return { sessions: [{ ...session, inTray }], page: 1, pages: 1, total: 1 }
     }),
@@ -361,6 +361,7 @@ describe('the Session sheet', () => {
         session: {
           ...aSession({ publishedAt: '2026-11-12T17:00:00.000Z' }),
           note: null,
+          squadIds: [],
           publishedByName: null,
         },
         changedSincePublished: true,

@@ -156,4 +156,43 @@ describe('editing a session', () => {
     await router.navigate('/sessions')
     expect(await screen.findByRole('link', { name: 'Winter jumps' })).toBeVisible()
   })
+
+  test('brings a squad in and takes one out, and says who leaves the sheet', async () => {
+    serve(['November jumps'])
+    const changed: unknown[] = []
+    server.use(
+      answer(listSquads, () => ({ squads: [...squads, aSquad(3, { name: 'Juniors' })] })),
+      answer(getSession, () => aSheet()),
+      answer(changeSession, ({ body }) => {
+        changed.push(body.squadIds)
+        return aSession({ version: 2 })
+      }),
+    )
+    const { user } = renderApp(`/sessions/${idOf('session', 1)}`, aMe(['coach']))
+    await user.click(await screen.findByRole('button', { name: 'Edit' }))
+    const dialog = screen.getByRole('dialog', { name: 'Edit the session' })
+    expect(await within(dialog).findByLabelText('Senior squad')).toBeChecked()
+    expect(within(dialog).queryByLabelText(/^Old/)).not.toBeInTheDocument()
+    expect(dialog).toHaveTextContent(
+      'Athletes of a squad that you take out leave the sheet, unless they have trials on it.',
+    )
+    await user.click(within(dialog).getByLabelText('Senior squad'))
+    await user.click(within(dialog).getByRole('button', { name: 'Save' }))
+    expect(await within(dialog).findByText('Choose at least one squad')).toBeVisible()
+    await user.click(within(dialog).getByLabelText('Juniors'))
+    await user.click(within(dialog).getByRole('button', { name: 'Save' }))
+    await waitFor(() => expect(dialog).not.toBeInTheDocument())
+    expect(changed).toEqual([[idOf('squad', 3)]])
+  })
+
+  test('keeps a squad that was archived since', async () => {
+    serve(['November jumps'])
+    const sheet = aSheet()
+    server.use(
+      answer(getSession, () => ({ ...sheet, session: { ...sheet.session, squadIds: [idOf('squad', 2)] } })),
+    )
+    const { user } = renderApp(`/sessions/${idOf('session', 1)}`, aMe(['coach']))
+    await user.click(await screen.findByRole('button', { name: 'Edit' }))
+    expect(await screen.findByLabelText('Old (archived)')).toBeChecked()
+  })
 })

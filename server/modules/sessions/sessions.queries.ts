@@ -1,8 +1,7 @@
-import { and, asc, count, desc, eq, inArray, isNull, sql, type SQL } from 'drizzle-orm'
+import { and, asc, count, desc, eq, sql, type SQL } from 'drizzle-orm'
 import type { SessionSummary } from '../../../shared/contracts/sessions.ts'
 import type { Tx } from '../../db/database.ts'
-import { athletes, squadMembers, squads } from '../../db/schema/people-of-club.ts'
-import { sessionAthletes, sessions, sessionSquads } from '../../db/schema/sessions.ts'
+import { sessions } from '../../db/schema/sessions.ts'
 
 const ofSession = (clubId: string, sessionId: string) =>
   and(eq(sessions.clubId, clubId), eq(sessions.id, sessionId))
@@ -92,45 +91,14 @@ export async function findSession(tx: Tx, clubId: string, sessionId: string): Pr
   return row ?? null
 }
 
-/** How many of these squads the club has and has not archived. */
-export async function countSquads(tx: Tx, clubId: string, squadIds: string[]): Promise<number> {
-  const [{ n }] = await tx
-    .select({ n: count() })
-    .from(squads)
-    .where(and(eq(squads.clubId, clubId), inArray(squads.id, squadIds), isNull(squads.archivedAt)))
-  return n
-}
-
 export type NewSession = Pick<
   typeof sessions.$inferInsert,
   'clubId' | 'date' | 'title' | 'place' | 'note' | 'protocol' | 'createdBy'
 >
 
-/** A session with all athletes that its squads have today. */
-export async function insertSession(tx: Tx, session: NewSession, squadIds: string[]): Promise<string> {
-  const { clubId } = session
-  const [{ id: sessionId }] = await tx.insert(sessions).values(session).returning({ id: sessions.id })
-  await tx.insert(sessionSquads).values(squadIds.map((squadId) => ({ clubId, sessionId, squadId })))
-  const members = await tx
-    .selectDistinct({ athleteId: athletes.id })
-    .from(squadMembers)
-    .innerJoin(
-      athletes,
-      and(eq(athletes.clubId, squadMembers.clubId), eq(athletes.id, squadMembers.athleteId)),
-    )
-    .where(
-      and(
-        eq(squadMembers.clubId, clubId),
-        inArray(squadMembers.squadId, squadIds),
-        isNull(athletes.archivedAt),
-      ),
-    )
-  if (members.length > 0) {
-    await tx
-      .insert(sessionAthletes)
-      .values(members.map(({ athleteId }) => ({ clubId, sessionId, athleteId })))
-  }
-  return sessionId
+export async function insertSession(tx: Tx, session: NewSession): Promise<string> {
+  const [{ id }] = await tx.insert(sessions).values(session).returning({ id: sessions.id })
+  return id
 }
 
 /** Changes the session if it still is of that version; false if not. */
@@ -145,17 +113,4 @@ export async function updateSession(
     .where(and(ofSession(clubId, sessionId), eq(sessions.version, version)))
     .returning({ id: sessions.id })
   return changed.length > 0
-}
-
-/** The athletes of a session by name. */
-export function athletesOfSession(tx: Tx, clubId: string, sessionId: string) {
-  return tx
-    .select({ id: athletes.id, name: athletes.name, nameKey: athletes.nameKey })
-    .from(sessionAthletes)
-    .innerJoin(
-      athletes,
-      and(eq(athletes.clubId, sessionAthletes.clubId), eq(athletes.id, sessionAthletes.athleteId)),
-    )
-    .where(and(eq(sessionAthletes.clubId, clubId), eq(sessionAthletes.sessionId, sessionId)))
-    .orderBy(asc(athletes.nameKey), asc(athletes.id))
 }

@@ -16,9 +16,15 @@ import { redate } from '../results/results.service.ts'
 import type { Candidate } from '../trials/match-athlete.ts'
 import { squadMissing } from './sessions.errors.ts'
 import {
+  addSquads,
   athletesOfSession,
-  countSessions,
   countSquads,
+  lockSessionAthletes,
+  removeSquads,
+  squadIdsOfSession,
+} from './session-squads.queries.ts'
+import {
+  countSessions,
   findSession,
   findSummaries,
   findSummary,
@@ -50,9 +56,9 @@ export async function create(
 ): Promise<SessionSummary> {
   const chosen = [...new Set(squadIds)]
   return deps.db.inClub(ctx, async (tx) => {
-    if ((await countSquads(tx, ctx.clubId, chosen)) !== chosen.length) throw squadMissing()
-    const session = { ...form, clubId: ctx.clubId, createdBy: ctx.personId }
-    const sessionId = await insertSession(tx, session, chosen)
+    await requireSquads(tx, ctx.clubId, chosen)
+    const sessionId = await insertSession(tx, { ...form, clubId: ctx.clubId, createdBy: ctx.personId })
+    await addSquads(tx, ctx.clubId, sessionId, chosen)
     await record(tx, ctx, 'session.create', 'session', sessionId)
     return requireSummary(tx, ctx, sessionId)
   })
@@ -62,12 +68,14 @@ export async function change(
   deps: Deps,
   ctx: Caller,
   sessionId: string,
-  { version, ...form }: BodyOf<typeof changeSession>,
+  { version, squadIds, ...form }: BodyOf<typeof changeSession>,
 ): Promise<SessionSummary> {
   return deps.db.inClub(ctx, async (tx) => {
+    if (squadIds) await lockSessionAthletes(tx, ctx.clubId, sessionId, 'alone')
     const changed = await updateSession(tx, { clubId: ctx.clubId, sessionId, version }, form)
+    if (!changed) throw staleVersion(await requireSummary(tx, ctx, sessionId))
+    if (squadIds) await changeSquads(tx, ctx.clubId, sessionId, squadIds)
     const session = await requireSummary(tx, ctx, sessionId)
-    if (!changed) throw staleVersion(session)
     if (form.date) await redate(tx, ctx, sessionId, form.date)
     await record(tx, ctx, 'session.change', 'session', sessionId)
     await notify(
@@ -78,6 +86,20 @@ export async function change(
     )
     return session
   })
+}
+
+/** Squads that stay are left as they are: their athletes are those of the day they came. */
+async function changeSquads(tx: Tx, clubId: string, sessionId: string, wanted: string[]): Promise<void> {
+  const there = await squadIdsOfSession(tx, clubId, sessionId)
+  const coming = [...new Set(wanted)].filter((id) => !there.includes(id))
+  await requireSquads(tx, clubId, coming)
+  await addSquads(tx, clubId, sessionId, coming)
+  const going = there.filter((id) => !wanted.includes(id))
+  await removeSquads(tx, clubId, sessionId, going)
+}
+
+async function requireSquads(tx: Tx, clubId: string, squadIds: string[]): Promise<void> {
+  if ((await countSquads(tx, clubId, squadIds)) !== squadIds.length) throw squadMissing()
 }
 
 export async function requireSummary(tx: Tx, ctx: ClubContext, sessionId: string): Promise<SessionSummary> {
@@ -92,12 +114,13 @@ export async function requireSession(tx: Tx, ctx: ClubContext, sessionId: string
   return session
 }
 
-/** What a recording of the session is read as, and whom its file name may name. */
+/** What a recording of the session is read as, and whom it may be of: they stay until the transaction ends. */
 export async function candidatesOf(
   tx: Tx,
   clubId: string,
   sessionId: string,
 ): Promise<{ protocol: string; candidates: Candidate[] }> {
+  await lockSessionAthletes(tx, clubId, sessionId, 'share')
   const session = await findSession(tx, clubId, sessionId)
   if (!session) throw new Error('The session of an upload is gone.')
   return { protocol: session.protocol, candidates: await athletesOfSession(tx, clubId, sessionId) }

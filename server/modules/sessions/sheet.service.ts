@@ -6,7 +6,7 @@ import { trialsOfSession } from '../trials/trials.service.ts'
 import { uploadsOfSession } from '../uploads/uploads.service.ts'
 import { lastPublisher } from './publications.queries.ts'
 import { wouldChange } from './publish.service.ts'
-import { athletesOfSession } from './sessions.queries.ts'
+import { athletesOfSession, squadIdsOfSession } from './session-squads.queries.ts'
 import { requireSession, requireSummary } from './sessions.service.ts'
 
 /** The Session sheet: everything of a session in one answer, as one moment. */
@@ -18,7 +18,12 @@ export function sheet(deps: Deps, ctx: Caller, sessionId: string): Promise<Sessi
     const means = await meansOfSession(tx, ctx, sessionId)
     const athletes = await athletesOfSession(tx, clubId, sessionId)
     return {
-      session: { ...summary, note, publishedByName: await lastPublisher(tx, clubId, sessionId) },
+      session: {
+        ...summary,
+        note,
+        squadIds: await squadIdsOfSession(tx, clubId, sessionId),
+        publishedByName: await lastPublisher(tx, clubId, sessionId),
+      },
       athletes: athletes.map(({ id, name }) => ({ athleteId: id, name, means: means.get(id) ?? {} })),
       trials: await trialsOfSession(tx, clubId, sessionId),
       uploads: await uploadsOfSession(tx, clubId, sessionId),

@@ -1,18 +1,21 @@
 import { zodResolver } from '@hookform/resolvers/zod'
-import { useForm } from 'react-hook-form'
+import { Controller, useForm } from 'react-hook-form'
 import { SessionForm, type SessionSheet } from '../../../shared/contracts/sessions.ts'
 import { useChangeSession } from '../../api/sessions/change-session.ts'
+import { useSquads } from '../../api/squads/list-squads.ts'
 import { useAnnounce } from '../../components/announcer.tsx'
 import { Button } from '../../components/button.tsx'
 import { Dialog } from '../../components/dialog.tsx'
 import { TextAreaField, TextField } from '../../components/field.tsx'
 import { FormError } from '../../components/form-error.tsx'
+import { QueryState } from '../../components/query-state.tsx'
 import { placeFieldErrors } from '../../lib/server-field-errors.ts'
+import { SquadTicks } from './squad-ticks.tsx'
 
-const EditForm = SessionForm.omit({ squadIds: true, protocol: true })
+const EditForm = SessionForm.omit({ protocol: true })
 const orNull = (typed: string | null) => typed?.trim() || null
 
-/** Date, title, place and note of a session. */
+/** Date, title, place, squads and note of a session. */
 export function EditSessionDialog({
   session,
   onClose,
@@ -20,8 +23,12 @@ export function EditSessionDialog({
   session: SessionSheet['session']
   onClose: () => void
 }) {
-  const { title, date, place, note } = session
-  const form = useForm({ resolver: zodResolver(EditForm), defaultValues: { title, date, place, note } })
+  const { title, date, place, note, squadIds } = session
+  const form = useForm({
+    resolver: zodResolver(EditForm),
+    defaultValues: { title, date, place, note, squadIds },
+  })
+  const squads = useSquads()
   const { errors, isDirty } = form.formState
   const announce = useAnnounce()
   const change = useChangeSession(() => {
@@ -53,6 +60,23 @@ export function EditSessionDialog({
             {...form.register('place', { setValueAs: orNull })}
           />
         </div>
+        <QueryState query={squads} what="the squads">
+          {(all) => (
+            <Controller
+              control={form.control}
+              name="squadIds"
+              render={({ field }) => (
+                <SquadTicks
+                  hint="Athletes of a squad that you take out leave the sheet, unless they have trials on it."
+                  squads={all.filter(({ id, archived }) => !archived || squadIds.includes(id))}
+                  chosen={field.value}
+                  onChange={field.onChange}
+                  error={errors.squadIds?.message}
+                />
+              )}
+            />
+          )}
+        </QueryState>
         <TextAreaField
           label="Note (may be left empty)"
           error={errors.note?.message}

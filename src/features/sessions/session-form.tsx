@@ -9,10 +9,9 @@ import { ErrorSummary } from '../../components/error-summary.tsx'
 import { SelectField, TextAreaField, TextField } from '../../components/field.tsx'
 import { FormError } from '../../components/form-error.tsx'
 import { LeaveGuard } from '../../components/leave-guard.tsx'
-import { TickList } from '../../components/tick-list.tsx'
-import { countOf } from '../../lib/count-of.ts'
 import { placeFieldErrors } from '../../lib/server-field-errors.ts'
 import { useFormError } from '../../lib/use-form-error.ts'
+import { SquadTicks } from './squad-ticks.tsx'
 
 export type SessionValues = z.infer<typeof SessionSchema>
 
@@ -83,15 +82,9 @@ export function SessionForm({ values, squads, onSave }: Props) {
         control={form.control}
         name="squadIds"
         render={({ field }) => (
-          <TickList
-            label={labels.squadIds}
+          <SquadTicks
             hint="Their athletes stand on the sheet from the start."
-            items={squads.map((squad) => ({
-              id: squad.id,
-              words: squad.name,
-              hint: countOf(squad.athleteIds.length, squad.athleteIds.length, 'athlete'),
-            }))}
-            none="The club has no squads yet: make one first, under Squads."
+            squads={squads}
             chosen={field.value}
             onChange={field.onChange}
             error={errors.squadIds?.message}

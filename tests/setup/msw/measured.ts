@@ -150,7 +150,7 @@ export function aSession(change: Partial<SessionSummary> = {}): SessionSummary {
 export function aSheet(change: Partial<SessionSheet> = {}): SessionSheet {
   const mara = idOf('athlete', 1)
   return {
-    session: { ...aSession(), note: null, publishedByName: null },
+    session: { ...aSession(), note: null, squadIds: [idOf('squad', 1)], publishedByName: null },
     athletes: [
       {
         athleteId: mara,
