@@ -2,14 +2,46 @@ import type { Figure } from '../types.ts'
 import { studentT } from '../../statistics/distributions/student-t.ts'
 
 /**
- * A value with what each input quantity contributes to its standard uncertainty: `parts[i]` is the sensitivity
- * to input i times the standard uncertainty of input i (GUM, JCGM 100:2008, 5.1), sign kept, so that two
- * quantities that share an input stay correlated through sums, products and quotients. Inputs beyond the end of
- * `parts` contribute nothing.
+ * A value with what the input quantities contribute to its standard uncertainty: `parts[j]` is the sensitivity to
+ * input `inputs[j]` times the standard uncertainty of that input (GUM, JCGM 100:2008, 5.1), sign kept, so that two
+ * quantities that share an input stay correlated through sums, products and quotients. Inputs that are not named
+ * contribute nothing.
  */
 export interface Quantity {
   readonly value: number
-  readonly parts: Float64Array
+  readonly inputs: readonly number[]
+  readonly parts: readonly number[]
+}
+
+const noParts: readonly number[] = []
+
+/** Sums of the parts by input while a quantity is put together; zero again after each. */
+let sums = new Float64Array(256)
+/** The inputs met so far, each once. */
+const met: number[] = []
+
+function scatter(coefficient: number, { inputs, parts }: Quantity): void {
+  for (let j = 0; j < inputs.length; j++) {
+    const i = inputs[j]
+    // A part that cancelled to zero may be met twice; its second gathering finds nothing and adds nothing.
+    if (sums[i] === 0) met.push(i)
+    sums[i] += coefficient * parts[j]
+  }
+}
+
+function gather(value: number): Quantity {
+  const inputs: number[] = []
+  const parts: number[] = []
+  for (let j = 0; j < met.length; j++) {
+    const i = met[j]
+    const part = sums[i]
+    if (part === 0) continue
+    inputs.push(i)
+    parts.push(part)
+    sums[i] = 0
+  }
+  met.length = 0
+  return { value, inputs, parts }
 }
 
 /** An independent input quantity of the budget. */
@@ -23,7 +55,6 @@ interface Input {
 export class Budget {
   readonly on: boolean
   private readonly inputs: Input[] = []
-  private readonly nothing = new Float64Array(0)
   private readonly coverage: number
   /** Coverage factor where nothing is statistical. */
   private readonly normal: number
@@ -35,43 +66,30 @@ export class Budget {
   }
 
   exact(value: number): Quantity {
-    return { value, parts: this.nothing }
+    return { value, inputs: noParts, parts: noParts }
   }
 
   /** A new independent input with standard uncertainty `u` in the unit of `value`. */
   input(value: number, u: number, dof = Infinity, common = false): Quantity {
     if (!this.on) return this.exact(value)
-    const parts = new Float64Array(this.inputs.length + 1)
-    parts[this.inputs.length] = u
-    this.inputs.push({ dof, common })
-    return { value, parts }
+    const index = this.inputs.push({ dof, common }) - 1
+    if (index >= sums.length) sums = new Float64Array(2 * sums.length)
+    return { value, inputs: [index], parts: [u] }
   }
 
   /** Σ coefficientᵢ · quantityᵢ in the parts, with the value as it was measured. */
   linear(value: number, terms: readonly (readonly [coefficient: number, quantity: Quantity])[]): Quantity {
     if (!this.on) return this.exact(value)
-    let length = 0
-    for (let t = 0; t < terms.length; t++) length = Math.max(length, terms[t][1].parts.length)
-    const parts = new Float64Array(length)
-    for (let t = 0; t < terms.length; t++) {
-      const coefficient = terms[t][0]
-      const from = terms[t][1].parts
-      for (let i = 0; i < from.length; i++) parts[i] += coefficient * from[i]
-    }
-    return { value, parts }
+    for (let t = 0; t < terms.length; t++) scatter(terms[t][0], terms[t][1])
+    return gather(value)
   }
 
   /** The same for two quantities. */
   pair(value: number, ofA: number, a: Quantity, ofB: number, b: Quantity): Quantity {
     if (!this.on) return this.exact(value)
-    const long = a.parts.length >= b.parts.length
-    const [ofLonger, longer, ofShorter, shorter] = long
-      ? [ofA, a.parts, ofB, b.parts]
-      : [ofB, b.parts, ofA, a.parts]
-    const parts = new Float64Array(longer.length)
-    for (let i = 0; i < longer.length; i++) parts[i] = ofLonger * longer[i]
-    for (let i = 0; i < shorter.length; i++) parts[i] += ofShorter * shorter[i]
-    return { value, parts }
+    scatter(ofA, a)
+    scatter(ofB, b)
+    return gather(value)
   }
 
   plus(a: Quantity, b: Quantity): Quantity {
@@ -93,17 +111,17 @@ export class Budget {
 
   scaled(a: Quantity, factor: number): Quantity {
     if (!this.on) return this.exact(a.value * factor)
-    return { value: a.value * factor, parts: a.parts.map((part) => factor * part) }
+    return { value: a.value * factor, inputs: a.inputs, parts: a.parts.map((part) => factor * part) }
   }
 
   /** Combined standard uncertainty, and the effective degrees of freedom (Welch–Satterthwaite, GUM G.4.1). */
-  combined(quantity: Quantity, repeat = false): { u: number; dof: number } {
+  combined({ inputs, parts }: Quantity, repeat = false): { u: number; dof: number } {
     let variance = 0
     let weighted = 0
-    for (let i = 0; i < quantity.parts.length; i++) {
-      const input = this.inputs[i]
+    for (let j = 0; j < inputs.length; j++) {
+      const input = this.inputs[inputs[j]]
       if (repeat && input.common) continue
-      const square = quantity.parts[i] * quantity.parts[i]
+      const square = parts[j] * parts[j]
       variance += square
       weighted += (square * square) / input.dof
     }
