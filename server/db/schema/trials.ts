@@ -12,6 +12,7 @@ import {
   uuid,
 } from 'drizzle-orm/pg-core'
 import type { MovedEvents } from '../../../shared/mechanics/events/event-order.ts'
+import type { ChangedSettings } from '../../../shared/mechanics/settings/choices.ts'
 import type {
   EventName,
   EventTime,
@@ -154,7 +155,10 @@ export interface AnalysisInputs {
   recordedMassKg: number | null
   gravity: number
   calibrationU: Record<string, number>
+  /** The engine's own settings, as `default-<version>`. */
   settings: string
+  /** What the club changed of them; absent where it changed none. */
+  changedSettings?: ChangedSettings
   /** Absent where no event was moved, so that the hash is that of a trial that nobody touched. */
   movedEvents?: MovedEvents
 }

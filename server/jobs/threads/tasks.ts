@@ -1,7 +1,8 @@
-import { deflate, inflate } from 'node:zlib'
+import { deflate, inflate, inflateSync } from 'node:zlib'
 import { promisify } from 'node:util'
 import { analyse } from '../../../shared/mechanics/analyse.ts'
 import type { AnalyseOptions, RecordingAnalysis } from '../../../shared/mechanics/types.ts'
+import { defaultSettings, type Settings } from '../../../shared/mechanics/settings.ts'
 import type { ReadError } from '../../../shared/recordings/errors.ts'
 import { previewOf } from '../../../shared/recordings/preview.ts'
 import { readRecording } from '../../../shared/recordings/read-recording.ts'
@@ -66,11 +67,26 @@ export interface AnalyseSamples {
   /** In the stored form. */
   samples: Uint8Array
   options: AnalyseOptions
+  settings: Settings
 }
 
 /** Stored samples → what the engine says of them. */
-export async function analyseSamples({ samples, options }: AnalyseSamples): Promise<RecordingAnalysis> {
-  return analyse(decodeSamples(await inflated(samples)), options)
+export async function analyseSamples({
+  samples,
+  options,
+  settings,
+}: AnalyseSamples): Promise<RecordingAnalysis> {
+  return analyse(decodeSamples(await inflated(samples)), options, settings)
+}
+
+/**
+ * Several at once, in one message each way. Nothing else runs in the thread meanwhile, so the blocking inflate is the
+ * cheaper one.
+ */
+export function analyseAll(tasks: readonly AnalyseSamples[]): RecordingAnalysis[] {
+  return tasks.map(({ samples, options, settings }) =>
+    analyse(decodeSamples(inflateSync(samples)), options, settings),
+  )
 }
 
 /** Runs the way of a recording once, so that the first real file does not pay for compiling it. */
@@ -84,5 +100,9 @@ export async function warmUp(): Promise<void> {
   const text = `Time (s),Force (N)\n${lines.join('\n')}\n`
   const read = await readFile({ bytes: new TextEncoder().encode(text), fileName: 'warm-up.csv' })
   if (read.ok)
-    await analyseSamples({ samples: read.samples, options: { gravity: 9.80665, calibrationU: {} } })
+    await analyseSamples({
+      samples: read.samples,
+      options: { gravity: 9.80665, calibrationU: {} },
+      settings: defaultSettings,
+    })
 }

@@ -9,6 +9,7 @@ export interface Threads {
   /** The file is fetched when its turn has come: no more files are in memory than there are threads. */
   readFile(fetch: () => Promise<tasks.ReadFile>): ReturnType<typeof tasks.readFile>
   analyseSamples: typeof tasks.analyseSamples
+  analyseAll(all: readonly tasks.AnalyseSamples[]): Promise<ReturnType<typeof tasks.analyseAll>>
   /** Starts every thread and compiles its way through a recording. */
   warm(): Promise<void>
   close(): Promise<void>
@@ -60,6 +61,7 @@ export function createThreads(limits: Partial<ThreadLimits> = {}): Threads {
         return run('readFile', file, [file.bytes.buffer as ArrayBuffer])
       }),
     analyseSamples: (task) => slots(() => run('analyseSamples', task)),
+    analyseAll: (all) => slots(() => run('analyseAll', all)),
     warm: async () => {
       await Promise.all(Array.from({ length: threads }, () => slots(() => run('warmUp', null))))
     },

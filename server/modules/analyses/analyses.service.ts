@@ -2,9 +2,11 @@ import { createHash } from 'node:crypto'
 import type { Analysis } from '../../../shared/contracts/trials.ts'
 import { engineVersion } from '../../../shared/mechanics/version.ts'
 import type { ClubContext, Tx } from '../../db/database.ts'
+import type { MadeWith } from '../../db/schema/recomputes.ts'
 import type { AnalysisInputs } from '../../db/schema/trials.ts'
 import type { Deps } from '../../deps.ts'
 import type { JobDeps } from '../../jobs/define-job.ts'
+import { madeWithNow } from '../clubs/measuring.service.ts'
 import { notify } from '../events/notify.ts'
 import { rebuildWorking } from '../results/results.service.ts'
 import {
@@ -19,7 +21,7 @@ import {
   type TrialRow,
 } from './analyses.queries.ts'
 import { type EngineSaid, toRow, toView } from './analysis-form.ts'
-import { engineOptions, hashInputs, inputsOf, inputsText } from './inputs.ts'
+import { engineOptions, hashInputs, inputsOf, inputsText, settingsOf } from './inputs.ts'
 import { givenUp, ofOneTrial } from './without-figures.ts'
 
 /** A trial's current analysis, or the pinned one. */
@@ -43,7 +45,8 @@ export async function analyseTrial(deps: JobDeps, ctx: ClubContext, trialId: str
     await deps.db.inClub(ctx, (tx) => makeCurrent(tx, work))
     return
   }
-  const task = { samples: work.samples, options: engineOptions(work.inputs) }
+  const { samples, inputs } = work
+  const task = { samples, options: engineOptions(inputs), settings: settingsOf(inputs) }
   const said = ofOneTrial(await deps.threads.analyseSamples(task))
   await deps.db.inClub(ctx, (tx) => keep(tx, work, said))
 }
@@ -52,7 +55,9 @@ export async function analyseTrial(deps: JobDeps, ctx: ClubContext, trialId: str
 interface Work {
   ctx: ClubContext
   key: AnalysisKey
+  athleteId: string | null
   inputs: AnalysisInputs
+  madeWith: MadeWith
   samples: Buffer
 }
 
@@ -60,18 +65,27 @@ async function readTrial({ db }: Deps, ctx: ClubContext, trialId: string): Promi
   const { clubId } = ctx
   const read = await db.inClub(ctx, async (tx) => {
     const trial = await findTrialToAnalyse(tx, clubId, trialId)
-    return trial && { inputs: inputsOf(trial), samples: await findSamples(tx, clubId, trialId) }
+    if (!trial) return null
+    const madeWith = await madeWithNow(tx, clubId)
+    const samples = await findSamples(tx, clubId, trialId)
+    return { athleteId: trial.athleteId, inputs: inputsOf(trial, madeWith), madeWith, samples }
   })
   if (!read) return null
   const key = { clubId, trialId, engineVersion, inputsHash: hashInputs(read.inputs, read.samples) }
   return { ctx, key, ...read }
 }
 
-/** Locks the trial; null where it is not any more what it was when it was read. */
-async function lockUnchanged(tx: Tx, { key, inputs }: Work): Promise<TrialRow | null> {
+/**
+ * Locks the trial; null where it is not any more what it was when it was read, and a job of its own was sent. No job
+ * follows a change of the club's settings or of the athlete's recorded mass: those stay as they were read.
+ */
+async function lockUnchanged(tx: Tx, work: Work): Promise<TrialRow | null> {
+  const { key, inputs, madeWith, athleteId } = work
   await lockTrial(tx, key.clubId, key.trialId)
   const now = await findTrialToAnalyse(tx, key.clubId, key.trialId)
-  return now && inputsText(inputsOf(now)) === inputsText(inputs) ? now : null
+  if (!now || now.athleteId !== athleteId) return null
+  const { recordedMassKg } = inputs
+  return inputsText(inputsOf({ ...now, recordedMassKg }, madeWith)) === inputsText(inputs) ? now : null
 }
 
 /** Makes an analysis that was made before of the same inputs the current one, if it is not. */

@@ -1,5 +1,14 @@
 import { describe, expect, it } from 'vitest'
-import { engineOptions, hashInputs, inputsOf, type TrialToAnalyse } from './inputs.ts'
+import {
+  engineOptions,
+  hashInputs,
+  inputsOf,
+  nothingKnown,
+  remadeWith,
+  settingsOf,
+  type TrialToAnalyse,
+} from './inputs.ts'
+import { defaultSettings } from '../../../shared/mechanics/settings.ts'
 
 const trial: TrialToAnalyse = {
   test: { protocol: 'cmj', side: 'both', externalLoadKg: 0, boxHeightM: null, arms: 'hips' },
@@ -53,5 +62,33 @@ describe('what the engine is given', () => {
       calibrationU: { left: 0.005, right: 0.005 },
       recordedMassKg: 71,
     })
+  })
+})
+
+describe('the inputs made again with other settings, plates or place', () => {
+  const changed = { changedSettings: { eventForceN: 20 }, gravity: 9.81 }
+  const calibrationU = { left: 0.01, right: 0.002, single: 0.005, total: 0.005 }
+  const made = inputsOf({ ...trial, movedEvents: { takeoff: 1.5 } })
+  const again = remadeWith(made, trial.channels, { ...nothingKnown, ...changed, calibrationU })
+
+  it('keep the trial’s own facts as they were taken then', () => {
+    const { test, recordedMassKg, movedEvents } = made
+    expect(again).toMatchObject({ test, recordedMassKg, movedEvents })
+  })
+
+  it('hold the calibration of the plates that measured, and of no other', () => {
+    expect(again).toMatchObject({ gravity: 9.81, calibrationU: { left: 0.01, right: 0.002 } })
+    expect(Object.keys(again.calibrationU)).toEqual(['left', 'right'])
+  })
+
+  it('give the engine its own settings with the changed ones in their place', () => {
+    expect(settingsOf(again)).toEqual({ ...defaultSettings, eventForceN: 20 })
+    expect(settingsOf(made)).toEqual(defaultSettings)
+  })
+
+  it('are the same where nothing was changed, so that they are the same analysis', () => {
+    expect(hashInputs(remadeWith(made, trial.channels, nothingKnown), samples)).toEqual(
+      hashInputs(made, samples),
+    )
   })
 })

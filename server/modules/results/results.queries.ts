@@ -1,32 +1,44 @@
-import { and, asc, eq, isNotNull, isNull, notInArray, sql } from 'drizzle-orm'
+import { and, asc, eq, inArray, isNotNull, isNull, type SQL, sql } from 'drizzle-orm'
+import type { PgColumn } from 'drizzle-orm/pg-core'
 import type { Test } from '../../../shared/contracts/tests.ts'
 import type { Tx } from '../../db/database.ts'
 import { athletes } from '../../db/schema/people-of-club.ts'
 import { sessionResults, trialSpreads } from '../../db/schema/results.ts'
 import { sessions } from '../../db/schema/sessions.ts'
 import { analyses, publishedTrials, trials } from '../../db/schema/trials.ts'
-import type { GatheredResult, IncludedTrial } from './gather-results.ts'
+import type { GatheredResult } from './gather-results.ts'
 
 /** 'working' follows the sheet; 'published' holds what the newest publication pinned. */
 export type Edition = 'working' | 'published'
 
-/** One athlete in one session of a club. */
+/** One athlete in one session. */
 export interface Place {
-  clubId: string
   sessionId: string
   athleteId: string
 }
 
 /**
- * Makes whoever else rebuilds this place wait until the transaction ends; the statements after it then see what
- * the other wrote.
+ * Makes whoever else rebuilds one of these places wait until the transaction ends; the statements after it then see
+ * what the other wrote. In one order, so that two who rebuild several wait for each other and never lock up.
  */
-export async function lockPlace(tx: Tx, { clubId, sessionId, athleteId }: Place): Promise<void> {
-  const place = `${clubId}/${sessionId}/${athleteId}`
-  await tx.execute(sql`select pg_advisory_xact_lock(hashtextextended(${place}, 0))`)
+export async function lockPlaces(tx: Tx, clubId: string, places: readonly Place[]): Promise<void> {
+  const keys = places.map(({ sessionId, athleteId }) => `${clubId}/${sessionId}/${athleteId}`).sort()
+  await tx.execute(
+    sql`select pg_advisory_xact_lock(hashtextextended(place, 0)) from unnest(${sql.param(keys)}::text[]) as place`,
+  )
+}
+
+/** True of rows whose session and athlete are one of these places. */
+const isOneOf = (places: readonly Place[], sessionId: PgColumn, athleteId: PgColumn): SQL => {
+  const [sessionIds, athleteIds] = [
+    places.map((place) => place.sessionId),
+    places.map((place) => place.athleteId),
+  ]
+  return sql`(${sessionId}, ${athleteId}) in (select * from unnest(${sql.param(sessionIds)}::uuid[], ${sql.param(athleteIds)}::uuid[]))`
 }
 
 const included = {
+  sessionId: trials.sessionId,
   trialId: trials.id,
   analysisId: analyses.id,
   test: {
@@ -42,10 +54,10 @@ const included = {
 }
 const inOrder = [asc(trials.droppedAt), asc(trials.ordinal), asc(trials.id)]
 
-/** The trials that count on the sheet: on the athlete, analysed, not set aside. */
-export function workingTrials(tx: Tx, { clubId, sessionId, athleteId }: Place): Promise<IncludedTrial[]> {
+/** The trials that count on the sheets of these places: analysed, not set aside. */
+export function workingTrials(tx: Tx, clubId: string, places: readonly Place[]) {
   return tx
-    .select(included)
+    .select({ ...included, athleteId: sql<string>`${trials.athleteId}` })
     .from(trials)
     .innerJoin(
       analyses,
@@ -54,18 +66,17 @@ export function workingTrials(tx: Tx, { clubId, sessionId, athleteId }: Place): 
     .where(
       and(
         eq(trials.clubId, clubId),
-        eq(trials.sessionId, sessionId),
-        eq(trials.athleteId, athleteId),
+        isOneOf(places, trials.sessionId, trials.athleteId),
         isNull(trials.setAsideAt),
       ),
     )
     .orderBy(...inOrder)
 }
 
-/** The trials and analyses that the newest publication pinned for the athlete. */
-export function pinnedTrials(tx: Tx, { clubId, sessionId, athleteId }: Place): Promise<IncludedTrial[]> {
+/** The trials and analyses that the newest publication pinned for the athletes of these places. */
+export function pinnedTrials(tx: Tx, clubId: string, places: readonly Place[]) {
   return tx
-    .select(included)
+    .select({ ...included, athleteId: publishedTrials.athleteId })
     .from(publishedTrials)
     .innerJoin(trials, and(eq(trials.clubId, publishedTrials.clubId), eq(trials.id, publishedTrials.trialId)))
     .innerJoin(
@@ -75,54 +86,36 @@ export function pinnedTrials(tx: Tx, { clubId, sessionId, athleteId }: Place): P
     .where(
       and(
         eq(publishedTrials.clubId, clubId),
-        eq(trials.sessionId, sessionId),
-        eq(publishedTrials.athleteId, athleteId),
+        isOneOf(places, trials.sessionId, publishedTrials.athleteId),
         eq(publishedTrials.current, true),
       ),
     )
     .orderBy(...inOrder)
 }
 
-/** Puts these results in the place of whatever the edition held of the athlete and session. */
+/** A result with its place. */
+export type PlacedResult = Place & GatheredResult & { sessionDate: string }
+
+/** Puts these results in the place of whatever the edition held of the places. */
 export async function replaceResults(
   tx: Tx,
-  place: Place & { edition: Edition; sessionDate: string },
-  results: GatheredResult[],
+  of: { clubId: string; edition: Edition; places: readonly Place[] },
+  results: readonly PlacedResult[],
 ): Promise<void> {
-  const keys = results.map(({ testKey }) => testKey)
+  const { clubId, edition, places } = of
   await tx
     .delete(sessionResults)
     .where(
       and(
-        eq(sessionResults.clubId, place.clubId),
-        eq(sessionResults.sessionId, place.sessionId),
-        eq(sessionResults.athleteId, place.athleteId),
-        eq(sessionResults.edition, place.edition),
-        keys.length > 0 ? notInArray(sessionResults.testKey, keys) : undefined,
+        eq(sessionResults.clubId, clubId),
+        eq(sessionResults.edition, edition),
+        isOneOf(places, sessionResults.sessionId, sessionResults.athleteId),
       ),
     )
   if (results.length === 0) return
   await tx
     .insert(sessionResults)
-    .values(results.map(({ test, ...result }) => ({ ...place, ...test, ...result })))
-    .onConflictDoUpdate({
-      target: [
-        sessionResults.clubId,
-        sessionResults.athleteId,
-        sessionResults.sessionId,
-        sessionResults.testKey,
-        sessionResults.edition,
-      ],
-      set: {
-        sessionDate: sql`excluded.session_date`,
-        trialIds: sql`excluded.trial_ids`,
-        analysisIds: sql`excluded.analysis_ids`,
-        metricValues: sql`excluded.metric_values`,
-        metricU: sql`excluded.metric_u`,
-        metricURepeat: sql`excluded.metric_u_repeat`,
-        rebuiltAt: sql`now()`,
-      },
-    })
+    .values(results.map(({ test, ...result }) => ({ clubId, edition, ...test, ...result })))
 }
 
 /** Results of one edition, oldest first; of one athlete, or of one session. */
@@ -174,12 +167,17 @@ export async function athletesEverPinned(tx: Tx, clubId: string, sessionId: stri
   return rows.map(({ athleteId }) => athleteId)
 }
 
-export async function sessionDateOf(tx: Tx, clubId: string, sessionId: string): Promise<string> {
-  const [row] = await tx
-    .select({ date: sessions.date })
+/** Session → its day. */
+export async function datesOfSessions(
+  tx: Tx,
+  clubId: string,
+  sessionIds: string[],
+): Promise<Map<string, string>> {
+  const rows = await tx
+    .select({ id: sessions.id, date: sessions.date })
     .from(sessions)
-    .where(and(eq(sessions.clubId, clubId), eq(sessions.id, sessionId)))
-  return row.date
+    .where(and(eq(sessions.clubId, clubId), inArray(sessions.id, sessionIds)))
+  return new Map(rows.map(({ id, date }) => [id, date]))
 }
 
 export async function redateResults(

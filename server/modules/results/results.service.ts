@@ -8,49 +8,79 @@ import { rebuildSpreads } from './spreads.ts'
 import {
   athleteName,
   athletesEverPinned,
+  datesOfSessions,
+  type Edition,
   findResults,
   type FoundResult,
-  lockPlace,
+  lockPlaces,
   pinnedTrials,
   type Place,
   redateResults,
   replaceResults,
-  sessionDateOf,
   workingTrials,
 } from './results.queries.ts'
 
-/**
- * Rebuilds what the sheet says of these athletes of a session. Called in the transaction of whatever changed a
- * trial; places are locked in one order, so that two changes at once wait for each other and never lock up.
- */
-export async function rebuildWorking(
+/** Rebuilds what the sheet says of these athletes of a session. Called in the transaction of whatever changed a trial. */
+export function rebuildWorking(
   tx: Tx,
   ctx: ClubContext,
   sessionId: string,
   athleteIds: readonly (string | null)[],
 ): Promise<void> {
-  const sessionDate = await sessionDateOf(tx, ctx.clubId, sessionId)
-  const concerned = [...new Set(athleteIds.filter((athleteId) => athleteId !== null))].sort()
-  for (const athleteId of concerned) {
-    const place: Place = { clubId: ctx.clubId, sessionId, athleteId }
-    await lockPlace(tx, place)
-    const results = gatherResults(await workingTrials(tx, place))
-    await replaceResults(tx, { ...place, edition: 'working', sessionDate }, results)
-  }
-  await rebuildSpreads(tx, { clubId: ctx.clubId, sessionId, edition: 'working' })
+  const places = placesOf(sessionId, athleteIds)
+  return rebuild(tx, ctx.clubId, 'working', { places, sessionIds: [sessionId] })
+}
+
+/** The same for the trials of several sessions at once, in as many statements as for one. */
+export function rebuildWorkingOf(
+  tx: Tx,
+  ctx: ClubContext,
+  trials: readonly { sessionId: string; athleteId: string | null }[],
+): Promise<void> {
+  const sessionIds = [...new Set(trials.map(({ sessionId }) => sessionId))]
+  const places = sessionIds.flatMap((sessionId) =>
+    placesOf(
+      sessionId,
+      trials.filter((trial) => trial.sessionId === sessionId).map(({ athleteId }) => athleteId),
+    ),
+  )
+  return rebuild(tx, ctx.clubId, 'working', { places, sessionIds })
 }
 
 /** Rebuilds what athletes read of a session, after its pins have changed. */
 export async function rebuildPublished(tx: Tx, ctx: ClubContext, sessionId: string): Promise<void> {
-  const sessionDate = await sessionDateOf(tx, ctx.clubId, sessionId)
-  for (const athleteId of (await athletesEverPinned(tx, ctx.clubId, sessionId)).sort()) {
-    const place: Place = { clubId: ctx.clubId, sessionId, athleteId }
-    await lockPlace(tx, place)
-    const results = gatherResults(await pinnedTrials(tx, place))
-    await replaceResults(tx, { ...place, edition: 'published', sessionDate }, results)
-  }
-  await rebuildSpreads(tx, { clubId: ctx.clubId, sessionId, edition: 'published' })
+  const places = placesOf(sessionId, await athletesEverPinned(tx, ctx.clubId, sessionId))
+  await rebuild(tx, ctx.clubId, 'published', { places, sessionIds: [sessionId] })
 }
+
+const placesOf = (sessionId: string, athleteIds: readonly (string | null)[]): Place[] =>
+  [...new Set(athleteIds)].flatMap((athleteId) => (athleteId === null ? [] : [{ sessionId, athleteId }]))
+
+async function rebuild(
+  tx: Tx,
+  clubId: string,
+  edition: Edition,
+  { places, sessionIds }: { places: Place[]; sessionIds: string[] },
+): Promise<void> {
+  if (places.length > 0) {
+    await lockPlaces(tx, clubId, places)
+    const dates = await datesOfSessions(tx, clubId, sessionIds)
+    const trialsOf = edition === 'working' ? workingTrials : pinnedTrials
+    const trials = await trialsOf(tx, clubId, places)
+    const results = places.flatMap((place) =>
+      gatherResults(trials.filter((trial) => isAt(trial, place))).map((result) => ({
+        ...place,
+        ...result,
+        sessionDate: dates.get(place.sessionId) ?? '',
+      })),
+    )
+    await replaceResults(tx, { clubId, edition, places }, results)
+  }
+  await rebuildSpreads(tx, { clubId, edition, sessionIds })
+}
+
+const isAt = (trial: Place, { sessionId, athleteId }: Place) =>
+  trial.sessionId === sessionId && trial.athleteId === athleteId
 
 /** A session moved to another day takes its results along. */
 export const redate = (tx: Tx, ctx: ClubContext, sessionId: string, sessionDate: string): Promise<void> =>

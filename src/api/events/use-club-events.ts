@@ -2,7 +2,10 @@ import { useQueryClient, type QueryClient } from '@tanstack/react-query'
 import { useEffect } from 'react'
 import type { ClubEvent } from '../../../shared/contracts/events.ts'
 import { athleteKeys } from '../athletes/athlete-keys.ts'
+import { measuringSettingsKey } from '../clubs/get-measuring-settings.ts'
+import { plateCalibrationKey } from '../clubs/get-plate-calibration.ts'
 import { landingWatchKeys } from '../landing-watch/list-high-landings.ts'
+import { recomputeKeys } from '../recomputes/recompute-keys.ts'
 import { resultKeys } from '../results/get-my-results.ts'
 import { sessionKeys } from '../sessions/session-keys.ts'
 import { squadKeys } from '../squads/squad-keys.ts'
@@ -44,12 +47,14 @@ export function clubEventHandlers(queryClient: QueryClient): StreamHandlers {
     session: refresh(sessionKeys.all, trialKeys.all, landingWatchKeys.all, resultKeys.all, athleteKeys.all),
     // Names, squads and the club's limits: all that shows athletes or holds them against a limit.
     athletes: refresh(athleteKeys.all, sessionKeys.all, trialKeys.all, landingWatchKeys.all, squadKeys.all),
+    recomputes: refresh(recomputeKeys.all, measuringSettingsKey, plateCalibrationKey),
   }
   return {
     onOpen: () => {
       streamHealth.set(true)
       void refreshes.session()
       void refreshes.athletes()
+      void refreshes.recomputes()
     },
     onLost: () => streamHealth.set(false),
     onEvent: (event) => void refreshes[event.kind](),

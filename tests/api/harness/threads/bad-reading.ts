@@ -1,6 +1,6 @@
 import * as tasks from '../../../../server/jobs/threads/tasks.ts'
 
-export const { analyseSamples, warmUp } = tasks
+export const { analyseAll, analyseSamples, warmUp } = tasks
 
 /** Reads as the product does, but is led astray by the names of files: loops, hoards or throws. */
 export function readFile(file: tasks.ReadFile): ReturnType<typeof tasks.readFile> {

@@ -1,0 +1,16 @@
+import { queryOptions, useQuery } from '@tanstack/react-query'
+import { getPlateCalibration } from '../../../shared/contracts/measuring.ts'
+import { call } from '../client.ts'
+
+export const plateCalibrationKey = ['plate-calibration'] as const
+
+export function plateCalibrationQuery() {
+  return queryOptions({
+    queryKey: plateCalibrationKey,
+    queryFn: ({ signal }) => call(getPlateCalibration, {}, { signal }),
+  })
+}
+
+export function usePlateCalibration() {
+  return useQuery(plateCalibrationQuery())
+}
