@@ -31,6 +31,8 @@ export const errorCodes = [
   'upload-in-use',
   'nothing-to-publish',
   'athlete-not-in-session',
+  'event-misplaced',
+  'engine-outdated',
   'internal',
 ] as const
 

@@ -2,6 +2,7 @@ import { z } from 'zod'
 import { endpoint } from './endpoint.ts'
 import { Id, IsoDate, Version } from './fields.ts'
 import { limits } from './limits.ts'
+import { EngineInputs, EventMove, EventName, MovedEvents, MoveReason } from './moved-events.ts'
 import { measuringRoles } from './roles.ts'
 import { Test } from './tests.ts'
 
@@ -26,18 +27,6 @@ const Phase = z.enum([
   'landing',
   'settling',
 ])
-const EventName = z.enum([
-  'onset',
-  'arrival',
-  'minimumForce',
-  'minimumVelocity',
-  'zeroVelocity',
-  'takeoff',
-  'touchdown',
-  'landingPeak',
-  'landingZeroVelocity',
-  'still',
-])
 const MetricGroup = z.enum([
   'weighing',
   'jump',
@@ -55,6 +44,8 @@ export const Analysis = z.strictObject({
   engineVersion: z.string(),
   gravity: z.number(),
   events: z.partialRecord(EventName, z.strictObject({ timeS: z.number(), sample: z.number().int() })),
+  /** Of these events, those that a person set, as they set them. */
+  movedEvents: MovedEvents,
   metrics: z.record(z.string(), Figure),
   /** Metric keys that a failed check takes away: shown struck, never averaged. */
   withheld: z.array(z.string()),
@@ -119,6 +110,8 @@ export const Trial = z.strictObject({
     sampleRateHz: z.number(),
     sampleCount: z.number().int(),
     channels: z.array(z.enum(['left', 'right', 'single', 'total'])),
+    filledSamples: z.number().int(),
+    timeBaseError: z.number(),
   }),
   analysis: Analysis.nullable(),
   /** Neighbours on the sheet, for previous and next. */
@@ -126,6 +119,10 @@ export const Trial = z.strictObject({
   nextTrialId: Id.nullable(),
   /** False for an athlete looking at their own published trial. */
   mayEdit: z.boolean(),
+  /** Every time that events were moved or put back, newest first: the first one holds. None for an athlete. */
+  eventMoves: z.array(EventMove),
+  /** For whoever may move this trial's events; null for everybody else. */
+  engineInputs: EngineInputs.nullable(),
   version: Version,
 })
 export type Trial = z.infer<typeof Trial>
@@ -159,5 +156,29 @@ export const changeTrial = endpoint({
     athleteId: Id.nullable().optional(),
     setAsideReason: z.string().trim().min(3, 'Say why').max(limits.reasonCharacters).nullable().optional(),
   }),
+  response: Trial,
+})
+
+/**
+ * Sets which events stand where a person put them, in place of all that were moved before: none puts all back to
+ * automatic. The trial is then analysed anew. A coach may, and a physio in a session of their own.
+ */
+export const moveEvents = endpoint({
+  method: 'PUT',
+  path: '/api/trials/:trialId/moved-events',
+  access: measuringRoles,
+  params: TrialParams,
+  body: z
+    .strictObject({
+      version: Version,
+      /** Of the engine that showed the person what the move does. */
+      engineVersion: z.string().max(40),
+      events: MovedEvents,
+      reason: MoveReason.nullable(),
+    })
+    .refine(({ events, reason }) => reason !== null || Object.keys(events).length === 0, {
+      path: ['reason'],
+      error: 'Say why',
+    }),
   response: Trial,
 })

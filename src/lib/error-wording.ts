@@ -105,6 +105,14 @@ export const errorWording: Record<AnyErrorCode, ErrorWording> = {
     title: 'This athlete is not in the session',
     advice: 'Choose an athlete of the session’s squads.',
   },
+  'event-misplaced': {
+    title: 'An event cannot stand where it was put',
+    advice: 'Move it to where it can, then save. Nothing was saved yet.',
+  },
+  'engine-outdated': {
+    title: 'The engine was renewed while you had this open',
+    advice: 'Note where you put the event, load the page again and move it there. Nothing was saved.',
+  },
   internal: {
     title: 'Something went wrong on our side',
     advice: 'Try again in a moment. If it goes on, tell whoever runs Underfoot at your club.',

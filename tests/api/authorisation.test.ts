@@ -54,12 +54,13 @@ async function deactivatedSinceSignIn(): Promise<ApiClient> {
   return browser
 }
 
-function expected({ may, elsewhere, notTheirs }: AccessLine, caller: CallerName): Outcome {
+function expected({ may, elsewhere, notTheirs, notTheirsToChange }: AccessLine, caller: CallerName): Outcome {
   if (may === 'anybody') return 'answered'
   if (caller === 'signed out' || caller === 'deactivated') return 'not-signed-in'
   const [role, where] = caller.split(', ') as [Role, Where]
   if (may !== 'members' && !may.includes(role)) return 'not-allowed'
   if (where === 'other club' && elsewhere !== 'own') return elsewhere
+  if (notTheirsToChange?.includes(role)) return 'not-allowed'
   return notTheirs?.includes(role) ? 'not-found' : 'answered'
 }
 

@@ -46,6 +46,7 @@ export function toView(row: AnalysisRow): Analysis {
     engineVersion,
     gravity: inputs.gravity,
     events,
+    movedEvents: inputs.movedEvents ?? {},
     metrics,
     withheld: withheldMetrics({ metrics, checks }),
     sides,

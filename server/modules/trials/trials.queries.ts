@@ -74,7 +74,10 @@ const page = {
     sampleRateHz: trialSamples.sampleRateHz,
     sampleCount: trialSamples.sampleCount,
     channels: sql<('left' | 'right' | 'single' | 'total')[]>`${trialSamples.channels}`,
+    filledSamples: trialSamples.filledSamples,
+    timeBaseError: trialSamples.timeBaseError,
   },
+  sessionBy: sessions.createdBy,
 }
 
 /** A trial for staff. */

@@ -1,5 +1,6 @@
-import { changeTrial, getSamples, getTrial } from '../../../shared/contracts/trials.ts'
+import { changeTrial, getSamples, getTrial, moveEvents } from '../../../shared/contracts/trials.ts'
 import { handled, implement, type Route } from '../../http/implement.ts'
+import * as movedEvents from './moved-events.service.ts'
 import * as trials from './trials.service.ts'
 
 export const trialRoutes: Route[] = [
@@ -10,4 +11,5 @@ export const trialRoutes: Route[] = [
     return handled
   }),
   implement(changeTrial, ({ deps, ctx, params, body }) => trials.change(deps, ctx, params.trialId, body)),
+  implement(moveEvents, ({ deps, ctx, params, body }) => movedEvents.move(deps, ctx, params.trialId, body)),
 ]

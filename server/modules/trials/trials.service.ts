@@ -11,10 +11,13 @@ import type { Caller } from '../../http/caller.ts'
 import { notFound, staleVersion } from '../../http/errors.ts'
 import { sendJobs } from '../../jobs/queue.ts'
 import { viewAnalysis } from '../analyses/analyses.service.ts'
+import { viewEngineInputs } from '../analyses/engine-inputs.service.ts'
 import { record } from '../audit/audit.service.ts'
 import { notify } from '../events/notify.ts'
 import { rebuildWorking } from '../results/results.service.ts'
 import { candidatesOf } from '../sessions/sessions.service.ts'
+import { mayMoveEvents } from './may-move-events.ts'
+import { findEventMoves } from './moved-events.queries.ts'
 import { setAsideOf, toSheetTrial } from './sheet-trials.ts'
 import { athleteNotInSession } from './trials.errors.ts'
 import {
@@ -31,7 +34,7 @@ import {
 } from './trials.queries.ts'
 
 const inflated = promisify(inflate)
-const missing = () => notFound('This trial')
+export const missing = () => notFound('This trial')
 
 /** Coach and physio see every trial; anybody else only their own, as it was published. */
 const measures = (ctx: Caller) => ctx.roles.some((role) => (measuringRoles as readonly Role[]).includes(role))
@@ -42,12 +45,20 @@ export function getTrial(deps: Deps, ctx: Caller, trialId: string): Promise<Tria
   )
 }
 
-async function staffTrial(tx: Tx, ctx: Caller, trialId: string): Promise<Trial> {
+/** The trial as staff read it. */
+export async function staffTrial(tx: Tx, ctx: Caller, trialId: string): Promise<Trial> {
   const row = await findTrial(tx, ctx.clubId, trialId)
   if (!row) throw missing()
   const order = await sheetOrderOf(tx, ctx.clubId, row.sessionId)
   const analysis = await viewAnalysis(tx, ctx.clubId, { trialId })
-  return { ...pageOf(row, order), setAside: setAsideOf(row), analysis, mayEdit: true }
+  return {
+    ...pageOf(row, order),
+    setAside: setAsideOf(row),
+    analysis,
+    mayEdit: true,
+    eventMoves: await findEventMoves(tx, ctx.clubId, trialId),
+    engineInputs: mayMoveEvents(ctx, row) ? await viewEngineInputs(tx, ctx.clubId, trialId) : null,
+  }
 }
 
 /** Set aside later, or moved: what was published stands until it is published anew. */
@@ -56,7 +67,8 @@ async function ownTrial(tx: Tx, { clubId, athleteId }: Caller, trialId: string):
   if (!row) throw missing()
   const order = await ownOrderOf(tx, clubId, athleteId, row.sessionId)
   const analysis = await viewAnalysis(tx, clubId, { analysisId: row.analysisId })
-  return { ...pageOf({ ...row, athleteId }, order), setAside: null, analysis, mayEdit: false }
+  const page = pageOf({ ...row, athleteId }, order)
+  return { ...page, setAside: null, analysis, mayEdit: false, eventMoves: [], engineInputs: null }
 }
 
 type PageRow = Omit<TrialPageRow, 'fileName' | 'setAsideByName'> & { fileName: string | null }

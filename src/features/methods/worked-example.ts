@@ -27,7 +27,7 @@ export function workOut(bytes: Uint8Array, fileName: string): WorkedExample {
   const analysis = { id: fileName, engineVersion, gravity: standardGravity, events, metrics, sides, ledger }
   const withheld = withheldMetrics(trial)
   return {
-    analysis: { ...analysis, checks, missing, notes, withheld },
+    analysis: { ...analysis, movedEvents: {}, checks, missing, notes, withheld },
     test,
     recording: { sampleRateHz: recording.sampleRateHz },
     samples: recording.channels,

@@ -1,19 +1,5 @@
 import type { EventName, MetricGroup, Phase } from '../../../shared/mechanics/types.ts'
 
-/** The events of a trial in the order in which they come, as screens name them. */
-export const eventWords: Record<EventName, string> = {
-  onset: 'onset',
-  arrival: 'arrival',
-  minimumForce: 'least force',
-  minimumVelocity: 'fastest down',
-  zeroVelocity: 'lowest',
-  takeoff: 'takeoff',
-  touchdown: 'touchdown',
-  landingPeak: 'landing peak',
-  landingZeroVelocity: 'landing’s lowest',
-  still: 'still',
-}
-
 /** Those that stand on the trace; the table of the trace has them all. */
 export const tracedEvents: readonly EventName[] = ['onset', 'zeroVelocity', 'takeoff', 'touchdown', 'still']
 

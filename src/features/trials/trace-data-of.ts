@@ -1,9 +1,9 @@
+import { eventWords } from '../../../shared/contracts/event-words.ts'
 import type { Trial } from '../../../shared/contracts/trials.ts'
+import { eventOrder } from '../../../shared/mechanics/events/event-order.ts'
 import type { Signal } from '../../../shared/mechanics/signal/condition.ts'
-import type { EventName } from '../../../shared/mechanics/types.ts'
 import type { Samples } from '../../api/trials/read-samples.ts'
 import type { TraceChannel, TraceData, TraceEvent } from '../../charts/trial-trace/trace-data.ts'
-import { eventWords } from './event-words.ts'
 import { momentumOf, zeroedSignal, type Traced } from './zeroed-signal.ts'
 
 /** What the trace of a trial is drawn from; null where the recording holds no force to draw. */
@@ -37,8 +37,7 @@ function weightOf({ analysis, test }: Pick<Trial, 'analysis' | 'test'>): TraceDa
 
 /** In the order in which they come. */
 export function eventsOf({ analysis }: Pick<Trial, 'analysis'>): TraceEvent[] {
-  const names = Object.keys(eventWords) as EventName[]
-  return names
+  return eventOrder
     .flatMap((name) => {
       const event = analysis?.events[name]
       return event ? [{ key: name, label: eventWords[name], timeS: event.timeS }] : []

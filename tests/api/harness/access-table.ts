@@ -15,6 +15,8 @@ export interface AccessLine {
   elsewhere: 'not-found' | 'invalid' | 'own'
   /** Roles that may call, and are told of these rows that they are not there: nothing of them is published. */
   notTheirs?: readonly Role[]
+  /** Roles that may call, and are told of these rows that somebody else alone may change them. */
+  notTheirsToChange?: readonly Role[]
 }
 
 const nothing = () => ({})
@@ -160,6 +162,15 @@ export const accessTable: Record<string, AccessLine> = {
     may: test,
     request: ({ trialId }) => ({ params: { trialId }, body: { version: 9 } }),
     elsewhere: 'not-found',
+  },
+  moveEvents: {
+    may: test,
+    request: ({ trialId }) => ({
+      params: { trialId },
+      body: { version: 9, engineVersion: '0', events: {}, reason: null },
+    }),
+    elsewhere: 'not-found',
+    notTheirsToChange: ['physio'],
   },
   listHighLandings: { may: ['physio'], request: nothing, elsewhere: 'own' },
 

@@ -4,6 +4,7 @@ import type { Analysis, Trial } from '../../../shared/contracts/trials.ts'
 import type { Upload } from '../../../shared/contracts/uploads.ts'
 import { analyse } from '../../../shared/mechanics/analyse.ts'
 import type { Recording } from '../../../shared/mechanics/types.ts'
+import { engineVersion } from '../../../shared/mechanics/version.ts'
 import { withheldMetrics } from '../../../shared/mechanics/withheld.ts'
 import { makeJump } from '../../../seed/synthetic/jump.ts'
 import type { JumpOptions } from '../../../seed/synthetic/options.ts'
@@ -31,6 +32,7 @@ export function measuredJump(jump: Partial<JumpOptions> = {}, seed = 1) {
     engineVersion: '1.0.0',
     gravity,
     events,
+    movedEvents: {},
     metrics,
     withheld: withheldMetrics({ metrics, checks }),
     sides,
@@ -68,11 +70,15 @@ export function aTrial(
       sampleRateHz: recording.sampleRateHz,
       sampleCount: recording.channels.left?.length ?? 0,
       channels: ['left', 'right'],
+      filledSamples: 0,
+      timeBaseError: 0,
     },
     analysis,
     previousTrialId: null,
     nextTrialId: idOf('trial', 2),
     mayEdit: true,
+    eventMoves: [],
+    engineInputs: { engineVersion, test: cmj, recordedMassKg: null, gravity, calibrationU: {} },
     version: 1,
     ...change,
   }
