@@ -1,15 +1,24 @@
 import { createHash } from 'node:crypto'
+import { unknownPlateU } from '../../../shared/contracts/measuring.ts'
 import type { MovedEvents } from '../../../shared/mechanics/events/event-order.ts'
-import { defaultSettings } from '../../../shared/mechanics/settings.ts'
+import { defaultSettings, type Settings } from '../../../shared/mechanics/settings.ts'
+import { settingsWith } from '../../../shared/mechanics/settings/choices.ts'
 import type { AnalyseOptions, ForceChannel } from '../../../shared/mechanics/types.ts'
 import { standardGravity } from '../../../shared/units/gravity.ts'
+import type { MadeWith } from '../../db/schema/recomputes.ts'
 import type { AnalysisInputs } from '../../db/schema/trials.ts'
 
-/**
- * Expanded relative uncertainty (k = 2) of a plate's calibration where nothing is known of the plate: 0.5 %, as
- * makers commonly state (common practice).
- */
-const unknownPlateU = 0.005
+/** What is taken where nothing is known of the plates and their place, and no setting is changed. */
+export const nothingKnown: MadeWith = {
+  settings: `default-${defaultSettings.version}`,
+  gravity: standardGravity,
+  calibrationU: {
+    left: unknownPlateU,
+    right: unknownPlateU,
+    single: unknownPlateU,
+    total: unknownPlateU,
+  },
+}
 
 /** What an analysis is made from besides the samples. */
 export interface TrialToAnalyse {
@@ -20,14 +29,38 @@ export interface TrialToAnalyse {
   movedEvents?: MovedEvents | null
 }
 
-export function inputsOf({ test, recordedMassKg, channels, movedEvents }: TrialToAnalyse): AnalysisInputs {
+export function inputsOf(
+  { test, recordedMassKg, channels, movedEvents }: TrialToAnalyse,
+  madeWith: MadeWith = nothingKnown,
+): AnalysisInputs {
   return {
     test,
     recordedMassKg,
-    gravity: standardGravity,
-    calibrationU: Object.fromEntries(channels.map((channel) => [channel, unknownPlateU])),
-    settings: `default-${defaultSettings.version}`,
+    ...madeWithOf(channels, madeWith),
     ...(movedEvents && Object.keys(movedEvents).length > 0 ? { movedEvents } : {}),
+  }
+}
+
+/** The same trial's inputs with other settings, plates and place; its own facts stay as they were taken then. */
+export function remadeWith(
+  { test, recordedMassKg, movedEvents }: AnalysisInputs,
+  channels: readonly string[],
+  madeWith: MadeWith,
+): AnalysisInputs {
+  return inputsOf({ test, recordedMassKg, channels, movedEvents: movedEvents ?? null }, madeWith)
+}
+
+function madeWithOf(
+  channels: readonly string[],
+  { settings, changedSettings, gravity, calibrationU }: MadeWith,
+) {
+  return {
+    gravity,
+    calibrationU: Object.fromEntries(
+      channels.map((channel) => [channel, calibrationU[channel as ForceChannel]]),
+    ),
+    settings,
+    ...(changedSettings ? { changedSettings } : {}),
   }
 }
 
@@ -48,6 +81,10 @@ export function engineOptions(inputs: AnalysisInputs): AnalyseOptions {
     ...(inputs.movedEvents ? { movedEvents: inputs.movedEvents } : {}),
   }
 }
+
+/** The settings that the engine works with. */
+export const settingsOf = ({ changedSettings }: Pick<AnalysisInputs, 'changedSettings'>): Settings =>
+  settingsWith(changedSettings ?? {})
 
 /** The same value with its keys in one order, whatever order it was built or read back in. */
 function sorted(value: unknown): unknown {
