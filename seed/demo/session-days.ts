@@ -1,3 +1,4 @@
+import { usualTest } from '../../shared/contracts/session-test.ts'
 import { setTimeout as pause } from 'node:timers/promises'
 import type { SessionSheet } from '../../shared/contracts/sessions.ts'
 import type { Deps } from '../../server/deps.ts'
@@ -32,7 +33,7 @@ export async function runSquad(
       title: `${site.squad.name}: monthly jumps`,
       place: site.squad.place,
       note: null,
-      protocol: 'cmj',
+      test: usualTest('cmj'),
       squadIds: [site.squadId],
     })
     await dropFiles(onTheDay, site.coach, id, [...misnamed(files, day), ...oddFiles(files, number, day)])

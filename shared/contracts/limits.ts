@@ -17,6 +17,7 @@ export const limits = {
   passwordMax: 200,
   bodyMassKg: { min: 20, max: 250 },
   externalLoadKg: { min: 0, max: 300 },
+  boxHeightM: { min: 0.05, max: 2 },
   landingPeakBodyWeights: { min: 1, max: 20 },
   invitationDays: 14,
   resetMinutes: 60,

@@ -4,7 +4,8 @@ import { Id, IsoDate, Moment, Version } from './fields.ts'
 import { limits } from './limits.ts'
 import { MeanFigure } from './results.ts'
 import { measuringRoles } from './roles.ts'
-import { Protocol, Test } from './tests.ts'
+import { SessionTest } from './session-test.ts'
+import { Test } from './tests.ts'
 import { Upload } from './uploads.ts'
 
 export const SessionSummary = z.strictObject({
@@ -12,7 +13,8 @@ export const SessionSummary = z.strictObject({
   date: IsoDate,
   title: z.string(),
   place: z.string().nullable(),
-  protocol: Protocol,
+  /** What its recordings are read as; a trial may have been put to another. */
+  test: Test,
   squadNames: z.array(z.string()),
   athletes: z.number().int(),
   trials: z.number().int(),
@@ -44,7 +46,7 @@ export const SessionForm = z.strictObject({
   title: z.string().trim().min(1, 'Give the session a title').max(limits.titleCharacters),
   place: z.string().trim().max(limits.nameCharacters).nullable(),
   note: z.string().trim().max(limits.noteCharacters).nullable(),
-  protocol: Protocol,
+  test: SessionTest,
   squadIds: z.array(Id).min(1, 'Choose at least one squad'),
 })
 export const createSession = endpoint({
@@ -55,12 +57,13 @@ export const createSession = endpoint({
   response: SessionSummary,
 })
 const SessionParams = z.strictObject({ sessionId: Id })
+/** Another test puts those of its trials to it that have the session's own, and analyses them anew. */
 export const changeSession = endpoint({
   method: 'PATCH',
   path: '/api/sessions/:sessionId',
   access: measuringRoles,
   params: SessionParams,
-  body: SessionForm.partial().omit({ protocol: true }).extend({ version: Version }),
+  body: SessionForm.partial().extend({ version: Version }),
   response: SessionSummary,
 })
 

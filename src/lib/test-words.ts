@@ -1,11 +1,20 @@
 import type { z } from 'zod'
-import { protocolNames, type Test } from '../../shared/contracts/tests.ts'
+import { protocolNames, type Arms, type Side, type Test } from '../../shared/contracts/tests.ts'
+import { protocolsWithArms } from '../../shared/contracts/session-test.ts'
 import { formatNumber } from './format-figure.ts'
+
+export const armsWords: Record<z.infer<typeof Arms>, string> = { hips: 'hands on hips', free: 'arms free' }
+export const sideWords: Record<z.infer<typeof Side>, string> = {
+  both: 'both feet',
+  left: 'left leg',
+  right: 'right leg',
+}
 
 /** A test in words: "Countermovement jump, hands on hips", and what else makes it another test. */
 export function testWords(test: z.infer<typeof Test>): string {
-  const parts = [protocolNames[test.protocol], test.arms === 'hips' ? 'hands on hips' : 'arms free']
-  if (test.side !== 'both') parts.push(`${test.side} leg`)
+  const parts = [protocolNames[test.protocol]]
+  if (protocolsWithArms.includes(test.protocol)) parts.push(armsWords[test.arms])
+  if (test.side !== 'both') parts.push(sideWords[test.side])
   if (test.externalLoadKg > 0) parts.push(`${formatNumber(test.externalLoadKg, 1)} kg load`)
   if (test.boxHeightM !== null) parts.push(`${formatNumber(test.boxHeightM * 100, 0)} cm box`)
   return parts.join(', ')

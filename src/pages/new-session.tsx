@@ -1,4 +1,5 @@
 import { useNavigate } from 'react-router-dom'
+import { usualTest } from '../../shared/contracts/session-test.ts'
 import { useMe } from '../api/account/get-me.ts'
 import { useCreateSession } from '../api/sessions/create-session.ts'
 import { useSquads } from '../api/squads/list-squads.ts'
@@ -26,7 +27,7 @@ export function NewSessionPage() {
                 date: todayIn(timeZone, new Date()),
                 place: null,
                 note: null,
-                protocol: 'cmj',
+                test: usualTest('cmj'),
                 squadIds: [],
               }}
               squads={all.filter((squad) => !squad.archived)}

@@ -92,6 +92,7 @@ describe('a new session', () => {
           title: 'November jumps',
           place: null,
           note: null,
+          test: { protocol: 'cmj', side: 'both', externalLoadKg: 20, boxHeightM: null, arms: 'free' },
           squadIds: [idOf('squad', 1)],
         })
         kept.sessions = [aSession({ title: body.title, date: body.date })]
@@ -109,6 +110,14 @@ describe('a new session', () => {
     expect(screen.getByText('Choose at least one squad')).toBeVisible()
     await expectNoAxeFaults()
     await user.type(screen.getByLabelText('Title'), 'November jumps')
+    await user.clear(screen.getByLabelText('Load carried, kg'))
+    await user.type(screen.getByLabelText('Load carried, kg'), '500')
+    await user.selectOptions(screen.getByLabelText('Arms'), 'arms free')
+    expect(screen.queryByLabelText('Side')).not.toBeInTheDocument()
+    expect(screen.queryByLabelText(/^Box/)).not.toBeInTheDocument()
+    expect(await screen.findByText('Give a load of 0 to 300 kg')).toBeVisible()
+    await user.clear(screen.getByLabelText('Load carried, kg'))
+    await user.type(screen.getByLabelText('Load carried, kg'), '20')
     await user.click(screen.getByLabelText('Senior squad'))
     await user.click(screen.getByRole('button', { name: 'Make the session' }))
     await pageTitled('November jumps')
@@ -149,7 +158,7 @@ describe('editing a session', () => {
     const { user, router } = renderApp(`/sessions/${idOf('session', 1)}`, aMe(['coach']))
     await user.click(await screen.findByRole('button', { name: 'Edit' }))
     const dialog = screen.getByRole('dialog', { name: 'Edit the session' })
-    await user.clear(within(dialog).getByLabelText('Title'))
+    await user.clear(await within(dialog).findByLabelText('Title'))
     await user.type(within(dialog).getByLabelText('Title'), 'Winter jumps')
     await user.click(within(dialog).getByRole('button', { name: 'Save' }))
     await pageTitled('Winter jumps')
@@ -176,6 +185,7 @@ describe('editing a session', () => {
     expect(dialog).toHaveTextContent(
       'Athletes of a squad that you take out leave the sheet, unless they have trials on it.',
     )
+    expect(dialog).toHaveTextContent('With another test the trials of this session are analysed anew.')
     await user.click(within(dialog).getByLabelText('Senior squad'))
     await user.click(within(dialog).getByRole('button', { name: 'Save' }))
     expect(await within(dialog).findByText('Choose at least one squad')).toBeVisible()

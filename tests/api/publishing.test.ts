@@ -1,6 +1,11 @@
 import { afterAll, beforeAll, beforeEach, describe, expect, it } from 'vitest'
 import { getMyResults } from '../../shared/contracts/results.ts'
-import { getSession, publishSession, type SessionSheet } from '../../shared/contracts/sessions.ts'
+import {
+  changeSession,
+  getSession,
+  publishSession,
+  type SessionSheet,
+} from '../../shared/contracts/sessions.ts'
 import { changeTrial, getSamples, getTrial } from '../../shared/contracts/trials.ts'
 import { getOriginal } from '../../shared/contracts/uploads.ts'
 import { workerContext } from '../../server/db/database.ts'
@@ -147,6 +152,24 @@ describe('a published session', () => {
     expect((await readTrial(mara.browser, 'mara_ostrow_2.csv')).body).toMatchObject({
       analysis: { id: pinned.analysis.id },
     })
+  })
+
+  it('keeps the test that it was published under when the session is put to another', async () => {
+    await publish()
+    const before = (await readTrial(mara.browser, 'mara_ostrow_1.csv')).body as {
+      test: object
+      analysis: object
+    }
+    const { version } = (await readSheet()).session
+    const test = { ...before.test, externalLoadKg: 20 }
+    const body = { version, test }
+    await day.coach.call(changeSession, { params: { sessionId: sessionId() }, body })
+    await settledSheet(day.coach, sessionId())
+    const { test: asPublished, analysis } = before
+    const after = await readTrial(mara.browser, 'mara_ostrow_1.csv')
+    expect(after.body).toMatchObject({ test: asPublished, analysis })
+    await publish()
+    expect((await readTrial(mara.browser, 'mara_ostrow_1.csv')).body).toMatchObject({ test })
   })
 
   it('loses an athlete’s results when all their trials are gone from the correction', async () => {

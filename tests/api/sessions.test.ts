@@ -6,6 +6,7 @@ import {
   listSessions,
   type SessionSummary,
 } from '../../shared/contracts/sessions.ts'
+import { usualTest } from '../../shared/contracts/session-test.ts'
 import { changeSquad, listSquads } from '../../shared/contracts/squads.ts'
 import { workerContext } from '../../server/db/database.ts'
 import { sessions } from '../../server/db/schema/sessions.ts'
@@ -37,7 +38,7 @@ const form = (changes: Partial<Record<keyof SessionSummary | 'note' | 'squadIds'
   title: 'Monthly jumps',
   place: null,
   note: null,
-  protocol: 'cmj',
+  test: usualTest('cmj'),
   squadIds: [sprint],
   ...changes,
 })

@@ -1,5 +1,5 @@
 import { sql } from 'drizzle-orm'
-import { date, foreignKey, index, primaryKey, text, uuid } from 'drizzle-orm/pg-core'
+import { date, doublePrecision, foreignKey, index, primaryKey, text, uuid } from 'drizzle-orm/pg-core'
 import {
   club,
   clubId,
@@ -26,6 +26,11 @@ export const sessions = club.table(
     note: text('note'),
     /** Protocol that its recordings are read as unless a trial says otherwise. */
     protocol: text('protocol').notNull(),
+    /** The rest of that test: `protocol` alone does not make two results comparable. */
+    side: text('side').notNull().default('both'),
+    externalLoadKg: doublePrecision('external_load_kg').notNull().default(0),
+    boxHeightM: doublePrecision('box_height_m'),
+    arms: text('arms').notNull().default('hips'),
     createdBy: uuid('created_by').notNull(),
     /** Of the publication that athletes read now. */
     publishedAt: moment('published_at'),

@@ -8,16 +8,17 @@ const ofSession = (clubId: string, sessionId: string) =>
   and(eq(sessionSquads.clubId, clubId), eq(sessionSquads.sessionId, sessionId))
 
 /**
- * Until the transaction ends, whoever reads the session's athletes to put a trial on one (`share`) and whoever
- * changes its squads (`alone`) wait for each other: no trial ends up on an athlete who is off the sheet.
+ * Until the transaction ends, whoever reads the session's test and athletes to make or assign a trial (`share`) and
+ * whoever changes its test or squads (`alone`) wait for each other: no trial ends up on an athlete who is off the
+ * sheet, or with a test that the session had a moment ago.
  */
-export async function lockSessionAthletes(
+export async function lockSession(
   tx: Tx,
   clubId: string,
   sessionId: string,
   how: 'share' | 'alone',
 ): Promise<void> {
-  const key = sql`hashtextextended(${`session-athletes/${clubId}/${sessionId}`}, 0)`
+  const key = sql`hashtextextended(${`session/${clubId}/${sessionId}`}, 0)`
   await tx.execute(
     how === 'alone'
       ? sql`select pg_advisory_xact_lock(${key})`

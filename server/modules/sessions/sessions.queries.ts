@@ -1,5 +1,6 @@
 import { and, asc, count, desc, eq, sql, type SQL } from 'drizzle-orm'
 import type { SessionSummary } from '../../../shared/contracts/sessions.ts'
+import type { Test } from '../../../shared/contracts/tests.ts'
 import type { Tx } from '../../db/database.ts'
 import { sessions } from '../../db/schema/sessions.ts'
 
@@ -15,12 +16,20 @@ const squadsOfSession = sql`club.session_squads ss
   join club.squads s on s.club_id = ss.club_id and s.id = ss.squad_id
   where ss.club_id = sessions.club_id and ss.session_id = sessions.id`
 
+const testColumns = {
+  protocol: sql<Test['protocol']>`${sessions.protocol}`,
+  side: sql<Test['side']>`${sessions.side}`,
+  externalLoadKg: sessions.externalLoadKg,
+  boxHeightM: sessions.boxHeightM,
+  arms: sql<Test['arms']>`${sessions.arms}`,
+}
+
 const summary = {
   id: sessions.id,
   date: sessions.date,
   title: sessions.title,
   place: sessions.place,
-  protocol: sql<SessionSummary['protocol']>`${sessions.protocol}`,
+  test: testColumns,
   squadNames: sql<string[]>`array(select s.name from ${squadsOfSession} order by s.name)`,
   athletes: sql<number>`(select count(*)::int from club.session_athletes a
     where a.club_id = sessions.club_id and a.session_id = sessions.id)`,
@@ -93,11 +102,14 @@ export async function findSession(tx: Tx, clubId: string, sessionId: string): Pr
 
 export type NewSession = Pick<
   typeof sessions.$inferInsert,
-  'clubId' | 'date' | 'title' | 'place' | 'note' | 'protocol' | 'createdBy'
->
+  'clubId' | 'date' | 'title' | 'place' | 'note' | 'createdBy'
+> & { test: Test }
 
-export async function insertSession(tx: Tx, session: NewSession): Promise<string> {
-  const [{ id }] = await tx.insert(sessions).values(session).returning({ id: sessions.id })
+export async function insertSession(tx: Tx, { test, ...session }: NewSession): Promise<string> {
+  const [{ id }] = await tx
+    .insert(sessions)
+    .values({ ...session, ...test })
+    .returning({ id: sessions.id })
   return id
 }
 
@@ -105,11 +117,14 @@ export async function insertSession(tx: Tx, session: NewSession): Promise<string
 export async function updateSession(
   tx: Tx,
   { clubId, sessionId, version }: { clubId: string; sessionId: string; version: number },
-  change: Partial<Pick<SessionRow, 'date' | 'title' | 'place' | 'note' | 'publishedAt'>>,
+  {
+    test,
+    ...change
+  }: Partial<Pick<SessionRow, 'date' | 'title' | 'place' | 'note' | 'publishedAt'>> & { test?: Test },
 ): Promise<boolean> {
   const changed = await tx
     .update(sessions)
-    .set({ ...change, version: sql`${sessions.version} + 1` })
+    .set({ ...change, ...test, version: sql`${sessions.version} + 1` })
     .where(and(ofSession(clubId, sessionId), eq(sessions.version, version)))
     .returning({ id: sessions.id })
   return changed.length > 0

@@ -5,6 +5,7 @@ import type {
   SessionForm,
   SessionSummary,
 } from '../../../shared/contracts/sessions.ts'
+import type { Test } from '../../../shared/contracts/tests.ts'
 import type { BodyOf, QueryOf, ResponseOf } from '../../../shared/contracts/endpoint.ts'
 import type { ClubContext, Tx } from '../../db/database.ts'
 import type { Deps } from '../../deps.ts'
@@ -14,12 +15,13 @@ import { record } from '../audit/audit.service.ts'
 import { notify } from '../events/notify.ts'
 import { redate } from '../results/results.service.ts'
 import type { Candidate } from '../trials/match-athlete.ts'
+import { retest } from '../trials/retest.service.ts'
 import { squadMissing } from './sessions.errors.ts'
 import {
   addSquads,
   athletesOfSession,
   countSquads,
-  lockSessionAthletes,
+  lockSession,
   removeSquads,
   squadIdsOfSession,
 } from './session-squads.queries.ts'
@@ -71,9 +73,11 @@ export async function change(
   { version, squadIds, ...form }: BodyOf<typeof changeSession>,
 ): Promise<SessionSummary> {
   return deps.db.inClub(ctx, async (tx) => {
-    if (squadIds) await lockSessionAthletes(tx, ctx.clubId, sessionId, 'alone')
+    if (squadIds || form.test) await lockSession(tx, ctx.clubId, sessionId, 'alone')
+    const before = await findSummary(tx, ctx.clubId, sessionId)
     const changed = await updateSession(tx, { clubId: ctx.clubId, sessionId, version }, form)
     if (!changed) throw staleVersion(await requireSummary(tx, ctx, sessionId))
+    if (before && form.test) await retest(tx, ctx, sessionId, { from: before.test, to: form.test })
     if (squadIds) await changeSquads(tx, ctx.clubId, sessionId, squadIds)
     const session = await requireSummary(tx, ctx, sessionId)
     if (form.date) await redate(tx, ctx, sessionId, form.date)
@@ -119,9 +123,9 @@ export async function candidatesOf(
   tx: Tx,
   clubId: string,
   sessionId: string,
-): Promise<{ protocol: string; candidates: Candidate[] }> {
-  await lockSessionAthletes(tx, clubId, sessionId, 'share')
-  const session = await findSession(tx, clubId, sessionId)
+): Promise<{ test: Test; candidates: Candidate[] }> {
+  await lockSession(tx, clubId, sessionId, 'share')
+  const session = await findSummary(tx, clubId, sessionId)
   if (!session) throw new Error('The session of an upload is gone.')
-  return { protocol: session.protocol, candidates: await athletesOfSession(tx, clubId, sessionId) }
+  return { test: session.test, candidates: await athletesOfSession(tx, clubId, sessionId) }
 }

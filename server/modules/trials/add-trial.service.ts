@@ -12,7 +12,7 @@ export async function addTrial(
   upload: { id: string; sessionId: string; fileName: string; createdAt: Date },
   read: FileRead,
 ): Promise<void> {
-  const { protocol, candidates } = await candidatesOf(tx, clubId, upload.sessionId)
+  const { test, candidates } = await candidatesOf(tx, clubId, upload.sessionId)
   const athleteId = matchAthlete(upload.fileName, candidates)
   const trialId = await insertTrial(
     tx,
@@ -22,7 +22,7 @@ export async function addTrial(
       uploadId: upload.id,
       athleteId,
       assignedBy: athleteId && 'file-name',
-      protocol,
+      ...test,
       startS: 0,
       endS: (read.sampleCount - 1) / read.sampleRateHz,
       preview: read.preview,

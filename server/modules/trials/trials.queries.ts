@@ -100,12 +100,18 @@ export async function findOwnTrial(tx: Tx, clubId: string, athleteId: string, tr
   const [row] = await tx
     .select({
       ...page,
+      // That of the day: the session may have been put to another test since.
+      test: sql<Test>`${analyses.inputs} -> 'test'`,
       fileName: sql<null>`null`,
       setAsideByName: sql<null>`null`,
       analysisId: publishedTrials.analysisId,
     })
     .from(publishedTrials)
     .innerJoin(trials, and(eq(trials.clubId, publishedTrials.clubId), eq(trials.id, publishedTrials.trialId)))
+    .innerJoin(
+      analyses,
+      and(eq(analyses.clubId, publishedTrials.clubId), eq(analyses.id, publishedTrials.analysisId)),
+    )
     .innerJoin(sessions, and(eq(sessions.clubId, trials.clubId), eq(sessions.id, trials.sessionId)))
     .innerJoin(trialSamples, and(eq(trialSamples.clubId, trials.clubId), eq(trialSamples.trialId, trials.id)))
     .innerJoin(

@@ -1,35 +1,53 @@
 import { zodResolver } from '@hookform/resolvers/zod'
-import { Controller, useForm } from 'react-hook-form'
+import { useForm } from 'react-hook-form'
 import { SessionForm, type SessionSheet } from '../../../shared/contracts/sessions.ts'
+import type { Squad } from '../../../shared/contracts/squads.ts'
 import { useChangeSession } from '../../api/sessions/change-session.ts'
 import { useSquads } from '../../api/squads/list-squads.ts'
 import { useAnnounce } from '../../components/announcer.tsx'
 import { Button } from '../../components/button.tsx'
 import { Dialog } from '../../components/dialog.tsx'
-import { TextAreaField, TextField } from '../../components/field.tsx'
 import { FormError } from '../../components/form-error.tsx'
 import { QueryState } from '../../components/query-state.tsx'
 import { placeFieldErrors } from '../../lib/server-field-errors.ts'
-import { SquadTicks } from './squad-ticks.tsx'
+import { SessionFields } from './session-fields.tsx'
+import type { SessionValues } from './session-values.ts'
 
-const EditForm = SessionForm.omit({ protocol: true })
-const orNull = (typed: string | null) => typed?.trim() || null
-
-/** Date, title, place, squads and note of a session. */
-export function EditSessionDialog({
-  session,
-  onClose,
-}: {
+interface Props {
   session: SessionSheet['session']
   onClose: () => void
-}) {
-  const { title, date, place, note, squadIds } = session
-  const form = useForm({
-    resolver: zodResolver(EditForm),
-    defaultValues: { title, date, place, note, squadIds },
-  })
+}
+
+/** All that was said of a session when it was made. */
+export function EditSessionDialog({ session, onClose }: Props) {
   const squads = useSquads()
-  const { errors, isDirty } = form.formState
+  const { title, date, place, note, test, squadIds } = session
+  const form = useForm<SessionValues>({
+    resolver: zodResolver(SessionForm),
+    defaultValues: { title, date, place, note, test, squadIds },
+  })
+  return (
+    <Dialog title="Edit the session" onClose={onClose} dirty={form.formState.isDirty}>
+      <QueryState query={squads} what="the squads">
+        {(all) => (
+          <EditForm
+            session={session}
+            form={form}
+            squads={all.filter(({ id, archived }) => !archived || squadIds.includes(id))}
+            onClose={onClose}
+          />
+        )}
+      </QueryState>
+    </Dialog>
+  )
+}
+
+function EditForm({
+  session,
+  form,
+  squads,
+  onClose,
+}: Props & { form: ReturnType<typeof useForm<SessionValues>>; squads: Squad[] }) {
   const announce = useAnnounce()
   const change = useChangeSession(() => {
     announce({ text: 'Session saved.' })
@@ -42,50 +60,26 @@ export function EditSessionDialog({
     ),
   )
   return (
-    <Dialog title="Edit the session" onClose={onClose} dirty={isDirty}>
-      <form noValidate className="flex flex-col gap-4" onSubmit={(event) => void submit(event)}>
-        <FormError error={change.error} />
-        <TextField
-          label="Title"
-          autoComplete="off"
-          error={errors.title?.message}
-          {...form.register('title')}
-        />
-        <div className="grid gap-4 sm:grid-cols-2">
-          <TextField label="Date" type="date" error={errors.date?.message} {...form.register('date')} />
-          <TextField
-            label="Place (may be left empty)"
-            autoComplete="off"
-            error={errors.place?.message}
-            {...form.register('place', { setValueAs: orNull })}
-          />
-        </div>
-        <QueryState query={squads} what="the squads">
-          {(all) => (
-            <Controller
-              control={form.control}
-              name="squadIds"
-              render={({ field }) => (
-                <SquadTicks
-                  hint="Athletes of a squad that you take out leave the sheet, unless they have trials on it."
-                  squads={all.filter(({ id, archived }) => !archived || squadIds.includes(id))}
-                  chosen={field.value}
-                  onChange={field.onChange}
-                  error={errors.squadIds?.message}
-                />
-              )}
-            />
-          )}
-        </QueryState>
-        <TextAreaField
-          label="Note (may be left empty)"
-          error={errors.note?.message}
-          {...form.register('note', { setValueAs: orNull })}
-        />
-        <Button type="submit" look="main" className="self-start" busy={change.isPending} disabled={!isDirty}>
-          Save
-        </Button>
-      </form>
-    </Dialog>
+    <form noValidate className="flex flex-col gap-4" onSubmit={(event) => void submit(event)}>
+      <FormError error={change.error} />
+      <SessionFields
+        form={form}
+        squads={squads}
+        squadsHint="Athletes of a squad that you take out leave the sheet, unless they have trials on it."
+        {...(session.trials > 0 && {
+          testHint:
+            'With another test the trials of this session are analysed anew. What is published stays until you publish again.',
+        })}
+      />
+      <Button
+        type="submit"
+        look="main"
+        className="self-start"
+        busy={change.isPending}
+        disabled={!form.formState.isDirty}
+      >
+        Save
+      </Button>
+    </form>
   )
 }

@@ -1,10 +1,10 @@
 import { Link } from 'react-router-dom'
 import type { SessionSummary } from '../../../shared/contracts/sessions.ts'
-import { protocolNames } from '../../../shared/contracts/tests.ts'
 import type { Column } from '../../components/table.tsx'
 import { Tag } from '../../components/tag.tsx'
 import { formatDateShort } from '../../lib/format-date.ts'
 import { pathOf } from '../../lib/paths.ts'
+import { testWords } from '../../lib/test-words.ts'
 
 /** The columns of the list of sessions; the server orders it, newest first. */
 export const sessionColumns: Column<SessionSummary>[] = [
@@ -15,7 +15,7 @@ export const sessionColumns: Column<SessionSummary>[] = [
   },
   { key: 'date', head: 'Date', cell: (session) => formatDateShort(session.date) },
   { key: 'squads', head: 'Squads', cell: (session) => session.squadNames.join(', ') },
-  { key: 'test', head: 'Test', cell: (session) => protocolNames[session.protocol] },
+  { key: 'test', head: 'Test', cell: (session) => testWords(session.test) },
   {
     key: 'place',
     head: 'Place',

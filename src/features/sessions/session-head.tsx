@@ -1,11 +1,11 @@
 import type { ReactNode } from 'react'
 import type { SessionSheet } from '../../../shared/contracts/sessions.ts'
-import { protocolNames } from '../../../shared/contracts/tests.ts'
 import { useMe } from '../../api/account/get-me.ts'
 import { Button } from '../../components/button.tsx'
 import { PageHead } from '../../components/page-head.tsx'
 import { counted } from '../../lib/counted.ts'
 import { formatDate, formatMoment } from '../../lib/format-date.ts'
+import { testWords } from '../../lib/test-words.ts'
 import type { SheetCounts } from './sheet-rows.ts'
 
 interface Props {
@@ -27,7 +27,7 @@ export function SessionHead({
     formatDate(session.date),
     session.place,
     session.squadNames.join(', '),
-    protocolNames[session.protocol],
+    testWords(session.test),
   ]
   return (
     <>

@@ -1,5 +1,6 @@
 import { randomUUID } from 'node:crypto'
 import type { Role } from '../../../shared/contracts/roles.ts'
+import { usualTest } from '../../../shared/contracts/session-test.ts'
 import type { CallOptions } from './api-client.ts'
 import type { OneOfEach } from './one-of-each.ts'
 
@@ -110,7 +111,7 @@ export const accessTable: Record<string, AccessLine> = {
         title: 'Next',
         place: null,
         note: null,
-        protocol: 'cmj',
+        test: usualTest('cmj'),
         squadIds: [squadId],
       },
     }),

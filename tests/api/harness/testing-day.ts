@@ -5,6 +5,7 @@ import {
   type SessionSheet,
   type SessionSummary,
 } from '../../../shared/contracts/sessions.ts'
+import { usualTest } from '../../../shared/contracts/session-test.ts'
 import { limits } from '../../../shared/contracts/limits.ts'
 import { finishUpload, sendChunk, startUpload, type Upload } from '../../../shared/contracts/uploads.ts'
 import { buildAthlete, buildSquad } from '../../../seed/builders/athlete.ts'
@@ -44,7 +45,14 @@ export async function startTestingDay(
 
 export const newSession = (coach: ApiClient, squadId: string, date = '2027-02-26'): Promise<SessionSummary> =>
   coach.call(createSession, {
-    body: { date, title: 'Monthly jumps', place: 'Hall', note: null, protocol: 'cmj', squadIds: [squadId] },
+    body: {
+      date,
+      title: 'Monthly jumps',
+      place: 'Hall',
+      note: null,
+      test: usualTest('cmj'),
+      squadIds: [squadId],
+    },
   })
 
 /** The file of a countermovement jump, made from physics; each seed is another file. */

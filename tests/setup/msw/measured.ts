@@ -141,7 +141,7 @@ export function aSession(change: Partial<SessionSummary> = {}): SessionSummary {
     date: '2026-11-12',
     title: 'November jumps',
     place: 'North hall',
-    protocol: 'cmj',
+    test: cmj,
     squadNames: ['Senior squad'],
     athletes: 2,
     trials: 3,
