@@ -1,6 +1,7 @@
 import type { z } from 'zod'
 import { protocolNames, type Arms, type Side, type Test } from '../../shared/contracts/tests.ts'
 import { protocolsWithArms } from '../../shared/contracts/session-test.ts'
+import type { Protocol as AnyProtocol } from '../../shared/mechanics/types.ts'
 import { formatNumber } from './format-figure.ts'
 
 export const armsWords: Record<z.infer<typeof Arms>, string> = { hips: 'hands on hips', free: 'arms free' }
@@ -19,3 +20,24 @@ export function testWords(test: z.infer<typeof Test>): string {
   if (test.boxHeightM !== null) parts.push(`${formatNumber(test.boxHeightM * 100, 0)} cm box`)
   return parts.join(', ')
 }
+
+/** What one trial of a test is called by those who did it. */
+export const trialNouns: Readonly<Record<AnyProtocol, string>> = {
+  cmj: 'jump',
+  sj: 'jump',
+  dj: 'jump',
+  slcmj: 'jump',
+  dropLanding: 'landing',
+  hops: 'set of hops',
+}
+export const trialNounsOfMany: typeof trialNouns = {
+  cmj: 'jumps',
+  sj: 'jumps',
+  dj: 'jumps',
+  slcmj: 'jumps',
+  dropLanding: 'landings',
+  hops: 'sets of hops',
+}
+
+/** "set of hops" at the beginning of a line: "Set of hops". */
+export const sentenceCase = (words: string): string => words.charAt(0).toUpperCase() + words.slice(1)

@@ -28,7 +28,7 @@ function open(results: ResultPoint[], athlete: typeof mara | null = mara) {
 describe('the athlete’s own page', () => {
   test('begins with the newest result: what it is, when, and its give or take', async () => {
     open(year)
-    expect(await screen.findByText('Jump test, 12 November 2026')).toBeVisible()
+    expect(await screen.findByText('Countermovement jump, hands on hips · 12 November 2026')).toBeVisible()
     expect(screen.getByText('35.0', { selector: 'p > span' })).toBeVisible()
     expect(screen.getByText('cm, give or take 0.4')).toBeVisible()
     expect(screen.getByText(/The average of 2 jumps/)).toBeVisible()
@@ -86,7 +86,7 @@ describe('the athlete’s own page', () => {
 
   test('a test without a height to show says so and invents none', async () => {
     open([aResult(1, { means: {} })])
-    expect(await screen.findByText('No jump of this test was sure enough to show a height.')).toBeVisible()
+    expect(await screen.findByText('No jump of this test was sure enough to show a figure.')).toBeVisible()
     expect(screen.getByText('Jump height: no results yet.')).toBeVisible()
   })
 
@@ -107,7 +107,7 @@ describe('the athlete’s own page', () => {
     const again = await screen.findByRole('button', { name: 'Try again' }, { timeout: 5_000 })
     server.use(answer(getMyResults, () => ({ athlete: mara, results: year })))
     await user.click(again)
-    expect(await screen.findByText('Jump test, 12 November 2026')).toBeVisible()
+    expect(await screen.findByText('Countermovement jump, hands on hips · 12 November 2026')).toBeVisible()
     await pageTitled('My results')
   })
 })

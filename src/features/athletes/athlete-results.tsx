@@ -1,13 +1,15 @@
 import type { ResultPoint } from '../../../shared/contracts/results.ts'
-import { sheetMetrics } from '../../../shared/contracts/sheet-metrics.ts'
 import { testKey } from '../../../shared/contracts/tests.ts'
+import type { MetricKey } from '../../../shared/mechanics/catalogue.ts'
 import { EmptyState } from '../../components/empty-state.tsx'
 import { Sheet } from '../../components/sheet.tsx'
 import { testWords } from '../../lib/test-words.ts'
 import { useListState } from '../../lib/use-list-state.ts'
-import { ResultsOfTest, type SheetMetric } from './results-of-test.tsx'
+import { headlineMetric, metricsOf } from '../results/test-metrics.ts'
+import { ResultsOfTest } from './results-of-test.tsx'
 
-const defaults = { metric: sheetMetrics[0] as string, sort: '-date' }
+/** Without a metric each test shows the one that stands for it. */
+const defaults = { metric: '', sort: '-date' }
 
 /** All of an athlete's results, a block for each test: results of different tests are never one line. */
 export function AthleteResults({ results }: { results: ResultPoint[] }) {
@@ -30,7 +32,7 @@ export function AthleteResults({ results }: { results: ResultPoint[] }) {
           key={key}
           title={testWords(ofTest[0]!.test)}
           results={ofTest}
-          metric={metricOf(view.metric)}
+          metric={metricOf(view.metric, ofTest[0]!.test)}
           onMetric={(metric) => setView({ metric })}
           sort={view.sort}
           onSort={(sort) => setView({ sort })}
@@ -40,6 +42,6 @@ export function AthleteResults({ results }: { results: ResultPoint[] }) {
   )
 }
 
-function metricOf(key: string): SheetMetric {
-  return sheetMetrics.find((metric) => metric === key) ?? sheetMetrics[0]
+function metricOf(key: string, { protocol }: ResultPoint['test']): MetricKey {
+  return metricsOf(protocol).find((metric) => metric === key) ?? headlineMetric(protocol)
 }

@@ -1,6 +1,6 @@
 import { Link } from 'react-router-dom'
 import type { MeanFigure, ResultPoint } from '../../../shared/contracts/results.ts'
-import { sheetMetrics } from '../../../shared/contracts/sheet-metrics.ts'
+import type { MetricKey } from '../../../shared/mechanics/catalogue.ts'
 import type { Column } from '../../components/table.tsx'
 import { formatDateShort } from '../../lib/format-date.ts'
 import { pathOf } from '../../lib/paths.ts'
@@ -8,8 +8,8 @@ import { compareNumbers, compareText } from '../../lib/sort-rows.ts'
 import { FigureText } from '../results/figure-text.tsx'
 import { metricHead } from '../results/metric-words.ts'
 
-/** A session a row: when, which, how many trials, and the mean of each metric of a sheet. */
-export function resultColumns(): Column<ResultPoint>[] {
+/** A session a row: when, which, how many trials, and the mean of each of these metrics. */
+export function resultColumns(metrics: readonly MetricKey[]): Column<ResultPoint>[] {
   return [
     {
       key: 'date',
@@ -29,11 +29,11 @@ export function resultColumns(): Column<ResultPoint>[] {
       compare: (a, b) => a.trialIds.length - b.trialIds.length,
       figure: true,
     },
-    ...sheetMetrics.map(metricColumn),
+    ...metrics.map(metricColumn),
   ]
 }
 
-function metricColumn(key: (typeof sheetMetrics)[number]): Column<ResultPoint> {
+function metricColumn(key: MetricKey): Column<ResultPoint> {
   const meanOf = ({ means }: ResultPoint): MeanFigure | undefined => means[key]
   return {
     key,

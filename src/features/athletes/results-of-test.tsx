@@ -1,7 +1,6 @@
 import { ResultsOverTime } from '../../charts/results-over-time.tsx'
 import type { ResultPoint } from '../../../shared/contracts/results.ts'
-import { sheetMetrics } from '../../../shared/contracts/sheet-metrics.ts'
-import { catalogue } from '../../../shared/mechanics/catalogue.ts'
+import { catalogue, type MetricKey } from '../../../shared/mechanics/catalogue.ts'
 import { CautionLine } from '../../components/caution-line.tsx'
 import { SelectField } from '../../components/field.tsx'
 import { Sheet } from '../../components/sheet.tsx'
@@ -9,15 +8,14 @@ import { Table } from '../../components/table.tsx'
 import { counted } from '../../lib/counted.ts'
 import { formatSort, parseSort, sortRows } from '../../lib/sort-rows.ts'
 import { metricHead } from '../results/metric-words.ts'
+import { metricsOf } from '../results/test-metrics.ts'
 import { resultColumns } from './result-columns.tsx'
-
-export type SheetMetric = (typeof sheetMetrics)[number]
 
 interface ResultsOfTestProps {
   title: string
   /** Of one test, oldest first. */
   results: ResultPoint[]
-  metric: SheetMetric
+  metric: MetricKey
   onMetric: (metric: string) => void
   sort: string
   onSort: (sort: string) => void
@@ -25,7 +23,8 @@ interface ResultsOfTestProps {
 
 /** An athlete's results in one test: a metric over time, and every session with all its figures. */
 export function ResultsOfTest({ title, results, metric, onMetric, sort, onSort }: ResultsOfTestProps) {
-  const columns = resultColumns()
+  const metrics = metricsOf(results[0]!.test.protocol)
+  const columns = resultColumns(metrics)
   return (
     <div className="flex flex-col gap-5">
       <Sheet title={title} titleAside={counted(results.length, 'session')}>
@@ -35,7 +34,7 @@ export function ResultsOfTest({ title, results, metric, onMetric, sort, onSort }
           value={metric}
           onChange={(event) => onMetric(event.target.value)}
         >
-          {sheetMetrics.map((key) => (
+          {metrics.map((key) => (
             <option key={key} value={key}>
               {catalogue[key].name}
             </option>

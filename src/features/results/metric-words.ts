@@ -1,4 +1,4 @@
-import { catalogue, isMetricKey } from '../../../shared/mechanics/catalogue.ts'
+import { catalogue, isMetricKey, type MetricKey } from '../../../shared/mechanics/catalogue.ts'
 import { formatUncertainty, formatValue } from '../../lib/format-figure.ts'
 
 /** Where the unit is body weights it says "per body weight" already, and a head is short. */
@@ -20,7 +20,15 @@ export function figureWords(metricKey: string, figure: { value: number; U: numbe
   return parts.filter(Boolean).join(' ')
 }
 
+/** Within a sentence: "jump height", and "RSImod" as it is. */
+const inSentence = (words: string) => words.replace(/^\p{Lu}(?=\p{Ll})/u, (letter) => letter.toLowerCase())
+
 /** The same of a mean: "Mean jump height, cm". */
 export function meanHead(metricKey: string): string {
-  return `Mean ${metricHead(metricKey).replace(/^\p{Lu}(?=\p{Ll})/u, (letter) => letter.toLowerCase())}`
+  return `Mean ${inSentence(metricHead(metricKey))}`
+}
+
+/** "no jump height", where a trial has no such figure. */
+export function noFigureWords(metricKey: MetricKey): string {
+  return `no ${inSentence(catalogue[metricKey].name)}`
 }

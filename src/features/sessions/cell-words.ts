@@ -1,8 +1,6 @@
 import type { SheetTrial } from '../../../shared/contracts/sessions.ts'
-import { figureWords } from '../results/metric-words.ts'
-
-/** The metric that a sheet's cell shows. */
-export const cellMetric = 'jumpHeightImpulse'
+import { figureWords, noFigureWords } from '../results/metric-words.ts'
+import { headlineMetric } from '../results/test-metrics.ts'
 
 /** "1 failed check, 2 to look at", or null where all pass. */
 export function checkWords(analysis: NonNullable<SheetTrial['analysis']>): string | null {
@@ -11,20 +9,21 @@ export function checkWords(analysis: NonNullable<SheetTrial['analysis']>): strin
   return parts.filter(Boolean).join(', ') || null
 }
 
-/** What a cell says, for those who cannot see it: whose trial, which, its height, what is wrong with it. */
+/** What a cell says, for those who cannot see it: whose trial, which, its figure, what is wrong with it. */
 export function cellName(athleteName: string, n: number, trial: SheetTrial): string {
   return [`${athleteName}, trial ${n}`, ...stateWords(trial)].join(', ')
 }
 
-function stateWords({ analysis, setAside }: SheetTrial): string[] {
+function stateWords({ analysis, setAside, test }: SheetTrial): string[] {
   if (setAside) return [`set aside: ${setAside.reason}`]
   if (!analysis) return ['being analysed']
-  const height = analysis.metrics[cellMetric]
-  const withheld = analysis.withheld.includes(cellMetric)
+  const metric = headlineMetric(test.protocol)
+  const figure = analysis.metrics[metric]
+  const withheld = analysis.withheld.includes(metric)
   return [
-    height === undefined
-      ? 'no jump height'
-      : `${withheld ? 'withheld ' : ''}${figureWords(cellMetric, height)}`,
+    figure === undefined
+      ? noFigureWords(metric)
+      : `${withheld ? 'withheld ' : ''}${figureWords(metric, figure)}`,
     checkWords(analysis),
     analysis.worstSentence,
   ].filter((words) => words !== null)

@@ -2,6 +2,7 @@ import { useState, type ReactNode } from 'react'
 import type { SessionSheet as Sheet } from '../../../shared/contracts/sessions.ts'
 import { CautionLine } from '../../components/caution-line.tsx'
 import { EmptyState } from '../../components/empty-state.tsx'
+import { sheetColumnsOf } from '../results/test-metrics.ts'
 import { MoveTrialDialog } from '../trials/move-trial-dialog.tsx'
 import { SetAsideDialog } from '../trials/set-aside-dialog.tsx'
 import type { ActedTrial } from '../trials/use-trial-acts.ts'
@@ -45,6 +46,7 @@ export function SessionSheet({ sheet, files, queue, addFiles }: Props) {
       ) : (
         <SheetTable
           caption={`${sheet.session.title}, athletes and trials`}
+          metrics={sheetColumnsOf(sheet.session.test.protocol)}
           rows={rows}
           columns={columns}
           acts={{

@@ -1,26 +1,26 @@
 import type { MeanFigure } from '../../../shared/contracts/results.ts'
+import { massMetric } from '../../../shared/contracts/sheet-metrics.ts'
+import type { MetricKey } from '../../../shared/mechanics/catalogue.ts'
 import { MethodLink } from '../../components/method-link.tsx'
 import { ScrollRegion } from '../../components/scroll-region.tsx'
 import { FigureText } from '../results/figure-text.tsx'
 import { meanHead, metricHead } from '../results/metric-words.ts'
-import { cellMetric } from './cell-words.ts'
 import type { SheetRow } from './sheet-rows.ts'
 import './sheet-table.css'
 import { TrialCell, type CellActs } from './trial-cell.tsx'
 import { useSheetCursor, type SheetCursor } from './use-sheet-cursor.ts'
 
-const massMetric = 'bodyMass'
-const landingMetric = 'landingPeakForcePerBodyWeight'
-
 interface Props {
   caption: string
+  /** Means beside the mass, the one that stands for the test first. */
+  metrics: readonly MetricKey[]
   rows: readonly SheetRow[]
   columns: number
   acts: CellActs
 }
 
 /** Athletes down, the means of what is included beside them, then their trials across. */
-export function SheetTable({ caption, rows, columns, acts }: Props) {
+export function SheetTable({ caption, metrics, rows, columns, acts }: Props) {
   const cursor = useSheetCursor(rows.map((row) => row.trials.length))
   const numbers = Array.from({ length: columns }, (_, i) => i + 1)
   return (
@@ -33,12 +33,11 @@ export function SheetTable({ caption, rows, columns, acts }: Props) {
             <th scope="col" className="figure">
               <MethodLink noteKey={massMetric}>{metricHead(massMetric)}</MethodLink>
             </th>
-            <th scope="col" className="figure">
-              <MethodLink noteKey={cellMetric}>{meanHead(cellMetric)}</MethodLink>
-            </th>
-            <th scope="col" className="figure">
-              <MethodLink noteKey={landingMetric}>{meanHead(landingMetric)}</MethodLink>
-            </th>
+            {metrics.map((metric) => (
+              <th key={metric} scope="col" className="figure">
+                <MethodLink noteKey={metric}>{meanHead(metric)}</MethodLink>
+              </th>
+            ))}
             {numbers.map((n) => (
               <th key={n} scope="col">
                 Trial {n}
@@ -51,6 +50,7 @@ export function SheetTable({ caption, rows, columns, acts }: Props) {
             <AthleteRow
               key={row.athlete.athleteId}
               row={row}
+              metrics={metrics}
               index={i}
               columns={columns}
               cursor={cursor}
@@ -65,20 +65,22 @@ export function SheetTable({ caption, rows, columns, acts }: Props) {
 
 interface RowProps {
   row: SheetRow
+  metrics: readonly MetricKey[]
   index: number
   columns: number
   cursor: SheetCursor
   acts: CellActs
 }
 
-function AthleteRow({ row: { athlete, trials }, index, columns, cursor, acts }: RowProps) {
+function AthleteRow({ row: { athlete, trials }, metrics, index, columns, cursor, acts }: RowProps) {
   const empty = columns - trials.length
   return (
     <tr>
       <th scope="row">{athlete.name}</th>
       <MeanCell metricKey={massMetric} mean={athlete.means[massMetric]} plain />
-      <MeanCell metricKey={cellMetric} mean={athlete.means[cellMetric]} />
-      <MeanCell metricKey={landingMetric} mean={athlete.means[landingMetric]} plain />
+      {metrics.map((metric, i) => (
+        <MeanCell key={metric} metricKey={metric} mean={athlete.means[metric]} plain={i > 0} />
+      ))}
       {trials.map((trial, i) => (
         <TrialCell
           key={trial.id}

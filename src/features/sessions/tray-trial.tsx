@@ -1,14 +1,15 @@
 import { useId, useRef, useState } from 'react'
 import { Link } from 'react-router-dom'
 import type { SheetTrial } from '../../../shared/contracts/sessions.ts'
+import { massMetric } from '../../../shared/contracts/sheet-metrics.ts'
 import { Button } from '../../components/button.tsx'
 import { FormError } from '../../components/form-error.tsx'
 import { focusNextRow } from '../../lib/focus-next-row.ts'
 import { pathOf } from '../../lib/paths.ts'
 import { figureWords } from '../results/metric-words.ts'
+import { headlineMetric } from '../results/test-metrics.ts'
 import type { AthleteChoice } from '../trials/move-trial-dialog.tsx'
 import { useMoveTrial } from '../trials/use-trial-acts.ts'
-import { cellMetric } from './cell-words.ts'
 
 /** A trial that no athlete could be told from: what was measured, and a choice of athlete. */
 export function TrayTrial({ trial, athletes }: { trial: SheetTrial; athletes: readonly AthleteChoice[] }) {
@@ -58,11 +59,11 @@ export function TrayTrial({ trial, athletes }: { trial: SheetTrial; athletes: re
   )
 }
 
-/** Mass and height help to tell whose it is. */
-function measuredWords({ analysis, setAside }: SheetTrial): string {
+/** Mass and the figure of the test help to tell whose it is. */
+function measuredWords({ analysis, setAside, test }: SheetTrial): string {
   if (setAside) return `set aside: ${setAside.reason}`
   if (!analysis) return 'being analysed'
-  const words = ['bodyMass', cellMetric].flatMap((key) => {
+  const words = [massMetric, headlineMetric(test.protocol)].flatMap((key) => {
     const figure = analysis.metrics[key]
     return figure ? [figureWords(key, figure)] : []
   })

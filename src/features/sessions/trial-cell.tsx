@@ -6,8 +6,10 @@ import { Button } from '../../components/button.tsx'
 import { Tag } from '../../components/tag.tsx'
 import { pathOf } from '../../lib/paths.ts'
 import { FigureText } from '../results/figure-text.tsx'
+import { noFigureWords } from '../results/metric-words.ts'
+import { headlineMetric } from '../results/test-metrics.ts'
 import { useTakeBack, type ActedTrial } from '../trials/use-trial-acts.ts'
-import { cellMetric, cellName, checkWords } from './cell-words.ts'
+import { cellName, checkWords } from './cell-words.ts'
 import type { SheetCursor } from './use-sheet-cursor.ts'
 
 /** What may be done to a trial from its cell. */
@@ -24,7 +26,7 @@ interface Props {
   acts: CellActs
 }
 
-/** A trial on the sheet: its trace, its height, its checks in words. Opens it; x sets it aside, m moves it. */
+/** A trial on the sheet: its trace, the figure of its test, its checks in words. Opens it; x sets it aside, m moves it. */
 export function TrialCell({ trial, athleteName, n, focus, acts }: Props) {
   const { id, version, athleteId } = trial
   const acted = { id, version, athleteId, words: `trial ${n} of ${athleteName}` }
@@ -71,22 +73,23 @@ function focusCell(event: MouseEvent<HTMLElement>) {
   event.currentTarget.closest('td')?.querySelector('a')?.focus()
 }
 
-function CellFigures({ trial: { setAside, analysis } }: { trial: SheetTrial }) {
+function CellFigures({ trial: { setAside, analysis, test } }: { trial: SheetTrial }) {
   if (setAside)
     return (
       <span className="line-clamp-2 text-small leading-tight text-ink-2">set aside: {setAside.reason}</span>
     )
   if (!analysis) return <span className="text-small text-ink-2">being analysed</span>
-  const height = analysis.metrics[cellMetric]
+  const metric = headlineMetric(test.protocol)
+  const figure = analysis.metrics[metric]
   const words = checkWords(analysis)
-  const withheld = analysis.withheld.includes(cellMetric)
+  const withheld = analysis.withheld.includes(metric)
   return (
     <span className="flex flex-col items-start">
-      {height === undefined ? (
-        <span className="text-small text-ink-2">no height</span>
+      {figure === undefined ? (
+        <span className="text-small text-ink-2">{noFigureWords(metric)}</span>
       ) : (
         <span className={withheld ? 'text-ink-2 line-through' : undefined}>
-          <FigureText metricKey={cellMetric} figure={height} strong={!withheld} />
+          <FigureText metricKey={metric} figure={figure} strong={!withheld} />
         </span>
       )}
       {words !== null && <Tag tone={analysis.fails > 0 ? 'stop' : 'caution'}>{words}</Tag>}
