@@ -36,7 +36,7 @@ export type SheetMetric = (typeof metricsOfTest)[Protocol][number] | typeof mass
 
 /** All of them, each once. */
 export const sheetMetrics: readonly SheetMetric[] = [
-  ...new Set([...Object.values<readonly SheetMetric[]>(metricsOfTest).flat(), massMetric]),
+  ...new Set<SheetMetric>([...Object.values<readonly SheetMetric[]>(metricsOfTest).flat(), massMetric]),
 ]
 
 /** The one metric that stands for a test where there is room for one. */
