@@ -15,15 +15,17 @@ const timeoutMs = 10_000
 
 /** Hands a mail to the server of `SMTP_URL`; rejects where the server refuses it or cannot be reached. */
 export async function sendBySmtp(
-  { smtpUrl, mailFrom, appUrl }: Pick<Config, 'smtpUrl' | 'mailFrom' | 'appUrl'>,
+  { mode, smtpUrl, mailFrom, appUrl }: Pick<Config, 'mode' | 'smtpUrl' | 'mailFrom' | 'appUrl'>,
   { id, ...mail }: Mail,
 ): Promise<void> {
   if (!smtpUrl) throw new Error('SMTP_URL is not set: there is no mail server to hand mail to.')
-  const { hostname } = new URL(smtpUrl)
+  const isHere = new URL(smtpUrl).hostname === '127.0.0.1'
   const transport = nodemailer.createTransport({
     url: smtpUrl,
-    // The mail catcher on this machine speaks no TLS.
-    ignoreTLS: hostname === '127.0.0.1',
+    // A server on this machine, such as the mail catcher, may speak no TLS: nobody is in between.
+    ignoreTLS: isHere,
+    // Links that sign people in are not sent in the clear; what the URL itself says comes before this.
+    requireTLS: mode === 'production' && !isHere,
     connectionTimeout: timeoutMs,
     greetingTimeout: timeoutMs,
     socketTimeout: timeoutMs,
