@@ -10,6 +10,7 @@ import {
   signOut,
 } from '../../../shared/contracts/account.ts'
 import { implement, implementPublic, type Route } from '../../http/implement.ts'
+import { networkOf } from '../../http/network.ts'
 import { changeOwnPassword, describeMe } from './account.service.ts'
 import { acceptByToken, readInvitation } from './invitations.service.ts'
 import { finishPasswordReset, readReset, requestPasswordReset } from './resets.service.ts'
@@ -29,17 +30,19 @@ export const accountRoutes: Route[] = [
     return null
   }),
   implementPublic(requestReset, async ({ deps, body, req }) => {
-    await requestPasswordReset(deps, body.email, req.ip ?? '')
+    await requestPasswordReset(deps, body.email, networkOf(req.ip))
     return null
   }),
-  implementPublic(checkReset, ({ deps, params, req }) => readReset(deps, params.token, req.ip ?? '')),
+  implementPublic(checkReset, ({ deps, params, req }) => readReset(deps, params.token, networkOf(req.ip))),
   implementPublic(finishReset, async ({ deps, params, body, req }) => {
-    await finishPasswordReset(deps, params.token, body.password, req.ip ?? '')
+    await finishPasswordReset(deps, params.token, body.password, networkOf(req.ip))
     return null
   }),
-  implementPublic(getInvitation, ({ deps, params, req }) => readInvitation(deps, params.token, req.ip ?? '')),
+  implementPublic(getInvitation, ({ deps, params, req }) =>
+    readInvitation(deps, params.token, networkOf(req.ip)),
+  ),
   implementPublic(acceptInvitation, async ({ deps, params, body, req }) => {
-    const caller = await acceptByToken(deps, params.token, body, req.ip ?? '')
+    const caller = await acceptByToken(deps, params.token, body, networkOf(req.ip))
     await openSession(req, caller)
     return describeMe(deps, caller)
   }),

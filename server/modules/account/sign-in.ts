@@ -4,6 +4,7 @@ import type { SignInForm } from '../../../shared/contracts/account.ts'
 import type { z } from 'zod'
 import type { Deps } from '../../deps.ts'
 import type { Caller } from '../../http/caller.ts'
+import { networkOf } from '../../http/network.ts'
 import { countTry, forgetTries, takeBackTry } from '../../http/rate-limits.ts'
 import { cookieName } from '../../http/sign-in-session.ts'
 import { wrongCredentials } from './account.errors.ts'
@@ -16,7 +17,7 @@ export async function signInWithPassword(
   req: Request,
   res: Response,
 ): Promise<Caller> {
-  const network = req.ip ?? ''
+  const network = networkOf(req.ip)
   await countTry(db.pool, 'sign-in-network', network)
   await countTry(db.pool, 'sign-in-address', form.email)
   req.body = form
