@@ -12,6 +12,7 @@ const rateRules = {
   'password-person': { points: 10, duration: 15 * minute },
   'reset-address': { points: 5, duration: 60 * minute },
   'reset-network': { points: 60, duration: 60 * minute },
+  'invitation-address': { points: 5, duration: 60 * minute },
   'link-network': { points: 60, duration: 15 * minute },
 } as const
 export type RateRule = keyof typeof rateRules

@@ -1,7 +1,7 @@
 import { z } from 'zod'
 import { endpoint, noContent } from './endpoint.ts'
 import { Email, Id, Moment, Name, Version } from './fields.ts'
-import { Role } from './roles.ts'
+import { Role, RoleSet } from './roles.ts'
 
 export const Person = z.strictObject({
   id: Id,
@@ -36,7 +36,7 @@ export const listPeople = endpoint({
 export const InviteForm = z.strictObject({
   name: Name,
   email: Email,
-  roles: z.array(Role).min(1, 'Choose at least one role'),
+  roles: RoleSet,
   /** The athlete record that this person is; only with the role athlete. */
   athleteId: Id.nullable(),
 })
@@ -72,7 +72,7 @@ export const changePerson = endpoint({
   params: z.strictObject({ personId: Id }),
   body: z.strictObject({
     version: Version,
-    roles: z.array(Role).min(1, 'Choose at least one role').optional(),
+    roles: RoleSet.optional(),
     active: z.boolean().optional(),
   }),
   response: Person,

@@ -48,6 +48,28 @@ const accept = (token: string, password = 'my own long password', name = 'Guest 
   harness.client().send(acceptInvitation, { params: { token }, body: { name, password } })
 
 describe('an invitation', () => {
+  it('is sent to one address five times an hour at most, by whichever club', async () => {
+    const form = newForm()
+    const { invitation } = await invite(form)
+    const params = { invitationId: invitation.id }
+    for (let version = 1; version <= 4; version++) {
+      await admin.call(resendInvitation, { params, body: { version } })
+    }
+    const sixth = await admin.send(resendInvitation, { params, body: { version: 5 } })
+    expect([sixth.status, sixth.headers['retry-after']]).toEqual([429, expect.stringMatching(/^\d+$/)])
+    const otherClub = await buildClub(harness.db)
+    const otherAdmin = await harness.signedIn(await buildMember(harness.db, otherClub, ['admin']))
+    expect(await otherAdmin.refusal(invitePerson, { body: form })).toEqual([429, 'too-many-requests'])
+    await invite()
+  })
+
+  it('names no role twice', async () => {
+    const body = newForm({ roles: ['coach', 'coach'] })
+    const refused = await admin.send(invitePerson, { body })
+    expect(refused.status).toBe(400)
+    expect(JSON.stringify(refused.body)).toContain('A role is named twice')
+  })
+
   it('comes by mail with a link, in text and in HTML, from names that cannot break the mail', async () => {
     const { mail, token } = await invite()
     expect(mail?.subject).toBe('Quarry <b>Club</b> invites you to Underfoot')

@@ -6,6 +6,7 @@ import type { Tx } from '../../db/database.ts'
 import type { Deps } from '../../deps.ts'
 import type { Caller } from '../../http/caller.ts'
 import { invalidRequest, notFound, staleVersion } from '../../http/errors.ts'
+import { countTry } from '../../http/rate-limits.ts'
 import { newToken } from '../account/tokens.ts'
 import { record } from '../audit/audit.service.ts'
 import { sendMail } from '../mail/mail.service.ts'
@@ -35,7 +36,7 @@ export async function listOpenInvitations(tx: Tx, ctx: Caller, now: Date): Promi
   return (await selectOpenInvitations(tx, ctx.clubId)).map((row) => describe(row, now))
 }
 
-/** Invites somebody to the club; the mail with the link goes out with it. */
+/** Invites somebody to the club; the mail with the link goes out with it. No address is sent more than five an hour. */
 export async function invite(
   { db, clock }: InviteDeps,
   ctx: Caller,
@@ -46,6 +47,7 @@ export async function invite(
       athleteId: 'Choose the role athlete too, or no athlete',
     })
   }
+  await countTry(db.pool, 'invitation-address', form.email)
   return db.inClub(ctx, async (tx) => {
     if (form.athleteId) await requireFreeAthlete(tx, ctx.clubId, form.athleteId)
     if (await hasActiveMember(tx, ctx.clubId, form.email)) throw alreadyMember()
@@ -65,6 +67,9 @@ export async function invite(
 
 /** Sends the mail again with a new link; the one before stops working. */
 export async function resend({ db, clock }: InviteDeps, ctx: Caller, id: string, version: number) {
+  const present = await db.inClub(ctx, (tx) => findInvitation(tx, ctx.clubId, id))
+  if (!present) throw notFound('This invitation')
+  await countTry(db.pool, 'invitation-address', present.email)
   return db.inClub(ctx, async (tx) => {
     const row = await change(tx, ctx, id, version, { expiresAt: expiryFrom(clock()) }, clock())
     await record(tx, ctx, 'invitation.resend', 'invitation', id)
