@@ -59,11 +59,12 @@ export const sendChunk = endpoint({
   path: '/api/uploads/:uploadId/chunks/:n',
   access: measuringRoles,
   params: UploadParams.extend({
+    /** In decimal digits alone: what else JavaScript takes for a number is no address of a part. */
     n: z.coerce
-      .number()
-      .int()
-      .min(0)
-      .max(limits.fileBytes / limits.chunkBytes - 1),
+      .string()
+      .regex(/^(?:0|[1-9]\d*)$/)
+      .transform(Number)
+      .pipe(z.number().max(limits.fileBytes / limits.chunkBytes - 1)),
   }),
   body: z.unknown(),
   response: z.strictObject({ n: z.number().int() }),

@@ -135,6 +135,15 @@ describe('the parts of a file', () => {
     }
   })
 
+  it('are named by a plain number, and by nothing else that could be read as one', async () => {
+    const { id } = await announce('a.csv', 10)
+    for (const n of ['0x0', '0.0', '00', '1e0', '-0', '+0', ' 0', '']) {
+      const refused = await chunk(day.coach, id, n as unknown as number, bytesOf(10))
+      expect([400, 404]).toContain(refused.status)
+    }
+    await chunk(day.coach, id, 0, bytesOf(10)).expect(200)
+  })
+
   it('may not differ from what came before in their place', async () => {
     const { id } = await announce('a.csv', 10)
     await chunk(day.coach, id, 0, bytesOf(10, 1)).expect(200)
