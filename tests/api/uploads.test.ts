@@ -1,5 +1,7 @@
 import { createHash } from 'node:crypto'
+import type { IncomingMessage } from 'node:http'
 import { afterAll, beforeAll, describe, expect, it } from 'vitest'
+import { getMe } from '../../shared/contracts/account.ts'
 import { limits } from '../../shared/contracts/limits.ts'
 import { finishUpload, getOriginal, sendChunk, startUpload } from '../../shared/contracts/uploads.ts'
 import { onDatabase } from '../../server/setup/database-urls.mjs'
@@ -15,6 +17,7 @@ import {
   startTestingDay,
   type TestingDay,
 } from './harness/testing-day.ts'
+import { until } from './harness/until.ts'
 
 let harness: Harness
 let day: TestingDay
@@ -198,6 +201,30 @@ describe('the parts of a file', () => {
       .set('Content-Type', 'multipart/form-data; boundary=x')
       .send('--x\r\nContent-Disposition: form-data; name="chunk"; filename="c"\r\n\r\n12345')
     expect(refusalOf(response)).toEqual([400, 'chunk-invalid'])
+  })
+})
+
+describe('an original', () => {
+  it('that is not waited for to its end is no fault of the server', async () => {
+    const upload = await dropFile(day.coach, day.session.id, 'long.csv', bytesOf(12 * limits.chunkBytes, 21))
+    await day.coach
+      .send(getOriginal, { params: { uploadId: upload.id } })
+      .buffer(true)
+      .parse((stream, done) => {
+        stream.once('data', () => {
+          done(null, '')
+          stream.on('error', () => undefined)
+          ;(stream as unknown as IncomingMessage).destroy()
+        })
+      })
+    const lines = () => harness.log.filter((line) => line.includes(`${upload.id}/original`))
+    await until(
+      () => Promise.resolve(lines()),
+      (found) => found.some((line) => line.includes('request aborted')),
+      { what: 'the end of the request in the log' },
+    )
+    await day.coach.call(getMe)
+    expect(lines().filter((line) => !line.includes('"level":30'))).toEqual([])
   })
 })
 

@@ -12,6 +12,11 @@ import { setDismissal } from './dismissal.service.ts'
 import { receiveChunk } from './receive-chunk.ts'
 import * as uploads from './uploads.service.ts'
 
+/** Whoever took away the other end of an answer did not wait for the rest of it: no fault of ours. */
+function unlessLeft(error: NodeJS.ErrnoException): void {
+  if (error.code !== 'ERR_STREAM_PREMATURE_CLOSE') throw error
+}
+
 export const uploadRoutes: Route[] = [
   implement(startUpload, ({ deps, ctx, params, body }) =>
     uploads.startUpload(deps, ctx, params.sessionId, body),
@@ -33,7 +38,7 @@ export const uploadRoutes: Route[] = [
       'X-Content-Type-Options': 'nosniff',
       'Cache-Control': 'no-store, no-transform',
     })
-    await pipeline(Readable.from(chunks), res)
+    await pipeline(Readable.from(chunks), res).catch(unlessLeft)
     return handled
   }),
 ]
