@@ -28,6 +28,7 @@ export const errorCodes = [
   'upload-incomplete',
   'upload-finished',
   'upload-dismissed',
+  'too-many-uploads',
   'upload-in-use',
   'nothing-to-publish',
   'athlete-not-in-session',

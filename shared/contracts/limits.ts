@@ -5,6 +5,9 @@ export const limits = {
   fileBytes: MAX_FILE_BYTES,
   chunkBytes: 1024 * 1024,
   filesPerDrop: 300,
+  /** Of one person in one club, announced and not all here: a page sends four at once, and some stop half-way. */
+  unfinishedUploads: 100,
+  unfinishedBytes: 2 * 1024 ** 3,
   /** A chunk of 1 MiB on a slow line of 10 kB/s takes this long: what is silent for longer has stopped. */
   arrivingSeconds: 105,
   fileNameCharacters: 255,

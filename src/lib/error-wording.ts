@@ -93,6 +93,10 @@ export const errorWording: Record<AnyErrorCode, ErrorWording> = {
     title: 'This file was dismissed while it was on its way',
     advice: 'Take it back under “Show dismissed” in the Tray, or try again to send it anew.',
   },
+  'too-many-uploads': {
+    title: 'Too many of your files are only half here',
+    advice: 'Send their rest or dismiss them in the Trays of your sessions, then add this one again.',
+  },
   'upload-in-use': {
     title: 'This file cannot be dismissed now',
     advice: 'Wait until it is here and read. Trials of it are set aside on the sheet.',

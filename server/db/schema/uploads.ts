@@ -109,6 +109,9 @@ export const uploads = club.table(
     primaryKey({ columns: [t.clubId, t.id] }),
     index('uploads_session').on(t.clubId, t.sessionId),
     index('uploads_file').on(t.clubId, t.fileId),
+    index('uploads_unfinished')
+      .on(t.clubId, t.uploadedBy)
+      .where(sql`state = 'receiving' and dismissed_at is null`),
     foreignKey({ columns: [t.clubId, t.sessionId], foreignColumns: [sessions.clubId, sessions.id] }),
     foreignKey({ columns: [t.clubId, t.fileId], foreignColumns: [files.clubId, files.id] }),
     foreignKey({ columns: [t.clubId, t.duplicateOf], foreignColumns: [t.clubId, t.id] }),

@@ -1,3 +1,4 @@
+import { limits } from '../../../shared/contracts/limits.ts'
 import { tooLargeError } from '../../../shared/recordings/errors.ts'
 import type { ReadError } from '../../db/schema/uploads.ts'
 import { namedError } from '../../http/errors.ts'
@@ -25,6 +26,13 @@ export const uploadDismissed = () =>
     'upload-dismissed',
     409,
     'This file was dismissed before all of it was here. What had arrived is kept.',
+  )
+
+export const tooManyUploads = () =>
+  namedError(
+    'too-many-uploads',
+    409,
+    `At most ${limits.unfinishedUploads} of your files, or ${limits.unfinishedBytes / 1024 ** 3} GiB of them, may be on their way at once.`,
   )
 
 const inUse = (sentence: string) => namedError('upload-in-use', 409, sentence)

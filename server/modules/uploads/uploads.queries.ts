@@ -1,4 +1,4 @@
-import { and, asc, eq, isNull, sql, type SQL } from 'drizzle-orm'
+import { and, asc, count, eq, isNull, sql, type SQL } from 'drizzle-orm'
 import { alias } from 'drizzle-orm/pg-core'
 import { limits } from '../../../shared/contracts/limits.ts'
 import type { Upload } from '../../../shared/contracts/uploads.ts'
@@ -96,6 +96,32 @@ export async function findUpload(tx: Tx, clubId: string, uploadId: string): Prom
     .innerJoin(files, and(eq(files.clubId, uploads.clubId), eq(files.id, uploads.fileId)))
     .where(ofUpload(clubId, uploadId))
   return row ?? null
+}
+
+/** Until the transaction ends the person announces no other file in the club. */
+export async function lockAnnouncements(tx: Tx, clubId: string, personId: string): Promise<void> {
+  const key = `announcements/${clubId}/${personId}`
+  await tx.execute(sql`select pg_advisory_xact_lock(hashtextextended(${key}, 0))`)
+}
+
+/** How much of what a person announced is not all here, less what was dismissed. */
+export async function unfinishedOf(tx: Tx, clubId: string, personId: string) {
+  const [row] = await tx
+    .select({
+      files: count(),
+      bytes: sql<number>`coalesce(sum(${files.sizeBytes}), 0)`.mapWith(Number),
+    })
+    .from(uploads)
+    .innerJoin(files, and(eq(files.clubId, uploads.clubId), eq(files.id, uploads.fileId)))
+    .where(
+      and(
+        eq(uploads.clubId, clubId),
+        eq(uploads.uploadedBy, personId),
+        eq(uploads.state, 'receiving'),
+        isNull(uploads.dismissedAt),
+      ),
+    )
+  return row
 }
 
 export interface NewUpload {

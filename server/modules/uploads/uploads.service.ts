@@ -19,6 +19,7 @@ import {
   chunkInvalid,
   fileNameInvalid,
   fileTooLarge,
+  tooManyUploads,
   uploadDismissed,
   uploadFinished,
   uploadIncomplete,
@@ -27,7 +28,9 @@ import {
   advance,
   findUpload,
   insertUpload,
+  lockAnnouncements,
   ofUpload,
+  unfinishedOf,
   type UploadRow,
   viewUploads,
 } from './uploads.queries.ts'
@@ -44,6 +47,7 @@ export async function startUpload(
   if (!/[\p{L}\p{N}]/u.test(file.fileName)) throw fileNameInvalid(file.fileName)
   return deps.db.inClub(ctx, async (tx) => {
     await requireSession(tx, ctx, sessionId)
+    await requireRoom(tx, ctx, file.sizeBytes)
     const uploadId = await insertUpload(tx, {
       clubId: ctx.clubId,
       sessionId,
@@ -56,6 +60,13 @@ export async function startUpload(
     await notify(tx, ctx.clubId, { kind: 'session', id: sessionId })
     return view(tx, ctx, uploadId)
   })
+}
+
+/** What one person has half-way stays within limits, however many pages announce at once. */
+async function requireRoom(tx: Tx, { clubId, personId }: Caller, sizeBytes: number): Promise<void> {
+  await lockAnnouncements(tx, clubId, personId)
+  const { files, bytes } = await unfinishedOf(tx, clubId, personId)
+  if (files >= limits.unfinishedUploads || bytes + sizeBytes > limits.unfinishedBytes) throw tooManyUploads()
 }
 
 /** Stores one chunk: any order, repeatable; one that came first stands. */

@@ -1,7 +1,13 @@
 import { afterAll, beforeAll, describe, expect, it } from 'vitest'
 import { limits } from '../../shared/contracts/limits.ts'
 import { getSession } from '../../shared/contracts/sessions.ts'
-import { changeUpload, finishUpload, getOriginal, type Upload } from '../../shared/contracts/uploads.ts'
+import {
+  changeUpload,
+  finishUpload,
+  getOriginal,
+  startUpload,
+  type Upload,
+} from '../../shared/contracts/uploads.ts'
 import { buildMember } from '../../seed/builders/person.ts'
 import { buildTrial, buildUpload } from '../../seed/builders/trial.ts'
 import { onDatabase } from '../../server/setup/database-urls.mjs'
@@ -145,5 +151,44 @@ describe('a file that is not all here', () => {
     await change(day.coach, dismissed, false)
     await last().expect(200)
     expect((await finish(day.coach, upload.id)).state).toBe('waiting')
+  })
+})
+
+describe('what one person has half-way', () => {
+  const announce = (client: ApiClient, sizeBytes: number) =>
+    client.send(startUpload, {
+      params: { sessionId: day.session.id },
+      body: { fileName: 'half.csv', sizeBytes },
+    })
+
+  /** Somebody who announced so many files of this size before. */
+  async function sender(files: number, sizeBytes: number): Promise<ApiClient> {
+    const { id, ...member } = await buildMember(harness.db, day.clubId, ['coach'])
+    await inDatabase(
+      `with made as (insert into club.files (club_id, size_bytes)
+         select $1, $4 from generate_series(1, $5) returning id)
+       insert into club.uploads (club_id, session_id, file_id, file_name, uploaded_by)
+         select $1, $2, id, 'before.csv', $3 from made`,
+      [day.clubId, day.session.id, id, sizeBytes, files],
+    )
+    return harness.signedIn(member)
+  }
+
+  it('is so many files at most, however many are announced at once, and dismissing makes room', async () => {
+    const coach = await sender(limits.unfinishedUploads - 2, 9)
+    const answers = await Promise.all(Array.from({ length: 5 }, () => announce(coach, 9)))
+    const refused = answers.filter(({ status }) => status !== 200)
+    expect(refused.map(refusalOf)).toEqual(Array.from({ length: 3 }, () => [409, 'too-many-uploads']))
+    expect((await announce(day.coach, 9)).status).toBe(200)
+    const first = answers.find(({ status }) => status === 200)?.body as Upload
+    await change(coach, first, true)
+    expect((await announce(coach, 9)).status).toBe(200)
+  })
+
+  it('is so many bytes at most', async () => {
+    const coach = await sender(limits.unfinishedBytes / limits.fileBytes - 1, limits.fileBytes)
+    expect((await announce(coach, limits.fileBytes)).status).toBe(200)
+    expect(refusalOf(await announce(coach, 1))).toEqual([409, 'too-many-uploads'])
+    expect((await announce(coach, 0)).status).toBe(200)
   })
 })

@@ -1,0 +1,1 @@
+CREATE INDEX "uploads_unfinished" ON "club"."uploads" USING btree ("club_id","uploaded_by") WHERE state = 'receiving' and dismissed_at is null;
