@@ -2,6 +2,7 @@ import { z } from 'zod'
 import { eventOrder } from '../mechanics/events/event-order.ts'
 import { Moment } from './fields.ts'
 import { limits } from './limits.ts'
+import { Changed } from './measuring.ts'
 import { Test } from './tests.ts'
 
 export const EventName = z.enum(eventOrder)
@@ -33,5 +34,7 @@ export const EngineInputs = z.strictObject({
   recordedMassKg: z.number().nullable(),
   gravity: z.number(),
   calibrationU: z.partialRecord(z.enum(['left', 'right', 'single', 'total']), z.number()),
+  /** What the club changed of the engine's own settings. */
+  changedSettings: Changed,
 })
 export type EngineInputs = z.infer<typeof EngineInputs>

@@ -3,8 +3,14 @@ import { useBlocker } from 'react-router-dom'
 import { Button } from './button.tsx'
 import { Dialog } from './dialog.tsx'
 
+interface LeaveGuardProps {
+  dirty: boolean
+  /** What would be lost, as the beginning of a sentence. */
+  what?: string
+}
+
 /** While `dirty`, asks before the page is left with something typed and unsaved. */
-export function LeaveGuard({ dirty }: { dirty: boolean }) {
+export function LeaveGuard({ dirty, what = 'What you typed on this page' }: LeaveGuardProps) {
   const blocker = useBlocker(
     ({ currentLocation, nextLocation }) => dirty && currentLocation.pathname !== nextLocation.pathname,
   )
@@ -18,7 +24,7 @@ export function LeaveGuard({ dirty }: { dirty: boolean }) {
   if (blocker.state !== 'blocked') return null
   return (
     <Dialog title="Leave without saving?" onClose={blocker.reset}>
-      <p className="pb-4">What you typed on this page is not saved yet.</p>
+      <p className="pb-4">{what} is not saved yet.</p>
       <div className="flex flex-wrap gap-3">
         <Button look="main" onClick={blocker.reset}>
           Stay here

@@ -11,7 +11,9 @@ export function TrialPage() {
   useClubEvents()
   return (
     <QueryState query={trial} what="the trial">
-      {(found) => (found.mayEdit ? <TrialView trial={found} /> : <OwnTrialView trial={found} />)}
+      {(found) =>
+        found.mayEdit ? <TrialView key={found.id} trial={found} /> : <OwnTrialView trial={found} />
+      }
     </QueryState>
   )
 }

@@ -1,3 +1,5 @@
+import { WorkerInProcess } from './worker-in-process.ts'
+
 /** What a browser has and jsdom has not, as far as the client leans on it. */
 
 /** Where the focus was before a dialog opened. */
@@ -31,6 +33,9 @@ class StillObserver {
   disconnect() {}
 }
 globalThis.ResizeObserver ??= StillObserver
+
+// The engine's worker is the only one that the client starts.
+Object.assign(globalThis, { Worker: WorkerInProcess })
 
 // Nothing is drawn here; a canvas says so instead of complaining.
 HTMLCanvasElement.prototype.getContext = () => null

@@ -2,6 +2,7 @@ import type { EngineInputs } from '../../../shared/contracts/moved-events.ts'
 import type { Test } from '../../../shared/contracts/tests.ts'
 import { engineVersion } from '../../../shared/mechanics/version.ts'
 import type { Tx } from '../../db/database.ts'
+import { madeWithNow } from '../clubs/measuring.service.ts'
 import { findTrialToAnalyse } from './analyses.queries.ts'
 import { inputsOf } from './inputs.ts'
 
@@ -13,6 +14,7 @@ export async function viewEngineInputs(
 ): Promise<EngineInputs | null> {
   const trial = await findTrialToAnalyse(tx, clubId, trialId)
   if (!trial) return null
-  const { test, recordedMassKg, gravity, calibrationU } = inputsOf(trial)
-  return { engineVersion, test: test as Test, recordedMassKg, gravity, calibrationU }
+  const { test, changedSettings = {}, ...inputs } = inputsOf(trial, await madeWithNow(tx, clubId))
+  const { recordedMassKg, gravity, calibrationU } = inputs
+  return { engineVersion, test: test as Test, recordedMassKg, gravity, calibrationU, changedSettings }
 }

@@ -9,16 +9,22 @@ export interface TraceLayout {
   momentum: { top: number; bottom: number }
   timeAxisY: number
   narrow: boolean
+  /** From one tier of names to the next. */
+  tierPx: number
 }
 
-export const eventTierPx = 15
+const closeTierPx = 15
+/** Where each name is a handle to be pressed (WCAG 2.2, 2.5.8: 24 px). */
+const handleTierPx = 24
 
 /** Below this width the drawing is on a phone: thinner margins, lower panels. */
 const narrowPx = 620
 
-export function layOutTrace(width: number, eventTiers: number): TraceLayout {
+/** @param handles whether the events' names have to be large enough to be pressed */
+export function layOutTrace(width: number, eventTiers: number, handles = false): TraceLayout {
   const narrow = width < narrowPx
-  const eventsY = 8 + eventTierPx * Math.max(1, eventTiers) + 8
+  const tierPx = handles ? handleTierPx : closeTierPx
+  const eventsY = 8 + tierPx * Math.max(1, eventTiers) + 8
   const forceTop = eventsY + 12
   const forceBottom = forceTop + (narrow ? 220 : 345)
   const momentumTop = forceBottom + 44
@@ -32,5 +38,6 @@ export function layOutTrace(width: number, eventTiers: number): TraceLayout {
     momentum: { top: momentumTop, bottom: momentumBottom },
     timeAxisY: momentumBottom + 20,
     narrow,
+    tierPx,
   }
 }

@@ -1,3 +1,4 @@
+import type { EventName } from '../../../shared/mechanics/types.ts'
 import type { TracePhase } from './phase-shapes.ts'
 
 export interface TraceChannel {
@@ -7,9 +8,23 @@ export interface TraceChannel {
 }
 
 export interface TraceEvent {
-  key: string
+  key: EventName
   label: string
   timeS: number
+  /** Set by a person, not by the engine. */
+  adjusted?: boolean
+}
+
+/** Another trial laid over this one, shifted so that the two are aligned. */
+export interface TraceOverlay {
+  key: string
+  /** One letter, which stands at the line's end and in the list beside. */
+  label: string
+  sampleRateHz: number
+  /** Time of its first sample on this trial's time axis, seconds. */
+  startS: number
+  total: Float64Array
+  momentum: Float64Array | null
 }
 
 /** Everything that the trace of one trial is drawn from. Seconds from the first sample, newtons, kg·m/s. */
@@ -24,4 +39,5 @@ export interface TraceData {
   momentum: Float64Array | null
   phases: TracePhase[]
   events: TraceEvent[]
+  overlays: TraceOverlay[]
 }

@@ -2,6 +2,7 @@ import { memo } from 'react'
 import type { TraceLayout } from './lay-out.ts'
 import type { PlacedEvent } from './trace-events.tsx'
 import { TraceAxes } from './trace-axes.tsx'
+import { OverlayLines } from './overlay-lines.tsx'
 import type { TraceData } from './trace-data.ts'
 import { TraceEvents } from './trace-events.tsx'
 import { TraceLines } from './trace-lines.tsx'
@@ -27,6 +28,7 @@ export const TraceDrawing = memo(function TraceDrawing({ data, view, layout, sca
     <g>
       <TraceAxes layout={layout} scales={scales} withMomentum={data.momentum !== null} />
       <TracePhases shapes={shapes} />
+      <OverlayLines data={data} view={view} scales={scales} />
       <TraceLines data={data} view={view} layout={layout} scales={scales} />
       <PhaseFigures shapes={shapes} layout={layout} />
       <TraceEvents events={events} layout={layout} />

@@ -1,4 +1,4 @@
-import { eventTierPx, type TraceLayout } from './lay-out.ts'
+import type { TraceLayout } from './lay-out.ts'
 import type { TraceEvent } from './trace-data.ts'
 
 export interface PlacedEvent extends TraceEvent {
@@ -15,7 +15,7 @@ export function TraceEvents({ events, layout }: { events: PlacedEvent[]; layout:
           <line
             x1={event.x}
             x2={event.x}
-            y1={layout.eventsY - event.tier * eventTierPx}
+            y1={layout.eventsY - event.tier * layout.tierPx}
             y2={layout.momentum.bottom}
             className="stroke-ink-2"
             strokeOpacity="0.55"
@@ -31,13 +31,14 @@ export function TraceEvents({ events, layout }: { events: PlacedEvent[]; layout:
           />
           <text
             x={event.x}
-            y={layout.eventsY - 10 - event.tier * eventTierPx}
+            y={layout.eventsY - 10 - event.tier * layout.tierPx}
             textAnchor="middle"
             className="fill-ink stroke-sheet text-[12.5px]"
             strokeWidth="4"
             paintOrder="stroke"
           >
             {event.label}
+            {event.adjusted && ' (adjusted)'}
           </text>
         </g>
       ))}

@@ -64,10 +64,17 @@ function EndLabels({ data, view, layout, scales }: Props) {
     text: foot.label,
     className: `font-semibold ${footLine[foot.key].fill}`,
   }))
+  const others = data.overlays.map((overlay) => ({
+    key: overlay.key,
+    y: scales.force(valueAt(overlay.total, overlay.sampleRateHz, view.endS - overlay.startS)),
+    text: overlay.label,
+    className: 'font-semibold fill-ink-2',
+  }))
+  const ends = [...feet, ...others]
   const weightY = data.weight && !layout.narrow ? [scales.force(data.weight.valueN)] : []
-  const wanted = [...weightY, ...feet.map((foot) => foot.y)]
+  const wanted = [...weightY, ...ends.map((end) => end.y)]
   const places = spreadLabels(wanted, weightY.length > 0 ? 20 : 15, layout.force.top, layout.force.bottom)
-  const footPlaces = places.slice(weightY.length)
+  const endPlaces = places.slice(weightY.length)
   return (
     <g stroke="none" className="text-[12.5px]">
       <WeightLabel
@@ -76,9 +83,9 @@ function EndLabels({ data, view, layout, scales }: Props) {
         scales={scales}
         y={weightY.length > 0 ? places[0] : undefined}
       />
-      {feet.map((foot, i) => (
-        <text key={foot.key} x={layout.plot.right + 6} y={footPlaces[i]! + 4} className={foot.className}>
-          {foot.text}
+      {ends.map((end, i) => (
+        <text key={end.key} x={layout.plot.right + 6} y={endPlaces[i]! + 4} className={end.className}>
+          {end.text}
         </text>
       ))}
     </g>

@@ -13,6 +13,7 @@ const data: TraceData = {
   weight: { valueN: 800, label: 'body weight' },
   momentum: new Float64Array(2001).fill(-12.34),
   phases: [],
+  overlays: [],
   events: [
     { key: 'takeoff', label: 'takeoff', timeS: 1.2 },
     { key: 'onset', label: 'onset', timeS: 0.5 },

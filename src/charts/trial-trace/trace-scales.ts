@@ -1,6 +1,6 @@
 import { extent, scaleLinear } from 'd3'
 import { decimate } from './decimate.ts'
-import type { TraceData } from './trace-data.ts'
+import type { TraceData, TraceOverlay } from './trace-data.ts'
 import type { TraceLayout } from './lay-out.ts'
 
 export interface TraceView {
@@ -10,8 +10,15 @@ export interface TraceView {
 
 /** Time, force and momentum to pixels; force reaches down to zero, momentum shows zero. */
 export function traceScales(data: TraceData, view: TraceView, layout: TraceLayout) {
-  const force = range(data.total, data.sampleRateHz, view)
-  const momentum = data.momentum ? range(data.momentum, data.sampleRateHz, view) : { least: 0, greatest: 0 }
+  const overlaid = data.overlays.map((overlay) => ({ ...overlay, view: viewOf(overlay, view) }))
+  const force = joined([
+    range(data.total, data.sampleRateHz, view),
+    ...overlaid.map((other) => range(other.total, other.sampleRateHz, other.view)),
+  ])
+  const momenta = [{ ...data, view }, ...overlaid].flatMap((one) =>
+    one.momentum ? [range(one.momentum, one.sampleRateHz, one.view)] : [],
+  )
+  const momentum = joined([{ least: 0, greatest: 0 }, ...momenta])
   const reach = Math.max(1, -momentum.least, momentum.greatest) * 1.08
   return {
     time: scaleLinear([view.startS, view.endS], [layout.plot.left, layout.plot.right]),
@@ -24,7 +31,23 @@ export function traceScales(data: TraceData, view: TraceView, layout: TraceLayou
 }
 export type DrawnScales = ReturnType<typeof traceScales>
 
-function range(values: Float64Array, rate: number, view: TraceView) {
+/** The view on the overlaid trial's own time axis. */
+export const viewOf = ({ startS }: Pick<TraceOverlay, 'startS'>, view: TraceView): TraceView => ({
+  startS: view.startS - startS,
+  endS: view.endS - startS,
+})
+
+interface Range {
+  least: number
+  greatest: number
+}
+
+const joined = (ranges: Range[]): Range => ({
+  least: Math.min(...ranges.map(({ least }) => least)),
+  greatest: Math.max(...ranges.map(({ greatest }) => greatest)),
+})
+
+function range(values: Float64Array, rate: number, view: TraceView): Range {
   const indices = decimate(values, Math.ceil(view.startS * rate), Math.floor(view.endS * rate), 400)
   const [least = 0, greatest = 0] = extent(indices, (i) => values[i])
   return { least, greatest }

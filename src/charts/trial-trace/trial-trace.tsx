@@ -1,27 +1,36 @@
-import { useMemo, useState, type KeyboardEvent, type PointerEvent } from 'react'
+import { useMemo, useState, type KeyboardEvent, type PointerEvent, type ReactNode } from 'react'
 import { useWidth } from '../use-width.ts'
-import { layOutTrace } from './lay-out.ts'
+import { layOutTrace, type TraceLayout } from './lay-out.ts'
 import { placeEvents } from './place-events.ts'
 import type { TraceData } from './trace-data.ts'
 import { TraceDrawing } from './trace-drawing.tsx'
 import { moveCursor, readTrace } from './trace-reading.ts'
-import { traceScales, type TraceView } from './trace-scales.ts'
+import type { PlacedEvent } from './trace-events.tsx'
+import { traceScales, type DrawnScales, type TraceView } from './trace-scales.ts'
+
+interface Props {
+  data: TraceData
+  view: TraceView
+  summaryId: string
+  /** Laid over the picture: what of it can be taken hold of. */
+  handles?: (drawing: TraceFrame) => ReactNode
+}
+
+/** Where everything of a drawing stands. */
+export interface TraceFrame {
+  layout: TraceLayout
+  scales: DrawnScales
+  events: PlacedEvent[]
+}
 
 /**
  * Force and momentum of one trial on one time axis. Read by pointer, or by keyboard as a slider: the readout
  * under the picture says the figures at the cursor.
  */
-export function TrialTrace({
-  data,
-  view,
-  summaryId,
-}: {
-  data: TraceData
-  view: TraceView
-  summaryId: string
-}) {
+export function TrialTrace({ data, view, summaryId, handles }: Props) {
   const { ref, width } = useWidth<HTMLDivElement>(900)
-  const drawing = useMemo(() => draw(data, view, width), [data, view, width])
+  const roomy = handles !== undefined
+  const drawing = useMemo(() => draw(data, view, width, roomy), [data, view, width, roomy])
   const [cursorS, setCursorS] = useState<number | null>(null)
   const { layout, scales } = drawing
   const within = (timeS: number) => Math.min(Math.max(timeS, view.startS), view.endS)
@@ -38,7 +47,7 @@ export function TrialTrace({
   }
 
   return (
-    <div ref={ref}>
+    <div ref={ref} className="relative">
       <div
         role="slider"
         tabIndex={0}
@@ -68,6 +77,7 @@ export function TrialTrace({
           )}
         </svg>
       </div>
+      {handles?.(drawing)}
       <Readout data={data} timeS={cursorS === null ? null : within(cursorS)} />
     </div>
   )
@@ -96,10 +106,10 @@ function Readout({ data, timeS }: { data: TraceData; timeS: number | null }) {
   )
 }
 
-function draw(data: TraceData, view: TraceView, width: number) {
-  const flat = layOutTrace(width, 1)
+function draw(data: TraceData, view: TraceView, width: number, roomy: boolean): TraceFrame {
+  const flat = layOutTrace(width, 1, roomy)
   const { placed, tiers } = placeEvents(data.events, view, traceScales(data, view, flat).time)
-  const layout = layOutTrace(width, tiers)
+  const layout = layOutTrace(width, tiers, roomy)
   return { layout, scales: traceScales(data, view, layout), events: placed }
 }
 

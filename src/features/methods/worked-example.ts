@@ -1,9 +1,9 @@
 import { analyse } from '../../../shared/mechanics/analyse.ts'
-import { withheldMetrics } from '../../../shared/mechanics/withheld.ts'
 import { readRecording } from '../../../shared/recordings/read-recording.ts'
 import { standardGravity } from '../../../shared/units/gravity.ts'
 import type { Trial } from '../../../shared/contracts/trials.ts'
 import type { Samples } from '../../api/trials/read-samples.ts'
+import { analysisOf } from '../trials/engine/analysis-of.ts'
 
 /** Of each plate, expanded (k = 2): what the product takes where no certificate says otherwise. */
 const calibrationU = { left: 0.005, right: 0.005 }
@@ -23,12 +23,10 @@ export function workOut(bytes: Uint8Array, fileName: string): WorkedExample {
   const { trials, engineVersion } = analyse(recording, { gravity: standardGravity, calibrationU })
   const [trial] = trials
   if (!trial) throw new Error('The engine found no jump in the sample recording.')
-  const { test, events, metrics, sides, ledger, checks, missing, notes } = trial
-  const analysis = { id: fileName, engineVersion, gravity: standardGravity, events, metrics, sides, ledger }
-  const withheld = withheldMetrics(trial)
+  const by = { id: fileName, engineVersion, gravity: standardGravity, movedEvents: {} }
   return {
-    analysis: { ...analysis, movedEvents: {}, checks, missing, notes, withheld },
-    test,
+    analysis: analysisOf(trial, by),
+    test: trial.test,
     recording: { sampleRateHz: recording.sampleRateHz },
     samples: recording.channels,
   }

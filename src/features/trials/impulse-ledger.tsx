@@ -4,6 +4,7 @@ import { Sheet } from '../../components/sheet.tsx'
 import { formatUncertainty } from '../../lib/format-figure.ts'
 import { formatSigned } from '../../lib/format-signed.ts'
 import { phaseWords } from './event-words.ts'
+import { Was } from './was.tsx'
 import './impulse-ledger.css'
 
 type Ledger = NonNullable<Analysis['ledger']>
@@ -11,8 +12,12 @@ type Ledger = NonNullable<Analysis['ledger']>
 const { display } = catalogue.closingBalance
 
 /** The momentum account of a trial: opening balance, an entry a phase, running balance, closing balance. */
-export function ImpulseLedger({ ledger }: { ledger: Ledger }) {
+export function ImpulseLedger({ ledger, saved }: { ledger: Ledger; saved?: Ledger | null | undefined }) {
   const figure = (newtonSeconds: number) => formatSigned(newtonSeconds, display.decimals)
+  const was = (read: (from: Ledger) => number | undefined, now: number) => {
+    const before = saved ? read(saved) : undefined
+    return <Was saved={before === undefined ? undefined : figure(before)} now={figure(now)} />
+  }
   return (
     <Sheet title="Impulse ledger">
       <table className="ledger">
@@ -32,11 +37,17 @@ export function ImpulseLedger({ ledger }: { ledger: Ledger }) {
             <td />
             <td>0</td>
           </tr>
-          {ledger.entries.map((entry) => (
-            <tr key={entry.phase}>
+          {ledger.entries.map((entry, i) => (
+            <tr key={i}>
               <th scope="row">{phaseWords[entry.phase]}</th>
-              <td>{figure(entry.netImpulse)}</td>
-              <td>{figure(entry.balance)}</td>
+              <td>
+                {figure(entry.netImpulse)}
+                {was(({ entries }) => entries[i]?.netImpulse, entry.netImpulse)}
+              </td>
+              <td>
+                {figure(entry.balance)}
+                {was(({ entries }) => entries[i]?.balance, entry.balance)}
+              </td>
             </tr>
           ))}
         </tbody>
@@ -44,7 +55,10 @@ export function ImpulseLedger({ ledger }: { ledger: Ledger }) {
           <tr>
             <th scope="row">{closesAtRest(ledger) ? 'Closing, standing still' : 'Closing, still moving'}</th>
             <td />
-            <td>{figure(ledger.closing.value)}</td>
+            <td>
+              {figure(ledger.closing.value)}
+              {was(({ closing }) => closing.value, ledger.closing.value)}
+            </td>
           </tr>
         </tfoot>
       </table>

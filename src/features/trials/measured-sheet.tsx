@@ -6,13 +6,15 @@ import { CautionLine } from '../../components/caution-line.tsx'
 import { MethodLink } from '../../components/method-link.tsx'
 import { Sheet } from '../../components/sheet.tsx'
 import { FigureText } from '../results/figure-text.tsx'
+import { figureWords } from '../results/metric-words.ts'
 import { measuredGroups, type MeasuredFigure } from './measured-groups.ts'
+import { Was } from './was.tsx'
 
 /** A phone begins with these; the other groups are a tap away. At the desk all stand open. */
 const openOnPhone = new Set<MetricGroup>(['jump', 'landing'])
 
 /** Every figure of the trial, by group; what a failed check takes away is struck, what is missing says why. */
-export function MeasuredSheet({ analysis }: { analysis: Analysis }) {
+export function MeasuredSheet({ analysis, saved }: { analysis: Analysis; saved?: Analysis | undefined }) {
   const [atDesk] = useState(
     () => typeof matchMedia === 'undefined' || matchMedia('(min-width: 40rem)').matches,
   )
@@ -26,7 +28,7 @@ export function MeasuredSheet({ analysis }: { analysis: Analysis }) {
             </summary>
             <dl>
               {figures.map((measured) => (
-                <MeasuredRow key={measured.metric.key} {...measured} />
+                <MeasuredRow key={measured.metric.key} {...measured} saved={saved?.metrics} />
               ))}
             </dl>
           </details>
@@ -38,13 +40,18 @@ export function MeasuredSheet({ analysis }: { analysis: Analysis }) {
   )
 }
 
-function MeasuredRow({ metric, figure, withheldBecause }: MeasuredFigure) {
+interface RowProps extends MeasuredFigure {
+  saved: Analysis['metrics'] | undefined
+}
+
+function MeasuredRow({ metric, figure, withheldBecause, saved }: RowProps) {
+  const before = saved?.[metric.key]
   return (
     <div className="grid break-inside-avoid grid-cols-[1fr_auto] items-baseline gap-x-4 border-b border-rule-2 py-1">
       <dt className={withheldBecause ? 'text-ink-2' : undefined}>
         <MethodLink noteKey={metric.key}>{metric.name}</MethodLink>
       </dt>
-      <dd>
+      <dd className="text-end">
         {withheldBecause ? (
           <s className="text-ink-2">
             <span className="sr-only">withheld: </span>
@@ -52,6 +59,12 @@ function MeasuredRow({ metric, figure, withheldBecause }: MeasuredFigure) {
           </s>
         ) : (
           <FigureText metricKey={metric.key} figure={figure} unit />
+        )}
+        {saved && (
+          <Was
+            saved={before ? figureWords(metric.key, before) : null}
+            now={figureWords(metric.key, figure)}
+          />
         )}
       </dd>
       {withheldBecause && <dd className="col-span-full text-small text-ink-2">{withheldBecause}</dd>}

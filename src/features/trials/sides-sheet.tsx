@@ -7,14 +7,23 @@ import { Sheet } from '../../components/sheet.tsx'
 import { formatUncertainty } from '../../lib/format-figure.ts'
 import { formatSigned } from '../../lib/format-signed.ts'
 import { FigureText } from '../results/figure-text.tsx'
+import { figureWords } from '../results/metric-words.ts'
+import { Was } from './was.tsx'
 import './sides-sheet.css'
 
 type Sides = NonNullable<Analysis['sides']>
 
 const percent = { unit: '%', factor: 1, decimals: 1 }
 
+interface Props {
+  sides: Sides
+  checks: Analysis['checks']
+  /** While events are being moved: the saved figures. */
+  saved?: Sides | null | undefined
+}
+
 /** The figures of each foot, their difference, and which is larger. */
-export function SidesSheet({ sides, checks }: { sides: Sides; checks: Analysis['checks'] }) {
+export function SidesSheet({ sides, checks, saved }: Props) {
   const taken = new Set(checks.filter(({ verdict }) => verdict === 'fail').flatMap(({ affects }) => affects))
   const isTaken = (key: MetricKey) => taken.has('sides') || taken.has(catalogue[key].group)
   const keys = metricKeys.filter((key) => sides.left[key] && sides.right[key])
@@ -40,7 +49,7 @@ export function SidesSheet({ sides, checks }: { sides: Sides; checks: Analysis['
           </thead>
           <tbody>
             {keys.map((key) => (
-              <SideRow key={key} metricKey={key} sides={sides} struck={isTaken(key)} />
+              <SideRow key={key} metricKey={key} sides={sides} saved={saved} struck={isTaken(key)} />
             ))}
           </tbody>
         </table>
@@ -52,7 +61,12 @@ export function SidesSheet({ sides, checks }: { sides: Sides; checks: Analysis['
   )
 }
 
-function SideRow({ metricKey, sides, struck }: { metricKey: MetricKey; sides: Sides; struck: boolean }) {
+interface RowProps extends Pick<Props, 'sides' | 'saved'> {
+  metricKey: MetricKey
+  struck: boolean
+}
+
+function SideRow({ metricKey, sides, saved, struck }: RowProps) {
   const asymmetry = sides.asymmetry[metricKey]
   const { name } = catalogue[metricKey]
   return (
@@ -63,9 +77,11 @@ function SideRow({ metricKey, sides, struck }: { metricKey: MetricKey; sides: Si
       </th>
       <td className="figure">
         <FigureText metricKey={metricKey} figure={sides.left[metricKey]!} unit />
+        {saved && <WasFoot metricKey={metricKey} saved={saved.left} now={sides.left} />}
       </td>
       <td className="figure">
         <FigureText metricKey={metricKey} figure={sides.right[metricKey]!} unit />
+        {saved && <WasFoot metricKey={metricKey} saved={saved.right} now={sides.right} />}
       </td>
       <td className="figure">
         {asymmetry && (
@@ -78,6 +94,17 @@ function SideRow({ metricKey, sides, struck }: { metricKey: MetricKey; sides: Si
       <td>{asymmetry && largerWords(asymmetry)}</td>
     </tr>
   )
+}
+
+interface WasFootProps {
+  metricKey: MetricKey
+  saved: Sides['left']
+  now: Sides['left']
+}
+
+function WasFoot({ metricKey, saved, now }: WasFootProps) {
+  const words = (foot: Sides['left']) => (foot[metricKey] ? figureWords(metricKey, foot[metricKey]) : null)
+  return <Was saved={words(saved)} now={words(now)} />
 }
 
 /** The larger side, or that the plate cannot tell. */

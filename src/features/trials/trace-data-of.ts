@@ -20,6 +20,7 @@ export function traceDataOf(trial: Traced & Pick<Trial, 'test'>, samples: Sample
     momentum: analysis && momentumOf(signal, analysis),
     phases: analysis?.ledger?.entries ?? [],
     events: eventsOf(trial),
+    overlays: [],
   }
 }
 
@@ -40,7 +41,9 @@ export function eventsOf({ analysis }: Pick<Trial, 'analysis'>): TraceEvent[] {
   return eventOrder
     .flatMap((name) => {
       const event = analysis?.events[name]
-      return event ? [{ key: name, label: eventWords[name], timeS: event.timeS }] : []
+      if (!event) return []
+      const adjusted = analysis?.movedEvents[name] !== undefined
+      return [{ key: name, label: eventWords[name], timeS: event.timeS, ...(adjusted ? { adjusted } : {}) }]
     })
     .sort((a, b) => a.timeS - b.timeS)
 }

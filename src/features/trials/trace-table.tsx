@@ -26,7 +26,7 @@ export function TraceTable({ data }: { data: TraceData }) {
         <tbody>
           {rows.map((row) => (
             <tr key={row.key}>
-              <th scope="row">{row.label}</th>
+              <th scope="row">{row.adjusted ? `${row.label}, adjusted` : row.label}</th>
               <td className="figure">{row.timeS.toFixed(3)} s</td>
               {row.reading.values.map((value) => (
                 <td key={value.label} className="figure">

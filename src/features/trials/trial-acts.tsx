@@ -11,7 +11,7 @@ import { SetAsideDialog } from './set-aside-dialog.tsx'
 import { useTakeBack, type ActedTrial } from './use-trial-acts.ts'
 
 /** What may be done to a trial from its page. */
-export function TrialActs({ trial }: { trial: Trial }) {
+export function TrialActs({ trial, onMove }: { trial: Trial; onMove: (() => void) | null }) {
   const [open, setOpen] = useState<'set-aside' | 'move' | null>(null)
   const acted: ActedTrial = {
     id: trial.id,
@@ -28,6 +28,7 @@ export function TrialActs({ trial }: { trial: Trial }) {
       <a className="button" href={originalAddress(trial.uploadId)} download>
         Download original
       </a>
+      {onMove && <Button onClick={onMove}>Move an event</Button>}
       <Button onClick={() => setOpen('move')}>Move to athlete</Button>
       {trial.setAside ? (
         <Button look="main" busy={busy} onClick={() => takeBack(trial.version)}>

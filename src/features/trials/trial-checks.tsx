@@ -4,13 +4,19 @@ import { Sheet } from '../../components/sheet.tsx'
 import { Tag } from '../../components/tag.tsx'
 import { groupWords } from './event-words.ts'
 import { formatMeasured } from './format-measured.ts'
+import { Was } from './was.tsx'
 
 type Check = Analysis['checks'][number]
 
 const order = { fail: 0, caution: 1, pass: 2 } as const
 
+interface Props extends Pick<Analysis, 'checks' | 'notes'> {
+  /** While events are being moved: the saved checks. */
+  saved?: Analysis['checks'] | undefined
+}
+
 /** The quality checks: those to look at first, the others behind one line. */
-export function TrialChecks({ checks, notes }: Pick<Analysis, 'checks' | 'notes'>) {
+export function TrialChecks({ checks, notes, saved }: Props) {
   const sorted = [...checks].sort((a, b) => order[a.verdict] - order[b.verdict])
   const looks = sorted.filter((check) => check.verdict !== 'pass')
   const passes = sorted.filter((check) => check.verdict === 'pass')
@@ -19,7 +25,7 @@ export function TrialChecks({ checks, notes }: Pick<Analysis, 'checks' | 'notes'
       {looks.length > 0 && (
         <ul>
           {looks.map((check) => (
-            <CheckToLookAt key={check.key} check={check} />
+            <CheckToLookAt key={check.key} check={check} saved={saved} />
           ))}
         </ul>
       )}
@@ -36,6 +42,7 @@ export function TrialChecks({ checks, notes }: Pick<Analysis, 'checks' | 'notes'
               >
                 <span>
                   <MethodLink noteKey={check.key}>{check.sentence}</MethodLink>
+                  <WasVerdict check={check} saved={saved} />
                 </span>
                 <Measured check={check} />
               </li>
@@ -54,16 +61,23 @@ export function TrialChecks({ checks, notes }: Pick<Analysis, 'checks' | 'notes'
   )
 }
 
-function CheckToLookAt({ check }: { check: Check }) {
+const verdictWords = { pass: 'pass', caution: 'look', fail: 'failed' } as const
+
+function WasVerdict({ check, saved }: { check: Check; saved: Check[] | undefined }) {
+  if (!saved) return null
+  const before = saved.find(({ key }) => key === check.key)
+  return <Was saved={before ? verdictWords[before.verdict] : 'not made'} now={verdictWords[check.verdict]} />
+}
+
+function CheckToLookAt({ check, saved }: { check: Check; saved: Check[] | undefined }) {
   const affects = check.affects.map((group) => groupWords[group].toLowerCase())
   return (
     <li className="border-b border-rule-2 py-1.5">
       <div className="flex justify-between gap-4">
         <span>
-          <Tag tone={check.verdict === 'fail' ? 'stop' : 'caution'}>
-            {check.verdict === 'fail' ? 'failed' : 'look'}
-          </Tag>{' '}
+          <Tag tone={check.verdict === 'fail' ? 'stop' : 'caution'}>{verdictWords[check.verdict]}</Tag>{' '}
           <MethodLink noteKey={check.key}>{check.sentence}</MethodLink>
+          <WasVerdict check={check} saved={saved} />
         </span>
         <Measured check={check} />
       </div>

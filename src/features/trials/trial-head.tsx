@@ -12,15 +12,21 @@ import { TrialActs } from './trial-acts.tsx'
 const height = catalogue.jumpHeightImpulse
 const velocity = catalogue.takeoffVelocity
 
+interface Props {
+  trial: Trial
+  /** Begins moving events; null where that cannot be. */
+  onMove: (() => void) | null
+}
+
 /** Who, when, which file; then the result. */
-export function TrialHead({ trial }: { trial: Trial }) {
+export function TrialHead({ trial, onMove }: Props) {
   const { title, aside } = resultWords(trial)
   return (
     <PageHead
       title={title}
       aside={aside}
       context={<TrialContext trial={trial} />}
-      actions={<TrialActs trial={trial} />}
+      actions={<TrialActs trial={trial} onMove={onMove} />}
     />
   )
 }

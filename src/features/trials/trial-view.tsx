@@ -1,18 +1,25 @@
+import { lazy, Suspense, useState } from 'react'
 import type { Trial } from '../../../shared/contracts/trials.ts'
+import { Loading } from '../../components/loading.tsx'
 import { Notice } from '../../components/notice.tsx'
-import { ImpulseLedger } from './impulse-ledger.tsx'
-import { MeasuredSheet } from './measured-sheet.tsx'
-import { SidesSheet } from './sides-sheet.tsx'
+import { AdjustedNotice } from './adjusted-notice.tsx'
 import { TraceSheet } from './trace-sheet.tsx'
-import { TrialChecks } from './trial-checks.tsx'
+import { TrialFigures } from './trial-figures.tsx'
 import { TrialHead } from './trial-head.tsx'
+
+/** Fetched when somebody first moves an event: it brings the engine. */
+const MovingEvents = lazy(async () => ({
+  default: (await import('./moving/moving-events.tsx')).MovingEvents,
+}))
 
 /** A trial for whoever runs sessions: all that was measured, and what stands behind it. */
 export function TrialView({ trial }: { trial: Trial }) {
-  const { analysis, setAside } = trial
+  const [moving, setMoving] = useState(false)
+  const { analysis, setAside, engineInputs } = trial
+  const mayMove = engineInputs !== null && analysis !== null
   return (
     <>
-      <TrialHead trial={trial} />
+      <TrialHead trial={trial} onMove={mayMove && !moving ? () => setMoving(true) : null} />
       {setAside && (
         <div className="pb-4">
           <Notice tone="caution" title={`Set aside by ${setAside.byName}: ${setAside.reason}`}>
@@ -20,21 +27,13 @@ export function TrialView({ trial }: { trial: Trial }) {
           </Notice>
         </div>
       )}
-      <div className="grid items-start gap-6 lg:grid-cols-[minmax(0,1fr)_22.5rem]">
-        <TraceSheet trial={trial} />
-        {analysis && (
-          <div className="flex flex-col gap-5">
-            {analysis.ledger && <ImpulseLedger ledger={analysis.ledger} />}
-            <TrialChecks checks={analysis.checks} notes={analysis.notes} />
-          </div>
-        )}
-      </div>
-      {analysis && (
-        <div className="flex flex-col gap-6 pt-6">
-          <MeasuredSheet analysis={analysis} />
-          {analysis.sides && <SidesSheet sides={analysis.sides} checks={analysis.checks} />}
-          <p className="text-small text-ink-2">Computed by engine {analysis.engineVersion}.</p>
-        </div>
+      <AdjustedNotice trial={trial} mayPutBack={mayMove && !moving} />
+      {moving ? (
+        <Suspense fallback={<Loading what="the engine" />}>
+          <MovingEvents trial={trial} onEnd={() => setMoving(false)} />
+        </Suspense>
+      ) : (
+        <TrialFigures analysis={analysis} trace={<TraceSheet trial={trial} />} />
       )}
     </>
   )

@@ -78,7 +78,14 @@ export function aTrial(
     nextTrialId: idOf('trial', 2),
     mayEdit: true,
     eventMoves: [],
-    engineInputs: { engineVersion, test: cmj, recordedMassKg: null, gravity, calibrationU: {} },
+    engineInputs: {
+      engineVersion,
+      test: cmj,
+      recordedMassKg: null,
+      gravity,
+      calibrationU: {},
+      changedSettings: {},
+    },
     version: 1,
     ...change,
   }
