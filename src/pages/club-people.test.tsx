@@ -169,10 +169,22 @@ describe('roles and access', () => {
     await waitFor(() => expect(club.people[1]!.active).toBe(true))
   })
 
+  test('deactivating oneself says what that means, and leads to the sign-in', async () => {
+    const { user, club, address } = open()
+    club.people[1]!.roles = ['admin']
+    await user.click(await screen.findByRole('button', { name: 'Deactivate Ines Calloway' }))
+    const dialog = screen.getByRole('dialog', { name: 'Deactivate yourself?' })
+    expect(dialog).toHaveTextContent('only another admin can let you in again')
+    await user.click(within(dialog).getByRole('button', { name: 'Deactivate myself' }))
+    await waitFor(() => expect(address()).toBe('/sign-in'))
+    expect(club.people[0]!.active).toBe(false)
+    expect(screen.queryByRole('dialog')).not.toBeInTheDocument()
+  })
+
   test('a refused deactivation says why and changes nothing', async () => {
     const { user } = open()
     await user.click(await screen.findByRole('button', { name: 'Deactivate Ines Calloway' }))
-    await user.click(screen.getByRole('button', { name: 'Deactivate' }))
+    await user.click(screen.getByRole('button', { name: 'Deactivate myself' }))
     expect(await screen.findByRole('alert')).toHaveTextContent('The club needs at least one active admin')
   })
 })

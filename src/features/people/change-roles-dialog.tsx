@@ -3,6 +3,7 @@ import { Controller, useForm } from 'react-hook-form'
 import { z } from 'zod'
 import { InviteForm, Person } from '../../../shared/contracts/people.ts'
 import type { Role } from '../../../shared/contracts/roles.ts'
+import { useMe } from '../../api/account/get-me.ts'
 import { useChangePerson } from '../../api/people/change-person.ts'
 import { useAnnounce } from '../../components/announcer.tsx'
 import { Button } from '../../components/button.tsx'
@@ -25,6 +26,7 @@ const staleFields: StaleField<Person>[] = [
 export function ChangeRolesDialog({ person, onClose }: { person: Person; onClose: () => void }) {
   const change = useChangePerson()
   const announce = useAnnounce()
+  const isOneself = useMe().data?.person.id === person.id
   const { opened, newer, version, catchStale, takeTheirs } = useStaleRow(person, Person)
   const form = useForm<{ roles: Role[] }>({
     resolver: zodResolver(RolesSchema),
@@ -37,7 +39,7 @@ export function ChangeRolesDialog({ person, onClose }: { person: Person; onClose
     setRefusal(null)
     try {
       await change.mutateAsync({ params: { personId: opened.id }, body: { version, roles } })
-      announce({ text: `The roles of ${opened.name} are saved.` })
+      announce({ text: isOneself ? 'Your roles are saved.' : `The roles of ${opened.name} are saved.` })
       onClose()
     } catch (error) {
       try {
@@ -49,7 +51,7 @@ export function ChangeRolesDialog({ person, onClose }: { person: Person; onClose
   })
 
   return (
-    <Dialog title={`Roles of ${opened.name}`} onClose={onClose} dirty={isDirty}>
+    <Dialog title={isOneself ? 'Your roles' : `Roles of ${opened.name}`} onClose={onClose} dirty={isDirty}>
       <form noValidate onSubmit={save} className="flex flex-col gap-4">
         <StaleNotice
           opened={opened}
@@ -69,7 +71,9 @@ export function ChangeRolesDialog({ person, onClose }: { person: Person; onClose
             <RolePicker chosen={field.value} onChange={field.onChange} error={errors.roles?.message} />
           )}
         />
-        <p className="text-small text-ink-2">The change holds from their next click on.</p>
+        <p className="text-small text-ink-2">
+          The change holds from {isOneself ? 'your' : 'their'} next click on.
+        </p>
         <Button type="submit" look="main" className="self-start" busy={change.isPending} disabled={!isDirty}>
           Save
         </Button>
