@@ -1,10 +1,12 @@
 import type { Route } from './http/implement.ts'
 import { accountRoutes } from './modules/account/account.routes.ts'
+import { analysisRoutes } from './modules/analyses/analyses.routes.ts'
 import { athleteRoutes } from './modules/athletes/athletes.routes.ts'
 import { clubRoutes } from './modules/clubs/clubs.routes.ts'
 import { eventRoutes } from './modules/events/events.routes.ts'
 import { landingWatchRoutes } from './modules/landing-watch/landing-watch.routes.ts'
 import { peopleRoutes } from './modules/people/people.routes.ts'
+import { recomputeRoutes } from './modules/recomputes/recomputes.routes.ts'
 import { resultRoutes } from './modules/results/results.routes.ts'
 import { sessionRoutes } from './modules/sessions/sessions.routes.ts'
 import { squadRoutes } from './modules/squads/squads.routes.ts'
@@ -22,6 +24,8 @@ export const routes: Route[] = [
   ...uploadRoutes,
   ...trialRoutes,
   ...landingWatchRoutes,
+  ...analysisRoutes,
+  ...recomputeRoutes,
   ...clubRoutes,
   ...eventRoutes,
 ]

@@ -1,5 +1,10 @@
 import { analyseTrialJob, giveUpAnalysingJob } from '../modules/analyses/analyses.jobs.ts'
 import { sendMailJob } from '../modules/mail/mail.jobs.ts'
+import {
+  addUpMovesJob,
+  giveUpRecomputingJob,
+  recomputeBatchJob,
+} from '../modules/recomputes/recomputes.jobs.ts'
 import { giveUpReadingJob, readUploadJob } from '../modules/uploads/uploads.jobs.ts'
 import type { Job } from './define-job.ts'
 
@@ -10,4 +15,7 @@ export const allJobs: readonly Job[] = [
   sendMailJob,
   giveUpReadingJob,
   giveUpAnalysingJob,
+  recomputeBatchJob,
+  addUpMovesJob,
+  giveUpRecomputingJob,
 ]

@@ -12,6 +12,8 @@ export const expireInSeconds = 40
 export const maintenanceSeconds = 5
 
 const ofUpload = z.strictObject({ version: z.literal(1), clubId: Id, uploadId: Id })
+const ofRecompute = z.strictObject({ version: z.literal(1), clubId: Id, recomputeId: Id })
+const ofBatch = ofRecompute.extend({ n: z.int().nonnegative() })
 const ofTrial = z.strictObject({ version: z.literal(1), clubId: Id, trialId: Id })
 
 /**
@@ -22,8 +24,18 @@ const ofTrial = z.strictObject({ version: z.literal(1), clubId: Id, trialId: Id 
 export const queues = {
   'give-up-reading': { payload: ofUpload, retryLimit: 5, retryDelaySeconds: 5 },
   'give-up-analysing': { payload: ofTrial, retryLimit: 5, retryDelaySeconds: 5 },
+  'give-up-recomputing': { payload: ofBatch, retryLimit: 5, retryDelaySeconds: 5 },
   'read-upload': { payload: ofUpload, retryLimit: 3, retryDelaySeconds: 1, after: 'give-up-reading' },
   'analyse-trial': { payload: ofTrial, retryLimit: 3, retryDelaySeconds: 1, after: 'give-up-analysing' },
+  'recompute-batch': {
+    payload: ofBatch,
+    retryLimit: 3,
+    retryDelaySeconds: 1,
+    after: 'give-up-recomputing',
+    // Enough to keep two threads at work, and few enough that a file dropped meanwhile waits for one batch.
+    atOnce: 3,
+  },
+  'add-up-moves': { payload: ofRecompute, retryLimit: 5, retryDelaySeconds: 1 },
   'send-mail': {
     payload: z.strictObject({ version: z.literal(1), mailId: Id }),
     // With doubling pauses, about four hours of a mail server that is away.
@@ -38,6 +50,8 @@ export interface QueueDefinition {
   /** Pause before the first retry; each later one is twice as long. */
   retryDelaySeconds: number
   after?: string
+  /** Jobs at work at once in one worker, where fewer than usual. */
+  atOnce?: number
 }
 
 export type QueueName = keyof typeof queues

@@ -1,7 +1,7 @@
 import { setTimeout as pause } from 'node:timers/promises'
 import PgBoss from 'pg-boss'
 import type { Job, JobDeps } from './define-job.ts'
-import { maintenanceSeconds, queueSchema } from './queues.ts'
+import { maintenanceSeconds, type QueueDefinition, queues, queueSchema } from './queues.ts'
 
 export interface RunOptions {
   /** Jobs of one queue at work at once: more than threads, so that waiting for the database costs nothing. */
@@ -72,18 +72,18 @@ interface Work {
 /** Keeps up to `atOnce` jobs of one queue at work; looks for more as soon as one ends, rests when there are none. */
 async function work({ boss, deps, job, settings, counts, signal }: Work): Promise<void> {
   const atWork = new Set<Promise<void>>()
+  const definition: QueueDefinition = queues[job.queue]
+  const atOnce = Math.min(settings.atOnce, definition.atOnce ?? settings.atOnce)
   while (!signal.aborted) {
-    const fetched = await fetchJobs(boss, job.queue, settings.atOnce - atWork.size).catch(
-      (error: unknown) => {
-        deps.log.error({ err: error, queue: job.queue }, 'the queue cannot be read')
-        return pause(afterFaultMs, [])
-      },
-    )
+    const fetched = await fetchJobs(boss, job.queue, atOnce - atWork.size).catch((error: unknown) => {
+      deps.log.error({ err: error, queue: job.queue }, 'the queue cannot be read')
+      return pause(afterFaultMs, [])
+    })
     for (const one of fetched) {
       const running = runOne({ boss, deps, job, counts }, one).finally(() => atWork.delete(running))
       atWork.add(running)
     }
-    if (atWork.size === settings.atOnce) await Promise.race(atWork)
+    if (atWork.size === atOnce) await Promise.race(atWork)
     else if (fetched.length === 0) await rest(settings.idleMs, atWork)
   }
   await Promise.all(atWork)

@@ -1,10 +1,13 @@
 import * as account from './account.ts'
+import * as analyses from './analyses.ts'
 import * as athletes from './athletes.ts'
 import * as clubs from './clubs.ts'
 import type { Endpoint } from './endpoint.ts'
 import * as events from './events.ts'
 import * as landingWatch from './landing-watch.ts'
+import * as measuring from './measuring.ts'
 import * as people from './people.ts'
+import * as recomputes from './recomputes.ts'
 import * as results from './results.ts'
 import * as sessions from './sessions.ts'
 import * as squads from './squads.ts'
@@ -16,7 +19,22 @@ const isEndpoint = (value: unknown): value is Endpoint =>
 
 /** Every endpoint of the API by name: what the authorisation test walks. */
 export const endpoints: Record<string, Endpoint> = Object.fromEntries(
-  [account, people, squads, athletes, results, sessions, uploads, trials, landingWatch, clubs, events]
+  [
+    account,
+    people,
+    squads,
+    athletes,
+    results,
+    sessions,
+    uploads,
+    trials,
+    analyses,
+    recomputes,
+    landingWatch,
+    clubs,
+    measuring,
+    events,
+  ]
     .flatMap((noun) => Object.entries(noun))
     .filter((entry): entry is [string, Endpoint] => isEndpoint(entry[1])),
 )

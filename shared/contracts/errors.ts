@@ -34,6 +34,15 @@ export const errorCodes = [
   'athlete-not-in-session',
   'event-misplaced',
   'engine-outdated',
+  'recompute-running',
+  'nothing-to-recompute',
+  'payments-off',
+  'payments-away',
+  'payment-declined',
+  'signature-invalid',
+  'subscription-running',
+  'subscription-missing',
+  'club-reads-only',
   'internal',
 ] as const
 

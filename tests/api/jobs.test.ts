@@ -1,6 +1,3 @@
-import { type ChildProcess, spawn } from 'node:child_process'
-import { once } from 'node:events'
-import { fileURLToPath } from 'node:url'
 import { afterAll, afterEach, beforeAll, describe, expect, it } from 'vitest'
 import { workerContext } from '../../server/db/database.ts'
 import { sendJobs } from '../../server/jobs/queue.ts'
@@ -16,6 +13,7 @@ import {
 } from './harness/testing-day.ts'
 import { until } from './harness/until.ts'
 import { startWorker, type WorkerOptions } from './harness/worker.ts'
+import { kill, spawnWorker, threadModule } from './harness/worker-process.ts'
 
 let harness: Harness
 let day: TestingDay
@@ -106,7 +104,7 @@ describe('a worker that is killed in the middle of a job', () => {
       // Whoever reads the upload cannot write what it read: the worker stays in the middle of the job.
       await admin.query('begin')
       await admin.query('select 1 from club.uploads where id = $1 for update', [upload.id])
-      const doomed = spawnWorker()
+      const doomed = spawnWorker(harness)
       try {
         await until(
           () => stateOf(upload.id),
@@ -181,21 +179,3 @@ describe('a queue that cannot be read', () => {
     }
   })
 })
-
-function spawnWorker(): ChildProcess {
-  return spawn(process.execPath, ['--import', 'tsx', 'server/worker.ts'], {
-    cwd: fileURLToPath(new URL('../..', import.meta.url)),
-    env: { ...process.env, NODE_ENV: 'test', DATABASE_WORKER_URL: harness.database.workerUrl },
-    stdio: 'ignore',
-  })
-}
-
-async function kill(child: ChildProcess): Promise<void> {
-  const ended = once(child, 'exit')
-  child.kill('SIGKILL')
-  await ended
-}
-
-function threadModule(name: 'bad-reading' | 'no-analysis'): string {
-  return fileURLToPath(new URL(`./harness/threads/${name}.ts`, import.meta.url))
-}

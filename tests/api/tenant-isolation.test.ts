@@ -6,7 +6,9 @@ import { databaseErrorOf } from '../../server/db/constraint-errors.ts'
 import type { ClubContext, Database, Tx } from '../../server/db/database.ts'
 import { workerContext } from '../../server/db/database.ts'
 import * as identity from '../../server/db/schema/identity.ts'
+import * as measuring from '../../server/db/schema/measuring.ts'
 import * as peopleOfClub from '../../server/db/schema/people-of-club.ts'
+import * as recomputes from '../../server/db/schema/recomputes.ts'
 import * as records from '../../server/db/schema/records.ts'
 import * as results from '../../server/db/schema/results.ts'
 import * as sessions from '../../server/db/schema/sessions.ts'
@@ -45,6 +47,10 @@ async function fillTheRest(): Promise<void> {
     const move = { events: {}, stood: {}, movedBy: personId, movedAt: new Date() }
     await tx.insert(trials.eventMoves).values({ clubId, trialId, ...move })
     await tx.insert(results.trialSpreads).values({ clubId, sessionId, ...spread })
+    const edition = { clubId, edition: 2, changedBy: personId }
+    await tx.insert(measuring.measuringSettings).values({ ...edition, changed: { eventForceN: 20 } })
+    const plates = { leftU: 0.005, rightU: 0.005, singleU: 0.005, totalU: 0.005 }
+    await tx.insert(measuring.plateCalibrations).values({ ...edition, ...plates })
   })
 }
 
@@ -72,7 +78,7 @@ const resultRow = (
 
 const isTable = (value: unknown): value is PgTable =>
   typeof value === 'object' && value !== null && Symbol.for('drizzle:IsDrizzleTable') in value
-const clubTables = [peopleOfClub, records, results, sessions, trials, uploads]
+const clubTables = [peopleOfClub, measuring, recomputes, records, results, sessions, trials, uploads]
   .flatMap((schema) => Object.values(schema) as unknown[])
   .filter(isTable)
 const nameOf = (table: PgTable) => getTableConfig(table).name

@@ -32,15 +32,29 @@ export function toRow(said: EngineSaid): StoredFigures {
   }
 }
 
-/** The analysis in the form that the API answers with. */
-export function toView(row: AnalysisRow): Analysis {
-  const { id, engineVersion, inputs, events, sides, ledger, checks, missing, notes } = row
+/** The figures and verdicts of a stored analysis, as the engine gave them. */
+export function figuresOf({
+  metricValues,
+  metricUncertainties,
+  sides,
+  checks,
+}: Pick<AnalysisRow, 'metricValues' | 'metricUncertainties' | 'sides' | 'checks'>): Pick<
+  EngineSaid,
+  'metrics' | 'sides' | 'checks'
+> {
   const metrics = Object.fromEntries(
-    Object.entries(row.metricValues).map(([key, value]) => {
-      const [U, k, URepeat, kRepeat] = row.metricUncertainties[key]
+    Object.entries(metricValues).map(([key, value]) => {
+      const [U, k, URepeat, kRepeat] = metricUncertainties[key]
       return [key, { value, U, k, URepeat, kRepeat }]
     }),
   )
+  return { metrics, sides, checks }
+}
+
+/** The analysis in the form that the API answers with. */
+export function toView(row: AnalysisRow): Analysis {
+  const { id, engineVersion, inputs, events, sides, ledger, checks, missing, notes } = row
+  const { metrics } = figuresOf(row)
   return {
     id,
     engineVersion,

@@ -25,7 +25,7 @@ import {
 } from './measuring.queries.ts'
 
 /** Refuses a change at a time when it must not be. */
-export type Guard = (tx: Tx) => Promise<void>
+export type Guard = (tx: Tx, clubId: string) => Promise<void>
 
 export const readMeasuringSettings = ({ db }: Pick<Deps, 'db'>, ctx: Caller): Promise<MeasuringSettings> =>
   db.inClub(ctx, (tx) => viewSettings(tx, ctx.clubId))
@@ -42,7 +42,7 @@ export function editMeasuringSettings(
 ): Promise<MeasuringSettings> {
   const { clubId, personId: changedBy } = ctx
   return db.inClub(ctx, async (tx) => {
-    await guard(tx)
+    await guard(tx, clubId)
     const before = await viewSettings(tx, clubId)
     const row = { clubId, edition: version + 1, changed: onlyChanged(changed), changedBy }
     if (before.version !== version || !(await insertMeasuringSettings(tx, row)))
@@ -68,7 +68,7 @@ export function editPlateCalibration(
   const { latitudeDeg, altitudeM } = place ?? { latitudeDeg: null, altitudeM: null }
   const stated = { leftU, rightU, singleU, totalU, latitudeDeg, altitudeM }
   return db.inClub(ctx, async (tx) => {
-    await guard(tx)
+    await guard(tx, clubId)
     const before = await viewCalibration(tx, clubId)
     const row = { clubId, edition: version + 1, changedBy, ...stated }
     if (before.version !== version || !(await insertPlateCalibration(tx, row)))

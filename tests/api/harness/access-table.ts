@@ -173,12 +173,54 @@ export const accessTable: Record<string, AccessLine> = {
     elsewhere: 'not-found',
     notTheirsToChange: ['physio'],
   },
+  listAnalyses: { may: test, request: ({ trialId }) => ({ params: { trialId } }), elsewhere: 'not-found' },
+  getStanding: {
+    may: ['coach', 'physio', 'admin'],
+    request: ({ athleteId }) => ({ query: { athleteId } }),
+    elsewhere: 'not-found',
+  },
+  listRecomputes: {
+    may: ['coach', 'physio', 'admin'],
+    request: ({ sessionId }) => ({ query: { sessionId } }),
+    elsewhere: 'not-found',
+  },
+  getRecompute: {
+    may: ['coach', 'physio', 'admin'],
+    request: ({ recomputeId }) => ({ params: { recomputeId } }),
+    elsewhere: 'not-found',
+  },
+  startRecompute: {
+    may: ['coach', 'admin'],
+    request: ({ sessionId }) => ({ body: { scope: { kind: 'session', sessionId }, dryRun: true } }),
+    elsewhere: 'not-found',
+  },
+  cancelRecompute: {
+    may: ['coach', 'admin'],
+    request: ({ recomputeId }) => ({ params: { recomputeId } }),
+    elsewhere: 'not-found',
+  },
   listHighLandings: { may: ['physio'], request: nothing, elsewhere: 'own' },
 
   getClubSettings: { may: ['admin', 'physio'], request: nothing, elsewhere: 'own' },
   changeClubSettings: {
     may: ['admin', 'physio'],
     request: form({ landingPeakLimits: {}, version: 9 }),
+    elsewhere: 'own',
+  },
+  getMeasuringSettings: { may: ['coach', 'physio', 'admin'], request: nothing, elsewhere: 'own' },
+  changeMeasuringSettings: {
+    may: ['coach', 'admin'],
+    request: form({ changed: {}, version: 9 }),
+    elsewhere: 'own',
+  },
+  getPlateCalibration: { may: ['coach', 'physio', 'admin'], request: nothing, elsewhere: 'own' },
+  changePlateCalibration: {
+    may: ['coach', 'admin'],
+    request: form({
+      calibrationU: { left: 0.005, right: 0.005, single: 0.005, total: 0.005 },
+      place: null,
+      version: 9,
+    }),
     elsewhere: 'own',
   },
   getSeats: { may: ['admin'], request: nothing, elsewhere: 'own' },

@@ -2,6 +2,7 @@ import { randomUUID } from 'node:crypto'
 import { buildAthlete, buildSquad } from '../../../seed/builders/athlete.ts'
 import { buildClub } from '../../../seed/builders/club.ts'
 import { buildMember } from '../../../seed/builders/person.ts'
+import { buildRecompute } from '../../../seed/builders/recompute.ts'
 import { buildSession } from '../../../seed/builders/session.ts'
 import { buildAnalysis, buildTrial, buildUpload } from '../../../seed/builders/trial.ts'
 import { invite } from '../../../server/modules/people/invitations.service.ts'
@@ -21,6 +22,7 @@ export async function buildOneOfEach({ db, deps, workerDeps }: Harness) {
   const uploadId = await buildUpload(db, clubId, { sessionId, uploadedBy: personId })
   const trialId = await buildTrial(db, clubId, { sessionId, uploadId, athleteId })
   const analysisId = await buildAnalysis(workerDeps.db, clubId, { trialId })
+  const recomputeId = await buildRecompute(db, clubId, { requestedBy: personId, trialIds: [trialId] })
   const admin = {
     clubId,
     personId,
@@ -30,5 +32,16 @@ export async function buildOneOfEach({ db, deps, workerDeps }: Harness) {
   } as const
   const guest = { name: 'Guest', email: `${randomUUID()}@example.org`, roles: ['coach' as const] }
   const { id: invitationId } = await invite(deps, admin, { ...guest, athleteId: null })
-  return { clubId, personId, squadId, athleteId, sessionId, uploadId, trialId, analysisId, invitationId }
+  return {
+    clubId,
+    personId,
+    squadId,
+    athleteId,
+    sessionId,
+    uploadId,
+    trialId,
+    analysisId,
+    recomputeId,
+    invitationId,
+  }
 }
