@@ -58,6 +58,14 @@ function productionProblems(role: DatabaseRole, settings: Omit<Settings, `${Data
   if (role === 'worker' && !settings.smtpUrl) {
     problems.push('SMTP_URL is not set: in production mail goes to a real server.')
   }
+  if (settings.paymentServiceUrl) {
+    problems.push(
+      'PAYMENT_SERVICE_URL is for development only: in production money moves at the hosted service.',
+    )
+  }
+  if (settings.stripeKey && !settings.stripeWebhookSecret) {
+    problems.push('STRIPE_WEBHOOK_SECRET is not set: without it no event of the payment service is believed.')
+  }
   if (!settings.appUrl.startsWith('https://')) {
     problems.push('APP_URL must begin with https:// in production: passwords and cookies travel to it.')
   }

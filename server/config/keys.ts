@@ -113,6 +113,33 @@ export const keys = {
     port(0),
     'Port where caught mail is read; 0 picks a free one (development and tests only).',
   ),
+  stripeKey: key(
+    'STRIPE_SECRET_KEY',
+    z.string().min(10).optional(),
+    'Secret key of the payment service (Stripe); without one nothing is sold, and clubs get their seats by command.',
+    'sk_live_…',
+  ),
+  stripeWebhookSecret: key(
+    'STRIPE_WEBHOOK_SECRET',
+    z.string().min(10).optional(),
+    'Signs the events that the payment service sends to /api/payments/events.',
+    'whsec_…',
+  ),
+  paymentServiceUrl: key(
+    'PAYMENT_SERVICE_URL',
+    z.url().optional(),
+    'Address of the local payment service instead of the hosted one (development and tests only).',
+  ),
+  paymentFakePort: key(
+    'PAYMENT_FAKE_PORT',
+    port(0),
+    'Port of the local payment service; 0 picks a free one (development and tests only).',
+  ),
+  paymentFakeFile: key(
+    'PAYMENT_FAKE_FILE',
+    z.string().min(1).optional(),
+    'File in which the local payment service keeps its state (development only).',
+  ),
 } as const
 
 export type Keys = typeof keys

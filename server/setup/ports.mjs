@@ -1,3 +1,4 @@
+import { existsSync, readFileSync, writeFileSync } from 'node:fs'
 import { createServer } from 'node:net'
 import { SetUpProblem } from './problem.mjs'
 
@@ -8,6 +9,19 @@ export async function freePort() {
   const address = server.address()
   await new Promise((done) => server.close(done))
   return typeof address === 'object' && address ? address.port : 0
+}
+
+/**
+ * The port that a file names, while it is free: addresses that were given out go on working after a new start.
+ * Otherwise a free one, which the file names from now on.
+ * @param {string} file
+ */
+export async function lastingPort(file) {
+  const kept = existsSync(file) ? Number(readFileSync(file, 'utf8')) : 0
+  if (Number.isInteger(kept) && kept > 0 && (await portIsFree(kept))) return kept
+  const port = await freePort()
+  writeFileSync(file, String(port))
+  return port
 }
 
 /**

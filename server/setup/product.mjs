@@ -1,12 +1,14 @@
+import { join } from 'node:path'
 import { ensureClient } from './client-build.mjs'
 import { openDatabase } from './database.mjs'
 import { demoAccountLines, ensureDemo } from './demo.mjs'
 import { migrate } from './migrations.mjs'
-import { freePort } from './ports.mjs'
+import { localFolder } from './paths.mjs'
+import { freePort, lastingPort } from './ports.mjs'
 import { SetUpProblem, endWith, step } from './problem.mjs'
 import { keepRunning } from './processes.mjs'
 import { untilReady } from './readiness.mjs'
-import { mailService, webService, workerService } from './services.mjs'
+import { localPayments, mailService, paymentService, webService, workerService } from './services.mjs'
 import { productEnvironment } from './settings.mjs'
 import { onStop, stopAll } from './stopping.mjs'
 import { welcome } from './welcome.mjs'
@@ -22,17 +24,30 @@ export async function startProduct(settings, { reload }) {
   await migrate(urls.owner)
   const mail = settings.smtpUrl ? undefined : { smtpPort: await freePort(), inboxPort: await freePort() }
   const smtpUrl = settings.smtpUrl ?? `smtp://127.0.0.1:${mail?.smtpPort}`
-  const env = productEnvironment(settings, { urls, smtpUrl })
+  const payments =
+    settings.production || settings.hostedPayments
+      ? undefined
+      : {
+          port: await lastingPort(join(localFolder(), 'payments.port')),
+          file: join(localFolder(), 'payments.json'),
+        }
+  const paymentUrl = payments && `http://127.0.0.1:${payments.port}`
+  const env = productEnvironment(settings, {
+    urls,
+    smtpUrl,
+    payments: paymentUrl ? { ...localPayments, PAYMENT_SERVICE_URL: paymentUrl } : {},
+  })
   if (!settings.production) await ensureDemo(urls, env, { disposable: !settings.database })
   if (!reload) await ensureClient()
 
   const services = [workerService(env, reload), webService(env, reload)]
   if (mail) services.unshift(mailService(env, mail))
+  if (payments) services.unshift(paymentService(env, payments))
   step(`Starting ${services.map(({ name }) => name).join(', ')}`)
   for (const service of services) await onStop(keepRunning(service, giveUp).stop)
   await untilReady(settings.port)
   const accounts = settings.production ? [] : await demoAccountLines(urls)
-  console.log(welcome(settings, mail?.inboxPort, accounts))
+  console.log(welcome(settings, { inboxPort: mail?.inboxPort, paymentUrl }, accounts))
 }
 
 /**

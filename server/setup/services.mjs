@@ -39,3 +39,23 @@ export function mailService(env, { smtpPort, inboxPort }) {
     showOutput: false,
   }
 }
+
+/** What the local payment service and the product know each other by; it opens nothing anywhere else. */
+export const localPayments = {
+  STRIPE_SECRET_KEY: 'sk_test_of_this_machine',
+  STRIPE_WEBHOOK_SECRET: 'whsec_of_this_machine',
+}
+
+/**
+ * @param {NodeJS.ProcessEnv} env
+ * @param {{ port: number, file: string }} where it listens, and keeps its state
+ * @returns {Service}
+ */
+export function paymentService(env, { port, file }) {
+  return {
+    name: 'payments',
+    args: [...tsx, 'server/fakes/payments/main.ts'],
+    env: { ...env, PAYMENT_FAKE_PORT: String(port), PAYMENT_FAKE_FILE: file },
+    showOutput: false,
+  }
+}

@@ -14,6 +14,7 @@ const databaseNames = /** @type {const} */ ({
  * @property {string} appUrl the address that people see, and that links in mail carry
  * @property {boolean} production
  * @property {string | undefined} smtpUrl
+ * @property {boolean} hostedPayments whether a key of the hosted payment service is given
  * @property {import('./roles.mjs').OfRoles | undefined} database of the operator's own, instead of a private one
  */
 
@@ -42,6 +43,7 @@ export function readSettings(env) {
     port,
     production,
     smtpUrl,
+    hostedPayments: Boolean(env.STRIPE_SECRET_KEY),
     appUrl: env.APP_URL || `http://localhost:${port}`,
     database: ownDatabase(env),
   }
@@ -66,16 +68,17 @@ function ownDatabase(env) {
 /**
  * The environment of every process of the product: all it is told, it is told here.
  * @param {Settings} settings
- * @param {{ urls: import('./roles.mjs').OfRoles, smtpUrl: string }} found
+ * @param {{ urls: import('./roles.mjs').OfRoles, smtpUrl: string, payments?: NodeJS.ProcessEnv }} found
  * @returns {NodeJS.ProcessEnv}
  */
-export function productEnvironment(settings, { urls, smtpUrl }) {
+export function productEnvironment(settings, { urls, smtpUrl, payments }) {
   return {
     ...process.env,
     NODE_ENV: process.env.NODE_ENV || 'development',
     PORT: String(settings.port),
     APP_URL: settings.appUrl,
     SMTP_URL: smtpUrl,
+    ...payments,
     SESSION_SECRET: process.env.SESSION_SECRET || localSecrets().session,
     [databaseNames.owner]: urls.owner,
     [databaseNames.web]: urls.web,
