@@ -1,66 +1,96 @@
-import { findUnloaded, type Stretch } from './events/unloaded.ts'
+import { findUnloaded, type Stretch, type Unloaded } from './events/unloaded.ts'
+import { protocolNames } from './protocols/names.ts'
 import type { NoTrial } from './protocols/protocol.ts'
 import { protocolTable } from './protocols/table.ts'
 import { defaultSettings, type Settings } from './settings.ts'
-import { conditionRecording } from './signal/condition.ts'
+import { conditionRecording, type Signal } from './signal/condition.ts'
 import { cutRecording } from './trials/cut-recording.ts'
+import { proposeTest } from './trials/propose-test.ts'
 import { movedWithin, shiftTrial } from './trials/shift-trial.ts'
 import { splitTrials } from './trials/split.ts'
-import type { AnalyseOptions, Note, Recording, RecordingAnalysis, Test, TrialAnalysis } from './types.ts'
+import type { AnalyseOptions, Note, Protocol, Recording, RecordingAnalysis, TrialAnalysis } from './types.ts'
 import { engineVersion } from './version.ts'
-
-const proposed: Test = { protocol: 'cmj', side: 'both', externalLoadKg: 0, boxHeightM: null, arms: 'hips' }
 
 const noFlight: Note = {
   code: 'no-trial-found',
   sentence: 'No flight was found: the force never falls to that of empty plates.',
 }
 
-/** The parts of a recording, each found loaded and unloaded, or the reason why there are none. */
-function prepare(recording: Recording, settings: Settings) {
-  const conditioned = conditionRecording(recording, settings)
-  if ('problem' in conditioned) return conditioned
-  const { signal } = conditioned
-  const unloaded = findUnloaded(signal.total, signal.sums, signal.dt, settings)
-  return unloaded ? { signal, unloaded } : { problem: noFlight }
+/** A recording whose plates were read, and where they are loaded and empty. */
+interface Prepared {
+  recording: Recording
+  signal: Signal
+  unloaded: Unloaded
 }
 
-/** A part of a recording that holds a trial is analysed as a recording of its own: so its cut gives the same figures. */
+function prepare(recording: Recording, settings: Settings): Prepared | NoTrial {
+  const conditioned = conditionRecording(recording, settings)
+  if ('problem' in conditioned) return conditioned.problem
+  const { signal } = conditioned
+  const unloaded = findUnloaded(signal.total, signal.sums, signal.dt, settings)
+  return unloaded ? { recording, signal, unloaded } : noFlight
+}
+
+function analyseTrial(
+  prepared: Prepared,
+  options: AnalyseOptions,
+  settings: Settings,
+): TrialAnalysis | NoTrial {
+  const test = options.test ?? proposeTest(prepared.signal, prepared.unloaded, options.known ?? {}, settings)
+  const analyseAs = protocolTable[test.protocol]
+  if (!analyseAs)
+    return { code: 'test-unknown', sentence: `The engine does not analyse the test “${test.protocol}”.` }
+  return analyseAs({ ...prepared, test, options, settings })
+}
+
+/** A part of a recording is analysed as a recording of its own: so its cut, stored alone, gives the same figures. */
 function analysePart(
   recording: Recording,
-  { from, to }: Stretch,
+  part: Stretch,
   options: AnalyseOptions,
   settings: Settings,
 ): TrialAnalysis | NoTrial {
   const dt = 1 / recording.sampleRateHz
-  const part = cutRecording(recording, { from, to })
-  const prepared = prepare(part, settings)
-  if ('problem' in prepared) return prepared.problem
-  const movedEvents = movedWithin(options.movedEvents, from * dt, (to - 1) * dt)
-  const outcome = analyseTrial(part, prepared, { ...options, movedEvents }, settings)
-  return 'test' in outcome ? shiftTrial(outcome, from, dt) : outcome
+  const prepared = prepare(cutRecording(recording, part), settings)
+  if ('code' in prepared) return prepared
+  const movedEvents = movedWithin(options.movedEvents, part.from * dt, (part.to - 1) * dt)
+  const outcome = analyseTrial(prepared, { ...options, ...(movedEvents && { movedEvents }) }, settings)
+  return 'test' in outcome ? shiftTrial(outcome, part.from, dt) : outcome
 }
 
-function analyseTrial(
+function leftOut({ sentence }: NoTrial, { from, to }: Stretch, dt: number): Note {
+  const span = `From ${(from * dt).toFixed(1)} to ${(to * dt).toFixed(1)} s`
+  return { code: 'part-left-out', sentence: `${span} no trial was found. ${sentence}` }
+}
+
+function analyseAll(
   recording: Recording,
-  { signal, unloaded }: Exclude<ReturnType<typeof prepare>, { problem: Note }>,
   options: AnalyseOptions,
   settings: Settings,
-): TrialAnalysis | NoTrial {
-  const test = options.test ?? proposed
-  const analyseAs = protocolTable[test.protocol]
-  if (!analyseAs)
-    return { code: 'test-unknown', sentence: `The engine does not analyse the test “${test.protocol}”.` }
-  return analyseAs({ recording, signal, unloaded, test, options, settings })
+): Pick<RecordingAnalysis, 'trials' | 'notes'> {
+  const whole = prepare(recording, settings)
+  if ('code' in whole) return { trials: [], notes: [whole] }
+  const { signal, unloaded } = whole
+  const parts = splitTrials(signal, unloaded, options.test?.protocol ?? null, settings)
+  if (parts.length === 1) {
+    const outcome = analyseTrial(whole, options, settings)
+    return 'test' in outcome ? { trials: [outcome], notes: [] } : { trials: [], notes: [outcome] }
+  }
+  const outcomes = parts.map((part) => analysePart(recording, part, options, settings))
+  const notes = outcomes.flatMap((outcome, i) =>
+    'test' in outcome ? [] : [leftOut(outcome, parts[i], signal.dt)],
+  )
+  const trials = outcomes.filter((outcome) => 'test' in outcome)
+  const [first] = outcomes.filter((outcome) => 'code' in outcome)
+  return { trials, notes: trials.length === 0 && first ? [first] : notes }
 }
 
-function analyseAll(recording: Recording, options: AnalyseOptions, settings: Settings) {
-  const whole = prepare(recording, settings)
-  if ('problem' in whole) return [whole.problem]
-  const parts = splitTrials(whole.signal, whole.unloaded, settings)
-  return parts.length === 1
-    ? [analyseTrial(recording, whole, options, settings)]
-    : parts.map((part) => analysePart(recording, part, options, settings))
+function proposals(trials: readonly TrialAnalysis[]): Note[] {
+  const said = (protocol: Protocol): Note => ({
+    code: 'test-proposed',
+    sentence: `Taken for a ${protocolNames[protocol].toLowerCase()}, because no test was named.`,
+  })
+  return [...new Set(trials.map(({ test }) => test.protocol))].map(said)
 }
 
 /**
@@ -73,21 +103,11 @@ export function analyse(
   options: AnalyseOptions,
   settings: Settings = defaultSettings,
 ): RecordingAnalysis {
-  const notes = [...recording.notes]
   if (!(options.gravity > 0 && Number.isFinite(options.gravity))) {
-    notes.push({
-      code: 'gravity-unknown',
-      sentence: 'The acceleration of free fall must be a positive number.',
-    })
-    return { engineVersion, trials: [], notes }
+    const sentence = 'The acceleration of free fall must be a positive number.'
+    return { engineVersion, trials: [], notes: [...recording.notes, { code: 'gravity-unknown', sentence }] }
   }
-  const outcomes = analyseAll(recording, options, settings)
-  const trials = outcomes.filter((outcome) => 'test' in outcome)
-  if (trials.length === 0) notes.push(...outcomes.filter((outcome) => 'code' in outcome).slice(0, 1))
-  else if (!options.test)
-    notes.push({
-      code: 'test-proposed',
-      sentence: 'Taken for a countermovement jump, because no test was named.',
-    })
-  return { engineVersion, trials, notes }
+  const { trials, notes } = analyseAll(recording, options, settings)
+  const proposed = options.test ? [] : proposals(trials)
+  return { engineVersion, trials, notes: [...recording.notes, ...notes, ...proposed] }
 }

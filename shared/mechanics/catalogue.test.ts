@@ -1,5 +1,6 @@
 import { describe, expect, it } from 'vitest'
 import { catalogue, isMetricKey, metricKeys } from './catalogue.ts'
+import { analysedProtocols } from './protocols/analysed.ts'
 
 describe('the catalogue', () => {
   it.each(metricKeys)('says of %s its name, unit, display, source and a sentence for athletes', (key) => {
@@ -8,7 +9,8 @@ describe('the catalogue', () => {
     expect(metric.name).toMatch(/^\S.*\S$/)
     expect(metric.source.length).toBeGreaterThan(9)
     expect(metric.athleteSentence).toMatch(/^[A-Z].*\.$/)
-    expect(metric.protocols).toEqual(['cmj'])
+    expect(metric.protocols.length).toBeGreaterThan(0)
+    for (const protocol of metric.protocols) expect(analysedProtocols).toContain(protocol)
     expect(Number.isInteger(metric.display.decimals)).toBe(true)
     expect(metric.display.factor).toBeGreaterThan(0)
   })
@@ -29,10 +31,11 @@ describe('the catalogue', () => {
 
   it('marks identities by a metric that exists and is not itself a copy', () => {
     for (const key of metricKeys) {
-      const origin = catalogue[key].sameFactAs
+      const { sameFactAs: origin, sameFactIn: within, protocols } = catalogue[key]
       if (origin === undefined) continue
       expect(isMetricKey(origin), key).toBe(true)
       expect(origin).not.toBe(key)
+      expect(protocols, key).toEqual(expect.arrayContaining([...(within ?? [])]))
     }
     expect(isMetricKey('toString')).toBe(false)
   })

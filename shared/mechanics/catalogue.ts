@@ -1,9 +1,11 @@
+import { contactMetrics } from './catalogue/contacts.ts'
 import { forceMetrics } from './catalogue/force.ts'
 import { impulseMetrics } from './catalogue/impulse.ts'
 import { jumpMetrics } from './catalogue/jump.ts'
 import { landingMetrics } from './catalogue/landing.ts'
 import { pushMetrics } from './catalogue/push.ts'
 import { sidesMetrics } from './catalogue/sides.ts'
+import { squatMetrics } from './catalogue/squat.ts'
 import { weighingMetrics } from './catalogue/weighing.ts'
 import type { MetricDefinition } from './types.ts'
 
@@ -13,6 +15,8 @@ const definitions = {
   ...impulseMetrics,
   ...forceMetrics,
   ...pushMetrics,
+  ...squatMetrics,
+  ...contactMetrics,
   ...landingMetrics,
   ...sidesMetrics,
 }

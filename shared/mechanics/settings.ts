@@ -1,15 +1,19 @@
 import { checkSettings } from './settings/checks.ts'
+import { contactSettings } from './settings/contacts.ts'
 import { figureSettings } from './settings/figures.ts'
 import { flightSettings } from './settings/flight.ts'
 import { stanceSettings } from './settings/stance.ts'
+import { trialSettings } from './settings/trials.ts'
 import { uncertaintySettings } from './settings/uncertainty.ts'
 import type { SettingDefinition } from './settings/definition.ts'
 
 /** Every threshold, window and constant that a published or chosen method fixes. */
 export const settingDefinitions = {
   ...flightSettings,
+  ...trialSettings,
   ...stanceSettings,
   ...figureSettings,
+  ...contactSettings,
   ...uncertaintySettings,
   ...checkSettings,
 } as const satisfies Record<string, SettingDefinition>

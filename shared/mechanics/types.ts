@@ -165,6 +165,8 @@ export interface TrialAnalysis {
 export interface AnalyseOptions {
   /** Without it the engine proposes the test and says so in a note. */
   test?: Test
+  /** What is known of a test that is not named. */
+  known?: Partial<Omit<Test, 'protocol'>>
   /** The athlete's recorded body mass without load, kg. */
   recordedMassKg?: number
   /** m/s² at the plate's place; standard gravity where unknown. */
@@ -197,7 +199,7 @@ export interface MetricDefinition {
   better: 'higher' | 'lower' | null
   group: MetricGroup
   phase: Phase | null
-  protocols: Protocol[]
+  protocols: readonly Protocol[]
   /** Published source of the method, or "common practice" or "definition". */
   source: string
   /** One sentence that an athlete understands. */
@@ -206,4 +208,6 @@ export interface MetricDefinition {
   feet?: 'also' | 'only'
   /** The metric of which this one is the same fact (an identity), so that no statistic counts it twice. */
   sameFactAs?: string
+  /** The tests in which it is so; in all of its own where not given. */
+  sameFactIn?: readonly Protocol[]
 }

@@ -1,5 +1,5 @@
 import type { MetricDefinition, Phase } from '../types.ts'
-import { define, display, type Entry } from './define.ts'
+import { define, display, tests, type Entry } from './define.ts'
 
 interface ForceOfPush {
   name: string
@@ -8,11 +8,15 @@ interface ForceOfPush {
   source: string
   athleteSentence: string
   feet?: MetricDefinition['feet']
+  protocols?: MetricDefinition['protocols']
+  sameFactAs?: string
+  sameFactIn?: MetricDefinition['protocols']
 }
 
 const forces = {
   peakForce: {
     name: 'Peak force',
+    protocols: tests.jumped,
     phase: null,
     better: 'higher',
     source: 'Definition: greatest force between onset and takeoff, unfiltered',
@@ -26,6 +30,7 @@ const forces = {
   },
   forceAtZeroVelocity: {
     name: 'Force at zero velocity',
+    protocols: tests.turned,
     phase: 'braking',
     better: 'higher',
     source: 'Definition: force at the deepest point',
@@ -33,6 +38,7 @@ const forces = {
   },
   peakBrakingForce: {
     name: 'Peak braking force',
+    protocols: tests.turned,
     phase: 'braking',
     source: 'Definition: greatest force of the braking phase',
     athleteSentence: 'The greatest force while you stopped the drop.',
@@ -40,6 +46,7 @@ const forces = {
   },
   meanBrakingForce: {
     name: 'Mean braking force',
+    protocols: tests.turned,
     phase: 'braking',
     source: 'Definition: gross impulse of the braking phase over its time',
     athleteSentence: 'The average force while you stopped the drop.',
@@ -47,14 +54,18 @@ const forces = {
   },
   peakPropulsionForce: {
     name: 'Peak propulsion force',
+    protocols: tests.jumped,
     phase: 'propulsion',
     better: 'higher',
     source: 'Definition: greatest force of the propulsion phase',
     athleteSentence: 'The greatest force on the way up.',
     feet: 'also',
+    sameFactAs: 'peakForce',
+    sameFactIn: tests.squat,
   },
   meanPropulsionForce: {
     name: 'Mean propulsion force',
+    protocols: tests.jumped,
     phase: 'propulsion',
     better: 'higher',
     source: 'Definition: gross impulse of the propulsion phase over its time',
@@ -76,6 +87,7 @@ const inNewtons = (force: ForceOfPush): Entry => ({
 
 const perBodyWeight = (force: ForceOfPush): Entry => ({
   name: `${force.name} per body weight`,
+  protocols: force.protocols ?? tests.counter,
   phase: force.phase,
   better: force.better,
   unit: 'BW',
@@ -90,9 +102,11 @@ const entries = Object.entries(forces) as [ForceKey, ForceOfPush][]
 /** Forces of the push, in newtons and per body weight. */
 export const forceMetrics = {
   ...define(
+    tests.counter,
     Object.fromEntries(entries.map(([key, force]) => [key, inNewtons(force)])) as Record<ForceKey, Entry>,
   ),
   ...define(
+    tests.counter,
     Object.fromEntries(
       entries.map(([key, force]) => [`${key}PerBodyWeight`, perBodyWeight(force)]),
     ) as Record<`${ForceKey}PerBodyWeight`, Entry>,

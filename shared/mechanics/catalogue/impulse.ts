@@ -1,12 +1,13 @@
-import { define, display } from './define.ts'
+import { define, display, tests } from './define.ts'
 
 const theorem =
   'Definition: integral of force less system weight over the phase (impulse and momentum theorem)'
 
 /** Net impulses: what the momentum account is made of. */
-export const impulseMetrics = define({
+export const impulseMetrics = define(tests.fromStance, {
   unweightingImpulse: {
     name: 'Unweighting impulse',
+    protocols: tests.counter,
     unit: 'N·s',
     display: display.impulse,
     group: 'impulse',
@@ -17,16 +18,19 @@ export const impulseMetrics = define({
   },
   brakingImpulse: {
     name: 'Braking impulse',
+    protocols: tests.turned,
     unit: 'N·s',
     display: display.impulse,
     group: 'impulse',
     phase: 'braking',
     source: theorem,
-    athleteSentence: 'The push that stopped your drop; it is as large as the unweighting impulse.',
+    athleteSentence: 'The push that stopped your way down.',
     sameFactAs: 'unweightingImpulse',
+    sameFactIn: tests.counter,
   },
   propulsionImpulse: {
     name: 'Propulsion impulse',
+    protocols: tests.jumped,
     unit: 'N·s',
     display: display.impulse,
     better: 'higher',
@@ -35,19 +39,22 @@ export const impulseMetrics = define({
     source: theorem,
     athleteSentence: 'The push that sent you upwards from the lowest point.',
     sameFactAs: 'netImpulse',
+    sameFactIn: tests.fromStance,
   },
   netImpulse: {
     name: 'Net impulse',
+    protocols: tests.jumped,
     unit: 'N·s',
     display: display.impulse,
     better: 'higher',
     group: 'impulse',
     phase: null,
     source: theorem,
-    athleteSentence: 'All pushes from the start to takeoff added up: your mass times your takeoff speed.',
+    athleteSentence: 'All pushes up to takeoff added up, less your weight.',
   },
   landingImpulse: {
     name: 'Landing impulse',
+    protocols: tests.landed,
     unit: 'N·s',
     display: display.impulse,
     group: 'landing',
@@ -58,6 +65,7 @@ export const impulseMetrics = define({
   },
   landingImpulse50: {
     name: 'Landing impulse, first 50 ms',
+    protocols: tests.landed,
     unit: 'N·s',
     display: display.impulse,
     group: 'landing',
@@ -67,6 +75,7 @@ export const impulseMetrics = define({
   },
   landingImpulse100: {
     name: 'Landing impulse, first 100 ms',
+    protocols: tests.landed,
     unit: 'N·s',
     display: display.impulse,
     group: 'landing',
@@ -76,6 +85,7 @@ export const impulseMetrics = define({
   },
   closingBalance: {
     name: 'Closing balance',
+    protocols: tests.restToRest,
     unit: 'N·s',
     display: display.impulse,
     group: 'ledger',

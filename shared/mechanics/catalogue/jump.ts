@@ -1,7 +1,7 @@
-import { define, display } from './define.ts'
+import { define, display, tests } from './define.ts'
 
 /** How high, how fast, how long. */
-export const jumpMetrics = define({
+export const jumpMetrics = define(tests.jumped, {
   jumpHeightImpulse: {
     name: 'Jump height',
     unit: 'm',
@@ -28,6 +28,7 @@ export const jumpMetrics = define({
   },
   jumpHeightTotal: {
     name: 'Rise above standing',
+    protocols: tests.turned,
     unit: 'm',
     display: display.centimetre,
     better: 'higher',
@@ -59,6 +60,7 @@ export const jumpMetrics = define({
       'McMahon, Lake, Ripley, Comfort 2020, J Appl Biomech 36:370–374: system mass times takeoff velocity',
     athleteSentence: 'Your takeoff speed times your mass: how hard you would be to stop.',
     sameFactAs: 'netImpulse',
+    sameFactIn: tests.fromStance,
   },
   flightTime: {
     name: 'Flight time',
@@ -72,6 +74,7 @@ export const jumpMetrics = define({
   },
   timeToTakeoff: {
     name: 'Time to takeoff',
+    protocols: tests.fromStance,
     unit: 's',
     display: display.second,
     better: 'lower',
@@ -83,6 +86,7 @@ export const jumpMetrics = define({
   },
   rsiModified: {
     name: 'RSImod',
+    protocols: tests.fromStance,
     unit: 'm/s',
     display: display.metrePerSecondShort,
     better: 'higher',
@@ -94,6 +98,7 @@ export const jumpMetrics = define({
   },
   flightPerTakeoffTime: {
     name: 'Flight time to time to takeoff',
+    protocols: tests.fromStance,
     unit: '',
     display: display.ratio,
     better: 'higher',

@@ -1,9 +1,9 @@
-import { define, display } from './define.ts'
+import { define, display, tests } from './define.ts'
 
 const practice = 'Common practice; no validated injury limit exists'
 
 /** How the athlete came down. Measurements, not diagnoses. */
-export const landingMetrics = define({
+export const landingMetrics = define(tests.landed, {
   landingPeakForce: {
     name: 'Landing peak force',
     unit: 'N',

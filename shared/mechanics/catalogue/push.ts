@@ -1,10 +1,10 @@
-import { define, display } from './define.ts'
+import { define, display, tests } from './define.ts'
 
 const definition =
   'Definition, over the phase as named by McMahon, Suchomel, Lake, Comfort 2018, Strength Cond J 40(4):96–106'
 
 /** How force, velocity and power ran from the first movement to takeoff. */
-export const pushMetrics = define({
+export const pushMetrics = define(tests.counter, {
   brakingRateOfForce: {
     name: 'Braking rate of force',
     unit: 'N/s',
@@ -17,6 +17,7 @@ export const pushMetrics = define({
   },
   propulsionRateOfForce: {
     name: 'Propulsion rate of force',
+    protocols: tests.fromStance,
     unit: 'N/s',
     display: display.kilonewtonPerSecond,
     group: 'push',
@@ -35,6 +36,7 @@ export const pushMetrics = define({
   },
   brakingTime: {
     name: 'Braking time',
+    protocols: tests.turned,
     unit: 's',
     display: display.second,
     group: 'push',
@@ -44,15 +46,19 @@ export const pushMetrics = define({
   },
   propulsionTime: {
     name: 'Propulsion time',
+    protocols: tests.jumped,
     unit: 's',
     display: display.second,
     group: 'push',
     phase: 'propulsion',
     source: definition,
     athleteSentence: 'How long you pushed from the lowest point to takeoff.',
+    sameFactAs: 'timeToTakeoff',
+    sameFactIn: tests.squat,
   },
   peakVelocity: {
     name: 'Peak velocity',
+    protocols: tests.jumped,
     unit: 'm/s',
     display: display.metrePerSecond,
     better: 'higher',
@@ -93,6 +99,7 @@ export const pushMetrics = define({
   },
   peakPower: {
     name: 'Peak power',
+    protocols: tests.jumped,
     unit: 'W',
     display: display.watt,
     better: 'higher',
@@ -104,6 +111,7 @@ export const pushMetrics = define({
   },
   peakPowerPerKg: {
     name: 'Peak power per kilogram',
+    protocols: tests.jumped,
     unit: 'W/kg',
     display: display.wattPerKilogram,
     better: 'higher',
@@ -114,6 +122,7 @@ export const pushMetrics = define({
   },
   meanPropulsionPower: {
     name: 'Mean propulsion power',
+    protocols: tests.jumped,
     unit: 'W',
     display: display.watt,
     better: 'higher',
@@ -124,6 +133,7 @@ export const pushMetrics = define({
   },
   meanPropulsionPowerPerKg: {
     name: 'Mean propulsion power per kilogram',
+    protocols: tests.jumped,
     unit: 'W/kg',
     display: display.wattPerKilogram,
     better: 'higher',
@@ -134,6 +144,7 @@ export const pushMetrics = define({
   },
   peakBrakingPower: {
     name: 'Peak braking power',
+    protocols: tests.turned,
     unit: 'W',
     display: display.watt,
     group: 'push',
@@ -143,6 +154,7 @@ export const pushMetrics = define({
   },
   peakBrakingPowerPerKg: {
     name: 'Peak braking power per kilogram',
+    protocols: tests.turned,
     unit: 'W/kg',
     display: display.wattPerKilogram,
     group: 'push',
@@ -152,6 +164,7 @@ export const pushMetrics = define({
   },
   propulsionWork: {
     name: 'Propulsion work',
+    protocols: tests.jumped,
     unit: 'J',
     display: display.joule,
     better: 'higher',

@@ -1,12 +1,13 @@
-import { define, display } from './define.ts'
+import { define, display, tests } from './define.ts'
 
 const gross =
   'Definition: gross impulse of one foot over the phase of the total; a foot has no weight of its own'
 
 /** What needs two plates. */
-export const sidesMetrics = define({
+export const sidesMetrics = define(tests.bothFeet, {
   stanceForce: {
     name: 'Force in quiet stance',
+    protocols: tests.landedBothFeet,
     unit: 'N',
     display: display.newtonFine,
     group: 'sides',
@@ -17,6 +18,7 @@ export const sidesMetrics = define({
   },
   unweightingGrossImpulse: {
     name: 'Gross impulse, unweighting',
+    protocols: tests.counterBothFeet,
     unit: 'N·s',
     display: display.impulse,
     group: 'sides',
@@ -27,6 +29,7 @@ export const sidesMetrics = define({
   },
   brakingGrossImpulse: {
     name: 'Gross impulse, braking',
+    protocols: tests.turnedBothFeet,
     unit: 'N·s',
     display: display.impulse,
     group: 'sides',
@@ -47,6 +50,7 @@ export const sidesMetrics = define({
   },
   landingGrossImpulse: {
     name: 'Gross impulse, landing',
+    protocols: tests.landedBothFeet,
     unit: 'N·s',
     display: display.impulse,
     group: 'sides',
@@ -57,6 +61,7 @@ export const sidesMetrics = define({
   },
   meanLandingForce: {
     name: 'Mean landing force',
+    protocols: tests.landedBothFeet,
     unit: 'N',
     display: display.newton,
     group: 'sides',
@@ -77,6 +82,7 @@ export const sidesMetrics = define({
   },
   feetTouchdownLag: {
     name: 'Lag of the feet at touchdown',
+    protocols: tests.landedBothFeet,
     unit: 's',
     display: display.millisecondFine,
     group: 'sides',

@@ -1,9 +1,9 @@
-import { define, display } from './define.ts'
+import { define, display, tests } from './define.ts'
 
 const owen = 'Owen, Watkins, Kilduff, Bevan, Bennett 2014, J Strength Cond Res 28(6):1552–1558'
 
 /** What the quiet stance says. */
-export const weighingMetrics = define({
+export const weighingMetrics = define(tests.weighed, {
   bodyWeight: {
     name: 'Body weight',
     unit: 'N',
@@ -24,6 +24,7 @@ export const weighingMetrics = define({
   },
   restToRestWeight: {
     name: 'Weight, rest to rest',
+    protocols: tests.restToRest,
     unit: 'N',
     display: display.newtonFine,
     group: 'ledger',

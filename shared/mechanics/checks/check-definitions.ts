@@ -99,6 +99,30 @@ const definitions = {
     remedy: 'Land with each foot on its own plate; figures up to takeoff are not affected.',
     settings: ['footOffLandingS', 'eventForceN', 'unloadedSd'],
   },
+  'side-agreement': {
+    name: 'Side of the test',
+    affects: allGroups,
+    remedy: 'Correct the side of the test, or check which plate is the left one.',
+    settings: [],
+  },
+  'other-foot-off': {
+    name: 'Other foot off its plate',
+    affects: allGroups,
+    remedy: 'Hold the other foot clear of its plate from the weighing to takeoff.',
+    settings: ['otherFootCaution', 'otherFootFail'],
+  },
+  'other-foot-landing': {
+    name: 'Landing on one foot',
+    affects: ['landing'],
+    remedy: 'Land on the foot that jumped; figures up to takeoff are not affected.',
+    settings: ['otherFootCaution', 'otherFootFail'],
+  },
+  'squat-dip': {
+    name: 'No dip before the push',
+    affects: ['jump', 'impulse', 'push', 'flight'],
+    remedy: 'Hold the squat for two seconds, then push straight up without going down first.',
+    settings: ['squatDipCaution', 'squatDipFail', 'onsetSmoothingS'],
+  },
   'one-takeoff': {
     name: 'One takeoff',
     affects: allButWeighing,
@@ -106,7 +130,7 @@ const definitions = {
     settings: ['longestFlightS', 'eventPersistenceS'],
   },
   'plausible-jump': {
-    name: 'Plausible countermovement jump',
+    name: 'Plausible jump',
     affects: allButWeighing,
     remedy: 'Look at the trace: perhaps this is another test, or the athlete stepped instead of jumping.',
     settings: ['lowestJumpM', 'highestJumpM'],
@@ -116,6 +140,32 @@ const definitions = {
     affects: ['jump', 'impulse', 'push', 'flight', 'landing', 'ledger'],
     remedy: 'Land with straight legs, stand still before the jump, and check the weighing.',
     settings: ['heightAgreementM', 'heightAgreementFailM', 'heightNegativeM', 'heightNegativeFailM'],
+  },
+  'drop-height': {
+    name: 'Effective drop height against the box',
+    affects: ['jump', 'impulse', 'push', 'contact'],
+    remedy:
+      'Step straight off the box without jumping or lowering yourself, and check the height of the box and the weighing.',
+    settings: ['dropHeightCautionM', 'dropHeightFailM'],
+  },
+  'plausible-rebound': {
+    name: 'Plausible drop jump',
+    affects: allButWeighing,
+    remedy:
+      'Look at the trace: perhaps this is another test, or the athlete stood still between fall and jump.',
+    settings: ['longestReboundS', 'lowestJumpM', 'highestJumpM'],
+  },
+  'hop-count': {
+    name: 'Number of hops',
+    affects: ['contact'],
+    remedy: 'Hop ten times in a row after the jump that starts the series, and record all of them.',
+    settings: ['fewestContacts', 'contactsConsidered', 'bestContacts'],
+  },
+  'hops-counted': {
+    name: 'Hops that count',
+    affects: ['contact'],
+    remedy: 'Ask for quick hops: as little time on the ground as can be.',
+    settings: ['longestCountedContactS', 'contactsConsidered', 'bestContacts'],
   },
   'landing-on-plates': {
     name: 'Landing on the plates',

@@ -1,6 +1,6 @@
 import type { TrialCheck } from '../types.ts'
 import type { Foot } from '../metrics/sides.ts'
-import type { JumpModel } from '../metrics/jump-model.ts'
+import type { JumpModel, TrialModel } from '../metrics/trial-model.ts'
 import { allGroups } from './affected-groups.ts'
 import { check, rounded } from './check.ts'
 
@@ -69,4 +69,18 @@ function offInLanding(model: JumpModel, feet: [Foot, Foot]): TrialCheck | null {
 /** Checks that need two plates. */
 export function feetChecks(model: JumpModel, feet: [Foot, Foot]): TrialCheck[] {
   return [bothOn(model, feet), offInLanding(model, feet)].filter((entry) => entry !== null)
+}
+
+/** A plate whose force never changes: not connected, or nobody on it. */
+export function deadPlates({ signal }: TrialModel): TrialCheck {
+  const dead = signal.plates.filter((plate) => plate.dead).map(({ channel }) => channel)
+  return check(
+    'plate-alive',
+    dead.length === 0 ? 'pass' : 'fail',
+    { measured: dead.length, limit: 0, unit: 'plates' },
+    {
+      pass: 'Every plate reads a changing force.',
+      fail: `The ${dead.join(' and ')} plate reads the same force throughout: it is not connected, or nobody stood on it.`,
+    },
+  )
 }

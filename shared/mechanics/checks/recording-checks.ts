@@ -51,7 +51,8 @@ function gaps(recording: Recording, signal: Signal, settings: Settings): TrialCh
 }
 
 function saturation(signal: Signal, settings: Settings): TrialCheck {
-  const longest = Math.max(...signal.plates.map(({ flatTop }) => flatTop))
+  // A plate that never changes has no range to leave; whether it should, another check says.
+  const longest = Math.max(0, ...signal.plates.filter(({ dead }) => !dead).map(({ flatTop }) => flatTop))
   const limit = settings.saturationSamples
   return check(
     'saturation',
@@ -65,12 +66,12 @@ function saturation(signal: Signal, settings: Settings): TrialCheck {
 }
 
 /** Whether the plates were set to zero with the athlete on them: loaded reads nothing, unloaded reads minus the weight. */
-export function taredWithAthlete({ level, stanceLevel }: Unloaded): boolean {
-  return Math.abs(stanceLevel) < 0.15 * (stanceLevel - level)
+export function taredWithAthlete({ level, stanceLevel }: Unloaded, settings: Settings): boolean {
+  return Math.abs(stanceLevel) < settings.zeroShare * (stanceLevel - level)
 }
 
 function zeroOffset(signal: ZeroedSignal, unloaded: Unloaded, settings: Settings): TrialCheck {
-  const tared = taredWithAthlete(unloaded)
+  const tared = taredWithAthlete(unloaded, settings)
   const largest = signal.plates.reduce((most, { offsetN }) => Math.max(most, Math.abs(offsetN)), 0)
   const verdict = tared
     ? 'caution'

@@ -1,9 +1,30 @@
 import type { AnalyseOptions, TrialCheck } from '../types.ts'
-import type { JumpModel } from '../metrics/jump-model.ts'
+import type { Weighing } from '../events/weighing.ts'
+import type { JumpModel, TrialModel } from '../metrics/trial-model.ts'
 import { meanOver } from '../signal/running-mean.ts'
 import { check, rounded, verdictOn } from './check.ts'
 
-function length({ weighing, signal, settings }: JumpModel): TrialCheck {
+/** Where the athlete stood still to be weighed, and what to ask for where that was too short or unsteady. */
+interface Stance {
+  when: string
+  longer: string
+  steadier: string
+}
+
+const beforeJump: Stance = {
+  when: 'before the jump',
+  longer: 'Start recording, stand still for two seconds, then jump.',
+  steadier: 'Ask the athlete to stand still for two seconds before the jump.',
+}
+const afterLanding: Stance = {
+  when: 'after the landing',
+  longer: 'Let the athlete stand still for two seconds after the landing, and record all of it.',
+  steadier: 'Ask the athlete to stand still for two seconds after the landing.',
+}
+
+type Weighed = TrialModel<Weighing>
+
+function length({ weighing, signal, settings }: Weighed, stance: Stance): TrialCheck {
   const duration = (weighing.window.to - weighing.window.from) * signal.dt
   const verdict =
     duration >= 0.999 * settings.weighingWindowS
@@ -16,15 +37,16 @@ function length({ weighing, signal, settings }: JumpModel): TrialCheck {
     verdict,
     { measured: duration, limit: settings.weighingWindowS, unit: 's' },
     {
-      pass: 'The athlete stood still for a second before the jump.',
-      caution: `The athlete stood still for only ${rounded(duration, 2)} s before the jump.`,
-      fail: `The athlete stood still for only ${rounded(duration, 2)} s before the jump, too short to weigh.`,
+      pass: `The athlete stood still for a second ${stance.when}.`,
+      caution: `The athlete stood still for only ${rounded(duration, 2)} s ${stance.when}.`,
+      fail: `The athlete stood still for only ${rounded(duration, 2)} s ${stance.when}, too short to weigh.`,
+      remedy: stance.longer,
     },
   )
 }
 
 /** Half-second means within the weighing window show a weight that is still changing, spread shows unrest. */
-function steadiness({ weighing, sums, settings }: JumpModel): TrialCheck {
+function steadiness({ weighing, sums, settings }: Weighed, stance: Stance): TrialCheck {
   const { from, to } = weighing.window
   const middle = (from + to) >> 1
   const change = Math.abs(meanOver(sums, middle, to) - meanOver(sums, from, middle))
@@ -37,6 +59,7 @@ function steadiness({ weighing, sums, settings }: JumpModel): TrialCheck {
       pass: `The force wavers by ${rounded(100 * unrest, 1)} % of the weight during the weighing.`,
       caution: `The force wavers by ${rounded(100 * unrest, 1)} % of the weight during the weighing; the weight is less sure.`,
       fail: `The force wavers by ${rounded(100 * unrest, 1)} % of the weight during the weighing: the athlete did not stand still.`,
+      remedy: stance.steadier,
     },
   )
 }
@@ -65,7 +88,7 @@ function stillAtOnset({ weighing, sums, events, motion, signal, settings }: Jump
   )
 }
 
-function massAgreement({ bodyMass, settings }: JumpModel, recordedMassKg: number): TrialCheck {
+function massAgreement({ bodyMass, settings }: TrialModel, recordedMassKg: number): TrialCheck {
   const difference = bodyMass.value / recordedMassKg - 1
   return check(
     'mass-agreement',
@@ -79,10 +102,42 @@ function massAgreement({ bodyMass, settings }: JumpModel, recordedMassKg: number
   )
 }
 
-/** Checks of the quiet stance. */
+function massChecks(model: TrialModel, { recordedMassKg }: AnalyseOptions): TrialCheck[] {
+  return recordedMassKg !== undefined && recordedMassKg > 0 ? [massAgreement(model, recordedMassKg)] : []
+}
+
+/** Checks of the quiet stance before a jump. */
 export function weighingChecks(model: JumpModel, options: AnalyseOptions): TrialCheck[] {
-  const { recordedMassKg } = options
-  const checks = [length(model), steadiness(model), stillAtOnset(model)]
-  if (recordedMassKg !== undefined && recordedMassKg > 0) checks.push(massAgreement(model, recordedMassKg))
-  return checks
+  return [
+    length(model, beforeJump),
+    steadiness(model, beforeJump),
+    stillAtOnset(model),
+    ...massChecks(model, options),
+  ]
+}
+
+/** No quiet stance after the landing: what needs the weight goes by the recorded mass, or is missing. */
+function notWeighed({ settings, motion }: TrialModel): TrialCheck {
+  const known = Number.isFinite(motion.systemWeight)
+  return check(
+    'weighing-length',
+    known ? 'caution' : 'fail',
+    { measured: 0, limit: settings.weighingWindowS, unit: 's' },
+    {
+      pass: '',
+      caution:
+        'The athlete did not stand still after the landing: the recorded mass stands in for the weighing, and the time in the air for the velocity.',
+      fail: 'The athlete did not stand still after the landing, so nothing was weighed; times and forces are not affected.',
+      remedy: afterLanding.longer,
+    },
+    ['weighing', 'jump', 'impulse', 'push', 'ledger'],
+  )
+}
+
+/** Checks of the quiet stance after a landing. */
+export function restChecks(model: TrialModel, options: AnalyseOptions): TrialCheck[] {
+  const { weighing } = model
+  if (!weighing) return [notWeighed(model)]
+  const weighed = { ...model, weighing }
+  return [length(weighed, afterLanding), steadiness(weighed, afterLanding), ...massChecks(model, options)]
 }

@@ -9,8 +9,10 @@ export type FlankDirection = 'falling' | 'rising'
 export interface Crossing {
   /** Position in samples from the record's first. */
   position: number
-  /** Standard uncertainty of the position from noise, samples. */
+  /** Standard uncertainty of the position, samples. */
   positionU: number
+  /** The part of it from ringing, which is alike in every touch; not given of an instant set by hand, samples. */
+  ringingU?: number
   /** Slope of the force there, N a sample, negative at takeoff. */
   slope: number
 }
@@ -146,9 +148,11 @@ export function fitFlank(
   const known = crossingWeights(flank, count, distance, weights)
   const fromNoise = known ? weightedNoise(weights, count, fitted.noise) : 1
   const lifted = reachOf(flank, settings.eventForceN + fitted.ringing, count) ?? count
+  const ringingU = settings.flankRinging * (lifted - distance)
   return {
     position: place.firstContact + step * (flank.foot + distance - outside),
-    positionU: Math.hypot(fromNoise, settings.flankRinging * (lifted - distance)),
+    positionU: Math.hypot(fromNoise, ringingU),
+    ringingU,
     slope: step * slope,
   }
 }

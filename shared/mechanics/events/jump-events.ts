@@ -1,32 +1,25 @@
-import type { AnalyseOptions, EventName } from '../types.ts'
 import type { Settings } from '../settings.ts'
 import { instantAt, integrate, type Motion } from '../signal/motion.ts'
-import { findPeak, type Peak } from '../signal/peak.ts'
-import { fitFlank, type Crossing } from './flank.ts'
-import { findOnset, type Onset } from './onset.ts'
-import { findStill } from './still.ts'
+import { findPeak } from '../signal/peak.ts'
+import type { Crossing } from './flank.ts'
 import {
-  extremeVelocity,
-  fallStops,
-  placeWeightCrossing,
-  risesThroughZero,
-  type Placed,
-} from './turning-points.ts'
+  movedTo,
+  movedU,
+  placeCrossing,
+  placeLanding,
+  placeStill,
+  type EventSearch,
+} from './landing-events.ts'
+import { findOnset, type Onset } from './onset.ts'
+import { noEvents, type TrialEvents } from './trial-events.ts'
+import { extremeVelocity, placeWeightCrossing, risesThroughZero } from './turning-points.ts'
 import type { Stretch } from './unloaded.ts'
 import { chooseWindow, staysChosen, weighIn, type Weighing } from './weighing.ts'
-import type { Zero, ZeroedSignal } from './zero.ts'
 
-/** The events of a countermovement jump and its landing, in samples; `null` where the record does not hold one. */
-export interface JumpEvents {
+/** The events of a jump from stance and its landing: it has a beginning and a takeoff. */
+export interface JumpEvents extends TrialEvents {
   onset: Onset
   takeoff: Crossing
-  minimumForce: Peak | null
-  minimumVelocity: Placed | null
-  zeroVelocity: number | null
-  touchdown: Crossing | null
-  landingPeak: Peak | null
-  landingZeroVelocity: number | null
-  still: number | null
 }
 
 export interface LocatedJump {
@@ -36,43 +29,15 @@ export interface LocatedJump {
 }
 
 /** Where the jump is to be looked for. */
-export interface JumpSearch {
-  signal: ZeroedSignal
-  zero: Zero
+export interface JumpSearch extends EventSearch {
   /** First sample on the plates before the jump. */
   start: number
   flight: Stretch
   /** Whether the athlete came back onto the plates after the flight. */
   landed: boolean
+  /** Whether the body goes down before the push. */
+  dips: boolean
   gravity: number
-  moved: NonNullable<AnalyseOptions['movedEvents']>
-  settings: Settings
-}
-
-/** A person's instant in place of the fitted one, as far as it lies in the record; it is sure to a sample. */
-function movedTo({ moved, signal }: JumpSearch, name: EventName): number | null {
-  const timeS = moved[name]
-  if (timeS === undefined || !Number.isFinite(timeS)) return null
-  return Math.max(0, Math.min(signal.length - 1, timeS * signal.sampleRateHz))
-}
-
-/** Standard uncertainty of an instant set by hand, samples: anywhere within one. */
-const movedU = 0.5 / Math.sqrt(3)
-
-function placeCrossing(search: JumpSearch, name: 'takeoff' | 'touchdown'): Crossing | null {
-  const { signal, flight, zero, settings } = search
-  const edge = name === 'takeoff' ? flight.from : flight.to
-  const found = fitFlank(
-    signal.total,
-    edge,
-    name === 'takeoff' ? 'falling' : 'rising',
-    zero.total,
-    signal.dt,
-    settings,
-  )
-  const position = movedTo(search, name)
-  if (position === null) return found
-  return { position, positionU: movedU, slope: found?.slope ?? (name === 'takeoff' ? -1 : 1) }
 }
 
 /** Weighs and finds the onset; weighs again before it where the first weighing ran into the movement. */
@@ -100,6 +65,7 @@ function weighBeforeOnset(search: JumpSearch, takeoff: number): { weighing: Weig
 function placePushEvents(search: JumpSearch, motion: Motion, onset: number, takeoff: number) {
   const { zero, signal, settings } = search
   const noDip = { minimumForce: null, minimumVelocity: null, zeroVelocity: null }
+  if (!search.dips) return noDip
   const lowest = extremeVelocity(motion, onset, takeoff, -1)
   if (!(motion.velocity[lowest] < 0)) return noDip
   const moved = movedTo(search, 'minimumVelocity')
@@ -126,44 +92,27 @@ function placePushEvents(search: JumpSearch, motion: Motion, onset: number, take
   }
 }
 
-function placeLandingEvents(search: JumpSearch, motion: Motion, touchdown: Crossing | null) {
-  const { signal, zero, settings } = search
-  if (!touchdown) return { landingPeak: null, landingZeroVelocity: null, still: null }
-  const last = signal.length - 1
-  const still =
-    movedTo(search, 'still') ??
-    findStill(signal.sums, motion.systemWeight, touchdown.position, signal.dt, settings)
-  const stopsBefore = Math.floor(still ?? last)
-  const landingZeroVelocity =
-    movedTo(search, 'landingZeroVelocity') ??
-    fallStops(motion, touchdown.position, stopsBefore, settings.closingFail)
-  const end = landingZeroVelocity ?? Math.min(last, touchdown.position + settings.landingSearchS / signal.dt)
-  return {
-    landingPeak: findPeak(signal.total, touchdown.position, end, 1, zero.total, signal.dt, settings),
-    landingZeroVelocity,
-    still,
-  }
-}
-
 /** Weighs, places every event and integrates; `null` where there is no takeoff or nothing to weigh. */
 export function locateJump(search: JumpSearch): LocatedJump | null {
-  const { signal, landed, gravity } = search
-  const takeoff = placeCrossing(search, 'takeoff')
+  const { signal, flight, landed, gravity } = search
+  const takeoff = placeCrossing(search, 'takeoff', flight.from)
   if (!takeoff) return null
   const weighed = weighBeforeOnset(search, takeoff.position)
   if (!weighed || !(weighed.onset.position < takeoff.position)) return null
   const { weighing, onset } = weighed
   const motion = integrate(signal.total, onset.position, weighing.systemWeight, gravity, signal.dt)
-  const touchdown = landed ? placeCrossing(search, 'touchdown') : null
+  const touchdown = landed ? placeCrossing(search, 'touchdown', flight.to) : null
   return {
     weighing,
     motion,
     events: {
+      ...noEvents,
       onset,
       takeoff,
       touchdown,
       ...placePushEvents(search, motion, onset.position, takeoff.position),
-      ...placeLandingEvents(search, motion, touchdown),
+      ...(touchdown &&
+        placeLanding(search, motion, touchdown, placeStill(search, motion.systemWeight, touchdown))),
     },
   }
 }

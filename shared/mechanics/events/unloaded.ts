@@ -86,9 +86,10 @@ export function findUnloaded(
 
   const load = stanceLevel - level
   const threshold = level + Math.max(settings.eventForceN, settings.unloadedSd * sd)
-  const nearZero = Math.abs(level) < 0.15 * load || Math.abs(stanceLevel) < 0.15 * load
+  const near = settings.zeroShare * load
+  const nearZero = Math.abs(level) < near || Math.abs(stanceLevel) < near
   // A large offset is believed only of a flat trace; the bottom of a slow squat lies higher still.
-  const offset = Math.abs(level) < 0.4 * load && sd < 0.02 * load
+  const offset = Math.abs(level) < settings.offsetShare * load && sd < settings.offsetSpread * load
   if (threshold > level + load / 2 || (!nearZero && !offset)) return null
 
   const gap = Math.round(settings.shortestContactS / dt)

@@ -1,13 +1,12 @@
 import type { Crossing } from '../events/flank.ts'
 import { staysWithin } from '../events/turning-points.ts'
+import type { Settings } from '../settings.ts'
 import { meanAround } from '../signal/running-mean.ts'
 import type { Quantity } from '../uncertainty/budget.ts'
-import { at, velocityOf, type JumpModel } from './jump-model.ts'
+import { at, velocityOf, type JumpModel, type TrialModel } from './trial-model.ts'
 
 /** Instants of the events with their uncertainties, in seconds from the recording's first sample. */
-export interface EventTimes {
-  onset: Quantity
-  takeoff: Quantity
+export interface TrialTimes {
   touchdown: Quantity | null
   minimumVelocity: Quantity | null
   zeroVelocity: Quantity | null
@@ -15,12 +14,44 @@ export interface EventTimes {
   landingZeroVelocity: Quantity | null
 }
 
-/** A crossing of the event force moves with the noise of its fit and with the zero of the plates. */
-function crossingTime({ budget, signal, plates, zero }: JumpModel, crossing: Crossing): Quantity {
-  const perNewton = -signal.dt / crossing.slope
-  return budget.linear(crossing.position * signal.dt, [
-    [1, budget.input(0, crossing.positionU * signal.dt, zero.noiseDof)],
-    ...plates.map(({ offset }) => [perNewton, offset] as const),
+/** Where the feet leave the plates. */
+export interface TakeoffTime {
+  takeoff: Quantity
+}
+
+/** Of a jump from stance. */
+export interface EventTimes extends TrialTimes, TakeoffTime {
+  onset: Quantity
+}
+
+/**
+ * What a touch adds to the force without showing in the fit: ringing that the rise swallows, a recorder's low-pass,
+ * a heel or toe that comes a moment later. It moves a gentle crossing further than a steep one; samples.
+ */
+function unseenU(slope: number, dt: number, settings: Settings): number {
+  const byForce = Math.min(settings.touchLongestU / dt, settings.touchForceU / slope)
+  return Math.hypot(settings.touchTimeU / dt, byForce)
+}
+
+/**
+ * A crossing of the event force moves with the noise of its fit, with what a touch sets off, and with the zero of the
+ * plates. Touches of the same kind share one error `alike` of size 1; one of its own where not given.
+ */
+export function crossingTime(
+  { budget, signal, settings, plates, zero }: TrialModel,
+  { position, positionU, ringingU, slope }: Crossing,
+  alike?: Quantity,
+): Quantity {
+  const { dt } = signal
+  const seenU = ringingU ?? 0
+  const noiseU = Math.sqrt(Math.max(0, positionU * positionU - seenU * seenU))
+  const isTouch = slope > 0 && ringingU !== undefined
+  const touchU = isTouch ? Math.max(seenU, unseenU(slope, dt, settings)) : seenU
+  const touch = touchU > 0 ? [[touchU * dt, alike ?? budget.input(0, 1)] as const] : []
+  return budget.linear(position * dt, [
+    [1, budget.input(0, noiseU * dt, zero.noiseDof)],
+    ...touch,
+    ...plates.map(({ offset }) => [-dt / slope, offset] as const),
   ])
 }
 
@@ -39,7 +70,7 @@ const unsureS = 0.5
 const smoothedS = 0.006
 
 /** Where force passes the weight: an error of force or weight moves it as far as the force stays within that error. */
-function weightCrossingTime(model: JumpModel): Quantity | null {
+function weightCrossingTime(model: TrialModel): Quantity | null {
   const { budget, events, signal, motion, weighingError } = model
   if (!events.minimumVelocity) return null
   const { position, forceU } = events.minimumVelocity
@@ -53,7 +84,7 @@ function weightCrossingTime(model: JumpModel): Quantity | null {
 }
 
 /** Where velocity is zero: an error of the velocity moves it as far as the velocity stays within that error. */
-function zeroVelocityTime(model: JumpModel, position: number): Quantity {
+function zeroVelocityTime(model: TrialModel, position: number): Quantity {
   const { budget, motion, signal } = model
   if (!budget.on) return budget.exact(position * signal.dt)
   const velocity = velocityOf(model, at(model, position))
@@ -64,18 +95,25 @@ function zeroVelocityTime(model: JumpModel, position: number): Quantity {
   return budget.linear(position * signal.dt, [[u > 0 ? -stays / u : 0, velocity]])
 }
 
-/** Times of a trial's events. */
-export function eventTimes(model: JumpModel): EventTimes {
+/** Times of what any trial may have: its landing, and the turning points of its movement. */
+export function trialTimes(model: TrialModel): TrialTimes {
   const { budget, events, signal } = model
   const { touchdown, zeroVelocity, landingPeak, landingZeroVelocity } = events
   return {
-    onset: onsetTime(model),
-    takeoff: crossingTime(model, events.takeoff),
     touchdown: touchdown && crossingTime(model, touchdown),
     minimumVelocity: weightCrossingTime(model),
     zeroVelocity: zeroVelocity === null ? null : zeroVelocityTime(model, zeroVelocity),
     landingPeak:
       landingPeak && budget.input(landingPeak.position * signal.dt, landingPeak.positionU * signal.dt),
     landingZeroVelocity: landingZeroVelocity === null ? null : zeroVelocityTime(model, landingZeroVelocity),
+  }
+}
+
+/** Times of the events of a jump from stance. */
+export function eventTimes(model: JumpModel): EventTimes {
+  return {
+    onset: onsetTime(model),
+    takeoff: crossingTime(model, model.events.takeoff),
+    ...trialTimes(model),
   }
 }

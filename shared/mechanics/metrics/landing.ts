@@ -5,8 +5,9 @@ import { grossImpulse } from '../signal/gross-impulse.ts'
 import { integratedNoise } from '../signal/noise.ts'
 import { findPeak, type Peak } from '../signal/peak.ts'
 import type { Quantity } from '../uncertainty/budget.ts'
-import type { EventTimes } from './event-times.ts'
-import { at, displacementOf, forceOf, velocityOf, type JumpModel } from './jump-model.ts'
+import type { TrialTimes } from './event-times.ts'
+import { velocityAtEvent } from './jump.ts'
+import { at, displacementOf, forceOf, type TrialModel } from './trial-model.ts'
 import { findRise, greatestSlope } from './loading-rate.ts'
 import { miss, put, reasons, type Measured, type Outcome } from './measured.ts'
 
@@ -31,7 +32,7 @@ const fixedKeys: MetricKey[] = [
 ]
 
 /** Position of the first maximum that the force falls away from by the asked prominence; the peak if none. */
-function firstPeak(model: JumpModel, touchdown: number, peak: Peak): Peak {
+function firstPeak(model: TrialModel, touchdown: number, peak: Peak): Peak {
   const { motion, settings, bodyWeight, zero, signal } = model
   const prominence = settings.firstPeakProminence * bodyWeight.value
   let highest = -Infinity
@@ -56,12 +57,12 @@ function firstPeak(model: JumpModel, touchdown: number, peak: Peak): Peak {
   return peak
 }
 
-function perWeight(model: JumpModel, rate: Quantity): Quantity {
+function perWeight(model: TrialModel, rate: Quantity): Quantity {
   return model.budget.over(rate, model.bodyWeight)
 }
 
 /** Slope between the 20 and 80 % crossings: both levels move with the peak. */
-function rate2080(model: JumpModel, touchdown: number, peak: Peak, peakForce: Quantity): Outcome {
+function rate2080(model: TrialModel, touchdown: number, peak: Peak, peakForce: Quantity): Outcome {
   const { budget, motion, zero, signal, settings } = model
   const rise = findRise(motion.force, touchdown, peak, zero.total, settings)
   if (!rise) return { missing: 'The force does not rise through 20 and 80 % of its peak after touchdown.' }
@@ -81,7 +82,7 @@ function rate2080(model: JumpModel, touchdown: number, peak: Peak, peakForce: Qu
   return rise.doubt === null ? { quantity } : { quantity, withoutU: rise.doubt }
 }
 
-function rateMax(model: JumpModel, touchdown: number, peak: Peak): Outcome {
+function rateMax(model: TrialModel, touchdown: number, peak: Peak): Outcome {
   const { budget, motion, zero, signal, settings } = model
   const found = greatestSlope(motion.force, touchdown, peak.position, settings.loadingRateWindowS / signal.dt)
   if (!found) return { missing: 'Too few samples lie between touchdown and the landing peak.' }
@@ -93,7 +94,7 @@ function rateMax(model: JumpModel, touchdown: number, peak: Peak): Outcome {
 
 /** Enters a landing figure and its twin per body weight. */
 function withPerWeight(
-  model: JumpModel,
+  model: TrialModel,
   into: Measured,
   key: 'landingPeakForce' | 'landingLoadingRateMean' | 'landingLoadingRate2080' | 'landingLoadingRateMax',
   outcome: Outcome,
@@ -103,7 +104,7 @@ function withPerWeight(
   into.set(`${key}PerBodyWeight`, twin)
 }
 
-function peakFigures(model: JumpModel, times: EventTimes, into: Measured): void {
+function peakFigures(model: TrialModel, times: TrialTimes, into: Measured): void {
   const { budget, events } = model
   const { touchdown, landingPeak } = events
   if (!touchdown || !landingPeak || !times.touchdown || !times.landingPeak)
@@ -124,7 +125,12 @@ function peakFigures(model: JumpModel, times: EventTimes, into: Measured): void 
   withPerWeight(model, into, 'landingLoadingRateMax', rateMax(model, touchdown.position, landingPeak))
 }
 
-function motionFigures(model: JumpModel, times: EventTimes, landingVelocity: Quantity, into: Measured): void {
+function motionFigures(
+  model: TrialModel,
+  times: TrialTimes,
+  landingVelocity: Quantity,
+  into: Measured,
+): void {
   const { budget, events, motion, settings, systemMass } = model
   const { touchdown, landingPeak, landingZeroVelocity } = events
   if (!touchdown || !times.touchdown || !landingPeak) return miss(into, motionKeys, reasons.noTouchdown)
@@ -142,7 +148,7 @@ function motionFigures(model: JumpModel, times: EventTimes, landingVelocity: Qua
 }
 
 /** Gross impulse over a fixed window from touchdown; a late touchdown leaves some out and takes some in. */
-function fixedImpulse(model: JumpModel, touchdown: Quantity, position: number, windowS: number): Outcome {
+function fixedImpulse(model: TrialModel, touchdown: Quantity, position: number, windowS: number): Outcome {
   const { budget, motion, sums, signal, plates, zero } = model
   const end = position + windowS / signal.dt
   if (end > signal.length - 1)
@@ -162,7 +168,7 @@ function fixedImpulse(model: JumpModel, touchdown: Quantity, position: number, w
 }
 
 /** Touchdown to the force staying within the band about the weight for good; placed to the running mean's sharpness. */
-function stabilisation(model: JumpModel, touchdown: Quantity, position: number): Outcome {
+function stabilisation(model: TrialModel, touchdown: Quantity, position: number): Outcome {
   const { budget, motion, sums, signal, settings } = model
   const { dt } = signal
   const half = Math.max(1, Math.round(settings.onsetSmoothingS / dt / 2))
@@ -177,22 +183,10 @@ function stabilisation(model: JumpModel, touchdown: Quantity, position: number):
   }
 }
 
-/** Velocity at touchdown, by integration from rest through push and flight. */
-function landingVelocityOf(model: JumpModel, touchdown: Quantity): Quantity | null {
-  const { budget, motion, events, settings } = model
-  if (!events.touchdown) return null
-  const instant = velocityAtCrossing(motion, events.touchdown, settings)
-  const acceleration = ((settings.eventForceN - motion.systemWeight) * motion.gravity) / motion.systemWeight
-  return budget.linear(instant.velocity, [
-    [1, velocityOf(model, instant)],
-    [acceleration, touchdown],
-  ])
-}
-
 /** Everything about the landing. */
-export function landingFigures(model: JumpModel, times: EventTimes, into: Measured): void {
+export function landingFigures(model: TrialModel, times: TrialTimes, into: Measured): void {
   const { touchdown } = model.events
-  const landingVelocity = times.touchdown && landingVelocityOf(model, times.touchdown)
+  const landingVelocity = touchdown && times.touchdown && velocityAtEvent(model, touchdown, times.touchdown)
   if (!touchdown || !times.touchdown || !landingVelocity)
     return miss(into, [...peakKeys, ...motionKeys, ...fixedKeys], reasons.noTouchdown)
   const { settings } = model

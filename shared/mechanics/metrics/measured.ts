@@ -12,6 +12,12 @@ export const reasons = {
   noTouchdown: 'No touchdown was found: the athlete did not come back onto the plates within a flight.',
   noLandingEnd: 'The velocity did not come back to zero before the recording ended.',
   noStill: 'The athlete did not stand still for a second after landing before the recording ended.',
+  noTurn: 'The velocity did not come to zero during the contact: the fall was not turned into a jump.',
+  noHops: 'Too few hops count: the feet were on the ground for too long, or the series is too short.',
+  notWeighed: 'The athlete did not stand still long enough to be weighed.',
+  noWeight:
+    'The athlete did not stand still after the landing, and no body mass is recorded: there is no weight to go by.',
+  noStance: 'No quiet stance was found before the first jump.',
   noDip: 'No countermovement was found: the body did not move down before the push.',
 } as const
 

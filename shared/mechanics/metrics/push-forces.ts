@@ -4,7 +4,7 @@ import { findPeak, type Peak } from '../signal/peak.ts'
 import type { Quantity } from '../uncertainty/budget.ts'
 import type { EventTimes } from './event-times.ts'
 import { downwardVelocityOf } from './impulse.ts'
-import { forceOf, type JumpModel } from './jump-model.ts'
+import { forceOf, type JumpModel, type TrialModel } from './trial-model.ts'
 import { miss, put, reasons, type Measured } from './measured.ts'
 
 /** Each force's twin per body weight. */
@@ -12,19 +12,24 @@ const perBodyWeight = Object.fromEntries(forceKeys.map((key) => [key, `${key}Per
   [Key in ForceKey]: `${Key}PerBodyWeight`
 }
 
-function peakForceOf(model: JumpModel, peak: Peak): Quantity {
+function peakForceOf(model: TrialModel, peak: Peak): Quantity {
   return forceOf(model, peak.value, peak.position, peak.valueU)
 }
 
-function greatest(model: JumpModel, from: number, to: number): Quantity {
+/** Greatest force between two positions. */
+export function greatestForce(model: TrialModel, from: number, to: number): Quantity {
   const { motion, zero, signal } = model
   return peakForceOf(model, findPeak(motion.force, from, to, 1, zero.total, signal.dt, model.settings))
 }
 
 /** Force at an instant within the movement, by a parabola over some milliseconds; the instant itself is unsure. */
-function smoothForceAt(model: JumpModel, position: number, time: Quantity): Quantity {
+export function smoothForceAt(model: TrialModel, position: number, time: Quantity): Quantity {
   const { budget, motion, zero, signal } = model
-  const fit = fitParabola(motion.force, position, Math.max(2, Math.round(0.006 / signal.dt)))
+  const fit = fitParabola(
+    motion.force,
+    position,
+    Math.max(2, Math.round(model.settings.forceWindowS / signal.dt)),
+  )
   const value = parabolaAt(fit, position)
   const slope = parabolaSlopeAt(fit, position) / signal.dt
   const read = forceOf(model, value, position, parabolaNoiseAt(fit, position, zero.total))
@@ -32,8 +37,8 @@ function smoothForceAt(model: JumpModel, position: number, time: Quantity): Quan
 }
 
 /** Mean force over a phase: weight plus change of momentum over time. */
-function meanForce(
-  { budget, systemWeight }: JumpModel,
+export function meanForce(
+  { budget, systemWeight }: TrialModel,
   momentumChange: Quantity,
   duration: Quantity,
 ): Quantity {
@@ -47,7 +52,7 @@ function allForces(
 ): Partial<Record<ForceKey, Quantity>> {
   const { budget, events, systemMass } = model
   const { onset, minimumForce, minimumVelocity, zeroVelocity, takeoff } = events
-  const peakForce = greatest(model, onset.position, takeoff.position)
+  const peakForce = greatestForce(model, onset.position, takeoff.position)
   const downward = downwardVelocityOf(model)
   if (
     !minimumForce ||
@@ -66,14 +71,25 @@ function allForces(
     peakForce,
     minimumForce: peakForceOf(model, minimumForce),
     forceAtZeroVelocity: smoothForceAt(model, zeroVelocity, times.zeroVelocity),
-    peakBrakingForce: greatest(model, minimumVelocity.position, zeroVelocity),
+    peakBrakingForce: greatestForce(model, minimumVelocity.position, zeroVelocity),
     meanBrakingForce: meanForce(model, momentumDown, brakingTime),
-    peakPropulsionForce: greatest(model, zeroVelocity, takeoff.position),
+    peakPropulsionForce: greatestForce(model, zeroVelocity, takeoff.position),
     meanPropulsionForce: meanForce(model, momentumUp, propulsionTime),
   }
 }
 
-/** Forces of the push in newtons and per body weight. */
+/** Enters a force of the push in newtons and per body weight. */
+export function putForce(model: TrialModel, into: Measured, key: ForceKey, force: Quantity): void {
+  put(into, key, force)
+  put(into, perBodyWeight[key], model.budget.over(force, model.bodyWeight))
+}
+
+/** Enters the same reason for forces and their twins per body weight. */
+export function missForces(into: Measured, keys: readonly ForceKey[], reason: string): void {
+  for (const key of keys) miss(into, [key, perBodyWeight[key]], reason)
+}
+
+/** Forces of a push with a countermovement. */
 export function pushForceFigures(
   model: JumpModel,
   times: EventTimes,
@@ -83,10 +99,7 @@ export function pushForceFigures(
   const forces = allForces(model, times, takeoffVelocity)
   for (const key of forceKeys) {
     const force = forces[key]
-    if (!force) miss(into, [key, perBodyWeight[key]], reasons.noDip)
-    else {
-      put(into, key, force)
-      put(into, perBodyWeight[key], model.budget.over(force, model.bodyWeight))
-    }
+    if (force) putForce(model, into, key, force)
+    else missForces(into, [key], reasons.noDip)
   }
 }

@@ -6,7 +6,7 @@ import { grossImpulse } from '../signal/gross-impulse.ts'
 import { integratedNoise, type Noise } from '../signal/noise.ts'
 import { findPeak } from '../signal/peak.ts'
 import type { Budget, Quantity } from '../uncertainty/budget.ts'
-import { isSide, type JumpModel, type PlateInputs } from './jump-model.ts'
+import { isSide, type JumpModel, type PlateInputs } from './trial-model.ts'
 import { findRise, greatestSlope } from './loading-rate.ts'
 import { miss, put, type Measured, type Outcome } from './measured.ts'
 

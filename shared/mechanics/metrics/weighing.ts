@@ -1,9 +1,11 @@
-import { at, grossError, type JumpModel } from './jump-model.ts'
+import { at, grossError, type TrialModel } from './trial-model.ts'
 import { miss, put, reasons, type Measured } from './measured.ts'
 
-/** Weight and mass from the quiet stance. */
-export function weighingFigures(model: JumpModel, into: Measured): void {
+/** Weight and mass from the quiet stance. A recorded mass is no measurement: it gives no figures. */
+export function weighingFigures(model: TrialModel, into: Measured): void {
   const { budget, weighing, systemWeight, bodyWeight, bodyMass } = model
+  if (!weighing)
+    return miss(into, ['bodyWeight', 'systemWeight', 'bodyMass', 'weighingSpread'], reasons.notWeighed)
   const samples = weighing.window.to - weighing.window.from
   const independent = Math.max(2, weighing.noiseDof + 1, samples / 50)
   const spread = budget.input(
@@ -18,24 +20,30 @@ export function weighingFigures(model: JumpModel, into: Measured): void {
 }
 
 /**
- * What the whole movement says from rest to rest: the closing balance m·v at still, and the weight that would make it
- * zero, the mean force.
+ * What the whole movement says from rest to rest, from the onset to still: the closing balance, momentum at still less
+ * momentum at the onset, and the weight that would make it zero, the mean force. One of the two ends is where the
+ * integration starts.
  */
-export function restToRestFigures(model: JumpModel, into: Measured): void {
-  const { budget, motion, events, systemWeight, onsetVelocity, settings } = model
-  if (events.still === null) return miss(into, ['restToRestWeight', 'closingBalance'], reasons.noStill)
-  const duration = (events.still - motion.start) * motion.dt
+export function restToRestFigures(model: TrialModel, into: Measured): void {
+  const { budget, motion, events, systemWeight, startVelocity, settings } = model
+  const { onset, still } = events
+  if (!onset || still === null)
+    return miss(into, ['restToRestWeight', 'closingBalance'], onset ? reasons.noStill : reasons.noStance)
+  const backwards = motion.start !== onset.position
+  const end = backwards ? onset.position : still
+  const sign = backwards ? -1 : 1
+  const duration = (still - onset.position) * motion.dt
   const mass = motion.systemWeight / motion.gravity
-  const closing = mass * at(model, events.still).velocity
+  const closing = sign * mass * at(model, end).velocity
   const atRest = budget.input(0, settings.swayVelocityChange / Math.SQRT2)
-  const gross = grossError(model, events.still)
+  const gross = grossError(model, end)
   const rest = [
-    [mass, onsetVelocity],
+    [mass, startVelocity],
     [mass, atRest],
   ] as const
-  put(into, 'closingBalance', budget.linear(closing, [[1, gross], [-duration, systemWeight], ...rest]))
+  put(into, 'closingBalance', budget.linear(closing, [[sign, gross], [-duration, systemWeight], ...rest]))
   const restToRest = budget.linear(motion.systemWeight + closing / duration, [
-    [1 / duration, gross],
+    [sign / duration, gross],
     ...rest.map(([factor, quantity]) => [factor / duration, quantity] as const),
   ])
   put(into, 'restToRestWeight', restToRest)

@@ -79,6 +79,30 @@ export const checkSettings = {
     effect: 'A more uneven stance gets a caution',
   },
   footShareFail: { value: 0.1, unit: 'of the weight', source: own, effect: 'A lightly loaded plate fails' },
+  squatDipCaution: {
+    value: 0.04,
+    unit: 'of system weight',
+    source: `${own}: more than noise and sway`,
+    effect: 'A larger dip before a squat jump passes',
+  },
+  squatDipFail: {
+    value: 0.1,
+    unit: 'of system weight',
+    source: `${practice}, from memory: beyond it the squat jump is a countermovement jump`,
+    effect: 'A larger dip before a squat jump is kept',
+  },
+  otherFootCaution: {
+    value: 0.05,
+    unit: 'of system weight',
+    source: own,
+    effect: 'A stronger touch of the other foot passes',
+  },
+  otherFootFail: {
+    value: 0.15,
+    unit: 'of system weight',
+    source: own,
+    effect: 'A stronger push of the other foot is kept',
+  },
   heightAgreementM: {
     value: 0.04,
     unit: 'm',
@@ -137,4 +161,22 @@ export const checkSettings = {
     effect: 'Stranger traces pass',
   },
   lowestJumpM: { value: 0.02, unit: 'm', source: own, effect: 'Smaller hops fail' },
+  dropHeightCautionM: {
+    value: 0.06,
+    unit: 'm',
+    source: `${own}: stepping down changes the fall by some centimetres`,
+    effect: 'A fall further from the height of the box passes',
+  },
+  dropHeightFailM: {
+    value: 0.15,
+    unit: 'm',
+    source: own,
+    effect: 'A fall further from the height of the box is kept',
+  },
+  longestReboundS: {
+    value: 0.6,
+    unit: 's',
+    source: `${own}: a longer contact is a landing and a jump`,
+    effect: 'Slower contacts pass for a drop jump',
+  },
 } as const satisfies Record<string, SettingDefinition>

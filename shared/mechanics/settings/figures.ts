@@ -17,6 +17,12 @@ export const figureSettings = {
     effect: 'Less noise and more rounding of peaks',
   },
   peakWidestS: { value: 0.015, unit: 's', source: own, effect: 'The same, for flat peaks' },
+  forceWindowS: {
+    value: 0.006,
+    unit: 's',
+    source: `${own}: half the window in which the force at an instant is fitted`,
+    effect: 'Less noise and more bend in the force at an instant',
+  },
   stillWindowS: {
     value: 1,
     unit: 's',
@@ -71,6 +77,18 @@ export const figureSettings = {
     unit: 'Hz',
     source: `${practice}: zero-lag Butterworth, cut-off corrected for two passes (Winter)`,
     effect: 'More noise and detail in the rates of force',
+  },
+  filterMarginS: {
+    value: 0.1,
+    unit: 's',
+    source: `${own}: some five time constants of the filter`,
+    effect: 'The filter settles further outside the push',
+  },
+  filterHighestCutoff: {
+    value: 0.45,
+    unit: 'of the sample rate',
+    source: `${own}: below half of it, beyond which a filter has no meaning`,
+    effect: 'The filter keeps its cut-off at lower sample rates',
   },
   landingImpulseShortS: {
     value: 0.05,

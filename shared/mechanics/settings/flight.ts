@@ -77,6 +77,30 @@ export const flightSettings = {
     source: `${practice}: 20 to 50 ms at both edges for ringing`,
     effect: 'Less of the flight serves to find zero and noise',
   },
+  stepOnS: {
+    value: 0.1,
+    unit: 's',
+    source: `${own}: until both feet stand after stepping on`,
+    effect: 'Quiet stance is looked for later',
+  },
+  zeroShare: {
+    value: 0.15,
+    unit: 'of the load',
+    source: `${own}: a level that near zero is that of empty plates, or of plates set to zero with the athlete on them`,
+    effect: 'Larger offsets are taken for zero without looking further',
+  },
+  offsetShare: {
+    value: 0.4,
+    unit: 'of the load',
+    source: `${own}: a large offset is believed only of a flat trace; the bottom of a slow squat lies higher still`,
+    effect: 'Larger offsets of the plates are recognised',
+  },
+  offsetSpread: {
+    value: 0.02,
+    unit: 'of the load, SD',
+    source: `${own}: empty plates are that flat`,
+    effect: 'Noisier plates with a large offset are recognised',
+  },
   smallestLoadN: { value: 150, unit: 'N', source: own, effect: 'Lighter athletes are no longer recognised' },
   greatestForceN: {
     value: 50000,

@@ -15,6 +15,24 @@ export const uncertaintySettings = {
     source: `${own}: stance from which sway is estimated by means of one window each`,
     effect: 'Sway is estimated in fewer recordings',
   },
+  touchTimeU: {
+    value: 0.0005,
+    unit: 's, standard uncertainty',
+    source: `${own}: a recorder's low-pass of 200 Hz delays the force by a millisecond, a steep rise by less`,
+    effect: 'Wider intervals of touchdown, contact and flight times',
+  },
+  touchForceU: {
+    value: 8,
+    unit: 'N, standard uncertainty',
+    source: `${own}: ringing of the plate at the touch that the fit takes for the rise`,
+    effect: 'The same, more so where the force rises gently',
+  },
+  touchLongestU: {
+    value: 0.0012,
+    unit: 's, standard uncertainty',
+    source: `${own}: ringing of 150 Hz has turned by then`,
+    effect: 'The same, where the force rises most gently',
+  },
   gravityU: {
     value: 0.0005,
     unit: 'm/s², standard uncertainty',

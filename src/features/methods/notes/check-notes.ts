@@ -23,11 +23,26 @@ export const checkNotes: Record<CheckKey, string> = {
     'The share of the weight on the lighter foot in quiet stance, and whether a foot left its plate before takeoff. Made with two plates; a caution touches the sides only, a failure everything.',
   'foot-off-landing':
     'The longest time that a foot was off its plate after both had touched down. Made with two plates.',
+  'side-agreement':
+    'Whether the leg that the test names is the one that the athlete stood on. Made in tests of one leg with two plates.',
+  'other-foot-off':
+    'The greatest force of the other foot on its plate from the weighing to takeoff, as a share of the weight. Made in tests of one leg with two plates.',
+  'other-foot-landing':
+    'The greatest force of the other foot on its plate from touchdown until the fall is stopped, as a share of the weight. Made in tests of one leg with two plates.',
+  'squat-dip':
+    'How far the force falls under the weight between the onset and the greatest force of a squat jump, as a share of the weight. Beyond a tenth it is a countermovement.',
   'one-takeoff': 'How many flights the recording holds. The figures are those of the first.',
   'plausible-jump':
-    'Whether the body went down before the push, and whether the jump height is that of a standing jump.',
+    'Whether the body went down before the push of a countermovement jump, and whether the jump height is that of a standing jump.',
   'height-agreement':
     'Height by flight time less height by impulse. It fails beyond 2.5 times the upper limit or 4 times the lower one. Where flight alone reads somewhat high, only the figures of the flight are touched.',
+  'drop-height':
+    'The height of a free fall that has the velocity of the first touch, less the height of the box. Made where the box is known.',
+  'plausible-rebound':
+    'How long the feet were on the ground between fall and jump, and whether the jump height is one that a body can reach.',
+  'hop-count': 'How many contacts lie between two flights. Under five it fails, under ten it is a caution.',
+  'hops-counted':
+    'How many of the first ten contacts are short enough to count. Under five it fails; any that does not count is a caution.',
   'landing-on-plates': 'Whether a touchdown on the plates follows the takeoff.',
   'landing-length':
     'How long the recording goes on after touchdown. It fails where it ends before the fall is stopped.',
