@@ -37,7 +37,20 @@ const onlyUnfinishedDeleted = (table: string, unfinished: ReturnType<typeof sql>
     using: unfinished,
   })
 
-/** The bytes of an original, finished once with the SHA-256 of the whole; the same bytes are one file a club. */
+/** A file inside an archive that is kept as it came: where its bytes stand there. */
+export interface ArchivedFile {
+  /** As in the archive, with `/` between folders. */
+  path: string
+  /** First byte of the packed data, and how many there are. */
+  start: number
+  bytes: number
+  method: 'stored' | 'deflated'
+}
+
+/**
+ * The bytes of an original, finished once with the SHA-256 of the whole; the same bytes are one file a club. They
+ * stand in chunks of their own, or inside an archive that does.
+ */
 export const files = club.table(
   'files',
   {
@@ -46,10 +59,15 @@ export const files = club.table(
     sizeBytes: bigint('size_bytes', { mode: 'number' }).notNull(),
     sha256: bytea('sha256'),
     finishedAt: moment('finished_at'),
+    /** The file of the archive that holds it; null for a file with chunks of its own. */
+    archiveId: uuid('archive_id'),
+    archived: jsonb('archived').$type<ArchivedFile | null>(),
     createdAt: createdAt(),
   },
   (t) => [
     primaryKey({ columns: [t.clubId, t.id] }),
+    foreignKey({ columns: [t.clubId, t.archiveId], foreignColumns: [t.clubId, t.id] }),
+    check('files_archived', sql`(archive_id is null) = (archived is null)`),
     uniqueIndex('files_sha256')
       .on(t.clubId, t.sha256)
       .where(sql`sha256 is not null`),
@@ -98,6 +116,9 @@ export const uploads = club.table(
     reading: jsonb('reading').$type<Reading | null>(),
     /** The upload that brought the same bytes first. */
     duplicateOf: uuid('duplicate_of'),
+    /** The upload of the archive that this file came in, and its place there, from 1. */
+    archiveUploadId: uuid('archive_upload_id'),
+    archivePlace: integer('archive_place'),
     uploadedBy: uuid('uploaded_by').notNull(),
     /** Cleared from the Tray by a person; the state and the bytes stay, so that it can be taken back. */
     dismissedAt: moment('dismissed_at'),
@@ -115,6 +136,9 @@ export const uploads = club.table(
     foreignKey({ columns: [t.clubId, t.sessionId], foreignColumns: [sessions.clubId, sessions.id] }),
     foreignKey({ columns: [t.clubId, t.fileId], foreignColumns: [files.clubId, files.id] }),
     foreignKey({ columns: [t.clubId, t.duplicateOf], foreignColumns: [t.clubId, t.id] }),
+    foreignKey({ columns: [t.clubId, t.archiveUploadId], foreignColumns: [t.clubId, t.id] }),
+    uniqueIndex('uploads_of_archive').on(t.clubId, t.archiveUploadId, t.archivePlace),
+    check('uploads_archive_place', sql`(archive_upload_id is null) = (archive_place is null)`),
     foreignKey({
       columns: [t.clubId, t.uploadedBy],
       foreignColumns: [memberships.clubId, memberships.personId],
