@@ -24,10 +24,6 @@ export function byteOrderMarkLength(bytes: Uint8Array): number {
   return beginsWith(bytes, [0xef, 0xbb, 0xbf]) ? 3 : 0
 }
 
-export function isUtf16(bytes: Uint8Array): boolean {
-  return beginsWith(bytes, [0xff, 0xfe]) || beginsWith(bytes, [0xfe, 0xff])
-}
-
 /** What a file is when it is not text, in words that fit after "The file is"; null for text. */
 export function kindIfNotText(bytes: Uint8Array): string | null {
   const known = SIGNATURES.find((signature) => beginsWith(bytes, signature.bytes, signature.at))

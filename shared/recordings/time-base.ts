@@ -98,6 +98,36 @@ function bridgeGaps(stampsS: Float64Array, step: number, lineOf: LineOfRow): Int
   return samples
 }
 
+/** The even base of rows that bear no stamps. */
+export function evenTimeBase(sampleRateHz: number, length: number): TimeBase {
+  return { sampleRateHz, error: 0, length, sampleOfRow: null, coarseStepS: null }
+}
+
+/** No step is further than this from the mean one: none is then odd against the median, which lies among them. */
+const PLAINLY_EVEN = 0.13
+
+/** The base of stamps that are plainly even, in one pass; null for all others. */
+function plainlyEven(stampsS: Float64Array, evenStep: number): TimeBase | null {
+  const rows = stampsS.length
+  const first = stampsS[0] ?? NaN
+  let [before, greatestOdd, greatestError] = [first, 0, 0]
+  for (let i = 1; i < rows; i++) {
+    const stamp = stampsS[i] as number
+    const odd = Math.abs(stamp - before - evenStep)
+    if (odd > greatestOdd) greatestOdd = odd
+    const error = Math.abs(stamp - first - i * evenStep)
+    if (error > greatestError) greatestError = error
+    before = stamp
+  }
+  if (!(greatestOdd <= PLAINLY_EVEN * evenStep)) return null
+  const error = greatestError / evenStep
+  return evenTimeBaseWith(evenStep, rows, error)
+}
+
+function evenTimeBaseWith(stepS: number, rows: number, error: number): TimeBase {
+  return { ...evenTimeBase(settledRate(stepS, rows - 1, error), rows), error }
+}
+
 /**
  * The even time base of a column of time stamps in seconds (no blanks, at least two). The rate comes from the
  * whole length, which rounding of the stamps hardly touches. A few odd steps are missing samples; many of them,
@@ -109,6 +139,8 @@ export function timeBaseOf(stampsS: Float64Array, lineOf: LineOfRow): TimeBase {
   const span = (stampsS[rows - 1] ?? 0) - (stampsS[0] ?? 0)
   if (!(span > 0)) throw uneven(rows - 1, stampsS, lineOf)
   const evenStep = span / (rows - 1)
+  const plain = plainlyEven(stampsS, evenStep)
+  if (plain) return plain
   const { median, oddShare } = judgeSteps(stepsOf(stampsS))
   const evenError = distanceFromEven(stampsS, evenStep, null)
   const resolution = smallestStep(stampsS)

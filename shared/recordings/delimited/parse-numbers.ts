@@ -2,65 +2,84 @@ import Papa from 'papaparse'
 import { ReadFault } from '../errors.ts'
 import { MAX_SAMPLES } from '../limits.ts'
 import { shown } from '../safe-text.ts'
-import { cellKind } from './numbers.ts'
-import type { CellKind } from './numbers.ts'
-import { lineEndFor } from './rows.ts'
-import type { NumberColumns } from './scan-numbers.ts'
+import { cellKind, hasThousands, readClock, readNumber } from '../table/number-text.ts'
+import type { DecimalMark } from '../table/number-text.ts'
+import type { Body, UnreadableCell } from '../table/table.ts'
+import { lineEndFor, splitAtBlanks } from './lines.ts'
+import type { PlainStyle } from './scan-numbers.ts'
 
-/** Rows of numbers read by Papa Parse, and what stood among and after them. */
-export interface ParsedNumbers {
-  columns: NumberColumns
-  /** The first cell that was neither a number nor blank, in a row of numbers. */
-  firstUnreadable: { line: number; column: number; seen: string } | null
-  /** Lines of text after the last row of numbers. */
-  linesAfter: { count: number; first: string }
-}
-
-/** As `cellKind`, and a number beyond what a double holds is no number. */
-function finiteKind(text: string): CellKind {
-  const kind = cellKind(text)
-  return kind === 'number' && !Number.isFinite(Number(text)) ? 'text' : kind
-}
-
-/** Collects rows while Papa Parse steps through a body. */
-class RowCollector {
-  readonly columns: number[][]
-  firstUnreadable: ParsedNumbers['firstUnreadable'] = null
+/**
+ * Collects the numbers of rows of cells, whatever took the rows apart: words for missing samples, ragged rows, marks
+ * between thousands, times of day, a footer.
+ */
+export class RowCollector {
+  private readonly columns: number[][]
+  private readonly lines: number[] = []
+  private firstUnreadable: UnreadableCell | null = null
+  private thousands = false
   /** Rows without any number, held back: at the end they are a footer, in the middle damage. */
   private strays: { line: number; text: string }[] = []
-  private line: number
+  private strayCount = 0
   private readonly wanted: readonly number[]
+  private readonly decimal: DecimalMark
 
-  constructor(wanted: readonly number[], firstLine: number) {
+  constructor(wanted: readonly number[], decimal: DecimalMark) {
     this.wanted = wanted
+    this.decimal = decimal
     this.columns = wanted.map(() => [])
-    this.line = firstLine - 1
   }
 
   get rows(): number {
-    return this.columns[0]?.length ?? 0
+    return this.lines.length
   }
 
-  get linesAfter(): ParsedNumbers['linesAfter'] {
-    return { count: this.strays.length, first: this.strays[0]?.text ?? '' }
-  }
-
-  take(cells: string[]): void {
-    this.line++
-    if (cells.length === 1 && (cells[0] === '' || cells[0] === '\r')) return
-    const texts = this.wanted.map((index) => (cells[index] ?? '').trim())
-    const kinds = texts.map(finiteKind)
-    if (!kinds.includes('number') && cells.some((cell) => cellKind(cell) === 'text')) {
-      this.strays.push({ line: this.line, text: cells.join(' ') })
+  /**
+   * @param cells one row; numbers as they are, text as written, nothing as ''
+   * @throws ReadFault `corrupt-file` where rows of text stood before a row of numbers
+   */
+  take(cells: readonly (string | number)[], line: number): void {
+    if (cells.every((cell) => cell === '' || cell === '\r')) return
+    const values = this.wanted.map((index) => this.valueOf(cells[index] ?? ''))
+    if (values.every(Number.isNaN) && cells.some((cell) => this.isText(cell))) {
+      this.strayCount++
+      if (this.strays.length === 0) this.strays.push({ line, text: cells.join(' ') })
       return
     }
     this.refuseStrays()
-    kinds.forEach((kind, i) => {
-      const text = texts[i] ?? ''
-      this.columns[i]?.push(kind === 'number' ? Number(text) : NaN)
-      if (kind === 'text')
-        this.firstUnreadable ??= { line: this.line, column: (this.wanted[i] ?? 0) + 1, seen: shown(text) }
+    this.lines.push(line)
+    values.forEach((value, i) => {
+      this.columns[i]?.push(value)
+      if (Number.isNaN(value))
+        this.noteUnreadable(cells[this.wanted[i] ?? -1] ?? '', line, this.wanted[i] ?? 0)
     })
+  }
+
+  body(): Pick<Body, 'columns' | 'lineOf' | 'firstUnreadable' | 'linesAfter'> & { thousands: boolean } {
+    const { lines } = this
+    return {
+      columns: this.columns.map((column) => Float64Array.from(column)),
+      lineOf: (row) => lines[row] ?? 0,
+      firstUnreadable: this.firstUnreadable,
+      linesAfter: { count: this.strayCount, first: this.strays[0]?.text ?? '' },
+      thousands: this.thousands,
+    }
+  }
+
+  private isText(cell: string | number): boolean {
+    return typeof cell === 'string' && cellKind(cell, this.decimal) === 'text'
+  }
+
+  private valueOf(cell: string | number): number {
+    if (typeof cell === 'number') return Number.isFinite(cell) ? cell : NaN
+    const value = readNumber(cell, this.decimal)
+    if (Number.isNaN(value)) return readClock(cell)
+    if (!this.thousands && hasThousands(cell, this.decimal)) this.thousands = true
+    return value
+  }
+
+  private noteUnreadable(cell: string | number, line: number, column: number): void {
+    if (this.firstUnreadable || typeof cell === 'number' || cellKind(cell, this.decimal) === 'blank') return
+    this.firstUnreadable = { line, column: column + 1, seen: shown(cell) }
   }
 
   private refuseStrays(): void {
@@ -76,26 +95,25 @@ class RowCollector {
 }
 
 /**
- * Reads the wanted columns of a body that is not plain: quotes, ragged rows, words for missing samples, a footer.
+ * Reads the wanted columns of a text that is not plain numbers.
  * @throws ReadFault `corrupt-file` where a line of text stands among the numbers
  */
 export function parseNumbers(
-  bytes: Uint8Array,
-  start: number,
-  delimiter: string,
+  text: string,
+  { delimiter, decimal }: PlainStyle,
   wanted: readonly number[],
   firstLine: number,
-): ParsedNumbers {
-  const collector = new RowCollector(wanted, firstLine)
-  // One character a byte is enough: numbers are ASCII, and other text is only quoted in messages.
-  const text = new TextDecoder('windows-1252').decode(bytes.subarray(start))
+): ReturnType<RowCollector['body']> {
+  const collector = new RowCollector(wanted, decimal)
+  let line = firstLine - 1
   let fault: unknown = null
-  Papa.parse<string[]>(text, {
+  Papa.parse<string[]>(delimiter === ' ' ? splitAtBlanks(text) : text, {
     delimiter,
     newline: lineEndFor(text),
     step: ({ data }, parser) => {
+      line++
       try {
-        collector.take(data)
+        collector.take(data, line)
       } catch (error) {
         fault = error
       }
@@ -103,9 +121,5 @@ export function parseNumbers(
     },
   })
   if (fault) throw fault
-  return {
-    columns: collector.columns.map((column) => Float64Array.from(column)),
-    firstUnreadable: collector.firstUnreadable,
-    linesAfter: collector.linesAfter,
-  }
+  return collector.body()
 }

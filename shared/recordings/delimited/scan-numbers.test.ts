@@ -2,8 +2,10 @@ import fc from 'fast-check'
 import { describe, expect, it } from 'vitest'
 import { parseNumbers } from './parse-numbers.ts'
 import { scanNumbers } from './scan-numbers.ts'
+import type { PlainStyle } from './scan-numbers.ts'
 
 const encode = (text: string): Uint8Array => new TextEncoder().encode(text)
+const inCommas: PlainStyle = { delimiter: ',', decimal: '.' }
 
 /** Numbers as programs write them: fixed decimals, full precision, exponents, signs, bare points. */
 const numberText = fc.oneof(
@@ -32,18 +34,34 @@ const numberText = fc.oneof(
 
 const table = fc.record({
   rows: fc.array(fc.tuple(numberText, numberText, numberText), { minLength: 1, maxLength: 30 }),
-  delimiter: fc.constantFrom(',', ';', '\t', '|'),
-  lineBreak: fc.constantFrom('\n', '\r\n'),
+  style: fc.constantFrom<PlainStyle>(
+    inCommas,
+    { delimiter: ';', decimal: '.' },
+    { delimiter: ';', decimal: ',' },
+    { delimiter: '\t', decimal: ',' },
+    { delimiter: '|', decimal: '.' },
+    { delimiter: ' ', decimal: '.' },
+    { delimiter: ' ', decimal: ',' },
+  ),
+  lineBreak: fc.constantFrom('\n', '\r\n', '\r'),
+  gap: fc.constantFrom(' ', '\t', '   ', ' \t '),
   wanted: fc.constantFrom([0], [1], [2], [0, 2], [0, 1, 2]),
 })
 
 describe('scanNumbers', () => {
   it('reads the very bits that Papa Parse and the language read', () => {
     fc.assert(
-      fc.property(table, ({ rows, delimiter, lineBreak, wanted }) => {
-        const bytes = encode(rows.map((row) => row.join(delimiter)).join(lineBreak))
-        const scanned = scanNumbers(bytes, 0, delimiter, wanted)
-        const parsed = parseNumbers(bytes, 0, delimiter, wanted, 1).columns
+      fc.property(table, ({ rows, style, lineBreak, gap, wanted }) => {
+        const { delimiter, decimal } = style
+        const written = (text: string): string => {
+          // Between runs of blanks a blank cell cannot be told.
+          const cell = delimiter === ' ' ? text.trim() || '0' : text
+          return cell.replace('.', decimal)
+        }
+        const between = delimiter === ' ' ? gap : delimiter
+        const text = rows.map((row) => row.map(written).join(between)).join(lineBreak)
+        const scanned = scanNumbers(encode(text), 0, style, wanted)
+        const parsed = parseNumbers(text, style, wanted, 1).columns
         expect(scanned?.map((column) => [...column])).toStrictEqual(parsed.map((column) => [...column]))
       }),
       { seed: 20_480, numRuns: 500 },
@@ -52,13 +70,13 @@ describe('scanNumbers', () => {
 
   it('grows beyond its first capacity without losing a row', () => {
     const values = Array.from({ length: 10_000 }, (_, i) => i / 8)
-    const [column] = scanNumbers(encode(values.join('\n')), 0, ',', [0]) ?? []
+    const [column] = scanNumbers(encode(values.join('\n')), 0, inCommas, [0]) ?? []
     expect([...(column ?? [])]).toStrictEqual(values)
   })
 
   it('skips empty lines and columns that nobody asked for, whatever they hold', () => {
     const bytes = encode('x,1,left\n\ny,2,right\r\n\r\n')
-    expect(scanNumbers(bytes, 0, ',', [1])).toStrictEqual([Float64Array.of(1, 2)])
+    expect(scanNumbers(bytes, 0, inCommas, [1])).toStrictEqual([Float64Array.of(1, 2)])
   })
 
   it.each([
@@ -73,31 +91,27 @@ describe('scanNumbers', () => {
     ['a number beyond what a double holds', '1,1e999\n'],
     ['a hexadecimal number', '1,0x10\n'],
   ])('hands %s back to the general reader', (_, text) => {
-    expect(scanNumbers(encode(text), 0, text.includes(';') ? ';' : ',', [0, 1])).toBeNull()
+    expect(
+      scanNumbers(encode(text), 0, { ...inCommas, delimiter: text.includes(';') ? ';' : ',' }, [0, 1]),
+    ).toBeNull()
   })
 })
 
 describe('parseNumbers', () => {
   it('reads quoted cells, ragged rows and words for missing samples', () => {
-    const read = parseNumbers(encode('"1","2"\n3\nNaN,4\n5,oops\n'), 0, ',', [0, 1], 10)
+    const read = parseNumbers('"1","2"\n3\nNaN,4\n5,oops\n', inCommas, [0, 1], 10)
     expect(read.columns).toStrictEqual([Float64Array.of(1, 3, NaN, 5), Float64Array.of(2, NaN, 4, NaN)])
     expect(read.firstUnreadable).toStrictEqual({ line: 13, column: 2, seen: 'oops' })
   })
 
   it('leaves a footer out and says how it begins', () => {
-    const { linesAfter, columns } = parseNumbers(
-      encode('1,2\n\nend of recording\nchecked\n'),
-      0,
-      ',',
-      [0, 1],
-      2,
-    )
+    const { linesAfter, columns } = parseNumbers('1,2\n\nend of recording\nchecked\n', inCommas, [0, 1], 2)
     expect(linesAfter).toStrictEqual({ count: 2, first: 'end of recording' })
     expect(columns[0]).toHaveLength(1)
   })
 
   it('refuses text between numbers and names its line', () => {
-    const read = (): unknown => parseNumbers(encode('1,2\nTime,Force\n3,4\n'), 0, ',', [0, 1], 2)
+    const read = (): unknown => parseNumbers('1,2\nTime,Force\n3,4\n', inCommas, [0, 1], 2)
     expect(read).toThrow('Line 3 stands among the numbers and holds none: “Time Force”.')
   })
 })

@@ -1,5 +1,5 @@
 import { describe, expect, it } from 'vitest'
-import { readHeading, unitOf } from './header-cell.ts'
+import { readHeading, unitOf } from './heading.ts'
 
 const unitText = (cell: string, below?: string): string => {
   const { unit } = readHeading(cell, below)
@@ -16,6 +16,9 @@ describe('readHeading', () => {
     ['t/s', 's'],
     ['Zeit [Sek]', 's'],
     ['s', 's'],
+    ['Time (hh:mm:ss)', 'clock'],
+    ['Uhrzeit [hh:mm:ss.fff]', 'clock'],
+    ['Time (µs)', 'us'],
   ])('takes %s for time in %s', (cell, unit) => {
     expect([readHeading(cell).quantity, unitText(cell)]).toStrictEqual(['time', unit])
   })
@@ -31,24 +34,21 @@ describe('readHeading', () => {
     ['Kraft {kN}', 'kN'],
     ['Force', 'none'],
     ['forces', 'none'],
-    ['Load (kg)', 'other kg'],
+    ['Load (kg)', 'kgf'],
+    ['Force (lbf)', 'lbf'],
+    ['Force [BW]', 'BW'],
+    ['Force (%BW)', '%BW'],
+    ['Fx (N)', 'N'],
   ])('takes %s for a force in %s', (cell, unit) => {
     expect([readHeading(cell).quantity, unitText(cell)]).toStrictEqual(['force', unit])
   })
 
-  it.each([
-    'Fx (N)',
-    'Mz (N·m)',
-    'Velocity (m/s)',
-    'Sample',
-    'Contact time (ms)',
-    'Time (hh:mm:ss)',
-    'Left COPx (mm)',
-    'Net force (N)',
-    '',
-  ])('takes %s for neither', (cell) => {
-    expect(readHeading(cell).quantity).toBe('other')
-  })
+  it.each(['Mz (N·m)', 'Velocity (m/s)', 'Contact time (ms)', 'Left COPx (mm)', 'Net force (N)', ''])(
+    'takes %s for neither',
+    (cell) => {
+      expect(readHeading(cell).quantity).toBe('other')
+    },
+  )
 
   it.each([
     ['Left (N)', 'left'],
@@ -63,6 +63,27 @@ describe('readHeading', () => {
     ['Fz1 (N)', null],
   ])('reads the foot of %s as %s', (cell, foot) => {
     expect(readHeading(cell).foot).toBe(foot)
+  })
+
+  it.each([
+    ['Sample', 'sample'],
+    ['Frame no.', 'sample'],
+    ['Sub Frame', 'within'],
+    ['SubFrame', 'within'],
+    ['Time (samples)', 'sample'],
+  ])('takes %s for a count of samples', (cell, quantity) => {
+    expect(readHeading(cell).quantity).toBe(quantity)
+  })
+
+  it.each([
+    ['Fx (N)', 'x', ''],
+    ['Plate 2 Fz (N)', 'z', 'plate 2'],
+    ['Fy1 (N)', 'y', '1'],
+    ['Vertical force (N)', 'up', ''],
+    ['Anterior force (N)', 'level', ''],
+    ['Left (N)', null, 'left'],
+  ])('reads the axis of %s as %s', (cell, axis, plate) => {
+    expect(readHeading(cell)).toMatchObject({ axis, plate })
   })
 
   it('takes the unit from a row below where the heading has none', () => {
