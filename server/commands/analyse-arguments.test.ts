@@ -2,6 +2,7 @@ import { mkdtempSync, writeFileSync } from 'node:fs'
 import { tmpdir } from 'node:os'
 import { join } from 'node:path'
 import { describe, expect, it } from 'vitest'
+import { analysedProtocols } from '../../shared/mechanics/protocols/analysed.ts'
 import { defaultSettings } from '../../shared/mechanics/settings.ts'
 import { UsageError, readArguments } from './analyse-arguments.ts'
 
@@ -41,6 +42,16 @@ describe('readArguments', () => {
     })
   })
 
+  it('keeps what is known of a test that is not named', () => {
+    const { given } = readArguments(['a.csv', '--load', '20', '--side', 'right', '--box', '0.4'])
+    expect(given).toStrictEqual({ known: { externalLoadKg: 20, side: 'right', boxHeightM: 0.4 } })
+  })
+
+  it('takes every test that the engine analyses', () => {
+    for (const protocol of analysedProtocols)
+      expect(readArguments(['a.csv', '--protocol', protocol]).given.test?.protocol).toBe(protocol)
+  })
+
   it('changes settings by name', () => {
     const path = settingsFile('{ "eventForceN": 20, "onsetRule": "standard-deviations" }')
     const { settings } = readArguments(['a.csv', '--settings', path])
@@ -52,6 +63,7 @@ describe('readArguments', () => {
     [['a.csv', '--rate', 'fast'], '--rate takes a number'],
     [['a.csv', '--mass', '4'], '--mass takes a number from 10 to 400'],
     [['a.csv', '--protocol', 'sprint'], '--protocol takes cmj'],
+    [['a.csv', '--box', '40'], '--box takes a number from 0.01 to 2'],
     [['a.csv', '--side', 'front'], '--side takes both, left or right'],
     [['a.csv', '--colour'], "Unknown option '--colour'"],
     [['a.csv', '--settings', '/no/such/file'], 'could not be read as JSON'],

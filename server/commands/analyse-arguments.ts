@@ -2,16 +2,18 @@ import { readFileSync } from 'node:fs'
 import { parseArgs } from 'node:util'
 import { defaultSettings } from '../../shared/mechanics/settings.ts'
 import type { Settings } from '../../shared/mechanics/settings.ts'
-import type { Side } from '../../shared/mechanics/types.ts'
-import { plainJump } from './analysis-document.ts'
+import { analysedProtocols } from '../../shared/mechanics/protocols/analysed.ts'
+import type { Protocol, Side } from '../../shared/mechanics/types.ts'
+import { usualTest } from '../../shared/contracts/session-test.ts'
 import type { GivenFacts } from './analysis-document.ts'
 
 export const usage = `Usage: npm run --silent analyse -- FILE… [options]
 
 Reads recordings as the server does and prints one JSON document with their figures.
 
-  --protocol cmj     the test; without it the engine proposes one and says so
+  --protocol cmj     the test: ${analysedProtocols.join(', ')}; without it the engine proposes one and says so
   --side both        both, left or right
+  --box 0.3          height of the box in metres, of a drop jump or landing
   --load 20          external load in kilograms
   --mass 81.5        the athlete's body mass in kilograms, checked against the weighing
   --rate 1000        sampling rate in hertz, for files without a time column
@@ -33,6 +35,7 @@ export interface AnalyseArguments {
 const options = {
   protocol: { type: 'string' },
   side: { type: 'string' },
+  box: { type: 'string' },
   load: { type: 'string' },
   mass: { type: 'string' },
   rate: { type: 'string' },
@@ -61,14 +64,26 @@ function number(name: string, text: string | undefined, from: number, to: number
 
 const isSide = (text: string): text is Side => text === 'both' || text === 'left' || text === 'right'
 
-function testFrom(values: ReturnType<typeof parse>['values']): Pick<GivenFacts, 'test'> {
-  const { protocol, side = 'both' } = values
-  if (protocol !== undefined && protocol !== 'cmj')
-    throw new UsageError(`--protocol takes cmj, and “${protocol}” was given.`)
-  if (!isSide(side)) throw new UsageError(`--side takes both, left or right, and “${side}” was given.`)
+function protocolFrom(text: string): Protocol {
+  const protocol = analysedProtocols.find((known) => known === text)
+  if (protocol) return protocol
+  throw new UsageError(`--protocol takes ${analysedProtocols.join(', ')}, and “${text}” was given.`)
+}
+
+/** The test, where it is named; else what is known of it. */
+function testFrom(values: ReturnType<typeof parse>['values']): Pick<GivenFacts, 'test' | 'known'> {
+  const { protocol, side } = values
+  if (side !== undefined && !isSide(side))
+    throw new UsageError(`--side takes both, left or right, and “${side}” was given.`)
   const load = number('load', values.load, 0, 500)
-  if (protocol === undefined && load === undefined && values.side === undefined) return {}
-  return { test: { ...plainJump, side, externalLoadKg: load ?? 0 } }
+  const box = number('box', values.box, 0.01, 2)
+  const known = {
+    ...(side === undefined ? {} : { side }),
+    ...(load === undefined ? {} : { externalLoadKg: load }),
+    ...(box === undefined ? {} : { boxHeightM: box }),
+  }
+  if (protocol !== undefined) return { test: { ...usualTest(protocolFrom(protocol)), ...known } }
+  return Object.keys(known).length === 0 ? {} : { known }
 }
 
 /** The engine's settings with those that a file of `{ name: number }` changes. */

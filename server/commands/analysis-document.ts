@@ -4,6 +4,7 @@ import { analyse } from '../../shared/mechanics/analyse.ts'
 import { catalogue, isMetricKey } from '../../shared/mechanics/catalogue.ts'
 import type { Settings } from '../../shared/mechanics/settings.ts'
 import type {
+  AnalyseOptions,
   AsymmetryFigure,
   Figure,
   Note,
@@ -14,21 +15,15 @@ import type {
 import type { ReadError } from '../../shared/recordings/errors.ts'
 import { readRecording } from '../../shared/recordings/read-recording.ts'
 import type { ColumnMap, FileFormat } from '../../shared/recordings/result.ts'
+import { usualTest } from '../../shared/contracts/session-test.ts'
 import { engineOptions, inputsOf } from '../modules/analyses/inputs.ts'
-
-/** A countermovement jump of both feet, hands on hips, without load. */
-export const plainJump: Test = {
-  protocol: 'cmj',
-  side: 'both',
-  externalLoadKg: 0,
-  boxHeightM: null,
-  arms: 'hips',
-}
 
 /** What the person at the command line says of the files. */
 export interface GivenFacts {
   /** Without it the engine proposes the test. */
   test?: Test
+  /** What is known of a test that is not named. */
+  known?: AnalyseOptions['known']
   massKg?: number
   sampleRateHz?: number
 }
@@ -109,13 +104,13 @@ export function failedEntry(file: string, sha256: string | null, error: FileErro
 /** What the server would have the engine analyse the recording with, where nothing is known of plates and place. */
 function analysed(
   recording: Recording,
-  { test, massKg }: GivenFacts,
+  { test, known, massKg }: GivenFacts,
   settings: Settings,
 ): ReturnType<typeof analyse> {
   const channels = Object.keys(recording.channels)
-  const inputs = inputsOf({ test: test ?? plainJump, recordedMassKg: massKg ?? null, channels })
+  const inputs = inputsOf({ test: test ?? usualTest('cmj'), recordedMassKg: massKg ?? null, channels })
   const { test: named, ...proposing } = engineOptions(inputs)
-  return analyse(recording, test ? { ...proposing, test: named } : proposing, settings)
+  return analyse(recording, test ? { ...proposing, test: named } : { ...proposing, known }, settings)
 }
 
 /** Reads and analyses one file as the server does; `file` is named in the entry as it was given. */

@@ -17,14 +17,7 @@ export const Test = z.strictObject({
 })
 export type Test = z.infer<typeof Test>
 
-export const protocolNames: Readonly<Record<AnyProtocol, string>> = {
-  cmj: 'Countermovement jump',
-  sj: 'Squat jump',
-  dj: 'Drop jump',
-  slcmj: 'Single-leg countermovement jump',
-  dropLanding: 'Drop landing',
-  hops: 'Repeated hops',
-}
+export { protocolNames } from '../mechanics/protocols/names.ts'
 
 /** The sides on which a test is done, the usual one first. */
 export const protocolSides: Readonly<Record<AnyProtocol, readonly z.infer<typeof Side>[]>> = {

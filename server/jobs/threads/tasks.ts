@@ -1,7 +1,11 @@
 import { deflate, inflate, inflateSync } from 'node:zlib'
 import { promisify } from 'node:util'
 import { analyse } from '../../../shared/mechanics/analyse.ts'
-import type { AnalyseOptions, RecordingAnalysis } from '../../../shared/mechanics/types.ts'
+import { usualTest } from '../../../shared/contracts/session-test.ts'
+import type { Stretch } from '../../../shared/mechanics/events/unloaded.ts'
+import { cutRecording } from '../../../shared/mechanics/trials/cut-recording.ts'
+import type { AnalyseOptions, Recording, RecordingAnalysis, Test } from '../../../shared/mechanics/types.ts'
+import { standardGravity } from '../../../shared/units/gravity.ts'
 import { defaultSettings, type Settings } from '../../../shared/mechanics/settings.ts'
 import type { ReadError } from '../../../shared/recordings/errors.ts'
 import { previewOf } from '../../../shared/recordings/preview.ts'
@@ -15,6 +19,21 @@ const inflated = promisify(inflate)
 export interface ReadFile {
   bytes: Uint8Array
   fileName: string
+  /** The test of its session: what tells the trials of a recording apart. */
+  test: Test
+}
+
+/** One trial's part of a recording. */
+export interface TrialRead {
+  /** On the recording's clock, s. */
+  startS: number
+  endS: number
+  sampleCount: number
+  filledSamples: number
+  /** Total force, whole newtons. */
+  preview: number[]
+  /** In the stored form: shared/recordings/samples-codec.ts, then deflate. */
+  samples: Uint8Array
 }
 
 /** A file that was read, in the form that goes into the database. */
@@ -24,40 +43,56 @@ export interface FileRead {
   columnMap: ReadSuccess['columnMap']
   notes: ReadSuccess['notes']
   sampleRateHz: number
-  sampleCount: number
   channels: string[]
-  filledSamples: number
   timeBaseError: number
-  /** Total force, whole newtons. */
-  preview: number[]
-  /** Of `samples`: shared/recordings/samples-codec.ts, then deflate. */
+  /** Of the samples of every trial. */
   encoding: 'planes-1-deflate'
-  samples: Uint8Array
+  /** In the order of the recording; one that is all of it where the engine finds one trial or none. */
+  trials: TrialRead[]
 }
 
-/** Bytes of a file → samples in their stored form, or why it could not be read. */
+/** The parts of a recording that hold a trial each, in samples; all of it where the engine finds one or none. */
+function partsOf(recording: Recording, test: Test): Stretch[] {
+  const known = { test, gravity: standardGravity, calibrationU: {}, uncertainty: false }
+  const { trials } = analyse(recording, known)
+  const sampleAt = (timeS: number) => Math.round(timeS * recording.sampleRateHz)
+  if (trials.length > 1)
+    return trials.map(({ startS, endS }) => ({ from: sampleAt(startS), to: sampleAt(endS) + 1 }))
+  return [{ from: 0, to: Object.values(recording.channels)[0]?.length ?? 0 }]
+}
+
+async function storedTrial(recording: Recording, part: Stretch): Promise<TrialRead> {
+  const cut = cutRecording(recording, part)
+  return {
+    startS: part.from / recording.sampleRateHz,
+    endS: (part.to - 1) / recording.sampleRateHz,
+    sampleCount: part.to - part.from,
+    filledSamples: cut.filledSamples,
+    preview: previewOf(cut).forceN,
+    samples: await deflated(encodeSamples(cut), { level: 6 }),
+  }
+}
+
+/** Bytes of a file → samples in their stored form by trial, or why it could not be read. */
 export async function readFile({
   bytes,
   fileName,
+  test,
 }: ReadFile): Promise<FileRead | { ok: false; error: ReadError }> {
   const result = readRecording(bytes, fileName)
   if (!result.ok) return result
   const { recording, format, columnMap, notes } = result
-  const channels = Object.entries(recording.channels)
   return {
     ok: true,
     format,
     columnMap,
     notes,
     sampleRateHz: recording.sampleRateHz,
-    sampleCount: channels[0]?.[1].length ?? 0,
     // In the codec's order, which is also that of the bytes sent to a browser.
     channels: channelOrder.filter((channel) => recording.channels[channel]),
-    filledSamples: recording.filledSamples,
     timeBaseError: recording.timeBaseError,
-    preview: previewOf(recording).forceN,
     encoding: 'planes-1-deflate',
-    samples: await deflated(encodeSamples(recording), { level: 6 }),
+    trials: await Promise.all(partsOf(recording, test).map((part) => storedTrial(recording, part))),
   }
 }
 
@@ -98,10 +133,11 @@ export async function warmUp(): Promise<void> {
   ]
   const lines = weights.map((force, i) => `${i / 1000},${force + (i % 7)}`)
   const text = `Time (s),Force (N)\n${lines.join('\n')}\n`
-  const read = await readFile({ bytes: new TextEncoder().encode(text), fileName: 'warm-up.csv' })
+  const bytes = new TextEncoder().encode(text)
+  const read = await readFile({ bytes, fileName: 'warm-up.csv', test: usualTest('cmj') })
   if (read.ok)
     await analyseSamples({
-      samples: read.samples,
+      samples: read.trials[0].samples,
       options: { gravity: 9.80665, calibrationU: {} },
       settings: defaultSettings,
     })

@@ -5,8 +5,8 @@ import { candidatesOf } from '../sessions/sessions.service.ts'
 import { matchAthlete } from './match-athlete.ts'
 import { insertTrial } from './trials.queries.ts'
 
-/** Makes the trial of a recording that was read, on the athlete whom its file name names or in the Tray. */
-export async function addTrial(
+/** Makes the trials of a recording that was read, on the athlete whom its file name names or in the Tray. */
+export async function addTrials(
   tx: Tx,
   clubId: string,
   upload: { id: string; sessionId: string; fileName: string; createdAt: Date },
@@ -14,29 +14,33 @@ export async function addTrial(
 ): Promise<void> {
   const { test, candidates } = await candidatesOf(tx, clubId, upload.sessionId)
   const athleteId = matchAthlete(upload.fileName, candidates)
-  const trialId = await insertTrial(
-    tx,
-    {
-      clubId,
-      sessionId: upload.sessionId,
-      uploadId: upload.id,
-      athleteId,
-      assignedBy: athleteId && 'file-name',
-      ...test,
-      startS: 0,
-      endS: (read.sampleCount - 1) / read.sampleRateHz,
-      preview: read.preview,
-      droppedAt: upload.createdAt,
-    },
-    {
-      sampleRateHz: read.sampleRateHz,
-      sampleCount: read.sampleCount,
-      channels: read.channels,
-      filledSamples: read.filledSamples,
-      timeBaseError: read.timeBaseError,
-      encoding: read.encoding,
-      bytes: Buffer.from(read.samples),
-    },
-  )
-  await sendJobs(tx, 'analyse-trial', { version: 1, clubId, trialId })
+  const { sampleRateHz, channels, timeBaseError, encoding } = read
+  for (const [i, { startS, endS, preview, samples, sampleCount, filledSamples }] of read.trials.entries()) {
+    const trialId = await insertTrial(
+      tx,
+      {
+        clubId,
+        sessionId: upload.sessionId,
+        uploadId: upload.id,
+        ordinal: i + 1,
+        athleteId,
+        assignedBy: athleteId && 'file-name',
+        ...test,
+        startS,
+        endS,
+        preview,
+        droppedAt: upload.createdAt,
+      },
+      {
+        sampleRateHz,
+        sampleCount,
+        channels,
+        filledSamples,
+        timeBaseError,
+        encoding,
+        bytes: Buffer.from(samples),
+      },
+    )
+    await sendJobs(tx, 'analyse-trial', { version: 1, clubId, trialId })
+  }
 }

@@ -1,3 +1,4 @@
+import type { Test } from '../../../shared/contracts/tests.ts'
 import type { Tx } from '../../db/database.ts'
 import { workerContext } from '../../db/database.ts'
 import type { ReadError } from '../../db/schema/uploads.ts'
@@ -6,22 +7,28 @@ import { defineJob, type JobDeps } from '../../jobs/define-job.ts'
 import type { FileRead } from '../../jobs/threads/tasks.ts'
 import { ThreadEnded } from '../../jobs/threads/threads.ts'
 import { notify } from '../events/notify.ts'
-import { addTrial } from '../trials/add-trial.service.ts'
+import { candidatesOf } from '../sessions/sessions.service.ts'
+import { addTrials } from '../trials/add-trial.service.ts'
 import { wholeFile } from './chunks.ts'
 import { readingEnded, readingFailed } from './uploads.errors.ts'
 import { advance, findUpload, type Step, type UploadRow } from './uploads.queries.ts'
 
 /**
- * Reads a file in a thread, and makes its trial or says why there is none. Run twice, it finds the upload out of
+ * Reads a file in a thread, and makes its trials or says why there are none. Run twice, it finds the upload out of
  * `waiting` and leaves everything as it is.
  */
 export const readUploadJob = defineJob('read-upload', async (deps, { clubId, uploadId }) => {
   const ctx = workerContext(clubId)
-  const upload = await deps.db.inClub(ctx, (tx) => findUpload(tx, clubId, uploadId))
-  if (upload?.state !== 'waiting') return
-  const result = await readInThread(deps, upload, () => wholeFile(deps, ctx, upload))
+  const waiting = await deps.db.inClub(ctx, async (tx) => {
+    const upload = await findUpload(tx, clubId, uploadId)
+    if (upload?.state !== 'waiting') return null
+    return { upload, test: (await candidatesOf(tx, clubId, upload.sessionId)).test }
+  })
+  if (!waiting) return
+  const { upload, test } = waiting
+  const result = await readInThread(deps, upload, test, () => wholeFile(deps, ctx, upload))
   await deps.db.inClub(ctx, async (tx) => {
-    if (result.ok) await keepTrial(tx, clubId, upload, result)
+    if (result.ok) await keepTrials(tx, clubId, upload, result)
     else await settle(tx, clubId, upload, { state: 'refused', error: result.error })
   })
 })
@@ -38,20 +45,25 @@ async function refuse(deps: Deps, clubId: string, uploadId: string, error: ReadE
   })
 }
 
-async function readInThread({ threads }: JobDeps, { fileName }: UploadRow, fetch: () => Promise<Uint8Array>) {
+async function readInThread(
+  { threads }: JobDeps,
+  { fileName }: UploadRow,
+  test: Test,
+  fetch: () => Promise<Uint8Array>,
+) {
   try {
-    return await threads.readFile(async () => ({ fileName, bytes: await fetch() }))
+    return await threads.readFile(async () => ({ fileName, test, bytes: await fetch() }))
   } catch (error) {
     if (error instanceof ThreadEnded) return { ok: false as const, error: readingEnded(error) }
     throw error
   }
 }
 
-async function keepTrial(tx: Tx, clubId: string, upload: UploadRow, read: FileRead): Promise<void> {
+async function keepTrials(tx: Tx, clubId: string, upload: UploadRow, read: FileRead): Promise<void> {
   const { format, columnMap, sampleRateHz } = read
   const notes = [...(upload.reading?.notes ?? []), ...read.notes]
   const reading = { notes, format, columnMap, sampleRateHz }
-  if (await settle(tx, clubId, upload, { state: 'read', reading })) await addTrial(tx, clubId, upload, read)
+  if (await settle(tx, clubId, upload, { state: 'read', reading })) await addTrials(tx, clubId, upload, read)
 }
 
 /** Takes the upload out of `waiting`; false where that was done already. */
