@@ -3,6 +3,7 @@ import { Button } from './button.tsx'
 import { EmptyState } from './empty-state.tsx'
 import { Sheet } from './sheet.tsx'
 import { Table, type Column } from './table.tsx'
+import { useFocusInRows } from './use-focus-in-rows.ts'
 
 interface ListSheetProps<Row> {
   /** What the table holds, for those who cannot see it. */
@@ -21,20 +22,23 @@ interface ListSheetProps<Row> {
 export function ListSheet<Row extends { id: string }>(props: ListSheetProps<Row>) {
   const { caption, columns, rows, sort, onSort, none } = props
   const order = parseSort(sort)
+  const focusKept = useFocusInRows()
   return (
     <Sheet flush>
-      {rows.length === 0 ? (
-        <EmptyState title={none.title} action={<Button onClick={none.onBack}>{none.back}</Button>} />
-      ) : (
-        <Table
-          caption={caption}
-          columns={columns}
-          rows={sortRows(rows, columns, order)}
-          rowKey={({ id }) => id}
-          sort={order}
-          onSort={(next) => onSort(formatSort(next))}
-        />
-      )}
+      <div {...focusKept}>
+        {rows.length === 0 ? (
+          <EmptyState title={none.title} action={<Button onClick={none.onBack}>{none.back}</Button>} />
+        ) : (
+          <Table
+            caption={caption}
+            columns={columns}
+            rows={sortRows(rows, columns, order)}
+            rowKey={({ id }) => id}
+            sort={order}
+            onSort={(next) => onSort(formatSort(next))}
+          />
+        )}
+      </div>
     </Sheet>
   )
 }

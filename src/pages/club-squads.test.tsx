@@ -105,7 +105,14 @@ describe('squads', () => {
     const { user } = open()
     await user.click(await screen.findByRole('button', { name: 'Archive Under 19' }))
     await waitFor(() => expect(screen.queryByRole('row', { name: /Under 19/ })).not.toBeInTheDocument())
+    expect(screen.getByRole('link', { name: 'Senior squad' })).toHaveFocus()
     await user.click(within(screen.getByText(/Under 19 is archived/).parentElement!).getByText('Undo'))
     await screen.findByRole('row', { name: /Under 19/ })
+  })
+
+  test('of the last squad leaves the focus on the way to all of them', async () => {
+    const { user } = open('/club/squads?search=senior')
+    await user.click(await screen.findByRole('button', { name: 'Archive Senior squad' }))
+    expect(await screen.findByRole('button', { name: 'Show all active squads' })).toHaveFocus()
   })
 })

@@ -11,16 +11,18 @@ interface Props {
   session: SessionSheet['session']
   counts: SheetCounts
   onClose: () => void
+  /** Closes as well. */
+  onPublished: () => void
 }
 
 /** Says what athletes will see and what stays out, then publishes. */
-export function PublishDialog({ session, counts, onClose }: Props) {
+export function PublishDialog({ session, counts, onClose, onPublished }: Props) {
   const announce = useAnnounce()
   const publish = usePublishSession((published) => {
     announce({
       text: `Published ${counted(published.trialsPublished, 'trial')} to ${counted(published.athletesPublished, 'athlete')}.`,
     })
-    onClose()
+    onPublished()
   })
   const { athletes, trials } = counts.toPublish
   const again = session.publishedAt !== null

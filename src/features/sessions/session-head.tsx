@@ -1,4 +1,4 @@
-import type { ReactNode } from 'react'
+import { useEffect, useRef, type ReactNode } from 'react'
 import type { SessionSheet } from '../../../shared/contracts/sessions.ts'
 import { useMe } from '../../api/account/get-me.ts'
 import { Button } from '../../components/button.tsx'
@@ -14,6 +14,8 @@ interface Props {
   addFiles: ReactNode
   onEdit: () => void
   onPublish: () => void
+  /** How often it was published on this page: each time the focus goes to the line that says so. */
+  publications: number
 }
 
 export function SessionHead({
@@ -22,6 +24,7 @@ export function SessionHead({
   addFiles,
   onEdit,
   onPublish,
+  publications,
 }: Props) {
   const context = [
     formatDate(session.date),
@@ -51,7 +54,7 @@ export function SessionHead({
         }
       />
       {session.note !== null && <p className="max-w-prose pb-3">{session.note}</p>}
-      <PublishedLine session={session} changed={changedSincePublished} />
+      <PublishedLine session={session} changed={changedSincePublished} publications={publications} />
     </>
   )
 }
@@ -74,11 +77,23 @@ function PublishButton({ session, changed, counts, onPublish }: PublishButtonPro
   )
 }
 
-function PublishedLine({ session, changed }: { session: SessionSheet['session']; changed: boolean }) {
+interface PublishedLineProps {
+  session: SessionSheet['session']
+  changed: boolean
+  publications: number
+}
+
+function PublishedLine({ session, changed, publications }: PublishedLineProps) {
   const timeZone = useMe().data?.club.timeZone ?? 'UTC'
+  const line = useRef<HTMLParagraphElement>(null)
+  const isPublished = session.publishedAt !== null
+  // The button that had the focus is gone with the act.
+  useEffect(() => {
+    if (publications > 0) line.current?.focus()
+  }, [publications, isPublished])
   if (session.publishedAt === null) return null
   return (
-    <p className="pb-3 text-small text-ink-2">
+    <p ref={line} tabIndex={-1} className="pb-3 text-small text-ink-2">
       Published {formatMoment(session.publishedAt, timeZone)}
       {session.publishedByName !== null && ` by ${session.publishedByName}`}.{' '}
       {changed && 'What athletes read is older than this sheet: publish again to show them this one.'}

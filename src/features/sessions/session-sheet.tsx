@@ -27,6 +27,11 @@ type Open = { dialog: 'publish' | 'edit' } | { dialog: 'set-aside' | 'move'; tri
 export function SessionSheet({ sheet, files, queue, addFiles }: Props) {
   const [open, setOpen] = useState<Open>(null)
   const close = () => setOpen(null)
+  const [publications, setPublications] = useState(0)
+  const closePublished = () => {
+    close()
+    setPublications((n) => n + 1)
+  }
   const { rows, columns, tray } = sheetRows(sheet)
   const counts = sheetCounts(sheet)
   return (
@@ -37,6 +42,7 @@ export function SessionSheet({ sheet, files, queue, addFiles }: Props) {
         addFiles={addFiles}
         onEdit={() => setOpen({ dialog: 'edit' })}
         onPublish={() => setOpen({ dialog: 'publish' })}
+        publications={publications}
       />
       <Tray trials={tray} uploads={sheet.uploads} athletes={sheet.athletes} files={files} queue={queue} />
       {rows.length === 0 ? (
@@ -57,7 +63,7 @@ export function SessionSheet({ sheet, files, queue, addFiles }: Props) {
       )}
       {sheet.trials.length > 0 && <SheetFoot />}
       {open?.dialog === 'publish' && (
-        <PublishDialog session={sheet.session} counts={counts} onClose={close} />
+        <PublishDialog session={sheet.session} counts={counts} onClose={close} onPublished={closePublished} />
       )}
       {open?.dialog === 'edit' && <EditSessionDialog session={sheet.session} onClose={close} />}
       {open?.dialog === 'set-aside' && <SetAsideDialog trial={open.trial} onClose={close} />}
