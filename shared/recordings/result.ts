@@ -68,10 +68,23 @@ export interface WorkbookFormat {
   headerLine: number | null
 }
 
-export type FileFormat = DelimitedFormat | WorkbookFormat
+/** How a C3D file stores its numbers, and the force plates in it. */
+export interface C3dFormat {
+  kind: 'c3d'
+  processor: 'intel' | 'dec' | 'mips'
+  storage: 'integer' | 'float'
+  plates: { number: number; type: number; labels: string[] }[]
+  /** 1: the headings are made by the reader, over a sample a row. */
+  headerLine: number | null
+}
+
+export type FileFormat = DelimitedFormat | WorkbookFormat | C3dFormat
 
 /** How a file is built, before its headings are found. */
-export type TableFormat = Omit<DelimitedFormat, 'headerLine'> | Omit<WorkbookFormat, 'headerLine'>
+export type TableFormat =
+  | Omit<DelimitedFormat, 'headerLine'>
+  | Omit<WorkbookFormat, 'headerLine'>
+  | Omit<C3dFormat, 'headerLine'>
 
 export interface ReadSuccess {
   ok: true
