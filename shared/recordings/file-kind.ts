@@ -28,8 +28,12 @@ export function byteOrderMarkLength(bytes: Uint8Array): number {
 export function kindIfNotText(bytes: Uint8Array): string | null {
   const known = SIGNATURES.find((signature) => beginsWith(bytes, signature.bytes, signature.at))
   if (known) return known.kind
-  const looked = bytes.subarray(0, LOOKED_AT)
+  const looked = Math.min(bytes.length, LOOKED_AT)
   // Text holds tabs, line breaks and form feeds, and no other control byte.
-  const controls = looked.filter((byte) => byte < 0x20 && (byte < 0x09 || byte > 0x0d)).length
-  return controls > looked.length / 200 ? 'binary data of no known kind' : null
+  let controls = 0
+  for (let i = 0; i < looked; i++) {
+    const byte = bytes[i] as number
+    if (byte < 0x20 && (byte < 0x09 || byte > 0x0d)) controls++
+  }
+  return controls > looked / 200 ? 'binary data of no known kind' : null
 }

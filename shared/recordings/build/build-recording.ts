@@ -52,12 +52,7 @@ function trimEnds(columns: readonly Float64Array[]): { start: number; end: numbe
 function cleanRows(body: Body, wanted: readonly number[]): Columns {
   const notes: Note[] = []
   const cleaned = body.columns.map((column) => {
-    let [least, greatest] = [Infinity, -Infinity]
-    for (const value of column) {
-      if (value < least) least = value
-      if (value > greatest) greatest = value
-    }
-    const { values, found } = withoutSentinels(column, least, greatest)
+    const { values, found } = withoutSentinels(column)
     if (found) notes.push(readingNotes.sentinelsLeftOut(String(found.value), found.count))
     return values
   })
@@ -138,8 +133,9 @@ function channelsOf(
       force = filled.filled.map(toMillinewtonPrecision)
     }
     const isDownward = its.some((one) => one.downward)
-    if (!isDownward && putUpright(force, raw)) made.turned.push(channel)
-    if (wasTared(force, base.sampleRateHz)) made.tared.push(channel)
+    const isTurned = !isDownward && putUpright(force, raw)
+    if (isTurned) made.turned.push(channel)
+    if (wasTared(force, isTurned ? -raw.greatest : raw.least, base.sampleRateHz)) made.tared.push(channel)
     made.channels[channel] = force
   }
   checkFilled(made.filledSamples, longestRun, base, body)

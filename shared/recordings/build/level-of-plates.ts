@@ -30,7 +30,8 @@ const LOOKED_AT = 400
  * Whether a plate was set to zero with the athlete on it: usually it reads about nothing, and for as long as a flight
  * it rests at minus a weight.
  */
-export function wasTared(force: Float64Array, sampleRateHz: number): boolean {
+export function wasTared(force: Float64Array, least: number, sampleRateHz: number): boolean {
+  if (least > -LEAST_WEIGHT_N) return false
   const step = Math.max(1, Math.floor(force.length / LOOKED_AT))
   const some: number[] = []
   for (let at = 0; at < force.length; at += step) some.push(force[at] as number)

@@ -36,7 +36,13 @@ function standsApart(values: Float64Array, mark: number): boolean {
 }
 
 /** Blanks out a mark for missing samples: a well-known one that is the column's least or greatest number by far. */
-export function withoutSentinels(values: Float64Array, least: number, greatest: number): WithoutSentinels {
+export function withoutSentinels(values: Float64Array): WithoutSentinels {
+  let [least, greatest] = [Infinity, -Infinity]
+  for (let i = 0; i < values.length; i++) {
+    const value = values[i] as number
+    if (value < least) least = value
+    if (value > greatest) greatest = value
+  }
   const mark = SENTINELS.has(least) ? least : SENTINELS.has(greatest) ? greatest : NaN
   if (Number.isNaN(mark) || least === greatest || !standsApart(values, mark)) return { values, found: null }
   let count = 0

@@ -71,9 +71,14 @@ function pastMidnight(stamps: Float64Array): Float64Array {
   })
 }
 
+function hasBlank(values: Float64Array): boolean {
+  for (let i = 0; i < values.length; i++) if (Number.isNaN(values[i])) return true
+  return false
+}
+
 function fromStamps(time: OpenTime, rows: Rows, metadata: Metadata): TimeOfRows {
   const raw = rows.columnOf(time.index)
-  const whole = raw.some(Number.isNaN) ? fillBlanks(raw).filled : raw
+  const whole = hasBlank(raw) ? fillBlanks(raw).filled : raw
   const unit = time.unit ?? unitByStep(whole, time.name)
   if (unit === 'samples') throw new RangeError('A count of samples is no time stamp.')
   const seconds = inSeconds(unit === 'clock' ? pastMidnight(whole) : whole, unit)

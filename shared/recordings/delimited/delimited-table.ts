@@ -3,6 +3,7 @@ import { ReadFault } from '../errors.ts'
 import type { DelimitedFormat } from '../result.ts'
 import { shown } from '../safe-text.ts'
 import { layoutOf } from '../table/layout.ts'
+import type { Layout } from '../table/layout.ts'
 import { cellKind, numberStyleOf } from '../table/number-text.ts'
 import type { NumberStyle } from '../table/number-text.ts'
 import { TOP_ROWS } from '../table/table.ts'
@@ -26,6 +27,7 @@ interface Candidate {
   delimiter: Delimiter
   style: NumberStyle
   top: TopLine[]
+  layout: Layout | null
   /** How much of a table the top is. */
   score: number
   /** Headings stand over all columns of numbers: no other delimiter need be tried. */
@@ -38,11 +40,11 @@ const LF = 0x0a
 const CR = 0x0d
 
 /** The bytes of the first lines, a few more than are looked at: Papa Parse takes apart all that it is given. */
-function topBytes(bytes: Uint8Array): { piece: Uint8Array; isWhole: boolean } {
+function topBytes(bytes: Uint8Array, lines: number): { piece: Uint8Array; isWhole: boolean } {
   const head = bytes.subarray(0, HEAD_BYTES)
   const lineEnd = head.includes(LF) ? LF : CR
   let end = -1
-  for (let line = 0; line <= TOP_ROWS; line++) {
+  for (let line = 0; line <= lines; line++) {
     end = head.indexOf(lineEnd, end + 1)
     if (end < 0) return { piece: head, isWhole: head.length === bytes.length }
   }
@@ -131,9 +133,9 @@ function candidateFor(
 }
 
 /** Numbers over words in the rows of the body; headings over all of its columns speak for a delimiter too. */
-function judge(top: readonly TopLine[]): Pick<Candidate, 'score' | 'isClear'> {
+function judge(top: readonly TopLine[]): Pick<Candidate, 'layout' | 'score' | 'isClear'> {
   const layout = layoutOf(top)
-  if (!layout) return { score: -Infinity, isClear: false }
+  if (!layout) return { layout, score: -Infinity, isClear: false }
   let [numbers, texts] = [0, 0]
   for (const { kinds } of top.slice(layout.bodyRow)) {
     for (const kind of kinds) {
@@ -147,7 +149,7 @@ function judge(top: readonly TopLine[]): Pick<Candidate, 'score' | 'isClear'> {
   const wordsAbove = layout.preamble.findLast((row) => row.kinds.some((kind) => kind !== 'blank'))
   const isOpen = layout.headerLine === null && !wordsAbove?.kinds.includes('text')
   const share = isNamed ? 1.25 : isOpen ? 1 : 0.4
-  return { score: (numbers - texts) * share, isClear: isNamed && texts === 0 }
+  return { layout, score: (numbers - texts) * share, isClear: isNamed && texts === 0 }
 }
 
 /** The delimiter under which the top is most of a table; those that need no mark are tried where the marks leave doubt. */
@@ -213,6 +215,21 @@ function bodyReader(decoded: DecodedBytes, { delimiter, style, top }: Candidate)
   }
 }
 
+/** Rows that are enough where they are a table with its headings already: taking rows apart is slow. */
+const FEW_ROWS = 24
+
+/** The top of a file as a table: a few rows where they are clear, else all that are looked at. */
+function topOf(decoded: DecodedBytes): { best: Candidate; text: string } {
+  for (const lines of [FEW_ROWS, TOP_ROWS]) {
+    const { piece, isWhole } = topBytes(decoded.bytes, lines)
+    const text = oneCharacterAByte(piece)
+    const best = bestCandidate(text, decoded, isWhole)
+    const rows = best.top.length - (best.layout?.bodyRow ?? best.top.length)
+    if (lines === TOP_ROWS || (best.isClear && rows >= FEW_ROWS / 2)) return { best, text }
+  }
+  throw new RangeError('The top of a file is looked at twice at most.')
+}
+
 /** A file whose numbers no delimiter makes sense of. */
 function noTable(decoded: DecodedBytes): ReadFault {
   const seen = shown(decoded.decode(decoded.bytes.subarray(0, 240)))
@@ -233,9 +250,7 @@ function noTable(decoded: DecodedBytes): ReadFault {
  */
 export function delimitedTable(file: Uint8Array): Table {
   const decoded = decodeBytes(file)
-  const { piece, isWhole } = topBytes(decoded.bytes)
-  const text = oneCharacterAByte(piece)
-  const best = bestCandidate(text, decoded, isWhole)
+  const { best, text } = topOf(decoded)
   if (best.score === -Infinity) throw noTable(decoded)
   const { encoding, byteOrderMark } = decoded
   return {
@@ -248,6 +263,7 @@ export function delimitedTable(file: Uint8Array): Table {
       decimalMark: best.style.decimal,
     },
     top: best.top,
+    layout: best.layout,
     numbers: bodyReader(decoded, best),
   }
 }

@@ -47,10 +47,14 @@ export function isUtf16(bytes: Uint8Array): boolean {
   return utf16Of(bytes) !== null
 }
 
+function isAscii(bytes: Uint8Array): boolean {
+  let all = 0
+  for (let i = 0; i < bytes.length; i++) all |= bytes[i] as number
+  return all < 0x80
+}
+
 function isUtf8(bytes: Uint8Array): boolean {
-  let ascii = true
-  for (const byte of bytes) if (byte >= 0x80) ascii = false
-  if (ascii) return true
+  if (isAscii(bytes)) return true
   try {
     // A character cut by the end of the piece is no fault.
     new TextDecoder('utf-8', { fatal: true }).decode(bytes, { stream: true })

@@ -47,24 +47,68 @@ class BodyScanner {
     let capacity = this.likelyRows(wanted.length)
     let columns: NumberColumns = wanted.map(() => new Float64Array(capacity))
     let rows = 0
-    const lastWanted = wanted[wanted.length - 1] ?? 0
+    const most = MAX_SAMPLES
     while (this.toNextRow()) {
-      if (rows > MAX_SAMPLES) break
+      if (rows > most) break
       if (rows === capacity) {
         capacity *= 2
         columns = columns.map((column) => grown(column, capacity))
       }
-      let next = 0
-      for (let index = 0; index <= lastWanted; index++) {
-        if (index > 0 && !this.passDelimiter()) return null
-        if (index === wanted[next]) {
-          if (!this.number(columns[next++] as Float64Array, rows)) return null
-        } else if (!this.skipCell()) return null
-      }
-      if (!this.skipToLineEnd()) return null
+      if (!this.row(columns, rows, wanted)) return null
       rows++
     }
     return columns.map((column) => column.subarray(0, rows))
+  }
+
+  /**
+   * Reads one row. The loop over the figures of a cell stands here and not in a function of its own: it is nearly all
+   * of the work of reading a file.
+   */
+  private row(columns: NumberColumns, row: number, wanted: readonly number[]): boolean {
+    const { bytes, delimiter, decimal } = this
+    const count = wanted.length
+    let index = 0
+    for (let next = 0; next < count; next++) {
+      const target = wanted[next] as number
+      for (; index < target; index++) if (!this.skipCell() || !this.passDelimiter()) return false
+      let at = this.at
+      let byte = bytes[at] as number
+      const isNegative = byte === MINUS
+      if (isNegative) byte = bytes[++at] as number
+      let mantissa = 0
+      let digits = -at
+      let digit = byte - ZERO
+      while (digit >= 0 && digit <= 9) {
+        mantissa = (mantissa * 10 + digit) | 0
+        byte = bytes[++at] as number
+        digit = byte - ZERO
+      }
+      digits += at
+      let decimals = 0
+      if (byte === decimal) {
+        decimals = -(at + 1)
+        byte = bytes[++at] as number
+        digit = byte - ZERO
+        while (digit >= 0 && digit <= 9) {
+          mantissa = (mantissa * 10 + digit) | 0
+          byte = bytes[++at] as number
+          digit = byte - ZERO
+        }
+        decimals += at
+        digits += decimals
+      }
+      const column = columns[next] as Float64Array
+      const isShort = digits > 0 && digits <= SHORT_DIGITS
+      if (isShort && (byte === delimiter || byte === LF || byte === CR)) {
+        const magnitude = mantissa / (POWERS[decimals] as number)
+        column[row] = isNegative ? -magnitude : magnitude
+        this.at = at
+      } else if (this.slowNumber()) column[row] = this.value
+      else return false
+      index++
+      if (next < count - 1 && !this.passDelimiter()) return false
+    }
+    return this.skipToLineEnd()
   }
 
   /** Rows there would be if all were as long as the first, and a few more; a cell takes two bytes at least. */
@@ -120,47 +164,6 @@ class BodyScanner {
       byte = bytes[++at]
     }
     this.at = at
-    return true
-  }
-
-  /** Reads a number or a blank into `column`; false when the cell is anything else. */
-  private number(column: Float64Array, row: number): boolean {
-    const { bytes, delimiter, decimal } = this
-    let at = this.at
-    let byte = bytes[at] as number
-    const isNegative = byte === MINUS
-    if (isNegative) byte = bytes[++at] as number
-    const start = at
-    let mantissa = 0
-    let digit = byte - ZERO
-    while (digit >= 0 && digit <= 9) {
-      mantissa = (mantissa * 10 + digit) | 0
-      byte = bytes[++at] as number
-      digit = byte - ZERO
-    }
-    let digits = at - start
-    let decimals = 0
-    if (byte === decimal) {
-      const point = at
-      byte = bytes[++at] as number
-      digit = byte - ZERO
-      while (digit >= 0 && digit <= 9) {
-        mantissa = (mantissa * 10 + digit) | 0
-        byte = bytes[++at] as number
-        digit = byte - ZERO
-      }
-      decimals = at - point - 1
-      digits += decimals
-    }
-    const isShort = digits > 0 && digits <= SHORT_DIGITS
-    if (isShort && (byte === delimiter || byte === LF || byte === CR)) {
-      const magnitude = mantissa / (POWERS[decimals] as number)
-      column[row] = isNegative ? -magnitude : magnitude
-      this.at = at
-      return true
-    }
-    if (!this.slowNumber()) return false
-    column[row] = this.value
     return true
   }
 

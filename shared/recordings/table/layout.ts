@@ -22,11 +22,12 @@ const BODY_ROWS = 10
 /** Blank rows that may stand between headings and numbers. */
 const BLANK_ROWS = 2
 
-const holdsNumber = (row: TopRow, column: number): boolean =>
-  row.kinds[column] === 'number' || row.kinds[column] === 'clock'
-
-function numbersIn(row: TopRow): number[] {
-  return row.kinds.flatMap((kind, column) => (kind === 'number' || kind === 'clock' ? [column] : []))
+function numbersIn({ kinds }: TopRow): number[] {
+  const numbers: number[] = []
+  for (let column = 0; column < kinds.length; column++) {
+    if (kinds[column] === 'number' || kinds[column] === 'clock') numbers.push(column)
+  }
+  return numbers
 }
 
 const textsIn = (row: TopRow): number => row.kinds.reduce((n, kind) => n + (kind === 'text' ? 1 : 0), 0)
@@ -196,9 +197,4 @@ function lastHeading(top: readonly TopRow[], from: number): number | null {
 /** Headings some of which are small whole numbers: `Time;1;2`. */
 function isNumbered(row: TopRow): boolean {
   return row.cells.every((cell, i) => row.kinds[i] !== 'number' || /^\s*\d{1,2}\s*$/u.test(cell))
-}
-
-/** Whether a row of the body holds a number at all. */
-export function holdsNumbers(row: TopRow, numeric: readonly number[]): boolean {
-  return numeric.some((column) => holdsNumber(row, column))
 }

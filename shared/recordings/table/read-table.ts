@@ -13,7 +13,6 @@ import type { ReadError, ReadErrorCode } from '../errors.ts'
 import { readingNotes } from '../notes.ts'
 import type { ColumnMap, FileFormat, MapRequest, MappedForce, ReadHints, ReadResult } from '../result.ts'
 import { listed } from '../safe-text.ts'
-import { layoutOf } from './layout.ts'
 import type { Layout } from './layout.ts'
 import { readMetadata } from './metadata.ts'
 import type { Metadata } from './metadata.ts'
@@ -53,7 +52,7 @@ function contentReader(table: Table, { bodyRow, numeric }: Layout): (index: numb
 
 /** @throws ReadFault `no-header` where no rows hold numbers */
 function open(table: Table): OpenTable {
-  const layout = layoutOf(table.top)
+  const { layout } = table
   if (!layout) throw new ReadFault('no-header', 'No table of numbers under headings was found.')
   const { names, units, headerLine, numeric, preamble } = layout
   refuseCommasAsBoth(table, layout)

@@ -1,5 +1,6 @@
 import { RowCollector } from '../delimited/parse-numbers.ts'
 import type { WorkbookFormat } from '../result.ts'
+import { layoutOf } from './layout.ts'
 import { cellKind, numberStyleOf } from './number-text.ts'
 import { TOP_ROWS } from './table.ts'
 import type { CellKind, Table, TopRow } from './table.ts'
@@ -28,6 +29,7 @@ export function tableOfRows(
   return {
     format,
     top,
+    layout: layoutOf(top),
     numbers: (from, wanted) => {
       const collector = new RowCollector(wanted, style.decimal)
       for (let at = from; at < rows.length; at++)

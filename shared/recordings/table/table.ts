@@ -1,3 +1,4 @@
+import type { Layout } from './layout.ts'
 import type { TableFormat } from '../result.ts'
 
 /** What a cell's text is: a number, a time of day, nothing (or a word for a missing sample), or other text. */
@@ -44,6 +45,8 @@ export interface Table {
   format: TableFormat
   /** The first rows; at most `TOP_ROWS`. */
   top: readonly TopRow[]
+  /** Where headings and numbers stand in `top`; null where it holds no table of numbers. */
+  layout: Layout | null
   /**
    * Reads the columns of `wanted` (ascending, counted from 0) from row `from` of `top` on, to the end of the file.
    * @throws ReadFault `corrupt-file` where a row of text stands among the numbers
