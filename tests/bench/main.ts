@@ -1,6 +1,7 @@
 import { benchCoverage, coverageParts } from '../reference/coverage-bench.ts'
 import { benchEngine } from './engine.ts'
 import { benchPageWeight } from './page-weight.ts'
+import { benchRecompute } from './recompute.ts'
 import { benchUpload } from './upload.ts'
 
 interface Bench {
@@ -14,6 +15,7 @@ const benches: Record<string, Bench> = {
   coverage: { run: benchCoverage, parts: coverageParts },
   engine: { run: benchEngine },
   'page-weight': { run: benchPageWeight },
+  recompute: { run: benchRecompute },
   upload: { run: benchUpload },
 }
 

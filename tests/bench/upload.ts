@@ -4,12 +4,10 @@ import { createDatabase } from '../../server/db/database.ts'
 import { ensureClient } from '../../server/setup/client-build.mjs'
 import { pause } from '../../server/setup/pause.mjs'
 import { startTestCluster } from '../../server/setup/test-cluster.mjs'
-import { makeJump } from '../../seed/synthetic/jump.ts'
-import { recordJump } from '../../seed/synthetic/record.ts'
-import { writeDelimited } from '../../seed/synthetic/write-delimited.ts'
 import { ApiClient } from '../api/harness/api-client.ts'
 import { dropFile, startTestingDay, type TestingDay } from '../api/harness/testing-day.ts'
 import { startProduct, type Product } from '../setup/product.ts'
+import { eightSeconds } from './eight-seconds.ts'
 
 const files = 40
 /** As many at once as the drop zone sends. */
@@ -63,13 +61,6 @@ async function measure(product: Product): Promise<void> {
   } finally {
     await db.close()
   }
-}
-
-/** A recording of 8 s at 1000 Hz on two plates; each seed is another one. */
-function eightSeconds(seed: number): Uint8Array {
-  const noise = { whiteNoiseN: 1 }
-  const jump = makeJump({ takeoffVelocity: 2.2 + (seed % 8) * 0.1 }, seed)
-  return writeDelimited(recordJump(jump, { durationS: 8 }, { left: noise, right: noise }, seed))
 }
 
 async function timeDrop(day: TestingDay, drop: { name: string; bytes: Uint8Array }[]): Promise<number> {
