@@ -33,7 +33,8 @@ export const signOut = endpoint({
   response: noContent,
   repeat: 'natural',
 })
-export const getMe = endpoint({ method: 'GET', path: '/api/me', access: 'signed-in', response: Me })
+/** Null for nobody: every page asks, also of those who have yet to sign in. */
+export const getMe = endpoint({ method: 'GET', path: '/api/me', access: 'public', response: Me.nullable() })
 
 export const ChangePasswordForm = z.strictObject({
   current: z.string().min(1, 'Give your password').max(200),
@@ -43,6 +44,8 @@ export const changePassword = endpoint({
   method: 'POST',
   path: '/api/me/password',
   access: 'signed-in',
+  // A person's own, whatever the club's standing.
+  whileReadingOnly: 'allowed',
   body: ChangePasswordForm,
   response: noContent,
   repeat: 'natural',

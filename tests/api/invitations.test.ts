@@ -95,7 +95,7 @@ describe('an invitation', () => {
       person: { name: 'Guest Chosen', email: form.email },
       roles: ['coach', 'physio'],
     })
-    expect((await browser.call(getMe)).person.id).toBe(me.person.id)
+    expect((await browser.call(getMe))?.person.id).toBe(me.person.id)
     await harness.client().signIn(form.email, body.password)
     expect((await admin.call(listPeople)).invitations.map(({ email }) => email)).not.toContain(form.email)
   })

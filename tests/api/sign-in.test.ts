@@ -102,7 +102,7 @@ describe('signing in', () => {
     await buildMembership(harness.db, closed, person.id, ['admin'], false)
     await buildMembership(harness.db, clubId, person.id, ['coach'])
     const browser = await harness.signedIn(person)
-    expect((await browser.call(getMe)).club.id).toBe(clubId)
+    expect((await browser.call(getMe))?.club.id).toBe(clubId)
   })
 
   it('tells a person whose place was closed, and only with the right password', async () => {
@@ -143,19 +143,19 @@ describe('a signed-in person', () => {
     })
     const cookie = String(headers['set-cookie']).split(';')[0] ?? ''
     await browser.call(signOut)
-    expect(await browser.refusal(getMe)).toEqual([401, 'not-signed-in'])
+    expect(await browser.call(getMe)).toBeNull()
     expect((await harness.client().send(getMe, { headers: { Cookie: cookie } })).status).toBe(200)
     await harness.client().send(signOut, { headers: { Cookie: cookie } })
-    expect((await harness.client().send(getMe, { headers: { Cookie: cookie } })).status).toBe(401)
+    expect(await harness.client().call(getMe, { headers: { Cookie: cookie } })).toBeNull()
   })
 
   it('is signed out at the next request after the membership is closed', async () => {
     const person = await buildMember(harness.db, clubId, ['coach'])
     const browser = await harness.signedIn(person)
     await setActive(person.id, false)
-    expect(await browser.refusal(getMe)).toEqual([401, 'not-signed-in'])
+    expect(await browser.call(getMe)).toBeNull()
     await setActive(person.id, true)
-    expect(await browser.refusal(getMe)).toEqual([401, 'not-signed-in'])
+    expect(await browser.call(getMe)).toBeNull()
   })
 
   it('has another role at the next request after it was changed', async () => {
@@ -167,7 +167,7 @@ describe('a signed-in person', () => {
         .set({ roles: ['athlete'] })
         .where(eq(memberships.personId, person.id)),
     )
-    expect((await browser.call(getMe)).roles).toEqual(['athlete'])
+    expect((await browser.call(getMe))?.roles).toEqual(['athlete'])
   })
 
   it('changes the password with the present one, and is signed out everywhere else', async () => {
@@ -179,8 +179,8 @@ describe('a signed-in person', () => {
       'wrong-credentials',
     ])
     await here.call(changePassword, { body: { current: builtPassword, next } })
-    expect((await here.call(getMe)).person.id).toBe(person.id)
-    expect(await elsewhere.refusal(getMe)).toEqual([401, 'not-signed-in'])
+    expect((await here.call(getMe))?.person.id).toBe(person.id)
+    expect(await elsewhere.call(getMe)).toBeNull()
     await harness.client().signIn(person.email, next)
   })
 })

@@ -24,7 +24,7 @@ export const accountRoutes: Route[] = [
     await closeSession(req, res)
     return null
   }),
-  implement(getMe, ({ deps, ctx }) => describeMe(deps, ctx)),
+  implementPublic(getMe, async ({ deps, req }) => (req.user ? describeMe(deps, req.user) : null)),
   implement(changePassword, async ({ deps, ctx, body, req }) => {
     await changeOwnPassword(deps, ctx, body, req.sessionID)
     return null

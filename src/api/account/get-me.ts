@@ -1,26 +1,23 @@
 import { queryOptions, useQuery, useQueryClient, type QueryClient } from '@tanstack/react-query'
 import { getMe, type Me } from '../../../shared/contracts/account.ts'
 import type { Role } from '../../../shared/contracts/roles.ts'
-import { isApiError } from '../api-error.ts'
+import { ApiError } from '../api-error.ts'
 import { call } from '../client.ts'
 
 export const meKey = ['me'] as const
 
 /**
- * Who is signed in; null for nobody. Once somebody is, a "not signed in" is thrown like any other refusal: the
- * sign-in has ended under a page that may hold unsaved work, which must not be swept away.
+ * Who is signed in; null for nobody. Once somebody is, nobody is an error like any "not signed in": the sign-in has
+ * ended under a page that may hold unsaved work, which must not be swept away.
  */
 export function meQuery(queryClient: QueryClient) {
   return queryOptions({
     queryKey: meKey,
     queryFn: async ({ signal }): Promise<Me | null> => {
-      try {
-        return await call(getMe, {}, { signal })
-      } catch (error) {
-        const nobodyYet = !queryClient.getQueryData<Me | null>(meKey)
-        if (nobodyYet && isApiError(error, 'not-signed-in')) return null
-        throw error
-      }
+      const me = await call(getMe, {}, { signal })
+      if (me === null && queryClient.getQueryData<Me | null>(meKey))
+        throw new ApiError('not-signed-in', 'Your sign-in has ended.')
+      return me
     },
   })
 }

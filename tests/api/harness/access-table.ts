@@ -43,7 +43,7 @@ export const accessTable: Record<string, AccessLine> = {
     request: () => ({ params: token, body: { name: 'Guest', password } }),
     elsewhere: 'own',
   },
-  getMe: { may: 'members', request: nothing, elsewhere: 'own' },
+  getMe: { may: 'anybody', request: nothing, elsewhere: 'own' },
   changePassword: {
     may: 'members',
     request: form({ current: 'not the password', next: password }),
