@@ -1,29 +1,10 @@
 import { readdirSync, readFileSync } from 'node:fs'
 import { join } from 'node:path'
 import { describe, expect, it } from 'vitest'
-import type { ForceChannel } from '../../shared/mechanics/types.ts'
 import { readErrorCodes } from '../../shared/recordings/errors.ts'
-import type { ReadError } from '../../shared/recordings/errors.ts'
 import { readRecording } from '../../shared/recordings/read-recording.ts'
-import type { FileFormat, ReadHints } from '../../shared/recordings/result.ts'
-
-/** What `expected.json` of a numbered folder says; beside it lies `input.*`, or `input` says how to make it. */
-interface Case {
-  fileName?: string
-  hints?: ReadHints
-  /** A file too large to keep: the head, then the repeated text up to so many bytes. */
-  input?: { head: string; repeat: string; bytes: number }
-  reading?: {
-    sampleRateHz: number
-    filledSamples: number
-    channels: Partial<Record<ForceChannel, number[]>>
-    /** Codes, in order. */
-    notes: string[]
-    format?: Partial<FileFormat>
-    forces?: { index: number; unit: string; channel: ForceChannel }[]
-  }
-  error?: Partial<ReadError>
-}
+import type { Case } from './case.ts'
+import { madeCases } from './make/all.ts'
 
 const here = import.meta.dirname
 const folders = readdirSync(here, { withFileTypes: true })
@@ -60,6 +41,7 @@ describe('reading', () => {
       expect(result.error).toMatchObject(expected.error)
       expect(result.error.sentence).toMatch(/^[A-Z0-9].*\.$/u)
       expect(result.error.remedy).toMatch(/\.$/u)
+      if (expected.proposal) expect(result.needsMap?.proposal.map).toMatchObject(expected.proposal)
       return
     }
     if (!result.ok) throw new Error(`${result.error.code}: ${result.error.sentence}`)
@@ -77,6 +59,17 @@ describe('reading', () => {
     })
     if (expected.reading?.format) expect(result.format).toMatchObject(expected.reading.format)
     if (expected.reading?.forces) expect(result.columnMap.forces).toMatchObject(expected.reading.forces)
+    if (expected.reading?.time) expect(result.columnMap.time).toMatchObject(expected.reading.time)
+    if (expected.reading?.metadata) expect(result.metadata).toStrictEqual(expected.reading.metadata)
+    // The map as it was taken reads the same file to the same numbers.
+    const again = readRecording(bytes, fileName, { ...expected.hints, map: result.columnMap })
+    expect(again.ok && again.recording.channels).toStrictEqual(channels)
+  })
+
+  it.each(madeCases)('$folder lies there as it is made', ({ folder, bytes, expected }) => {
+    const stored = load(folder)
+    expect(Buffer.compare(stored.bytes, bytes)).toBe(0)
+    expect(stored.expected).toStrictEqual(JSON.parse(JSON.stringify(expected)))
   })
 
   it('has a case for every error that the catalogue knows', () => {

@@ -69,7 +69,10 @@ function assignUnnamed(columns: ForceColumn[], contentOf: ContentOf, line: numbe
   const total = columns.length > 2 ? sumAmong(columns, contentOf) : undefined
   const parts = columns.filter((column) => column !== total)
   const beside = total ? [readingNotes.totalNotAdded(total.name)] : []
-  if (parts.length === 2) {
+  const [first, second] = parts
+  if (parts.length === 2 && first && second) {
+    // The same force twice, raw and smoothed, is not that of two plates.
+    if (isSumOf(contentOf(first.index), [contentOf(second.index)])) throw ambiguous(columns, line)
     const notes = [readingNotes.feetUnknown(namesOf(parts)), ...beside]
     return { channels: [{ channel: 'total', columns: parts }], notes, ...(total ? { total } : {}) }
   }

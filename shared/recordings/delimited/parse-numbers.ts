@@ -8,6 +8,14 @@ import type { Body, UnreadableCell } from '../table/table.ts'
 import { lineEndFor, splitAtBlanks } from './lines.ts'
 import type { PlainStyle } from './scan-numbers.ts'
 
+interface HeldRow {
+  cells: readonly (string | number)[]
+  values: number[]
+  line: number
+  /** It holds no number at all. */
+  isStray: boolean
+}
+
 /**
  * Collects the numbers of rows of cells, whatever took the rows apart: words for missing samples, ragged rows, marks
  * between thousands, times of day, a footer.
@@ -17,9 +25,9 @@ export class RowCollector {
   private readonly lines: number[] = []
   private firstUnreadable: UnreadableCell | null = null
   private thousands = false
-  /** Rows without any number, held back: at the end they are a footer, in the middle damage. */
-  private strays: { line: number; text: string }[] = []
-  private strayCount = 0
+  /** Rows that begin with words, held back: at the end they are a footer, among others damage. */
+  private held: HeldRow[] = []
+  private heldCount = 0
   private readonly wanted: readonly number[]
   private readonly decimal: DecimalMark
 
@@ -40,18 +48,15 @@ export class RowCollector {
   take(cells: readonly (string | number)[], line: number): void {
     if (cells.every((cell) => cell === '' || cell === '\r')) return
     const values = this.wanted.map((index) => this.valueOf(cells[index] ?? ''))
-    if (values.every(Number.isNaN) && cells.some((cell) => this.isText(cell))) {
-      this.strayCount++
-      if (this.strays.length === 0) this.strays.push({ line, text: cells.join(' ') })
+    const numbers = values.filter((value) => !Number.isNaN(value)).length
+    const texts = this.wanted.filter((index) => this.isText(cells[index] ?? '')).length
+    const isStray = numbers === 0 && cells.some((cell) => this.isText(cell))
+    if (isStray || (numbers <= texts && this.isText(cells[0] ?? ''))) {
+      this.hold({ cells, values, line, isStray })
       return
     }
-    this.refuseStrays()
-    this.lines.push(line)
-    values.forEach((value, i) => {
-      this.columns[i]?.push(value)
-      if (Number.isNaN(value))
-        this.noteUnreadable(cells[this.wanted[i] ?? -1] ?? '', line, this.wanted[i] ?? 0)
-    })
+    this.release()
+    this.keep({ cells, values, line })
   }
 
   body(): Pick<Body, 'columns' | 'lineOf' | 'firstUnreadable' | 'linesAfter'> & { thousands: boolean } {
@@ -60,7 +65,7 @@ export class RowCollector {
       columns: this.columns.map((column) => Float64Array.from(column)),
       lineOf: (row) => lines[row] ?? 0,
       firstUnreadable: this.firstUnreadable,
-      linesAfter: { count: this.strayCount, first: this.strays[0]?.text ?? '' },
+      linesAfter: { count: this.heldCount, first: this.held[0]?.cells.join(' ') ?? '' },
       thousands: this.thousands,
     }
   }
@@ -82,15 +87,33 @@ export class RowCollector {
     this.firstUnreadable = { line, column: column + 1, seen: shown(cell) }
   }
 
-  private refuseStrays(): void {
-    const [stray] = this.strays
-    if (!stray) return
-    const seen = shown(stray.text)
-    throw new ReadFault(
-      'corrupt-file',
-      `Line ${stray.line} stands among the numbers and holds none: “${seen}”.`,
-      { line: stray.line, seen },
-    )
+  private hold(row: HeldRow): void {
+    this.heldCount++
+    // After one row of words the first is all that is told of any number of them.
+    if (!this.held.some(({ isStray }) => isStray)) this.held.push(row)
+  }
+
+  /** A row of numbers follows: what was held back is no footer. */
+  private release(): void {
+    if (this.heldCount === 0) return
+    const stray = this.held.find(({ isStray }) => isStray)
+    if (stray) {
+      const seen = shown(stray.cells.join(' '))
+      const sentence = `Line ${stray.line} stands among the numbers and holds none: “${seen}”.`
+      throw new ReadFault('corrupt-file', sentence, { line: stray.line, seen })
+    }
+    for (const row of this.held) this.keep(row)
+    this.held = []
+    this.heldCount = 0
+  }
+
+  private keep({ cells, values, line }: Omit<HeldRow, 'isStray'>): void {
+    this.lines.push(line)
+    values.forEach((value, i) => {
+      this.columns[i]?.push(value)
+      if (Number.isNaN(value))
+        this.noteUnreadable(cells[this.wanted[i] ?? -1] ?? '', line, this.wanted[i] ?? 0)
+    })
   }
 }
 

@@ -1,0 +1,12 @@
+import { heads } from './heads.ts'
+import { plates } from './plates.ts'
+import type { MadeCase } from './text.ts'
+import { writing } from './writing.ts'
+
+const FIRST_NUMBER = 101
+
+/** Every made case under the name of its folder. New ones go to the end of their list's file or get a list of their own. */
+export const madeCases: (MadeCase & { folder: string })[] = [...writing, ...heads, ...plates].map((made, i) => ({
+  ...made,
+  folder: `${FIRST_NUMBER + i}-${made.name}`,
+}))
