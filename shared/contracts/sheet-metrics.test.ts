@@ -29,7 +29,7 @@ describe('headlineOf(protocol)', () => {
       ['slcmj', 'jumpHeightImpulse'],
       ['sj', 'jumpHeightImpulse'],
       ['dj', 'rsi'],
-      ['hops', 'rsi'],
+      ['hops', 'rsiBestFive'],
       ['dropLanding', 'landingPeakForcePerBodyWeight'],
     ])
   })

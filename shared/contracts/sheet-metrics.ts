@@ -25,7 +25,7 @@ export const metricsOfTest = {
     'effectiveDropHeight',
     landing[1],
   ],
-  hops: ['rsi', 'rsiBestFive', 'contactTimeMean', 'hopCount', 'contactTime'],
+  hops: ['rsiBestFive', 'contactTimeMean', 'hopCount', ...landing],
   dropLanding: [...landing, 'landingTime', 'timeToStabilisation', 'timeToLandingPeak', 'landingVelocity'],
 } as const satisfies Record<Protocol, readonly [string, ...string[]]>
 
