@@ -1,6 +1,7 @@
 import compression from 'compression'
 import express, { Router, type Express } from 'express'
 import type { Server } from 'node:http'
+import { takePaymentEvent } from '../shared/contracts/billing.ts'
 import type { Deps } from './deps.ts'
 import { clientFiles } from './http/client-files.ts'
 import { refuseCrossSite } from './http/cross-site.ts'
@@ -40,6 +41,8 @@ function api(deps: Deps): Router {
     next()
   })
   router.use(refuseCrossSite(deps.config.appUrl))
+  // What is signed is taken as the bytes that came.
+  router.use(takePaymentEvent.path.replace(/^\/api/, ''), express.raw({ type: () => true, limit: '512kb' }))
   router.use(express.json({ limit: '256kb' }))
   router.use(signInSession(deps))
   router.use(passport.session())

@@ -2,6 +2,7 @@ import type { Route } from './http/implement.ts'
 import { accountRoutes } from './modules/account/account.routes.ts'
 import { analysisRoutes } from './modules/analyses/analyses.routes.ts'
 import { athleteRoutes } from './modules/athletes/athletes.routes.ts'
+import { billingRoutes } from './modules/billing/billing.routes.ts'
 import { clubRoutes } from './modules/clubs/clubs.routes.ts'
 import { eventRoutes } from './modules/events/events.routes.ts'
 import { landingWatchRoutes } from './modules/landing-watch/landing-watch.routes.ts'
@@ -27,5 +28,6 @@ export const routes: Route[] = [
   ...analysisRoutes,
   ...recomputeRoutes,
   ...clubRoutes,
+  ...billingRoutes,
   ...eventRoutes,
 ]

@@ -7,6 +7,8 @@ export interface Caller extends ClubContext {
   roles: readonly Role[]
   /** The athlete record of this person in this club, if any. */
   athleteId: string | null
+  /** From when the club only reads; null or left out: never, as things stand. */
+  readsOnlyFrom?: Date | null
 }
 
 declare global {

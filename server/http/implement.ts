@@ -5,6 +5,7 @@ import type { Deps } from '../deps.ts'
 import { authorise } from './authorise.ts'
 import type { Caller } from './caller.ts'
 import { answerOnce } from './idempotency.ts'
+import { refuseWhileReadingOnly } from './reads-only.ts'
 import { parse } from './validate.ts'
 
 /** Returned by a handler that wrote the answer to `res` itself (bytes, a stream). */
@@ -39,6 +40,7 @@ export function implement<E extends Endpoint>(endpoint: E, handler: Handler<E, C
     endpoint,
     handler: (deps) => async (req, res) => {
       const ctx = authorise(endpoint.access, req.user)
+      refuseWhileReadingOnly(endpoint, ctx, deps.clock())
       const call = { ...readCall(endpoint, deps, req, res), ctx }
       const run = async () => conform(endpoint, await handler(call))
       const repeatable = endpoint.method === 'GET' || endpoint.repeat === 'natural'

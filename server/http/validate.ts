@@ -24,6 +24,6 @@ function refuseUnstorable(value: unknown, path: readonly string[] = []): void {
     const field = path.join('.') || 'request'
     throw invalidRequest(unusable, { [field]: 'Holds a character that is no text; type it anew' })
   }
-  if (typeof value !== 'object' || value === null) return
+  if (typeof value !== 'object' || value === null || ArrayBuffer.isView(value)) return
   for (const [key, inner] of Object.entries(value)) refuseUnstorable(inner, [...path, key])
 }

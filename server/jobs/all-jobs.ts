@@ -1,4 +1,5 @@
 import { analyseTrialJob, giveUpAnalysingJob } from '../modules/analyses/analyses.jobs.ts'
+import { reconcileBillingJob, syncBillingJob } from '../modules/billing/billing.jobs.ts'
 import { sendMailJob } from '../modules/mail/mail.jobs.ts'
 import {
   addUpMovesJob,
@@ -13,6 +14,8 @@ export const allJobs: readonly Job[] = [
   readUploadJob,
   analyseTrialJob,
   sendMailJob,
+  syncBillingJob,
+  reconcileBillingJob,
   giveUpReadingJob,
   giveUpAnalysingJob,
   recomputeBatchJob,

@@ -36,6 +36,18 @@ export const queues = {
     atOnce: 3,
   },
   'add-up-moves': { payload: ofRecompute, retryLimit: 5, retryDelaySeconds: 1 },
+  'sync-billing': {
+    payload: z.strictObject({ version: z.literal(1), clubId: Id }),
+    // With doubling pauses, about four hours of a payment service that is away; the night makes up for the rest.
+    retryLimit: 12,
+    retryDelaySeconds: 5,
+    atOnce: 2,
+  },
+  'reconcile-billing': {
+    payload: z.strictObject({ version: z.literal(1) }),
+    retryLimit: 5,
+    retryDelaySeconds: 60,
+  },
   'send-mail': {
     payload: z.strictObject({ version: z.literal(1), mailId: Id }),
     // With doubling pauses, about four hours of a mail server that is away.

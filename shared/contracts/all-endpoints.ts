@@ -2,6 +2,7 @@ import * as account from './account.ts'
 import * as analyses from './analyses.ts'
 import * as athletes from './athletes.ts'
 import * as clubs from './clubs.ts'
+import * as billing from './billing.ts'
 import type { Endpoint } from './endpoint.ts'
 import * as events from './events.ts'
 import * as landingWatch from './landing-watch.ts'
@@ -32,6 +33,7 @@ export const endpoints: Record<string, Endpoint> = Object.fromEntries(
     recomputes,
     landingWatch,
     clubs,
+    billing,
     measuring,
     events,
   ]

@@ -24,6 +24,8 @@ export interface Endpoint<
    * club data), or 'natural' where the act itself is safe to repeat (sign-in, reset, a chunk of an upload).
    */
   repeat: 'key' | 'natural'
+  /** 'allowed' where a club may call it although its subscription has lapsed: reading always, and what this says. */
+  whileReadingOnly?: 'allowed'
 }
 
 const nothing = z.strictObject({})
@@ -44,6 +46,7 @@ export function endpoint<
   body?: B
   response: R
   repeat?: Endpoint['repeat']
+  whileReadingOnly?: Endpoint['whileReadingOnly']
 }): Endpoint<P, Q, B, R> {
   return {
     repeat: 'key',

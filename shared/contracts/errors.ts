@@ -43,13 +43,6 @@ export const errorCodes = [
   'subscription-running',
   'subscription-missing',
   'club-reads-only',
-  'payments-off',
-  'payments-away',
-  'payment-declined',
-  'signature-invalid',
-  'subscription-running',
-  'subscription-missing',
-  'club-reads-only',
   'internal',
 ] as const
 

@@ -24,4 +24,11 @@ export const limits = {
   landingPeakBodyWeights: { min: 1, max: 20 },
   invitationDays: 14,
   resetMinutes: 60,
+  seats: { min: 1, max: 5000 },
+  trialDays: 30,
+  trialSeats: 40,
+  /** From the first declined charge until a club only reads. Common practice: two weeks. */
+  graceDays: 14,
+  /** Days before a club only reads on which its admins are reminded, the first first. */
+  remindDaysBefore: [7, 2],
 } as const

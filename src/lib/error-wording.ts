@@ -153,34 +153,6 @@ export const errorWording: Record<AnyErrorCode, ErrorWording> = {
     title: 'The club can only read at the moment',
     advice: 'Nothing is lost. An admin of the club restores everything on the billing page.',
   },
-  'payments-off': {
-    title: 'Nothing can be bought here',
-    advice: 'No payment service is set up. Ask whoever runs this installation.',
-  },
-  'payments-away': {
-    title: 'The payment service did not answer',
-    advice: 'Wait a moment, look at what this page shows, then try again. Nothing is charged twice.',
-  },
-  'payment-declined': {
-    title: 'The card was declined',
-    advice: 'Nothing was changed. Give another card under “Card and invoices”, then try again.',
-  },
-  'signature-invalid': {
-    title: 'This did not come from the payment service',
-    advice: 'Check the signing secret of the events in the settings of this installation.',
-  },
-  'subscription-running': {
-    title: 'The club has a subscription already',
-    advice: 'Change its seats on the billing page instead of buying a second one.',
-  },
-  'subscription-missing': {
-    title: 'The club has no running subscription',
-    advice: 'Buy one on the billing page first.',
-  },
-  'club-reads-only': {
-    title: 'The club can only read at the moment',
-    advice: 'Nothing is lost. An admin of the club restores everything on the billing page.',
-  },
   internal: {
     title: 'Something went wrong on our side',
     advice: 'Try again in a moment. If it goes on, tell whoever runs Underfoot at your club.',

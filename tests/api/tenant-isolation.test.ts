@@ -5,6 +5,7 @@ import { afterAll, beforeAll, describe, expect, it } from 'vitest'
 import { databaseErrorOf } from '../../server/db/constraint-errors.ts'
 import type { ClubContext, Database, Tx } from '../../server/db/database.ts'
 import { workerContext } from '../../server/db/database.ts'
+import * as billing from '../../server/db/schema/billing.ts'
 import * as identity from '../../server/db/schema/identity.ts'
 import * as measuring from '../../server/db/schema/measuring.ts'
 import * as peopleOfClub from '../../server/db/schema/people-of-club.ts'
@@ -51,6 +52,11 @@ async function fillTheRest(): Promise<void> {
     await tx.insert(measuring.measuringSettings).values({ ...edition, changed: { eventForceN: 20 } })
     const plates = { leftU: 0.005, rightU: 0.005, singleU: 0.005, totalU: 0.005 }
     await tx.insert(measuring.plateCalibrations).values({ ...edition, ...plates })
+    await tx.insert(billing.standings).values({ clubId })
+  })
+  await harness.db.inClub(workerContext(clubId), async (tx) => {
+    await tx.insert(billing.subscriptions).values({ clubId })
+    await tx.insert(billing.billingNotices).values({ clubId, key: 'receipt:in_1' })
   })
 }
 
@@ -78,7 +84,7 @@ const resultRow = (
 
 const isTable = (value: unknown): value is PgTable =>
   typeof value === 'object' && value !== null && Symbol.for('drizzle:IsDrizzleTable') in value
-const clubTables = [peopleOfClub, measuring, recomputes, records, results, sessions, trials, uploads]
+const clubTables = [billing, peopleOfClub, measuring, recomputes, records, results, sessions, trials, uploads]
   .flatMap((schema) => Object.values(schema) as unknown[])
   .filter(isTable)
 const nameOf = (table: PgTable) => getTableConfig(table).name

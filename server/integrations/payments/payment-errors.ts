@@ -2,7 +2,7 @@ import Stripe from 'stripe'
 import { namedError } from '../../http/errors.ts'
 
 export const paymentsOff = () =>
-  namedError('payments-off', 503, 'No payment service is set up here. Whoever runs this installation can.')
+  namedError('payments-off', 409, 'No payment service is set up here. Whoever runs this installation can.')
 
 const declined = () =>
   namedError(

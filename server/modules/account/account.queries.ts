@@ -1,6 +1,7 @@
 import { and, asc, eq, ne, sql } from 'drizzle-orm'
 import type { Role } from '../../../shared/contracts/roles.ts'
 import type { Tx } from '../../db/database.ts'
+import { standings } from '../../db/schema/billing.ts'
 import { clubs, memberships, people, signInSessions } from '../../db/schema/identity.ts'
 import { athletes, settings } from '../../db/schema/people-of-club.ts'
 
@@ -31,15 +32,20 @@ export async function findFirstClub(tx: Tx, personId: string): Promise<string | 
   return membership?.clubId ?? null
 }
 
-/** Roles of an active member and the athlete record they are linked to; null where there is no such member. */
+/** Roles of an active member, their athlete record, and until when the club writes; null where there is no such member. */
 export async function findMember(tx: Tx, clubId: string, personId: string) {
   const [member] = await tx
-    .select({ roles: sql<Role[]>`${memberships.roles}`, athleteId: athletes.id })
+    .select({
+      roles: sql<Role[]>`${memberships.roles}`,
+      athleteId: athletes.id,
+      readsOnlyFrom: standings.readsOnlyFrom,
+    })
     .from(memberships)
     .leftJoin(
       athletes,
       and(eq(athletes.clubId, memberships.clubId), eq(athletes.personId, memberships.personId)),
     )
+    .leftJoin(standings, eq(standings.clubId, memberships.clubId))
     .where(and(eq(memberships.clubId, clubId), eq(memberships.personId, personId), memberships.active))
   return member ?? null
 }

@@ -5,6 +5,7 @@ import { sendBySmtp } from '../../integrations/smtp.ts'
 import { defineJob } from '../../jobs/define-job.ts'
 import { openReset } from '../account/resets.service.ts'
 import { openInvitationLink } from '../people/invitations.service.ts'
+import { billingText } from './billing-templates.ts'
 import { asHtml, asPlainText, type MailText } from './mail-text.ts'
 import { beginTry, findClubName, markFailed, markSent } from './mail.queries.ts'
 import { invitationText, mailPayloads, passwordResetText, resultsPublishedText } from './templates.ts'
@@ -55,7 +56,9 @@ async function compose(
     const token = await openInvitationLink(tx, invitationId)
     return token ? invitationText(club, `${appUrl}/invite/${token}`) : null
   }
-  return mail.template === 'results-published' ? resultsPublishedText(club, `${appUrl}/`) : null
+  return mail.template === 'results-published'
+    ? resultsPublishedText(club, `${appUrl}/`)
+    : billingText(mail, club, `${appUrl}/club/billing`)
 }
 
 export const sendMailJob = defineJob('send-mail', (deps, { mailId }) => sendOutboxMail(deps, mailId))

@@ -1,4 +1,5 @@
 import { limits } from '../../../shared/contracts/limits.ts'
+import { Money } from '../../../shared/contracts/money.ts'
 import { z } from 'zod'
 import type { MailText } from './mail-text.ts'
 
@@ -7,6 +8,10 @@ export const mailPayloads = {
   invitation: z.strictObject({ invitationId: z.uuid() }),
   'password-reset': z.strictObject({}),
   'results-published': z.strictObject({}),
+  'payment-receipt': Money.extend({ number: z.string(), url: z.string().nullable() }),
+  'payment-failed': z.strictObject({ until: z.string() }),
+  'club-reads-only': z.strictObject({}),
+  'trial-ends': z.strictObject({ until: z.string() }),
 }
 export type TemplateName = keyof typeof mailPayloads
 export type MailPayloads = { [T in TemplateName]: z.output<(typeof mailPayloads)[T]> }

@@ -224,4 +224,14 @@ export const accessTable: Record<string, AccessLine> = {
     elsewhere: 'own',
   },
   getSeats: { may: ['admin'], request: nothing, elsewhere: 'own' },
+
+  getBilling: { may: ['admin'], request: nothing, elsewhere: 'own' },
+  listPlans: { may: ['admin'], request: nothing, elsewhere: 'own' },
+  startCheckout: { may: ['admin'], request: form({ interval: 'month', seats: 5 }), elsewhere: 'own' },
+  previewSeats: { may: ['admin'], request: () => ({ query: { seats: 5 } }), elsewhere: 'own' },
+  changeSeats: { may: ['admin'], request: form({ version: 9, seats: 5, at: null }), elsewhere: 'own' },
+  endSubscription: { may: ['admin'], request: form({ version: 9, ends: true }), elsewhere: 'own' },
+  openPortal: { may: ['admin'], request: nothing, elsewhere: 'own' },
+  refreshBilling: { may: ['admin'], request: nothing, elsewhere: 'own' },
+  takePaymentEvent: { may: 'anybody', request: form({ id: 'evt_of_nobody' }), elsewhere: 'own' },
 }
