@@ -22,5 +22,8 @@ export interface Case {
   }
   error?: Partial<ReadError>
   /** Of an error that a person can settle: what is proposed. */
-  proposal?: { time: { index: number; unit: string } | null; forces: { index: number; channel: ForceChannel }[] }
+  proposal?: {
+    time: { index: number; unit: string } | null
+    forces: { index: number; channel: ForceChannel }[]
+  }
 }

@@ -22,7 +22,10 @@ export const rising = (rows: number): number[] => Array.from({ length: rows }, (
 export const falling = (rows: number): number[] => Array.from({ length: rows }, (_, i) => 410.5 - 0.75 * i)
 
 const recorded = recordJump(makeJump({ stanceS: 0.5 }), { durationS: 1.9, sampleRateHz: 100 })
-const both = Array.from(recorded.channels.left ?? [], (newtons, i) => newtons + (recorded.channels.right?.[i] ?? 0))
+const both = Array.from(
+  recorded.channels.left ?? [],
+  (newtons, i) => newtons + (recorded.channels.right?.[i] ?? 0),
+)
 /** A jump of the synthetic athlete at 100 Hz, a little more on the left, for files in which the weight tells. */
 export const jump = {
   rateHz: 100,
@@ -34,7 +37,8 @@ export const bothFeet = jump.left.map((newtons, i) => cents(newtons + (jump.righ
 export const seconds = (rows: number, rateHz = 1000): string[] =>
   Array.from({ length: rows }, (_, i) => (i / rateHz).toFixed(3))
 
-export const fixed = (values: number[], decimals = 2): string[] => values.map((value) => value.toFixed(decimals))
+export const fixed = (values: number[], decimals = 2): string[] =>
+  values.map((value) => value.toFixed(decimals))
 
 export interface Layout {
   delimiter?: string
@@ -49,7 +53,14 @@ export interface Layout {
 }
 
 /** The text of a table. */
-export function text({ delimiter = ',', lineBreak = '\n', preamble = [], head = [], columns, end }: Layout): string {
+export function text({
+  delimiter = ',',
+  lineBreak = '\n',
+  preamble = [],
+  head = [],
+  columns,
+  end,
+}: Layout): string {
   const rows = (columns[0] ?? []).map((_, row) => columns.map((column) => column[row] ?? '').join(delimiter))
   const lines = [...preamble, ...head.map((cells) => cells.join(delimiter)), ...rows]
   return lines.join(lineBreak) + (end ?? lineBreak)
@@ -71,7 +82,12 @@ type Extra = Omit<NonNullable<Case['reading']>, 'sampleRateHz' | 'filledSamples'
 }
 
 /** What a file is expected to give. */
-export function gives(channels: Channels, sampleRateHz: number, notes: string[] = [], extra: Extra = {}): Case {
+export function gives(
+  channels: Channels,
+  sampleRateHz: number,
+  notes: string[] = [],
+  extra: Extra = {},
+): Case {
   const { filledSamples = 0, ...rest } = extra
   return { reading: { sampleRateHz, filledSamples, channels, notes, ...rest } }
 }
