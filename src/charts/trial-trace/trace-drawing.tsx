@@ -1,10 +1,8 @@
 import { memo } from 'react'
 import type { TraceLayout } from './lay-out.ts'
-import type { PlacedEvent } from './trace-events.tsx'
 import { TraceAxes } from './trace-axes.tsx'
 import { OverlayLines } from './overlay-lines.tsx'
 import type { TraceData } from './trace-data.ts'
-import { TraceEvents } from './trace-events.tsx'
 import { TraceLines } from './trace-lines.tsx'
 import { PhaseFigures, TracePhases } from './trace-phases.tsx'
 import { phaseShape } from './phase-shapes.ts'
@@ -15,11 +13,10 @@ interface Props {
   view: TraceView
   layout: TraceLayout
   scales: DrawnScales
-  events: PlacedEvent[]
 }
 
 /** All of the trace that does not move with the cursor; drawn once for a width and a view. */
-export const TraceDrawing = memo(function TraceDrawing({ data, view, layout, scales, events }: Props) {
+export const TraceDrawing = memo(function TraceDrawing({ data, view, layout, scales }: Props) {
   const { weight } = data
   const shapes = weight
     ? data.phases.map((phase) => phaseShape(phase, data.total, data.sampleRateHz, weight.valueN, scales))
@@ -31,7 +28,6 @@ export const TraceDrawing = memo(function TraceDrawing({ data, view, layout, sca
       <OverlayLines data={data} view={view} scales={scales} />
       <TraceLines data={data} view={view} layout={layout} scales={scales} />
       <PhaseFigures shapes={shapes} layout={layout} />
-      <TraceEvents events={events} layout={layout} />
       <TakeoffMomentum data={data} scales={scales} />
     </g>
   )

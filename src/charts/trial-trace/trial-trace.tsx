@@ -2,16 +2,18 @@ import { useMemo, useState, type KeyboardEvent, type PointerEvent, type ReactNod
 import { useWidth } from '../use-width.ts'
 import { layOutTrace, type TraceLayout } from './lay-out.ts'
 import { placeEvents } from './place-events.ts'
-import type { TraceData } from './trace-data.ts'
+import type { TraceData, TraceEvent } from './trace-data.ts'
 import { TraceDrawing } from './trace-drawing.tsx'
 import { moveCursor, readTrace } from './trace-reading.ts'
-import type { PlacedEvent } from './trace-events.tsx'
+import { TraceEvents, type PlacedEvent } from './trace-events.tsx'
 import { traceScales, type DrawnScales, type TraceView } from './trace-scales.ts'
 
 interface Props {
   data: TraceData
   view: TraceView
   summaryId: string
+  /** In place of the data's own, while they are being moved: the picture behind them need not be drawn anew. */
+  events?: TraceEvent[]
   /** Laid over the picture: what of it can be taken hold of. */
   handles?: (drawing: TraceFrame) => ReactNode
 }
@@ -27,10 +29,10 @@ export interface TraceFrame {
  * Force and momentum of one trial on one time axis. Read by pointer, or by keyboard as a slider: the readout
  * under the picture says the figures at the cursor.
  */
-export function TrialTrace({ data, view, summaryId, handles }: Props) {
+export function TrialTrace({ data, view, summaryId, events = data.events, handles }: Props) {
   const { ref, width } = useWidth<HTMLDivElement>(900)
   const roomy = handles !== undefined
-  const drawing = useMemo(() => draw(data, view, width, roomy), [data, view, width, roomy])
+  const drawing = useDrawing(data, events, view, width, roomy)
   const [cursorS, setCursorS] = useState<number | null>(null)
   const { layout, scales } = drawing
   const within = (timeS: number) => Math.min(Math.max(timeS, view.startS), view.endS)
@@ -65,7 +67,8 @@ export function TrialTrace({ data, view, summaryId, handles }: Props) {
           aria-hidden="true"
           onPointerMove={onPointerMove}
         >
-          <TraceDrawing data={data} view={view} layout={layout} scales={scales} events={drawing.events} />
+          <TraceDrawing data={data} view={view} layout={layout} scales={scales} />
+          <TraceEvents events={drawing.events} layout={layout} />
           {cursorS !== null && (
             <line
               x1={scales.time(within(cursorS))}
@@ -106,11 +109,22 @@ function Readout({ data, timeS }: { data: TraceData; timeS: number | null }) {
   )
 }
 
-function draw(data: TraceData, view: TraceView, width: number, roomy: boolean): TraceFrame {
-  const flat = layOutTrace(width, 1, roomy)
-  const { placed, tiers } = placeEvents(data.events, view, traceScales(data, view, flat).time)
-  const layout = layOutTrace(width, tiers, roomy)
-  return { layout, scales: traceScales(data, view, layout), events: placed }
+/** Each part is made anew only where what it is made of has changed. */
+function useDrawing(
+  data: TraceData,
+  events: TraceEvent[],
+  view: TraceView,
+  width: number,
+  roomy: boolean,
+): TraceFrame {
+  const flat = useMemo(
+    () => traceScales(data, view, layOutTrace(width, 1, roomy)).time,
+    [data, view, width, roomy],
+  )
+  const { placed, tiers } = useMemo(() => placeEvents(events, view, flat), [events, view, flat])
+  const layout = useMemo(() => layOutTrace(width, tiers, roomy), [width, tiers, roomy])
+  const scales = useMemo(() => traceScales(data, view, layout), [data, view, layout])
+  return useMemo(() => ({ layout, scales, events: placed }), [layout, scales, placed])
 }
 
 const round = (timeS: number) => Math.round(timeS * 1000) / 1000

@@ -1,3 +1,4 @@
+import { memo } from 'react'
 import type { Analysis } from '../../../shared/contracts/trials.ts'
 import { catalogue } from '../../../shared/mechanics/catalogue.ts'
 import { Sheet } from '../../components/sheet.tsx'
@@ -12,7 +13,13 @@ type Ledger = NonNullable<Analysis['ledger']>
 const { display } = catalogue.closingBalance
 
 /** The momentum account of a trial: opening balance, an entry a phase, running balance, closing balance. */
-export function ImpulseLedger({ ledger, saved }: { ledger: Ledger; saved?: Ledger | null | undefined }) {
+export const ImpulseLedger = memo(function ImpulseLedger({
+  ledger,
+  saved,
+}: {
+  ledger: Ledger
+  saved?: Ledger | null | undefined
+}) {
   const figure = (newtonSeconds: number) => formatSigned(newtonSeconds, display.decimals)
   const was = (read: (from: Ledger) => number | undefined, now: number) => {
     const before = saved ? read(saved) : undefined
@@ -65,7 +72,7 @@ export function ImpulseLedger({ ledger, saved }: { ledger: Ledger; saved?: Ledge
       <p className="pt-2 text-small text-ink-2">{closingSentence(ledger)}</p>
     </Sheet>
   )
-}
+})
 
 const closesAtRest = (ledger: Ledger) => ledger.entries.at(-1)?.phase === 'settling'
 

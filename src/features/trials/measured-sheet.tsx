@@ -1,4 +1,4 @@
-import { useState } from 'react'
+import { memo, useState } from 'react'
 import type { Analysis } from '../../../shared/contracts/trials.ts'
 import { catalogue, isMetricKey } from '../../../shared/mechanics/catalogue.ts'
 import type { MetricGroup } from '../../../shared/mechanics/types.ts'
@@ -14,7 +14,13 @@ import { Was } from './was.tsx'
 const openOnPhone = new Set<MetricGroup>(['jump', 'landing'])
 
 /** Every figure of the trial, by group; what a failed check takes away is struck, what is missing says why. */
-export function MeasuredSheet({ analysis, saved }: { analysis: Analysis; saved?: Analysis | undefined }) {
+export const MeasuredSheet = memo(function MeasuredSheet({
+  analysis,
+  saved,
+}: {
+  analysis: Analysis
+  saved?: Analysis | undefined
+}) {
   const [atDesk] = useState(
     () => typeof matchMedia === 'undefined' || matchMedia('(min-width: 40rem)').matches,
   )
@@ -38,7 +44,7 @@ export function MeasuredSheet({ analysis, saved }: { analysis: Analysis; saved?:
       <CautionLine />
     </Sheet>
   )
-}
+})
 
 interface RowProps extends MeasuredFigure {
   saved: Analysis['metrics'] | undefined

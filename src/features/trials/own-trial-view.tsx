@@ -2,6 +2,7 @@ import { Link } from 'react-router-dom'
 import type { Analysis, Trial } from '../../../shared/contracts/trials.ts'
 import { catalogue, type MetricKey } from '../../../shared/mechanics/catalogue.ts'
 import { CautionLine } from '../../components/caution-line.tsx'
+import { MethodLink } from '../../components/method-link.tsx'
 import { PageHead } from '../../components/page-head.tsx'
 import { Sheet } from '../../components/sheet.tsx'
 import { formatDate } from '../../lib/format-date.ts'
@@ -64,7 +65,9 @@ function WhatItMeans({ analysis }: { analysis: Analysis }) {
             key={key}
             className="grid grid-cols-[1fr_auto] items-baseline gap-x-4 border-b border-rule-2 py-2"
           >
-            <dt className="font-semibold">{catalogue[key].name}</dt>
+            <dt className="font-semibold">
+              <MethodLink noteKey={key}>{catalogue[key].name}</MethodLink>
+            </dt>
             <dd>
               <FigureText metricKey={key} figure={analysis.metrics[key]!} unit />
             </dd>

@@ -1,3 +1,4 @@
+import { memo } from 'react'
 import type { Analysis } from '../../../shared/contracts/trials.ts'
 import { catalogue, metricKeys, type MetricKey } from '../../../shared/mechanics/catalogue.ts'
 import { CautionLine } from '../../components/caution-line.tsx'
@@ -23,7 +24,7 @@ interface Props {
 }
 
 /** The figures of each foot, their difference, and which is larger. */
-export function SidesSheet({ sides, checks, saved }: Props) {
+export const SidesSheet = memo(function SidesSheet({ sides, checks, saved }: Props) {
   const taken = new Set(checks.filter(({ verdict }) => verdict === 'fail').flatMap(({ affects }) => affects))
   const isTaken = (key: MetricKey) => taken.has('sides') || taken.has(catalogue[key].group)
   const keys = metricKeys.filter((key) => sides.left[key] && sides.right[key])
@@ -59,7 +60,7 @@ export function SidesSheet({ sides, checks, saved }: Props) {
       </div>
     </Sheet>
   )
-}
+})
 
 interface RowProps extends Pick<Props, 'sides' | 'saved'> {
   metricKey: MetricKey

@@ -1,3 +1,4 @@
+import { memo } from 'react'
 import type { Analysis } from '../../../shared/contracts/trials.ts'
 import { MethodLink } from '../../components/method-link.tsx'
 import { Sheet } from '../../components/sheet.tsx'
@@ -16,7 +17,7 @@ interface Props extends Pick<Analysis, 'checks' | 'notes'> {
 }
 
 /** The quality checks: those to look at first, the others behind one line. */
-export function TrialChecks({ checks, notes, saved }: Props) {
+export const TrialChecks = memo(function TrialChecks({ checks, notes, saved }: Props) {
   const sorted = [...checks].sort((a, b) => order[a.verdict] - order[b.verdict])
   const looks = sorted.filter((check) => check.verdict !== 'pass')
   const passes = sorted.filter((check) => check.verdict === 'pass')
@@ -59,7 +60,7 @@ export function TrialChecks({ checks, notes, saved }: Props) {
       )}
     </Sheet>
   )
-}
+})
 
 const verdictWords = { pass: 'pass', caution: 'look', fail: 'failed' } as const
 

@@ -27,34 +27,36 @@ export function MovingTrace({ trial, samples, draft }: Props) {
     [trial, live.analysis],
   )
   const whole = useMemo(() => traceDataOf(shown, samples), [shown, samples])
-  const data = useMemo(
+  const events = useMemo(
     () =>
-      whole && {
-        ...whole,
-        // Where the person put them at once; the engine's own follow with its answer.
-        events: whole.events.map(({ key, label, timeS }) => ({
-          key,
-          label,
-          timeS: moved[key] ?? timeS,
-          adjusted: moved[key] !== undefined,
-        })),
-      },
+      // Where the person put them at once; the engine's own follow with its answer.
+      whole?.events.map(({ key, label, timeS }) => ({
+        key,
+        label,
+        timeS: moved[key] ?? timeS,
+        adjusted: moved[key] !== undefined,
+      })),
     [whole, moved],
   )
   const [wide] = useState(() => jumpView(whole?.phases ?? [], whole?.durationS ?? 0))
   const [closeOn, setCloseOn] = useState<number | null>(null)
+  const durationS = whole?.durationS ?? 0
+  const view = useMemo(
+    () =>
+      closeOn === null
+        ? wide
+        : { startS: Math.max(0, closeOn - closeS), endS: Math.min(durationS, closeOn + closeS) },
+    [closeOn, durationS, wide],
+  )
   const summaryId = useId()
   const helpId = useId()
-  if (!data) return <p>The recording holds no force that could be drawn.</p>
-  const view =
-    closeOn === null
-      ? wide
-      : { startS: Math.max(0, closeOn - closeS), endS: Math.min(data.durationS, closeOn + closeS) }
+  if (!whole || !events) return <p>The recording holds no force that could be drawn.</p>
   const heldS = held === null ? undefined : times[held]
   return (
     <div className="flex flex-col gap-2">
       <TrialTrace
-        data={data}
+        data={whole}
+        events={events}
         view={view}
         summaryId={summaryId}
         handles={(frame) => <EventHandles frame={frame} describedBy={helpId} {...acts} />}
