@@ -161,7 +161,10 @@ export function buildModel<W extends Weighing | null, E extends TrialEvents>(
   const plates = plateInputs(signal, weighing, zero, options, budget)
   const gravityU = options.gravityUncertainty ?? settings.gravityU
   const gravity = budget.input(options.gravity, gravityU, Infinity, true)
-  const drift = budget.input(0, settings.driftU)
+  const drift = budget.linear(
+    0,
+    plates.map(() => [1, budget.input(0, settings.driftU)] as const),
+  )
   const { weighingError, systemWeight } = weighing
     ? weighed(weighing, zero, plates, drift, dt, budget)
     : recorded(motion, gravity, settings, budget)

@@ -4,9 +4,9 @@ import { own, type SettingDefinition } from './definition.ts'
 export const uncertaintySettings = {
   coverage: { value: 0.95, unit: 'probability', source: 'JCGM 100:2008', effect: 'Wider intervals' },
   swayVelocityChange: {
-    value: 0.003,
+    value: 0.0015,
     unit: 'm/s, SD over the weighing window',
-    source: own,
+    source: `${own}: what a stance that looks calm may hide; what it shows is counted as noise`,
     effect: 'Wider intervals of weight, velocity and height',
   },
   swayFromMeansS: {
@@ -40,8 +40,8 @@ export const uncertaintySettings = {
     effect: 'Wider U, same URepeat',
   },
   driftU: {
-    value: 0.08,
-    unit: 'N/s, standard uncertainty',
+    value: 0.1,
+    unit: 'N/s, standard uncertainty of each plate',
     source: `${own}: residual drift of a plate that has warmed up`,
     effect: 'Wider intervals of weight and velocity',
   },

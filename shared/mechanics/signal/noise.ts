@@ -42,14 +42,20 @@ export function estimateNoise(force: Float64Array, from: number, to: number): No
 
 /**
  * Noise of a stretch that is short beside its correlation: correlated samples hug their own mean, which hides a part
- * 1/n_eff of their variance and of every ρ. The sum of the ρ is left as published; that it stops at the first ρ ≤ 0
- * makes up for it.
+ * 1/n_eff of their variance and of every ρ.
  */
 export function allowForShortness(noise: Noise): Noise {
   const { inflation, samples, sd, correlation } = noise
   const hidden = Math.min(0.5, inflation / Math.max(1, samples))
   const whole = correlation.map((rho) => rho + hidden * (1 - rho))
-  return { ...noise, sd: sd * Math.sqrt((1 - 1 / Math.max(2, samples)) / (1 - hidden)), correlation: whole }
+  let sum = 0
+  for (let lag = 1; lag < whole.length; lag++) sum += whole[lag]
+  return {
+    ...noise,
+    inflation: 1 + 2 * sum,
+    sd: sd * Math.sqrt((1 - 1 / Math.max(2, samples)) / (1 - hidden)),
+    correlation: whole,
+  }
 }
 
 /** Number of independent samples that a mean over the stretch is worth, at least 1. */

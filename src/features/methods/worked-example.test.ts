@@ -27,6 +27,10 @@ describe('the worked example', () => {
       'other-foot-off',
       'other-foot-landing',
       'squat-dip',
+      'drop-height',
+      'plausible-rebound',
+      'hop-count',
+      'hops-counted',
     ])
     expect(analysis.checks.filter(({ verdict }) => verdict === 'fail')).toEqual([])
   })

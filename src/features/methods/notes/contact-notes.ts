@@ -98,7 +98,7 @@ export const contactNotes: Record<keyof typeof contactMetrics, MetricNote> = {
     symbols: 'R_(1) ≥ R_(2) ≥ … the RSI of the contacts that count, t_f flight time, t_c contact time',
     from: ['hopCount'],
     settings: [...counting, 'bestContacts', ...crossed, 'gravityU'],
-    evidence: 'published',
+    evidence: 'memory',
     unchecked: 'That contacts over 250 ms are left out is cited from memory.',
     limits:
       'The best of several noisy figures read somewhat high. Not interchangeable with the RSI of a drop jump.',

@@ -27,13 +27,7 @@ export interface MetricNote {
 }
 
 /** What makes the weighing. */
-export const weighed: SettingKey[] = [
-  'weighingWindowS',
-  'shortestWeighingS',
-  'noiseInflationKept',
-  'swayVelocityChange',
-  'driftU',
-]
+export const weighed: SettingKey[] = ['weighingWindowS', 'shortestWeighingS', 'swayVelocityChange', 'driftU']
 /** What places the onset. */
 export const begun: SettingKey[] = ['onsetFraction', 'onsetLeadS', 'movementFraction', 'quietPersistenceS']
 /** What places takeoff and touchdown. */
