@@ -1,5 +1,6 @@
 import { screen, within } from '@testing-library/react'
 import { describe, expect, test } from 'vitest'
+import { usualTest } from '../../shared/contracts/session-test.ts'
 import { getMyResults, type ResultPoint } from '../../shared/contracts/results.ts'
 import { expectNoAxeFaults } from '../../tests/setup/axe.ts'
 import { answer, cutOff } from '../../tests/setup/msw/answer.ts'
@@ -50,6 +51,42 @@ describe('the athlete’s own page', () => {
     ])
     expect(document.body).not.toHaveTextContent(/real rise|within noise|real fall/)
   })
+
+  test.each([
+    ['dj', 'rsi', 1.42, 'Drop jump, hands on hips, 30 cm box', '1.42', /The average of 2 jumps/, 'Jump 1'],
+    [
+      'hops',
+      'rsiBestFive',
+      1.91,
+      'Repeated hops, hands on hips',
+      '1.91',
+      /The average of 2 sets of hops/,
+      'Set of hops 1',
+    ],
+    [
+      'dropLanding',
+      'landingPeakForcePerBodyWeight',
+      3.4,
+      'Drop landing, 30 cm box',
+      '3.40',
+      /The average of 2 landings/,
+      'Landing 1',
+    ],
+  ] as const)(
+    'of a %s begins with the figure that stands for it',
+    async (protocol, key, value, words, shown, average, link) => {
+      const done = { ...usualTest(protocol), boxHeightM: protocol === 'hops' ? null : 0.3 }
+      open([
+        ...year,
+        aResult(4, { date: '2026-11-20', test: done, means: { [key]: { value, U: 0.05, trials: 2 } } }),
+      ])
+      expect(await screen.findByText(`${words} · 20 November 2026`)).toBeVisible()
+      expect(screen.getByText(shown, { selector: 'p > span' })).toBeVisible()
+      expect(screen.getByText(average)).toBeVisible()
+      expect(screen.getByRole('link', { name: `${link} of 20 November 2026` })).toBeVisible()
+      expect(screen.getByText('35.0', { selector: 'li span' })).toBeVisible()
+    },
+  )
 
   test('the points are read by keyboard, from the newest back', async () => {
     const { user } = open(year)

@@ -1,6 +1,7 @@
 import { screen, waitFor, within } from '@testing-library/react'
 import { http, HttpResponse } from 'msw'
 import { describe, expect, test } from 'vitest'
+import { usualTest } from '../../shared/contracts/session-test.ts'
 import {
   getSession,
   listSessions,
@@ -87,6 +88,25 @@ describe('the Session sheet', () => {
     expect(screen.getByText('2 trials, 0 set aside')).toBeVisible()
     expect(screen.getByText(/A measurement, not a diagnosis/)).toBeVisible()
     await expectNoAxeFaults()
+  })
+
+  test('has the columns of its test, and cells with the figure that stands for it', async () => {
+    const dropJump = { ...usualTest('dj'), boxHeightM: 0.3 }
+    const trial = aSheetTrial(1, 0.3, { athleteId: mara, test: dropJump })
+    const metrics = { ...trial.analysis!.metrics, rsi: { value: 1.42, U: 0.03 } }
+    const sheet = aSheet({ trials: [{ ...trial, analysis: { ...trial.analysis!, metrics } }] })
+    await openSheet({ ...sheet, session: { ...sheet.session, test: dropJump } })
+    expect(screen.getByText(/Drop jump, hands on hips, 30 cm box/)).toBeVisible()
+    expect(screen.getAllByRole('columnheader').map(({ textContent }) => textContent)).toEqual([
+      'Athlete',
+      'Body mass, kg',
+      expect.stringMatching(/^Mean RSI/),
+      expect.stringMatching(/^Mean contact time/),
+      'Mean jump height, cm',
+      'Mean landing peak force, BW',
+      'Trial 1',
+    ])
+    expect(screen.getByRole('link', { name: /Mara Ostrow, trial 1, 1\.42 ±\s0\.03/ })).toBeVisible()
   })
 
   test('says in words what is wrong with a trial, and strikes a withheld height', async () => {

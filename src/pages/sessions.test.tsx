@@ -126,6 +126,36 @@ describe('a new session', () => {
     expect(await screen.findByRole('link', { name: 'November jumps' })).toBeVisible()
   })
 
+  test('asks of each test what it needs, and for nothing that it does not have', async () => {
+    serve([])
+    const made: unknown[] = []
+    server.use(
+      answer(createSession, ({ body }) => {
+        made.push(body.test)
+        return aSession()
+      }),
+      answer(getSession, () => aSheet({ trials: [], uploads: [] })),
+    )
+    const { user } = renderApp('/sessions/new', aMe(['coach']))
+    await user.type(await screen.findByLabelText('Title'), 'Drops')
+    await user.click(screen.getByLabelText('Senior squad'))
+    await user.type(screen.getByLabelText('Load carried, kg'), '20')
+    await user.selectOptions(screen.getByLabelText('Test'), 'Drop landing')
+    for (const label of ['Load carried, kg', 'Arms'])
+      expect(screen.queryByLabelText(label)).not.toBeInTheDocument()
+    await user.selectOptions(screen.getByLabelText('Side'), 'left leg')
+    await user.click(screen.getByRole('button', { name: 'Make the session' }))
+    expect(await screen.findByText('Give the height of the box')).toBeVisible()
+    expect(screen.getByLabelText('Box, m')).toHaveFocus()
+    await user.type(screen.getByLabelText('Box, m'), '0,3')
+    await user.click(screen.getByRole('button', { name: 'Make the session' }))
+    await waitFor(() =>
+      expect(made).toEqual([
+        { protocol: 'dropLanding', side: 'left', externalLoadKg: 0, boxHeightM: 0.3, arms: 'hips' },
+      ]),
+    )
+  })
+
   test('what the server refuses stands at the form, and what was typed stays', async () => {
     serve([])
     server.use(

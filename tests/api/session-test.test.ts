@@ -83,6 +83,10 @@ describe('the test of a session', () => {
       expect(refusalOf(refused)).toEqual([400, 'invalid-request'])
       expect(JSON.stringify(refused.body)).toContain(`test.${Object.keys(wrong)[0]}`)
     }
+    const boxless = await day.coach.send(createSession, { body: form(usualTest('dj')) })
+    expect(JSON.stringify(boxless.body)).toContain('Give the height of the box')
+    const boxed = { ...usualTest('dropLanding'), boxHeightM: 0.3, side: 'right' as const }
+    expect((await day.coach.call(createSession, { body: form(boxed) })).test).toEqual(boxed)
   })
 })
 

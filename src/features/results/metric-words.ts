@@ -23,9 +23,10 @@ export function figureWords(metricKey: string, figure: { value: number; U: numbe
 /** Within a sentence: "jump height", and "RSImod" as it is. */
 const inSentence = (words: string) => words.replace(/^\p{Lu}(?=\p{Ll})/u, (letter) => letter.toLowerCase())
 
-/** The same of a mean: "Mean jump height, cm". */
+/** The same of a mean: "Mean jump height, cm"; what is a mean already says so once. */
 export function meanHead(metricKey: string): string {
-  return `Mean ${inSentence(metricHead(metricKey))}`
+  const head = metricHead(metricKey)
+  return head.startsWith('Mean ') ? head : `Mean ${inSentence(head)}`
 }
 
 /** "no jump height", where a trial has no such figure. */
