@@ -17,6 +17,7 @@ const items: NavItem[] = [
   { path: paths.people, words: 'People', roles: ['admin'] },
   { path: paths.squads, words: 'Squads', roles: ['coach', 'admin'] },
   { path: paths.seats, words: 'Seats', roles: ['admin'] },
+  { path: paths.billing, words: 'Billing', roles: ['admin'] },
   { path: paths.settings, words: 'Settings', roles: ['physio', 'admin'] },
   { path: paths.me, words: 'My results', roles: ['athlete'] },
   { path: paths.methods, words: 'Methods', roles },

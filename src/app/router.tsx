@@ -77,6 +77,7 @@ export const routes: RouteObject[] = [
         [
           page(paths.people, async () => (await import('../pages/club-people.tsx')).ClubPeoplePage),
           page(paths.seats, async () => (await import('../pages/club-seats.tsx')).ClubSeatsPage),
+          page(paths.billing, async () => (await import('../pages/club-billing.tsx')).ClubBillingPage),
         ],
       ),
       only(

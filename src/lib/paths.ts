@@ -19,6 +19,7 @@ export const paths = {
   people: '/club/people',
   squads: '/club/squads',
   seats: '/club/seats',
+  billing: '/club/billing',
   settings: '/club/settings',
   methods: '/methods',
   method: '/methods/:key',

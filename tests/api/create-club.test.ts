@@ -2,7 +2,9 @@ import { execFile } from 'node:child_process'
 import { promisify } from 'node:util'
 import { afterAll, beforeAll, describe, expect, it } from 'vitest'
 import { acceptInvitation } from '../../shared/contracts/account.ts'
+import { getBilling } from '../../shared/contracts/billing.ts'
 import { getSeats } from '../../shared/contracts/clubs.ts'
+import { createSquad } from '../../shared/contracts/squads.ts'
 import { startHarness, type Harness } from './harness/harness.ts'
 
 let harness: Harness
@@ -41,6 +43,34 @@ describe('the command that makes a club', () => {
     expect(await admin.call(getSeats)).toEqual({ used: 0, paid: 30, staff: 1 })
   })
 
+  it('makes a club on trial, which writes until the trial is over', async () => {
+    const { stdout } = await createClub(
+      ...[
+        '--name',
+        'Trial Club',
+        '--admin-email',
+        'trial@example.org',
+        '--admin-name',
+        'On Trial',
+        '--trial',
+      ],
+    )
+    const token = /invite\/([\w-]+)/.exec(stdout)?.[1] ?? ''
+    const admin = harness.client()
+    await admin.call(acceptInvitation, {
+      params: { token },
+      body: { name: 'A', password: 'the first of passwords' },
+    })
+    expect(await admin.call(getSeats)).toMatchObject({ paid: 40 })
+    expect(await admin.call(getBilling)).toMatchObject({ state: 'trial', readsOnly: false })
+    const squad = { body: { name: 'Squad', athleteIds: [] } }
+    const before = harness.time.now
+    harness.time.now = new Date(before.getTime() + 30 * 24 * 3600 * 1000 + 60_000)
+    expect(await admin.refusal(createSquad, squad)).toEqual([402, 'club-reads-only'])
+    harness.time.now = before
+    await admin.call(createSquad, squad)
+  })
+
   it('says what it needs when something is missing, wrong or unknown, and makes nothing', async () => {
     const rest = ['--admin-email', 'a@example.org', '--admin-name', 'A']
     const cases: [string[], RegExp][] = [
@@ -50,17 +80,20 @@ describe('the command that makes a club', () => {
     ]
     await Promise.all(cases.map(([args, words]) => expect(createClub(...args)).rejects.toThrow(words)))
     const { rows } = await harness.db.inIdentity((tx) => tx.execute('select name from identity.clubs'))
-    expect(rows).toEqual([{ name: 'Harbour Club' }])
+    expect(rows).toEqual([{ name: 'Harbour Club' }, { name: 'Trial Club' }])
   })
 })
 
-describe('the mail catcher’s process', () => {
+describe.each([
+  ['the mail catcher', 'server/fakes/main.ts', 'never caught'],
+  ['the local payment service', 'server/fakes/payments/main.ts', 'never runs there'],
+])('the process of %s', (_, file, words) => {
   it('refuses to start in production', async () => {
     const env = { PATH: process.env.PATH, NODE_ENV: 'production' }
-    const starting = run(process.execPath, ['--import', 'tsx', 'server/fakes/main.ts'], { env })
+    const starting = run(process.execPath, ['--import', 'tsx', file], { env })
     await expect(starting).rejects.toMatchObject({
       code: 1,
-      stdout: expect.stringContaining('never caught') as string,
+      stdout: expect.stringContaining(words) as string,
     })
   })
 })

@@ -1,0 +1,8 @@
+import { openPortal } from '../../../shared/contracts/billing.ts'
+import { goTo } from '../../lib/go-to.ts'
+import { useAct } from '../use-act.ts'
+
+/** Leads to the payment service's own page. */
+export function useOpenPortal() {
+  return useAct(openPortal, { refreshes: [], onDone: ({ url }) => goTo(url) })
+}
