@@ -137,6 +137,42 @@ describe('a good jump', () => {
     expect(late.metrics.takeoffVelocity.value).toBeLessThan(trial.metrics.takeoffVelocity.value - 0.09)
     expect(trialOf(jump, { movedEvents: { onset: NaN } })).toEqual(trial)
   })
+
+  const movable = [
+    'minimumForce',
+    'minimumVelocity',
+    'zeroVelocity',
+    'landingPeak',
+    'landingZeroVelocity',
+  ] as const
+  it.each(movable)('takes %s where a person put it', (name) => {
+    const timeS = (trial.events[name]?.timeS ?? NaN) - 0.004
+    expect(trialOf(jump, { movedEvents: { [name]: timeS } }).events[name]?.timeS).toBeCloseTo(timeS, 9)
+  })
+
+  it.each([
+    ['minimumForce', 'minimumForce'],
+    ['landingPeak', 'landingPeakForce'],
+  ] as const)('reads the force where %s was put, less surely on a flank than on the peak', (name, key) => {
+    const atPeak = trial.events[name]?.timeS ?? NaN
+    const same = trialOf(jump, { movedEvents: { [name]: atPeak } }).metrics[key]
+    const aside = trialOf(jump, { movedEvents: { [name]: atPeak - 0.02 } }).metrics[key]
+    const { value, U } = trial.metrics[key]
+    expect(same.value).toBeCloseTo(value, -1)
+    expect(same.U).toBeLessThan(2 * (U as number))
+    const sign = name === 'landingPeak' ? 1 : -1
+    expect(sign * (value - aside.value)).toBeGreaterThan(5)
+    expect(aside.U).toBeGreaterThan(same.U as number)
+  })
+
+  it('is as sure of a moved instant as of a sample, whatever the noise', () => {
+    const takeoff = Math.round((trial.events.takeoff?.timeS ?? NaN) * jump.sampleRateHz) / jump.sampleRateHz
+    const onset = Math.round((trial.events.onset?.timeS ?? NaN) * jump.sampleRateHz) / jump.sampleRateHz
+    const { U } = trialOf(jump, { movedEvents: { takeoff, onset } }).metrics.timeToTakeoff
+    const sampleS = 1 / jump.sampleRateHz
+    expect(U).toBeGreaterThan(0.5 * sampleS)
+    expect(U).toBeLessThan(2 * sampleS)
+  })
 })
 
 describe('a recording without a trial comes back empty, with the reason', () => {

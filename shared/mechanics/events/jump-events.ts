@@ -1,12 +1,12 @@
 import type { Settings } from '../settings.ts'
 import { instantAt, integrate, type Motion } from '../signal/motion.ts'
-import { findPeak } from '../signal/peak.ts'
 import type { Crossing } from './flank.ts'
 import {
   movedTo,
   movedU,
   placeCrossing,
   placeLanding,
+  placePeak,
   placeStill,
   type EventSearch,
 } from './landing-events.ts'
@@ -63,7 +63,7 @@ function weighBeforeOnset(search: JumpSearch, takeoff: number): { weighing: Weig
 }
 
 function placePushEvents(search: JumpSearch, motion: Motion, onset: number, takeoff: number) {
-  const { zero, signal, settings } = search
+  const { zero, settings } = search
   const noDip = { minimumForce: null, minimumVelocity: null, zeroVelocity: null }
   if (!search.dips) return noDip
   const lowest = extremeVelocity(motion, onset, takeoff, -1)
@@ -78,15 +78,7 @@ function placePushEvents(search: JumpSearch, motion: Motion, onset: number, take
   const lowestAt = minimumVelocity.position
   if (!(onset < lowestAt && lowestAt < (zeroAt ?? takeoff) && (zeroAt ?? onset) < takeoff)) return noDip
   return {
-    minimumForce: findPeak(
-      signal.total,
-      onset,
-      minimumVelocity.position,
-      -1,
-      zero.total,
-      signal.dt,
-      settings,
-    ),
+    minimumForce: placePeak(search, 'minimumForce', onset, minimumVelocity.position),
     minimumVelocity,
     zeroVelocity: zeroAt,
   }

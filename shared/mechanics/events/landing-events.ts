@@ -1,6 +1,6 @@
 import type { Settings } from '../settings.ts'
 import type { Motion } from '../signal/motion.ts'
-import { findPeak } from '../signal/peak.ts'
+import { findPeak, readPeakAt, type Peak } from '../signal/peak.ts'
 import type { AnalyseOptions, EventName } from '../types.ts'
 import { fitFlank, type Crossing, type FlankDirection } from './flank.ts'
 import { findStill } from './still.ts'
@@ -46,6 +46,20 @@ export function placeStill(search: EventSearch, weight: number, touchdown: Cross
   return movedTo(search, 'still') ?? findStill(signal.sums, weight, touchdown.position, signal.dt, settings)
 }
 
+/** The least or greatest force between two positions, or the force where a person put it. */
+export function placePeak(
+  search: EventSearch,
+  name: 'minimumForce' | 'landingPeak',
+  from: number,
+  to: number,
+): Peak {
+  const { signal, zero, settings } = search
+  const { total, dt } = signal
+  const position = movedTo(search, name)
+  if (position !== null) return readPeakAt(total, position, movedU, zero.total, dt, settings)
+  return findPeak(total, from, to, name === 'landingPeak' ? 1 : -1, zero.total, dt, settings)
+}
+
 /** Where the fall is stopped, and the greatest force until then. */
 export function placeLanding(
   search: EventSearch,
@@ -53,14 +67,14 @@ export function placeLanding(
   touchdown: Crossing,
   still: number | null,
 ): Pick<TrialEvents, 'landingPeak' | 'landingZeroVelocity' | 'still'> {
-  const { signal, zero, settings } = search
+  const { signal, settings } = search
   const last = signal.length - 1
   const landingZeroVelocity =
     movedTo(search, 'landingZeroVelocity') ??
     fallStops(motion, touchdown.position, Math.floor(still ?? last), settings.closingFail)
   const end = landingZeroVelocity ?? Math.min(last, touchdown.position + settings.landingSearchS / signal.dt)
   return {
-    landingPeak: findPeak(signal.total, touchdown.position, end, 1, zero.total, signal.dt, settings),
+    landingPeak: placePeak(search, 'landingPeak', touchdown.position, end),
     landingZeroVelocity,
     still,
   }

@@ -1,5 +1,11 @@
 import { defaultSettings, type Settings } from '../settings.ts'
-import { fitParabola, parabolaNoiseAt, parabolaSlopeNoise, type Parabola } from './local-parabola.ts'
+import {
+  fitParabola,
+  parabolaNoiseAt,
+  parabolaSlopeAt,
+  parabolaSlopeNoise,
+  type Parabola,
+} from './local-parabola.ts'
 import type { Noise } from './noise.ts'
 
 /** A greatest or least force of the noise-free curve, estimated between samples. */
@@ -87,4 +93,23 @@ export function findPeak(
     valueU: Math.hypot(fromNoise, sampling),
     positionU: Math.min(half + 1, Math.hypot(positionU, 0.05)),
   }
+}
+
+/**
+ * The force where a person put a peak: of the curve there, and not the greatest. Besides the noise of its fit it is
+ * as unsure as the curve is steep over the uncertainty `positionU` of the place, samples.
+ */
+export function readPeakAt(
+  force: Float64Array,
+  position: number,
+  positionU: number,
+  noise: Noise,
+  dt: number,
+  settings: Settings = defaultSettings,
+): Peak {
+  const centre = Math.round(position)
+  const fit = fitParabola(force, centre, halfWidth(force, centre, noise, dt, settings))
+  const slopeU = parabolaSlopeAt(fit, position) * positionU
+  const fromNoise = parabolaNoiseAt(fit, position, noise)
+  return { position, value: heightAt(fit, position), valueU: Math.hypot(fromNoise, slopeU), positionU }
 }
