@@ -1,12 +1,8 @@
-import { useState } from 'react'
 import type { Athlete } from '../../../shared/contracts/athletes.ts'
 import { Squad } from '../../../shared/contracts/squads.ts'
 import { useChangeSquad } from '../../api/squads/change-squad.ts'
-import { useAnnounce } from '../../components/announcer.tsx'
-import { Dialog } from '../../components/dialog.tsx'
-import { StaleNotice, type StaleField } from '../../components/stale-notice.tsx'
-import { changedValues } from '../../lib/changed-values.ts'
-import { useStaleRow } from '../../lib/use-stale-row.ts'
+import { ChangeRowDialog } from '../../components/change-row-dialog.tsx'
+import type { StaleField } from '../../components/stale-notice.tsx'
 import { SquadForm, type SquadValues } from './squad-form.tsx'
 
 interface ChangeSquadDialogProps {
@@ -17,44 +13,18 @@ interface ChangeSquadDialogProps {
 
 export function ChangeSquadDialog({ squad, athletes, onClose }: ChangeSquadDialogProps) {
   const change = useChangeSquad()
-  const announce = useAnnounce()
-  const [dirty, setDirty] = useState(false)
-  const { opened, newer, version, catchStale, takeTheirs } = useStaleRow(squad, Squad)
-
-  const save = async (values: SquadValues) => {
-    const body = { version, ...changedValues(valuesOf(opened), values) }
-    try {
-      const saved = await change.mutateAsync({ params: { squadId: opened.id }, body })
-      announce({ text: `${saved.name} is saved.` })
-      onClose()
-    } catch (error) {
-      catchStale(error)
-    }
-  }
-
   return (
-    <Dialog title={`Change ${opened.name}`} onClose={onClose} dirty={dirty}>
-      <SquadForm
-        key={opened.version}
-        values={valuesOf(opened)}
-        athletes={athletes}
-        act="Save"
-        onDirty={setDirty}
-        onSave={save}
-        notice={
-          <StaleNotice
-            opened={opened}
-            newer={newer}
-            fields={staleFields(athletes)}
-            busy={change.isPending}
-            onTakeTheirs={() => {
-              takeTheirs()
-              setDirty(false)
-            }}
-          />
-        }
-      />
-    </Dialog>
+    <ChangeRowDialog
+      row={squad}
+      schema={Squad}
+      valuesOf={valuesOf}
+      staleFields={staleFields(athletes)}
+      save={(squadId, body) => change.mutateAsync({ params: { squadId }, body })}
+      busy={change.isPending}
+      onClose={onClose}
+    >
+      {(form) => <SquadForm {...form} athletes={athletes} act="Save" />}
+    </ChangeRowDialog>
   )
 }
 
