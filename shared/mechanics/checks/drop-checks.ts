@@ -1,10 +1,25 @@
-import type { TrialModel } from '../metrics/trial-model.ts'
+import { at, type TrialModel } from '../metrics/trial-model.ts'
 import type { Figure, TrialCheck } from '../types.ts'
 import { check, rounded, verdictOn } from './check.ts'
 
-/** The height that the athlete truly fell from against the box; made where both are known. */
-export function dropHeight({ settings, test }: TrialModel, effective: Figure | undefined): TrialCheck | null {
-  if (!effective || test.boxHeightM === null || !(test.boxHeightM > 0)) return null
+/** Whether the body moved downwards at the first touch. */
+function fell(model: TrialModel): boolean {
+  const touch = model.events.arrival ?? model.events.touchdown
+  return touch === null || at(model, touch.position).velocity < 0
+}
+
+/** The height that the athlete truly fell from against the box; made where both are known, or where nobody fell. */
+export function dropHeight(model: TrialModel, effective: Figure | undefined): TrialCheck | null {
+  const { settings, test } = model
+  if (!effective) return null
+  if (!fell(model))
+    return check(
+      'drop-height',
+      'fail',
+      { measured: null, limit: test.boxHeightM, unit: 'm' },
+      { pass: '', fail: 'The body moved upwards at the first touch: weighing, zero or the record is wrong.' },
+    )
+  if (test.boxHeightM === null || !(test.boxHeightM > 0)) return null
   const difference = effective.value - test.boxHeightM
   const words = `The fall was that from ${rounded(100 * effective.value, 1)} cm, the box is ${rounded(100 * test.boxHeightM, 0)} cm high`
   return check(

@@ -114,11 +114,16 @@ export function landedOnPlates({ events }: TrialModel): TrialCheck {
   )
 }
 
-export function landingLength({ events, signal, settings }: TrialModel): TrialCheck | null {
+export function landingLength({ events, signal, settings }: TrialModel, mayGoOn = false): TrialCheck | null {
   if (!events.touchdown) return null
+  const unsure = mayGoOn && events.still === null
   const left = (signal.length - 1 - events.touchdown.position) * signal.dt
   const verdict =
-    events.landingZeroVelocity === null ? 'fail' : left < settings.landingLengthS ? 'caution' : 'pass'
+    events.landingZeroVelocity === null || unsure
+      ? 'fail'
+      : left < settings.landingLengthS
+        ? 'caution'
+        : 'pass'
   return check(
     'landing-length',
     verdict,
@@ -126,13 +131,15 @@ export function landingLength({ events, signal, settings }: TrialModel): TrialCh
     {
       pass: 'The recording goes on long enough after touchdown.',
       caution: `The recording ends ${rounded(left, 2)} s after touchdown.`,
-      fail: `The recording ends ${rounded(left, 2)} s after touchdown, before the fall was stopped.`,
+      fail: unsure
+        ? 'The recording ends before the athlete stood still: the last contact may be another hop.'
+        : `The recording ends ${rounded(left, 2)} s after touchdown, before the fall was stopped.`,
     },
   )
 }
 
 export function plausibleLanding({ events, motion, settings }: TrialModel): TrialCheck | null {
-  if (!events.landingPeak) return null
+  if (!events.landingPeak || !(motion.systemWeight > 0)) return null
   const bodyWeights = events.landingPeak.value / motion.systemWeight
   const ok = bodyWeights > settings.lowestLandingPeak
   return check(

@@ -44,8 +44,8 @@ function gaps(recording: Recording, signal: Signal, settings: Settings): TrialCh
     { measured: filled, limit: Math.floor(settings.filledLimit * signal.length), unit: 'samples' },
     {
       pass: 'No sample is missing.',
-      caution: `${filled} samples could not be read and were bridged by straight lines.`,
-      fail: `${filled} samples could not be read, too many to bridge.`,
+      caution: `There are ${filled} samples that could not be read; they were bridged by straight lines.`,
+      fail: `There are ${filled} samples that could not be read, too many to bridge.`,
     },
   )
 }

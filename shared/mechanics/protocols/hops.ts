@@ -62,7 +62,7 @@ export const analyseHops: AnalyseTrial = (input) => {
       [
         deadPlates(model),
         ...hopChecks(model, hops.length, hops.filter(({ counted }) => counted).length),
-        landingLength(model),
+        landingLength(model, true),
         plausibleLanding(model),
         ledger && closing(model, { ledger }),
       ].filter((entry) => entry !== null),
