@@ -4,7 +4,8 @@ import { Id, Moment, Version } from './fields.ts'
 import { limits } from './limits.ts'
 import { measuringRoles } from './roles.ts'
 
-export const UploadState = z.enum(['receiving', 'waiting', 'read', 'refused', 'duplicate'])
+/** `unpacked`: an archive whose files are uploads of their own. */
+export const UploadState = z.enum(['receiving', 'waiting', 'read', 'unpacked', 'refused', 'duplicate'])
 
 export const Upload = z.strictObject({
   id: Id,
@@ -25,6 +26,8 @@ export const Upload = z.strictObject({
     .nullable(),
   notes: z.array(z.strictObject({ code: z.string(), sentence: z.string() })),
   duplicateOf: z.strictObject({ uploadId: Id, sessionId: Id, fileName: z.string() }).nullable(),
+  /** The archive that it came in. */
+  archive: z.strictObject({ uploadId: Id, fileName: z.string() }).nullable(),
   /** Chunks that have arrived, for taking up an upload again. */
   chunksReceived: z.array(z.number().int()),
   /** When the newest chunk came, or before any the announcement. */

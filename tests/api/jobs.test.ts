@@ -127,7 +127,7 @@ describe('a worker that is killed in the middle of a job', () => {
 describe('a file that cannot be read in time', () => {
   it('is refused by name, its thread is ended, and the next file is read', async () => {
     const endless = await drop('endless.csv')
-    await start({ threads: { timeLimitMs: 4000, filename: threadModule('bad-reading') } })
+    await start({ threads: { readTimeLimitMs: 3000, filename: threadModule('bad-reading') } })
     const stuck = await settledSheet(day.coach, endless.session.id)
     expect(stuck.uploads[0]).toMatchObject({ state: 'refused', error: { code: 'reading-too-long' } })
     const next = await drop('next.csv')

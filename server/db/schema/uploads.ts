@@ -99,7 +99,7 @@ export const fileChunks = club.table(
   ],
 )
 
-/** One file dropped on a session. `state`: receiving, waiting (for the read job), read, refused, duplicate. */
+/** One file dropped on a session. `state`: receiving, waiting (for the read job), read, unpacked, refused, duplicate. */
 export const uploads = club.table(
   'uploads',
   {

@@ -1,5 +1,6 @@
 import { deflate, inflate, inflateSync } from 'node:zlib'
 import { promisify } from 'node:util'
+import type { MessagePort } from 'node:worker_threads'
 import { analyse } from '../../../shared/mechanics/analyse.ts'
 import { usualTest } from '../../../shared/contracts/session-test.ts'
 import type { Stretch } from '../../../shared/mechanics/events/unloaded.ts'
@@ -9,9 +10,9 @@ import { standardGravity } from '../../../shared/units/gravity.ts'
 import { defaultSettings, type Settings } from '../../../shared/mechanics/settings.ts'
 import type { ReadError } from '../../../shared/recordings/errors.ts'
 import { previewOf } from '../../../shared/recordings/preview.ts'
-import { readRecording } from '../../../shared/recordings/read-recording.ts'
 import type { ReadSuccess } from '../../../shared/recordings/result.ts'
 import { decodeSamples, encodeSamples } from '../../../shared/recordings/samples-codec.ts'
+import { type ArchiveRead, readAnyFile } from '../../modules/uploads/archive/read-any-file.ts'
 
 const deflated = promisify(deflate)
 const inflated = promisify(inflate)
@@ -21,6 +22,8 @@ export interface ReadFile {
   fileName: string
   /** The test of its session: what tells the trials of a recording apart. */
   test: Test
+  /** Told as reading begins: its time is counted from there. */
+  began?: MessagePort
 }
 
 /** One trial's part of a recording. */
@@ -73,14 +76,16 @@ async function storedTrial(recording: Recording, part: Stretch): Promise<TrialRe
   }
 }
 
-/** Bytes of a file → samples in their stored form by trial, or why it could not be read. */
+/** Bytes of a file → samples in their stored form by trial, what an archive holds, or why it could not be read. */
 export async function readFile({
   bytes,
   fileName,
   test,
-}: ReadFile): Promise<FileRead | { ok: false; error: ReadError }> {
-  const result = readRecording(bytes, fileName)
-  if (!result.ok) return result
+  began,
+}: ReadFile): Promise<FileRead | ArchiveRead | { ok: false; error: ReadError }> {
+  began?.postMessage(null)
+  const result = await readAnyFile(bytes, fileName)
+  if (!result.ok || 'archive' in result) return result
   const { recording, format, columnMap, notes } = result
   return {
     ok: true,
@@ -135,7 +140,7 @@ export async function warmUp(): Promise<void> {
   const text = `Time (s),Force (N)\n${lines.join('\n')}\n`
   const bytes = new TextEncoder().encode(text)
   const read = await readFile({ bytes, fileName: 'warm-up.csv', test: usualTest('cmj') })
-  if (read.ok)
+  if (read.ok && 'trials' in read)
     await analyseSamples({
       samples: read.trials[0].samples,
       options: { gravity: 9.80665, calibrationU: {} },

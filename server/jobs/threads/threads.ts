@@ -1,13 +1,15 @@
 import { availableParallelism } from 'node:os'
 import { fileURLToPath } from 'node:url'
+import { MessageChannel, type MessagePort } from 'node:worker_threads'
 import { Piscina } from 'piscina'
+import { isZip } from '../../modules/uploads/archive/package-kind.ts'
 import { createSlots } from './slots.ts'
 import type * as tasks from './tasks.ts'
 
 /** Reading and computing, away from the thread that talks to the database. */
 export interface Threads {
   /** The file is fetched when its turn has come: no more files are in memory than there are threads. */
-  readFile(fetch: () => Promise<tasks.ReadFile>): ReturnType<typeof tasks.readFile>
+  readFile(fetch: () => Promise<Omit<tasks.ReadFile, 'began'>>): ReturnType<typeof tasks.readFile>
   analyseSamples: typeof tasks.analyseSamples
   analyseAll(all: readonly tasks.AnalyseSamples[]): Promise<ReturnType<typeof tasks.analyseAll>>
   /** Starts every thread and compiles its way through a recording. */
@@ -27,8 +29,12 @@ export class ThreadEnded extends Error {
 
 export interface ThreadLimits {
   threads: number
-  /** Longest a file may take: the largest one allowed takes about a tenth. Below the queue's expiry. */
+  /** Longest a piece of work may take, the start of its thread included. Below the queue's expiry. */
   timeLimitMs: number
+  /** Longest a file may be read, from its first byte: the largest one allowed takes less than half of it. */
+  readTimeLimitMs: number
+  /** The same for workbooks and archives, which are unpacked first. */
+  unpackTimeLimitMs: number
   memoryMb: number
   /** The module whose functions the threads run. */
   filename: string
@@ -37,12 +43,17 @@ export interface ThreadLimits {
 const usual: ThreadLimits = {
   threads: availableParallelism(),
   timeLimitMs: 25_000,
+  readTimeLimitMs: 2_000,
+  unpackTimeLimitMs: 20_000,
   memoryMb: 768,
   filename: fileURLToPath(new URL('./tasks.ts', import.meta.url)),
 }
 
 export function createThreads(limits: Partial<ThreadLimits> = {}): Threads {
-  const { threads, timeLimitMs, memoryMb, filename } = { ...usual, ...limits }
+  const { threads, timeLimitMs, readTimeLimitMs, unpackTimeLimitMs, memoryMb, filename } = {
+    ...usual,
+    ...limits,
+  }
   const pool = new Piscina({
     filename,
     execArgv: ['--import', new URL('./load-typescript.mjs', import.meta.url).href],
@@ -52,13 +63,22 @@ export function createThreads(limits: Partial<ThreadLimits> = {}): Threads {
   })
   // The clock of a piece of work starts with the work: waiting for a thread is nobody's fault.
   const slots = createSlots(threads)
-  const run = async (name: string, task: unknown, transferList: ArrayBuffer[] = []) =>
-    pool.run(task, { name, transferList, signal: AbortSignal.timeout(timeLimitMs) }).catch(throwNamed)
+  const run = async (name: string, task: unknown, { signal, transferList = [] }: RunLimits = {}) =>
+    pool
+      .run(task, { name, transferList, signal: signal ?? AbortSignal.timeout(timeLimitMs) })
+      .catch(throwNamed)
   return {
     readFile: (fetch) =>
       slots(async () => {
         const file = await fetch()
-        return run('readFile', file, [file.bytes.buffer as ArrayBuffer])
+        const most = isZip(file.bytes) ? unpackTimeLimitMs : readTimeLimitMs
+        return timedFromBegin(most, timeLimitMs, ({ began, signal }) =>
+          run(
+            'readFile',
+            { ...file, began },
+            { signal, transferList: [file.bytes.buffer as ArrayBuffer, began] },
+          ),
+        )
       }),
     analyseSamples: (task) => slots(() => run('analyseSamples', task)),
     analyseAll: (all) => slots(() => run('analyseAll', all)),
@@ -66,6 +86,33 @@ export function createThreads(limits: Partial<ThreadLimits> = {}): Threads {
       await Promise.all(Array.from({ length: threads }, () => slots(() => run('warmUp', null))))
     },
     close: () => pool.close({ force: true }),
+  }
+}
+
+interface RunLimits {
+  signal?: AbortSignal
+  transferList?: (ArrayBuffer | MessagePort)[]
+}
+
+/**
+ * Runs work that says on `began` when it begins, and ends it `mostMs` later: a thread that has yet to start, after
+ * another was ended, takes longer than many a file. It ends after `mostInAllMs` in any case.
+ */
+async function timedFromBegin<Result>(
+  mostMs: number,
+  mostInAllMs: number,
+  work: (limit: { began: MessagePort; signal: AbortSignal }) => Promise<Result>,
+): Promise<Result> {
+  const { port1, port2 } = new MessageChannel()
+  const ending = new AbortController()
+  const end = () => ending.abort()
+  const timers = [setTimeout(end, mostInAllMs)]
+  port1.once('message', () => timers.push(setTimeout(end, mostMs)))
+  try {
+    return await work({ began: port2, signal: ending.signal })
+  } finally {
+    timers.forEach(clearTimeout)
+    port1.close()
   }
 }
 

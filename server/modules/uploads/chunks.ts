@@ -2,6 +2,7 @@ import { createHash } from 'node:crypto'
 import { limits } from '../../../shared/contracts/limits.ts'
 import type { ClubContext } from '../../db/database.ts'
 import type { Deps } from '../../deps.ts'
+import { archivedBytes, type StoredInArchive } from './archive/archived-file.ts'
 import { readChunk } from './files.queries.ts'
 
 /** How many chunks a file of this size comes in; an empty file has none. */
@@ -14,10 +15,18 @@ export const chunkLength = (sizeBytes: number, n: number) =>
 interface StoredFile {
   fileId: string
   sizeBytes: number
+  storedIn: StoredInArchive | null
 }
 
-/** The chunks of a file in order, each by a short read of its own: no file is ever whole in a transaction. */
-export async function* chunksOf(deps: Deps, ctx: ClubContext, { fileId, sizeBytes }: StoredFile) {
+/**
+ * The chunks of a file in order, each by a short read of its own: no file is ever whole in a transaction. A file of
+ * an archive comes in the pieces in which it unfolds.
+ */
+export async function* chunksOf(deps: Deps, ctx: ClubContext, { fileId, sizeBytes, storedIn }: StoredFile) {
+  if (storedIn) {
+    yield* archivedBytes(deps, ctx, storedIn)
+    return
+  }
   for (let n = 0; n < chunkCount(sizeBytes); n++) {
     const bytes = await deps.db.inClub(ctx, (tx) => readChunk(tx, ctx.clubId, fileId, n))
     if (!bytes) throw new Error(`Chunk ${n} of a finished file is gone.`)

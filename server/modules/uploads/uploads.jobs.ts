@@ -9,6 +9,9 @@ import { ThreadEnded } from '../../jobs/threads/threads.ts'
 import { notify } from '../events/notify.ts'
 import { candidatesOf } from '../sessions/sessions.service.ts'
 import { addTrials } from '../trials/add-trial.service.ts'
+import { keepMembers } from './archive/keep-members.service.ts'
+import { archiveNotes } from './archive/notes.ts'
+import { type Archive, archiveInArchive } from './archive/read-archive.ts'
 import { wholeFile } from './chunks.ts'
 import { readingEnded, readingFailed } from './uploads.errors.ts'
 import { advance, findUpload, type Step, type UploadRow } from './uploads.queries.ts'
@@ -28,8 +31,9 @@ export const readUploadJob = defineJob('read-upload', async (deps, { clubId, upl
   const { upload, test } = waiting
   const result = await readInThread(deps, upload, test, () => wholeFile(deps, ctx, upload))
   await deps.db.inClub(ctx, async (tx) => {
-    if (result.ok) await keepTrials(tx, clubId, upload, result)
-    else await settle(tx, clubId, upload, { state: 'refused', error: result.error })
+    if (!result.ok) await settle(tx, clubId, upload, { state: 'refused', error: result.error })
+    else if ('archive' in result) await takeApart(tx, clubId, upload, result.archive)
+    else await keepTrials(tx, clubId, upload, result)
   })
 })
 
@@ -64,6 +68,18 @@ async function keepTrials(tx: Tx, clubId: string, upload: UploadRow, read: FileR
   const notes = [...(upload.reading?.notes ?? []), ...read.notes]
   const reading = { notes, format, columnMap, sampleRateHz }
   if (await settle(tx, clubId, upload, { state: 'read', reading })) await addTrials(tx, clubId, upload, read)
+}
+
+/** Makes uploads of an archive's files; an archive that came in another one stays closed. */
+async function takeApart(tx: Tx, clubId: string, upload: UploadRow, archive: Archive): Promise<void> {
+  if (upload.archiveUploadId) {
+    await settle(tx, clubId, upload, { state: 'refused', error: archiveInArchive() })
+    return
+  }
+  const unpacked = archiveNotes.unpacked(archive.members.length, archive.skipped)
+  const reading = { notes: [...(upload.reading?.notes ?? []), unpacked] }
+  if (await settle(tx, clubId, upload, { state: 'unpacked', reading }))
+    await keepMembers(tx, clubId, upload, archive)
 }
 
 /** Takes the upload out of `waiting`; false where that was done already. */

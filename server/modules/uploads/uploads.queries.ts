@@ -6,11 +6,13 @@ import type { Tx } from '../../db/database.ts'
 import { people } from '../../db/schema/identity.ts'
 import { trials } from '../../db/schema/trials.ts'
 import { files, uploads, type Reading, type ReadError } from '../../db/schema/uploads.ts'
+import type { StoredInArchive } from './archive/archived-file.ts'
 
 export const ofUpload = (clubId: string, uploadId: string) =>
   and(eq(uploads.clubId, clubId), eq(uploads.id, uploadId))
 
 const first = alias(uploads, 'first')
+const archives = alias(uploads, 'archives')
 const dismissers = alias(people, 'dismissers')
 
 /** Chunks that still come, by the silence since the last: as the database sees it, not by the caller's clock. */
@@ -28,6 +30,7 @@ export async function viewUploads(tx: Tx, where: SQL | undefined): Promise<Uploa
       sizeBytes: files.sizeBytes,
       uploadedByName: people.name,
       first: { uploadId: first.id, sessionId: first.sessionId, fileName: first.fileName },
+      archive: { uploadId: archives.id, fileName: archives.fileName },
       // Only a file still on its way is taken up again.
       chunksReceived: sql<number[]>`case when ${uploads.state} = 'receiving' then array(
         select c.n from club.file_chunks c
@@ -44,6 +47,7 @@ export async function viewUploads(tx: Tx, where: SQL | undefined): Promise<Uploa
     .innerJoin(people, eq(people.id, uploads.uploadedBy))
     .leftJoin(dismissers, eq(dismissers.id, uploads.dismissedBy))
     .leftJoin(first, and(eq(first.clubId, uploads.clubId), eq(first.id, uploads.duplicateOf)))
+    .leftJoin(archives, and(eq(archives.clubId, uploads.clubId), eq(archives.id, uploads.archiveUploadId)))
     .where(where)
     .orderBy(asc(uploads.createdAt), asc(uploads.id))
   return rows.map(({ upload, first: duplicateOf, dismissedByName, ...row }) => ({
@@ -75,6 +79,10 @@ export interface UploadRow {
   sizeBytes: number
   dismissedAt: Date | null
   uploadedBy: string
+  /** The upload of the archive that it came in. */
+  archiveUploadId: string | null
+  /** Where its bytes stand in an archive; null where they have chunks of their own. */
+  storedIn: StoredInArchive | null
   createdAt: Date
 }
 
@@ -90,12 +98,17 @@ export async function findUpload(tx: Tx, clubId: string, uploadId: string): Prom
       sizeBytes: files.sizeBytes,
       dismissedAt: uploads.dismissedAt,
       uploadedBy: uploads.uploadedBy,
+      archiveUploadId: uploads.archiveUploadId,
+      archiveId: files.archiveId,
+      archived: files.archived,
       createdAt: uploads.createdAt,
     })
     .from(uploads)
     .innerJoin(files, and(eq(files.clubId, uploads.clubId), eq(files.id, uploads.fileId)))
     .where(ofUpload(clubId, uploadId))
-  return row ?? null
+  if (!row) return null
+  const { archiveId, archived, ...upload } = row
+  return { ...upload, storedIn: archiveId && archived ? { ...archived, archiveId } : null }
 }
 
 /** Until the transaction ends the person announces no other file in the club. */

@@ -41,6 +41,8 @@ function wordsOf({ stage }: QueuedFile, upload: Upload | undefined): string {
   switch (upload?.state) {
     case 'read':
       return upload.trials === 1 ? 'read, 1 trial' : `read, ${upload.trials} trials`
+    case 'unpacked':
+      return 'unpacked, its files are in the list'
     case 'refused':
       return 'could not be read'
     case 'duplicate':

@@ -16,7 +16,7 @@ import { useDismissUpload } from './use-dismiss-upload.ts'
 export function needsPerson(upload: Upload): boolean {
   if (upload.dismissed || upload.arriving) return false
   if (upload.state === 'read') return upload.trials === 0
-  return upload.state !== 'waiting'
+  return upload.state !== 'waiting' && upload.state !== 'unpacked'
 }
 
 /** A file in the Tray: what was found, what to do, and a way to clear it away. */

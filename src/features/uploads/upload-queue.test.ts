@@ -23,6 +23,7 @@ function upload(id: string, given: Partial<Upload> = {}): Upload {
     error: null,
     notes: [],
     duplicateOf: null,
+    archive: null,
     chunksReceived: [],
     lastReceivedAt: '2026-11-12T10:00:00.000Z',
     arriving: true,

@@ -130,6 +130,7 @@ export function anUpload(n: number, change: Partial<Upload> = {}): Upload {
     error: null,
     notes: [],
     duplicateOf: null,
+    archive: null,
     chunksReceived: [],
     lastReceivedAt: '2026-11-12T10:00:00.000Z',
     arriving: false,
