@@ -147,7 +147,7 @@ describe.each(syntheticProtocols)('bad input as %s', (protocol) => {
   })
 })
 
-it('two million samples are read within some seconds', () => {
+it('two million samples are read to their end', { timeout: 60_000 }, () => {
   const { recording, options } = goods.cmj
   const force = recording.channels.left as Float64Array
   const long = Float64Array.from({ length: 2_000_000 }, (_, i) => force[i % force.length])

@@ -72,11 +72,18 @@ function noiseAbout(flank: Flank, count: number, noise: Noise): Noise {
   return rms > noise.sd ? { ...allowForShortness(estimateNoise(residuals, first, count)), sd: rms } : noise
 }
 
-function fit(place: FlankWindow, level: number, highest: number, noise: Noise, dt: number): Fitted | null {
+function fit(
+  place: FlankWindow,
+  level: number,
+  highest: number,
+  noise: Noise,
+  dt: number,
+  footS: number,
+): Fitted | null {
   const count = fillWindow(place, level)
   if (count === null) return null
   const { outside } = place
-  const earliest = outside - Math.min(outside, Math.floor(0.01 / dt) + 2)
+  const earliest = outside - Math.min(outside, Math.floor(footS / dt) + 2)
   const flank = searchFoot(window, count, earliest, outside + 2, highest)
   return { flank, count, noise: noiseAbout(flank, count, noise), ringing: 0 }
 }
@@ -87,11 +94,11 @@ function fit(place: FlankWindow, level: number, highest: number, noise: Noise, d
  */
 function bestFit(place: FlankWindow, noise: Noise, dt: number, settings: Settings): Fitted | null {
   const level = (sd: number) => settings.eventForceN + settings.flankNoise * sd
-  const simple = fit(place, level(noise.sd), 2, noise, dt)
+  const simple = fit(place, level(noise.sd), 2, noise, dt, settings.flankFootS)
   if (!simple || simple.noise.sd <= settings.flankMisfitSd * noise.sd) return simple
-  const bent = fit(place, level(noise.sd), 3, noise, dt)
+  const bent = fit(place, level(noise.sd), 3, noise, dt, settings.flankFootS)
   if (bent && bent.flank.misfit < settings.flankThirdPower * simple.flank.misfit) return bent
-  const long = fit(place, level(simple.noise.sd), 2, noise, dt) ?? simple
+  const long = fit(place, level(simple.noise.sd), 2, noise, dt, settings.flankFootS) ?? simple
   return { ...long, ringing: long.noise.sd }
 }
 
@@ -133,7 +140,7 @@ export function fitFlank(
     force,
     firstContact: direction === 'falling' ? edge - 1 : edge,
     step: direction === 'falling' ? -1 : 1,
-    outside: Math.max(8, Math.min(40, Math.round(0.012 / dt))),
+    outside: Math.max(8, Math.min(40, Math.round(settings.flankOutsideS / dt))),
     longest: Math.min(256, Math.max(fewestFlankSamples, Math.round(settings.flankLimitS / dt))),
   }
   const { outside, step } = place

@@ -81,9 +81,6 @@ function spreadOf(force: Float64Array, { from, to }: Stretch): number {
   return Math.sqrt(squares / Math.max(1, to - from - 1))
 }
 
-/** Shorter windows that are tried, as parts of the full one, where no full one is steady. */
-const shorter = [1, 0.75, 0.5, 0.35, 0.25]
-
 function unrestOf({ spread, systemWeight }: WeighingWindow): number {
   return spread / Math.abs(systemWeight)
 }
@@ -108,7 +105,9 @@ export function chooseWindow(
   const available = limits.to - limits.from
   let steadiest: WeighingWindow | null = null
   let least = Infinity
-  for (const part of shorter) {
+  // Whatever the setting, every window is shorter than the one before, so that the search ends.
+  const shrink = Math.min(0.99, settings.weighingShrink)
+  for (let part = 1; ; part *= shrink) {
     const width = Math.min(available, Math.round(part * full))
     if (width < shortest) break
     const from = steadiestWindow(force, limits.from, limits.to, width)
@@ -120,7 +119,7 @@ export function chooseWindow(
     }
     const unrest = unrestOf(chosen)
     if (unrest <= settings.steadinessCaution) return chosen
-    if (unrest < 0.5 * least) {
+    if (unrest < settings.weighingSteadier * least) {
       steadiest = chosen
       least = unrest
     }

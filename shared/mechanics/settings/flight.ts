@@ -41,6 +41,18 @@ export const flightSettings = {
     source: own,
     effect: 'More of the flank serves to place takeoff and touchdown',
   },
+  flankFootS: {
+    value: 0.01,
+    unit: 's',
+    source: `${own}: as early before the threshold of the search a contact may begin`,
+    effect: 'The foot of a flank is searched earlier',
+  },
+  flankOutsideS: {
+    value: 0.012,
+    unit: 's',
+    source: `${own}: flight beside the flank that the fit holds at zero`,
+    effect: 'More of the flight steadies the fit of a flank',
+  },
   flankNoise: {
     value: 15,
     unit: 'SD of the unloaded plate',
@@ -88,6 +100,12 @@ export const flightSettings = {
     unit: 'of the load',
     source: `${own}: a level that near zero is that of empty plates, or of plates set to zero with the athlete on them`,
     effect: 'Larger offsets are taken for zero without looking further',
+  },
+  negativeShare: {
+    value: 0.1,
+    unit: 'of the range of the force',
+    source: `${own}: a usual level that far below zero is that of a plate whose sign is turned over`,
+    effect: 'Fewer plates are turned over',
   },
   offsetShare: {
     value: 0.4,

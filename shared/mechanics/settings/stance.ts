@@ -9,6 +9,18 @@ export const stanceSettings = {
     effect: 'Steadier weight, fewer recordings long enough',
   },
   shortestWeighingS: { value: 0.25, unit: 's', source: own, effect: 'More short recordings fail' },
+  weighingShrink: {
+    value: 0.72,
+    unit: 'of the window before',
+    source: `${own}: shorter windows are tried where no full one is steady`,
+    effect: 'More lengths are tried',
+  },
+  weighingSteadier: {
+    value: 0.5,
+    unit: 'of the unrest of the longer window',
+    source: `${own}: a shorter weighing must be plainly steadier`,
+    effect: 'Shorter windows are taken more readily',
+  },
   noiseBlockS: {
     value: 0.005,
     unit: 's',

@@ -127,10 +127,11 @@ export function usualLevel(force: Float64Array): number {
  * Pressing down reads negative where the usual level is below zero and the largest force points the same way:
  * a push and a landing reach further from standing than the empty plate does.
  */
-function isNegativeGoing(force: Float64Array, least: number, greatest: number): boolean {
-  if (least > -0.1 * (greatest - least)) return false
+function isNegativeGoing(force: Float64Array, { least, greatest }: Survey, share: number): boolean {
+  const wellBelow = -share * (greatest - least)
+  if (least > wellBelow) return false
   const usual = usualLevel(force)
-  return usual < -0.1 * (greatest - least) && usual - least > greatest - usual
+  return usual < wellBelow && usual - least > greatest - usual
 }
 
 function turnedOver(force: Float64Array, into: Float64Array): Float64Array {
@@ -151,9 +152,9 @@ function conditionPlate(
     unreadable = bridgeUnreadable(raw, force, settings.greatestForceN)
     range = survey(force, settings.greatestForceN)
   }
-  const flipped = isNegativeGoing(force, range.least, range.greatest)
-  if (flipped) force = turnedOver(force, borrow(`turned force of ${channel}`, raw.length))
   const dead = !(range.greatest - range.least > settings.smallestLoadN / 3)
+  const flipped = !dead && isNegativeGoing(force, range, settings.negativeShare)
+  if (flipped) force = turnedOver(force, borrow(`turned force of ${channel}`, raw.length))
   const flatTop = longestFlatTop(force, flipped ? -range.least : range.greatest)
   return { channel, force, flipped, dead, flatTop, unreadable }
 }
