@@ -14,7 +14,7 @@ import type {
 } from '../../shared/mechanics/types.ts'
 import type { ReadError } from '../../shared/recordings/errors.ts'
 import { readRecording } from '../../shared/recordings/read-recording.ts'
-import type { ColumnMap, FileFormat } from '../../shared/recordings/result.ts'
+import type { ColumnMap, FileFormat, ReadHints, ReadResult } from '../../shared/recordings/result.ts'
 import { usualTest } from '../../shared/contracts/session-test.ts'
 import { engineOptions, inputsOf } from '../modules/analyses/inputs.ts'
 
@@ -113,11 +113,24 @@ function analysed(
   return analyse(recording, test ? { ...proposing, test: named } : { ...proposing, known }, settings)
 }
 
+export const sha256Of = (bytes: Uint8Array): string => createHash('sha256').update(bytes).digest('hex')
+
+export const hintsOf = ({ sampleRateHz }: GivenFacts): ReadHints =>
+  sampleRateHz === undefined ? {} : { sampleRateHz }
+
 /** Reads and analyses one file as the server does; `file` is named in the entry as it was given. */
 export function fileEntry(file: string, bytes: Uint8Array, given: GivenFacts, settings: Settings): FileEntry {
-  const sha256 = createHash('sha256').update(bytes).digest('hex')
-  const { sampleRateHz } = given
-  const read = readRecording(bytes, basename(file), sampleRateHz === undefined ? {} : { sampleRateHz })
+  const read = readRecording(bytes, basename(file), hintsOf(given))
+  return readingEntry({ file, sha256: sha256Of(bytes) }, read, given, settings)
+}
+
+/** Analyses what was read of a file. */
+export function readingEntry(
+  { file, sha256 }: Pick<FileEntry, 'file' | 'sha256'>,
+  read: ReadResult,
+  given: GivenFacts,
+  settings: Settings,
+): FileEntry {
   if (!read.ok) return failedEntry(file, sha256, read.error)
   const { recording, format, columnMap } = read
   const { notes, trials } = analysed(recording, given, settings)

@@ -2,7 +2,7 @@ import { crc32, inflateRawSync } from 'node:zlib'
 import { MAX_UNPACK_RATIO, UNSUSPICIOUS_BYTES } from '../../../../shared/recordings/archive-limits.ts'
 import { ReadFault } from '../../../../shared/recordings/errors.ts'
 import { shown } from '../../../../shared/recordings/safe-text.ts'
-import type { DirectoryEntry } from './directory.ts'
+import type { DirectoryEntry, Packed } from './directory.ts'
 
 function damaged(path: string): ReadFault {
   const seen = shown(path)
@@ -31,6 +31,15 @@ function inflate(packed: Uint8Array, path: string, most: number): Uint8Array {
       },
     )
   }
+}
+
+/** The bytes of a file that was unpacked before, when its size was found. */
+export function unpackAgain(
+  archive: Uint8Array,
+  { packed, sizeBytes }: { packed: Packed; sizeBytes: number },
+): Uint8Array {
+  const raw = archive.subarray(packed.start, packed.start + packed.bytes)
+  return packed.method === 'stored' ? raw : inflateRawSync(raw, { maxOutputLength: Math.max(1, sizeBytes) })
 }
 
 /**
