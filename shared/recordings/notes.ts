@@ -100,6 +100,10 @@ export const readingNotes = {
     code: 'samples-filled',
     sentence: `${count} of ${of} samples were blank, unreadable or missing and were filled from their neighbours.`,
   }),
+  stampsFilled: (count: number): Note => ({
+    code: 'stamps-filled',
+    sentence: `${count} time ${count === 1 ? 'stamp was' : 'stamps were'} blank or unreadable and ${count === 1 ? 'was' : 'were'} put in between ${count === 1 ? 'its' : 'their'} neighbours.`,
+  }),
   endsTrimmed: (count: number): Note => ({
     code: 'ends-trimmed',
     sentence: `${count} ${count === 1 ? 'line' : 'lines'} at the start or end held no complete sample and ${count === 1 ? 'was' : 'were'} left off.`,

@@ -1,5 +1,7 @@
 import { benchCoverage, coverageParts } from '../reference/coverage-bench.ts'
 import { benchEngine } from './engine.ts'
+import { benchIngest } from './ingest.ts'
+import { benchMutations } from './mutations.ts'
 import { benchPageWeight } from './page-weight.ts'
 import { benchRecompute } from './recompute.ts'
 import { benchUpload } from './upload.ts'
@@ -14,6 +16,8 @@ interface Bench {
 const benches: Record<string, Bench> = {
   coverage: { run: benchCoverage, parts: coverageParts },
   engine: { run: benchEngine },
+  ingest: { run: benchIngest },
+  mutations: { run: benchMutations },
   'page-weight': { run: benchPageWeight },
   recompute: { run: benchRecompute },
   upload: { run: benchUpload },

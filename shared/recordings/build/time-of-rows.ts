@@ -76,14 +76,20 @@ function hasBlank(values: Float64Array): boolean {
   return false
 }
 
+/** Stamps without blanks; those that had to be put in between others are noted. */
+function withoutBlanks(stamps: Float64Array): { filled: Float64Array; notes: Note[] } {
+  if (!hasBlank(stamps)) return { filled: stamps, notes: [] }
+  const { filled, count } = fillBlanks(stamps)
+  return { filled, notes: [readingNotes.stampsFilled(count)] }
+}
+
 function fromStamps(time: OpenTime, rows: Rows, metadata: Metadata): TimeOfRows {
   const raw = rows.columnOf(time.index)
-  const whole = hasBlank(raw) ? fillBlanks(raw).filled : raw
+  const { filled: whole, notes } = withoutBlanks(raw)
   const unit = time.unit ?? unitByStep(whole, time.name)
   if (unit === 'samples') throw new RangeError('A count of samples is no time stamp.')
   const seconds = inSeconds(unit === 'clock' ? pastMidnight(whole) : whole, unit)
   const base = timeBaseOf(seconds, rows.lineOf)
-  const notes: Note[] = []
   if (time.unit === null) notes.push(readingNotes.timeUnitAssumed(unit, base.sampleRateHz))
   const stated = metadata.sampleRateHz
   const agrees = stated !== undefined && Math.abs(stated - base.sampleRateHz) <= SAME_RATE * stated
@@ -98,8 +104,7 @@ function fromStamps(time: OpenTime, rows: Rows, metadata: Metadata): TimeOfRows 
 
 /** Numbers of samples, out of frames and the samples within them where there are both. */
 function counted(time: OpenTime, rows: Rows): { counts: Float64Array; within: MappedTime['within'] } {
-  const frames = fillBlanks(rows.columnOf(time.index)).filled
-  if (!time.within) return { counts: frames, within: undefined }
+  if (!time.within) return { counts: rows.columnOf(time.index), within: undefined }
   const inner = rows.columnOf(time.within.index)
   let [least, greatest] = [Infinity, -Infinity]
   for (const value of inner) {
@@ -108,7 +113,7 @@ function counted(time: OpenTime, rows: Rows): { counts: Float64Array; within: Ma
   }
   const samplesPerFrame = greatest - least + 1
   const counts = rows.columnOf(time.index).map((frame, i) => frame * samplesPerFrame + (inner[i] ?? NaN))
-  return { counts: fillBlanks(counts).filled, within: { ...time.within, samplesPerFrame } }
+  return { counts, within: { ...time.within, samplesPerFrame } }
 }
 
 function fromCounts(
@@ -118,7 +123,8 @@ function fromCounts(
   map: Pick<ColumnMap, 'sampleRateHz'>,
   hints: ReadHints,
 ): TimeOfRows {
-  const { counts, within } = counted(time, rows)
+  const { counts: raw, within } = counted(time, rows)
+  const { filled: counts, notes } = withoutBlanks(raw)
   const perFrame = within?.samplesPerFrame ?? 1
   const frames = metadata.frameRateHz
   const fromFrames =
@@ -143,7 +149,7 @@ function fromCounts(
   return {
     base: { ...base, sampleRateHz: rateHz, coarseStepS: null },
     time: { index, name, unit: 'samples', ...(within ? { within } : {}) },
-    notes: [stated.note],
+    notes: [stated.note, ...notes],
   }
 }
 

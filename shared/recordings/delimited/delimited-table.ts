@@ -11,7 +11,7 @@ import type { Body, Table, TopRow } from '../table/table.ts'
 import { wholeLinesEnd } from './cut-line.ts'
 import { decodeBytes } from './encoding.ts'
 import type { DecodedBytes } from './encoding.ts'
-import { lineEndFor, splitAtBlanks } from './lines.ts'
+import { splitAtBlanks, withLineFeeds } from './lines.ts'
 import { parseNumbers } from './parse-numbers.ts'
 import { scanNumbers } from './scan-numbers.ts'
 
@@ -72,11 +72,10 @@ interface RawRow {
 
 /** Rows of cells between runs of blanks; a unit in brackets after a blank belongs to its heading. */
 function rowsAtBlanks(text: string): RawRow[] {
-  const lineEnd = lineEndFor(text)
   const rows: RawRow[] = []
   let at = 0
   while (at < text.length && rows.length < TOP_ROWS) {
-    const found = text.indexOf(lineEnd, at)
+    const found = text.indexOf('\n', at)
     const end = found < 0 ? text.length : found + 1
     const line = splitAtBlanks(text.slice(at, end).replace(/[\r\n]/gu, '')).replace(/ (?=[([{])/gu, '\u0000')
     rows.push({
@@ -92,7 +91,7 @@ function rowsAtMarks(text: string, delimiter: Delimiter): RawRow[] {
   const rows: RawRow[] = []
   Papa.parse<string[]>(text, {
     delimiter,
-    newline: lineEndFor(text),
+    newline: '\n',
     preview: TOP_ROWS,
     step: ({ data, meta }) => {
       rows.push({ cells: data, end: meta.cursor })
@@ -223,7 +222,7 @@ function topOf(decoded: DecodedBytes): { best: Candidate; text: string } {
   for (const lines of [FEW_ROWS, TOP_ROWS]) {
     const { piece, isWhole } = topBytes(decoded.bytes, lines)
     const text = oneCharacterAByte(piece)
-    const best = bestCandidate(text, decoded, isWhole)
+    const best = bestCandidate(withLineFeeds(text), decoded, isWhole)
     const rows = best.top.length - (best.layout?.bodyRow ?? best.top.length)
     if (lines === TOP_ROWS || (best.isClear && rows >= FEW_ROWS / 2)) return { best, text }
   }

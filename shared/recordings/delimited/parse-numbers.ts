@@ -5,7 +5,7 @@ import { shown } from '../safe-text.ts'
 import { cellKind, hasThousands, readClock, readNumber } from '../table/number-text.ts'
 import type { DecimalMark } from '../table/number-text.ts'
 import type { Body, UnreadableCell } from '../table/table.ts'
-import { lineEndFor, splitAtBlanks } from './lines.ts'
+import { splitAtBlanks, withLineFeeds } from './lines.ts'
 import type { PlainStyle } from './scan-numbers.ts'
 
 interface HeldRow {
@@ -130,9 +130,10 @@ export function parseNumbers(
   const collector = new RowCollector(wanted, decimal)
   let line = firstLine - 1
   let fault: unknown = null
-  Papa.parse<string[]>(delimiter === ' ' ? splitAtBlanks(text) : text, {
+  const lines = withLineFeeds(text)
+  Papa.parse<string[]>(delimiter === ' ' ? splitAtBlanks(lines) : lines, {
     delimiter,
-    newline: lineEndFor(text),
+    newline: '\n',
     step: ({ data }, parser) => {
       line++
       try {

@@ -148,6 +148,15 @@ function headingsAt(top: readonly TopRow[], at: number, columns: number): Headin
   return { names, units, from, to: at }
 }
 
+/** The second row above the headings that looks like those under them: then the headings stand among the numbers. */
+export function numbersAbove({ preamble, numeric }: Layout): TopRow | undefined {
+  const [first = 0] = numeric
+  const isNumber = ({ kinds }: TopRow, column: number): boolean =>
+    kinds[column] === 'number' || kinds[column] === 'clock'
+  if (numeric.length < 2) return undefined
+  return preamble.filter((row) => isNumber(row, first) && numeric.filter((column) => isNumber(row, column)).length > 1)[1]
+}
+
 /**
  * Finds headings and numbers in the rows at the top of a table.
  * @returns null where no stretch of rows holds numbers

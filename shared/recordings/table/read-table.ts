@@ -12,7 +12,8 @@ import { ReadFault } from '../errors.ts'
 import type { ReadError, ReadErrorCode } from '../errors.ts'
 import { readingNotes } from '../notes.ts'
 import type { ColumnMap, FileFormat, MapRequest, MappedForce, ReadHints, ReadResult } from '../result.ts'
-import { listed } from '../safe-text.ts'
+import { listed, shown } from '../safe-text.ts'
+import { numbersAbove } from './layout.ts'
 import type { Layout } from './layout.ts'
 import { readMetadata } from './metadata.ts'
 import type { Metadata } from './metadata.ts'
@@ -56,6 +57,7 @@ function open(table: Table): OpenTable {
   if (!layout) throw new ReadFault('no-header', 'No table of numbers under headings was found.')
   const { names, units, headerLine, numeric, preamble } = layout
   refuseCommasAsBoth(table, layout)
+  refuseHeadingsAmongNumbers(layout)
   const decimal = table.format.kind === 'delimited' ? table.format.decimalMark : '.'
   // Headings that are fewer than the columns cannot be told to stand over them.
   const named = names.length > (numeric.at(-1) ?? 0) ? names : []
@@ -74,6 +76,14 @@ function open(table: Table): OpenTable {
   }
 }
 
+function refuseHeadingsAmongNumbers(layout: Layout): void {
+  const row = numbersAbove(layout)
+  if (!row || layout.headerLine === null) return
+  const seen = shown(layout.names.join(' '))
+  const sentence = `Line ${layout.headerLine} stands among the numbers and holds headings: “${seen}”.`
+  throw new ReadFault('corrupt-file', sentence, { line: layout.headerLine, seen })
+}
+
 /** Half as many headings as columns, between commas: each number holds a comma of its own. */
 function refuseCommasAsBoth({ format }: Table, { names, numeric, headerLine }: Layout): void {
   if (format.kind !== 'delimited' || format.delimiter !== ',' || names.length === 0) return
@@ -81,7 +91,7 @@ function refuseCommasAsBoth({ format }: Table, { names, numeric, headerLine }: L
   const sentence = `There are ${names.length} headings over ${numeric.length} columns of numbers, as if each number had a comma of its own.`
   throw new ReadFault('decimal-comma', sentence, {
     ...(headerLine ? { line: headerLine } : {}),
-    seen: names.join(', '),
+    seen: shown(names.join(', ')),
   })
 }
 
