@@ -125,7 +125,7 @@ describe('a coach', () => {
       expect(await said('empty.csv')).toMatch(/The file is empty.*Export the recording again/)
       expect(await said('photo.csv')).toMatch(/PNG picture.*Export the recording as delimited text/)
       expect(await said('words.csv')).toMatch(/text without numbers.*Export the recording as delimited text/)
-      expect(await said('angles.csv')).toMatch(/names a vertical force.*Give the force column a heading/)
+      expect(await said('angles.csv')).toMatch(/names a vertical force.*head the force column with its unit/)
       expect(await said('big.csv')).toMatch(
         /The file has 65 MiB, and 64 MiB is the most.*Split the recording/,
       )
@@ -134,6 +134,21 @@ describe('a coach', () => {
     } finally {
       rmSync(folder, { recursive: true })
     }
+  })
+
+  test('clears a file from the Tray that becomes no trial, and finds it again', async () => {
+    const { page } = coach
+    const tray = page.getByRole('region', { name: 'Tray' })
+    await tray.getByRole('button', { name: 'Dismiss angles.csv' }).click()
+    await page.getByText('Dismissed: angles.csv. The file is kept.').waitFor()
+    await tray.getByText('Show 1 dismissed file').click()
+    const takeBack = tray
+      .getByRole('list', { name: 'Dismissed files' })
+      .getByRole('button', { name: 'Take back angles.csv' })
+    await takeBack.waitFor()
+    await expectAccessible(coach)
+    await takeBack.click()
+    await tray.getByRole('button', { name: 'Dismiss angles.csv' }).waitFor()
   })
 
   test('a file with path parts in its name is kept under its last part, and the same bytes are not kept twice', async () => {
