@@ -2,6 +2,7 @@ import { readFileSync } from 'node:fs'
 import { parseArgs } from 'node:util'
 import { defaultSettings } from '../../shared/mechanics/settings.ts'
 import type { Settings } from '../../shared/mechanics/settings.ts'
+import { methodChoiceKeys, methodChoices } from '../../shared/mechanics/settings/choices.ts'
 import { analysedProtocols } from '../../shared/mechanics/protocols/analysed.ts'
 import type { Protocol, Side } from '../../shared/mechanics/types.ts'
 import { usualTest } from '../../shared/contracts/session-test.ts'
@@ -93,8 +94,10 @@ function settingsFrom(path: string | undefined): Settings {
   for (const [name, value] of Object.entries(changes)) {
     const known = Object.hasOwn(defaultSettings, name) && name !== 'version'
     if (!known) throw new UsageError(`${path}: “${name}” is no setting of the engine.`)
-    const fits =
-      name === 'onsetRule' ? value === 'fraction' || value === 'standard-deviations' : Number.isFinite(value)
+    const options = methodChoiceKeys.find((key) => key === name)
+    const fits = options
+      ? typeof value === 'string' && Object.hasOwn(methodChoices[options].options, value)
+      : Number.isFinite(value)
     if (!fits) throw new UsageError(`${path}: the setting “${name}” cannot be ${JSON.stringify(value)}.`)
   }
   return { ...defaultSettings, ...changes }

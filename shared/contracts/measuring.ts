@@ -1,4 +1,5 @@
 import { z } from 'zod'
+import type { AsymmetryFormula } from '../statistics/asymmetry/formulas.ts'
 import {
   type ChangedSettings,
   methodChoices,
@@ -27,7 +28,10 @@ const numbers = Object.fromEntries(
 export const Changed = z
   .strictObject({
     ...numbers,
-    onsetRule: z.enum(Object.keys(methodChoices.onsetRule.options) as [OnsetRule, ...OnsetRule[]]).optional(),
+    onsetRule: z.enum(Object.keys(methodChoices.onsetRule.options) as OnsetRule[]).optional(),
+    asymmetryFormula: z
+      .enum(Object.keys(methodChoices.asymmetryFormula.options) as AsymmetryFormula[])
+      .optional(),
   })
   .superRefine((changed, issues) => {
     for (const [key, message] of Object.entries(problemsOf(changed as ChangedSettings)))

@@ -1,3 +1,4 @@
+import type { AsymmetryFormula } from '../statistics/asymmetry/formulas.ts'
 import { checkSettings } from './settings/checks.ts'
 import { contactSettings } from './settings/contacts.ts'
 import { figureSettings } from './settings/figures.ts'
@@ -24,7 +25,11 @@ export type SettingKey = keyof typeof settingDefinitions
 export type OnsetRule = 'fraction' | 'standard-deviations'
 
 /** The numbers that an analysis was made with; stored with it. */
-export type Settings = { version: number; onsetRule: OnsetRule } & Record<SettingKey, number>
+export type Settings = {
+  version: number
+  onsetRule: OnsetRule
+  asymmetryFormula: AsymmetryFormula
+} & Record<SettingKey, number>
 
 const entries = Object.entries(settingDefinitions).map(([key, { value }]) => [key, value])
 
@@ -32,5 +37,6 @@ const entries = Object.entries(settingDefinitions).map(([key, { value }]) => [ke
 export const defaultSettings: Readonly<Settings> = Object.freeze({
   version: 1,
   onsetRule: 'fraction',
+  asymmetryFormula: 'symmetryIndex',
   ...(Object.fromEntries(entries) as Record<SettingKey, number>),
 })

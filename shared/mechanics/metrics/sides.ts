@@ -1,12 +1,13 @@
 import type { MetricKey } from '../catalogue.ts'
-import type { AsymmetryFigure, Figure, Phase, Sides } from '../types.ts'
+import type { Figure, Phase, Sides } from '../types.ts'
 import { fitFlank, type Crossing } from '../events/flank.ts'
 import { phasesOf } from '../phases.ts'
 import { grossImpulse } from '../signal/gross-impulse.ts'
 import { integratedNoise, type Noise } from '../signal/noise.ts'
 import { findPeak } from '../signal/peak.ts'
-import type { Budget, Quantity } from '../uncertainty/budget.ts'
+import type { Quantity } from '../uncertainty/budget.ts'
 import { isSide, type JumpModel, type PlateInputs } from './trial-model.ts'
+import { asymmetryOf } from './asymmetry.ts'
 import { findRise, greatestSlope } from './loading-rate.ts'
 import { miss, put, type Measured, type Outcome } from './measured.ts'
 
@@ -177,26 +178,6 @@ export function lagFigures(model: JumpModel, [left, right]: [Foot, Foot], into: 
   into.set('feetTouchdownLag', lag(left.touchdown, right.touchdown))
 }
 
-/**
- * Signed symmetry index (right − left) / (½(right + left)) · 100 % (Robinson 1987, from memory; formula as in
- * BMC Sports Sci Med Rehabil 13:115). `null` where both feet carry nothing.
- */
-export function asymmetryOf(
-  budget: Budget,
-  left: Quantity,
-  right: Quantity,
-  withoutU: boolean,
-): AsymmetryFigure | null {
-  const sum = left.value + right.value
-  if (!(Math.abs(sum) > 0)) return null
-  const value = (200 * (right.value - left.value)) / sum
-  const square = sum * sum
-  const quantity = budget.pair(value, (400 * left.value) / square, right, (-400 * right.value) / square, left)
-  const { U, k, URepeat, kRepeat } = budget.figure(quantity, withoutU)
-  const zeroWithin = U === null ? null : Math.abs(value) <= U
-  return { value, U, k, URepeat, kRepeat, larger: value >= 0 ? 'right' : 'left', zeroWithin }
-}
-
 /** Figures of each foot and their asymmetry. */
 export function sidesOf(model: JumpModel, feet: [Foot, Foot]): Sides {
   const [left, right] = feet.map((foot) => footFigures(model, foot))
@@ -212,7 +193,7 @@ export function sidesOf(model: JumpModel, feet: [Foot, Foot]): Sides {
     enter(sides.right, key, b)
     if (!('quantity' in a) || !('quantity' in b)) continue
     const withoutU = a.withoutU !== undefined || b.withoutU !== undefined
-    const asymmetry = asymmetryOf(model.budget, a.quantity, b.quantity, withoutU)
+    const asymmetry = asymmetryOf(model.budget, a.quantity, b.quantity, withoutU, model.settings)
     if (asymmetry) sides.asymmetry[key] = asymmetry
   }
   return sides

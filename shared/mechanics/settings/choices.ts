@@ -1,3 +1,4 @@
+import type { AsymmetryFormula } from '../../statistics/asymmetry/formulas.ts'
 import {
   defaultSettings,
   type OnsetRule,
@@ -60,8 +61,18 @@ export const numberChoices = {
 export type NumberChoice = keyof typeof numberChoices
 export const numberChoiceKeys = Object.keys(numberChoices) as NumberChoice[]
 
+/** Settings that choose between methods. */
+export type MethodChoice = 'onsetRule' | 'asymmetryFormula'
+
+interface MethodChoiceDefinition {
+  source: string
+  effect: string
+  /** By the setting's value, in words. */
+  options: Readonly<Record<string, string>>
+}
+
 /** Choices between methods, with a sentence for each and where they come from. */
-export const methodChoices = {
+export const methodChoices: Readonly<Record<MethodChoice, MethodChoiceDefinition>> = {
   onsetRule: {
     source: `fraction: ${settingDefinitions.onsetFraction.source}; standard deviations: ${owen}`,
     effect: 'What the force must leave for the movement to have begun',
@@ -70,15 +81,27 @@ export const methodChoices = {
       'standard-deviations': 'standard deviations of the weighing',
     },
   },
-} as const satisfies Partial<
-  Record<keyof Settings, { source: string; effect: string; options: Record<string, string> }>
->
+  asymmetryFormula: {
+    source:
+      'symmetry index: Robinson, Herzog, Nigg 1987; bilateral share: Bishop et al. 2016; difference of the stronger: Impellizzeri et al. 2007; symmetry angle: Zifchock et al. 2008 (from memory)',
+    effect: 'The scale of every asymmetry; figures by two formulas are never comparable',
+    options: {
+      symmetryIndex: 'the difference over the mean of both sides',
+      bilateralShare: 'the difference over the sum of both sides',
+      percentageDifference: 'the difference over the stronger side',
+      symmetryAngle: 'the angle of one side against the other, over a right angle',
+      logRatio: 'the logarithm of the ratio',
+    },
+  },
+}
 
-export type MethodChoice = keyof typeof methodChoices
 export const methodChoiceKeys = Object.keys(methodChoices) as MethodChoice[]
 
 /** What a club has changed; whatever is absent stands at the engine's default. */
-export type ChangedSettings = Partial<Record<NumberChoice, number>> & { onsetRule?: OnsetRule }
+export type ChangedSettings = Partial<Record<NumberChoice, number>> & {
+  onsetRule?: OnsetRule
+  asymmetryFormula?: AsymmetryFormula
+}
 
 /** The first of each pair must stay below the second. */
 export const inOrder: readonly (readonly [NumberChoice, NumberChoice])[] = [

@@ -1,10 +1,15 @@
 import { describe, expect, it } from 'vitest'
 import { Budget } from '../uncertainty/budget.ts'
-import { asymmetryOf } from './sides.ts'
+import { asymmetryFormulas, type AsymmetryFormula } from '../../statistics/asymmetry/formulas.ts'
+import { asymmetryOf } from './asymmetry.ts'
 
 const budget = new Budget(true, 0.95)
-const asymmetry = (left: number, right: number, u = 1) =>
-  asymmetryOf(budget, budget.input(left, u), budget.input(right, u), false)
+const asymmetry = (
+  left: number,
+  right: number,
+  u = 1,
+  asymmetryFormula: AsymmetryFormula = 'symmetryIndex',
+) => asymmetryOf(budget, budget.input(left, u), budget.input(right, u), false, { asymmetryFormula })
 
 describe('asymmetryOf', () => {
   it.each([
@@ -26,6 +31,18 @@ describe('asymmetryOf', () => {
     const expected = (1.959964 * 400 * Math.hypot(480, 520)) / 1000 ** 2
     expect(asymmetry(480, 520)?.U).toBeCloseTo(expected, 5)
   })
+
+  it.each(Object.keys(asymmetryFormulas) as AsymmetryFormula[])(
+    'by %s: the value of the published formula, and an uncertainty that a small change of either side bears out',
+    (formula) => {
+      const of = asymmetryFormulas[formula]
+      const found = asymmetry(480, 520, 1, formula)
+      const value = of(480, 520) as number
+      expect(found?.value).toBe(value)
+      const moved = Math.hypot((of(481, 520) as number) - value, (of(480, 521) as number) - value)
+      expect((found?.U as number) / (1.959964 * moved)).toBeCloseTo(1, 2)
+    },
+  )
 
   it('is none where both feet carry nothing', () => {
     expect(asymmetry(0, 0)).toBeNull()
