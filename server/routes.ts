@@ -9,6 +9,7 @@ import { landingWatchRoutes } from './modules/landing-watch/landing-watch.routes
 import { peopleRoutes } from './modules/people/people.routes.ts'
 import { recomputeRoutes } from './modules/recomputes/recomputes.routes.ts'
 import { resultRoutes } from './modules/results/results.routes.ts'
+import { seatRoutes } from './modules/seats/seats.routes.ts'
 import { sessionRoutes } from './modules/sessions/sessions.routes.ts'
 import { squadRoutes } from './modules/squads/squads.routes.ts'
 import { trialRoutes } from './modules/trials/trials.routes.ts'
@@ -29,5 +30,6 @@ export const routes: Route[] = [
   ...recomputeRoutes,
   ...clubRoutes,
   ...billingRoutes,
+  ...seatRoutes,
   ...eventRoutes,
 ]

@@ -2,6 +2,7 @@ import { randomUUID } from 'node:crypto'
 import { foldName } from '../../shared/contracts/names.ts'
 import { workerContext, type Database } from '../../server/db/database.ts'
 import { athletes, squadMembers, squads } from '../../server/db/schema/people-of-club.ts'
+import { seats } from '../../server/db/schema/seats.ts'
 
 export interface AthleteRow {
   name?: string
@@ -11,7 +12,7 @@ export interface AthleteRow {
   squadIds?: readonly string[]
 }
 
-/** A valid athlete record; returns its id. Needs a database of the web role. */
+/** A valid athlete record, with a seat; returns its id. Needs a database of the web role. */
 export async function buildAthlete(
   db: Database,
   clubId: string,
@@ -23,6 +24,7 @@ export async function buildAthlete(
     await tx.insert(athletes).values({ clubId, id, ...row, name, nameKey: foldName(name) })
     const lines = squadIds.map((squadId) => ({ clubId, squadId, athleteId: id }))
     if (lines.length > 0) await tx.insert(squadMembers).values(lines)
+    await tx.insert(seats).values({ clubId, athleteId: id, assignedAt: new Date(0) })
   })
   return id
 }

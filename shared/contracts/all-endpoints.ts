@@ -10,6 +10,7 @@ import * as measuring from './measuring.ts'
 import * as people from './people.ts'
 import * as recomputes from './recomputes.ts'
 import * as results from './results.ts'
+import * as seats from './seats.ts'
 import * as sessions from './sessions.ts'
 import * as squads from './squads.ts'
 import * as trials from './trials.ts'
@@ -34,6 +35,7 @@ export const endpoints: Record<string, Endpoint> = Object.fromEntries(
     landingWatch,
     clubs,
     billing,
+    seats,
     measuring,
     events,
   ]

@@ -43,6 +43,7 @@ export const errorCodes = [
   'subscription-running',
   'subscription-missing',
   'club-reads-only',
+  'athlete-unseated',
   'internal',
 ] as const
 

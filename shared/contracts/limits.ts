@@ -25,6 +25,8 @@ export const limits = {
   invitationDays: 14,
   resetMinutes: 60,
   seats: { min: 1, max: 5000 },
+  /** A seat that was used stays its athlete's for so long, also when it is given back earlier. */
+  seatCoolingDays: 14,
   trialDays: 30,
   trialSeats: 40,
   /** From the first declined charge until a club only reads. Common practice: two weeks. */

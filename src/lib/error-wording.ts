@@ -149,6 +149,10 @@ export const errorWording: Record<AnyErrorCode, ErrorWording> = {
     title: 'The club has no running subscription',
     advice: 'Buy one on the billing page first.',
   },
+  'athlete-unseated': {
+    title: 'This athlete has no seat',
+    advice: 'The recording is kept in the Tray. A club admin gives seats on the Seats page; then put it on the athlete.',
+  },
   'club-reads-only': {
     title: 'The club can only read at the moment',
     advice: 'Nothing is lost. An admin of the club restores everything on the billing page.',

@@ -12,6 +12,7 @@ import * as peopleOfClub from '../../server/db/schema/people-of-club.ts'
 import * as recomputes from '../../server/db/schema/recomputes.ts'
 import * as records from '../../server/db/schema/records.ts'
 import * as results from '../../server/db/schema/results.ts'
+import * as seats from '../../server/db/schema/seats.ts'
 import * as sessions from '../../server/db/schema/sessions.ts'
 import * as trials from '../../server/db/schema/trials.ts'
 import * as uploads from '../../server/db/schema/uploads.ts'
@@ -53,6 +54,8 @@ async function fillTheRest(): Promise<void> {
     const plates = { leftU: 0.005, rightU: 0.005, singleU: 0.005, totalU: 0.005 }
     await tx.insert(measuring.plateCalibrations).values({ ...edition, ...plates })
     await tx.insert(billing.standings).values({ clubId })
+    await tx.insert(seats.seatWaits).values({ clubId, athleteId, since: new Date() })
+    await tx.insert(seats.seatRules).values({ clubId, byItself: true })
   })
   await harness.db.inClub(workerContext(clubId), async (tx) => {
     await tx.insert(billing.subscriptions).values({ clubId })
@@ -84,7 +87,7 @@ const resultRow = (
 
 const isTable = (value: unknown): value is PgTable =>
   typeof value === 'object' && value !== null && Symbol.for('drizzle:IsDrizzleTable') in value
-const clubTables = [billing, peopleOfClub, measuring, recomputes, records, results, sessions, trials, uploads]
+const clubTables = [billing, peopleOfClub, measuring, recomputes, records, results, seats, sessions, trials, uploads]
   .flatMap((schema) => Object.values(schema) as unknown[])
   .filter(isTable)
 const nameOf = (table: PgTable) => getTableConfig(table).name

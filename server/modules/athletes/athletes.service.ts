@@ -8,6 +8,7 @@ import { notFound, staleVersion } from '../../http/errors.ts'
 import { record } from '../audit/audit.service.ts'
 import { notify } from '../events/notify.ts'
 import { pointsOfAthlete } from '../results/results.service.ts'
+import { freeSeat, takeSeatByItself } from '../seats/seats.service.ts'
 import { lockSquadLists, setSquadsOfAthlete } from '../squads/squads.service.ts'
 import { findAthlete, insertAthlete, selectAthletes, updateAthlete } from './athletes.queries.ts'
 
@@ -27,7 +28,7 @@ export async function openAthlete({ db }: Pick<Deps, 'db'>, ctx: Caller, id: str
 }
 
 export async function addAthlete(
-  { db }: Pick<Deps, 'db'>,
+  { db, clock }: Pick<Deps, 'db' | 'clock'>,
   ctx: Caller,
   { squadIds, ...form }: BodyOf<typeof createAthlete>,
 ): Promise<Athlete> {
@@ -35,6 +36,7 @@ export async function addAthlete(
     await lockSquadLists(tx, ctx.clubId)
     const id = await insertAthlete(tx, ctx.clubId, { ...form, nameKey: foldName(form.name) })
     await setSquadsOfAthlete(tx, ctx.clubId, id, squadIds)
+    await takeSeatByItself(tx, ctx.clubId, id, clock())
     return finish(tx, ctx, 'athlete.create', id)
   })
 }
@@ -54,6 +56,8 @@ export async function editAthlete(
       throw present ? staleVersion(present) : notFound('This athlete')
     }
     if (squadIds) await setSquadsOfAthlete(tx, ctx.clubId, id, squadIds)
+    if (archived === true) await freeSeat(tx, ctx.clubId, id, clock())
+    if (archived === false) await takeSeatByItself(tx, ctx.clubId, id, clock())
     return finish(tx, ctx, 'athlete.change', id)
   })
 }

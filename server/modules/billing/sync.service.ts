@@ -4,6 +4,7 @@ import type { Deps } from '../../deps.ts'
 import type { CustomerTruth } from '../../integrations/payments/payments.ts'
 import { paymentsOf } from '../../integrations/payments/payments-of.ts'
 import { sendMail } from '../mail/mail.service.ts'
+import { fillSeats } from '../seats/seats.service.ts'
 import {
   findCopy,
   findCustomer,
@@ -45,10 +46,10 @@ async function settle(
   now: Date,
 ): Promise<boolean> {
   if (truth && !(await keep(tx, clubId, before, truth, now))) return false
-  if (!truth && !before.trialEndsAt) return true
   const standing = standingOf(truth, before.trialEndsAt, now)
-  await putStanding(tx, clubId, standing.readsOnlyFrom)
+  if (truth || before.trialEndsAt) await putStanding(tx, clubId, standing.readsOnlyFrom)
   if (standing.seats !== null) await setPaidSeats(tx, clubId, standing.seats)
+  await fillSeats(tx, clubId, now)
   for (const { key, template, payload } of noticesDue(truth, standing, now)) {
     if (!(await noteNotice(tx, clubId, key))) continue
     for (const to of await selectAdminAddresses(tx, clubId)) {

@@ -10,6 +10,7 @@ import { countTry } from '../../http/rate-limits.ts'
 import { newToken } from '../account/tokens.ts'
 import { record } from '../audit/audit.service.ts'
 import { sendMail } from '../mail/mail.service.ts'
+import { takeSeatByItself } from '../seats/seats.service.ts'
 import {
   findAthleteLink,
   findInvitation,
@@ -60,6 +61,7 @@ export async function invite(
       tokenHash: newToken().tokenHash,
     })
     await record(tx, ctx, 'invitation.send', 'invitation', row.id, { roles: row.roles })
+    if (form.athleteId) await takeSeatByItself(tx, ctx.clubId, form.athleteId, clock())
     await mailInvitation(tx, ctx.clubId, row)
     return describe(row, clock())
   })

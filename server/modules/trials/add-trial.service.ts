@@ -2,10 +2,14 @@ import type { Tx } from '../../db/database.ts'
 import { sendJobs } from '../../jobs/queue.ts'
 import type { FileRead } from '../../jobs/threads/tasks.ts'
 import { candidatesOf } from '../sessions/sessions.service.ts'
+import { seatedAthletes } from '../seats/seats.service.ts'
 import { matchAthlete } from './match-athlete.ts'
 import { insertTrial } from './trials.queries.ts'
 
-/** Makes the trials of a recording that was read, on the athlete whom its file name names or in the Tray. */
+/**
+ * Makes the trials of a recording that was read, on the athlete whom its file name names, or in the Tray: where it
+ * names nobody, or somebody without a seat.
+ */
 export async function addTrials(
   tx: Tx,
   clubId: string,
@@ -13,7 +17,10 @@ export async function addTrials(
   read: FileRead,
 ): Promise<void> {
   const { test, candidates } = await candidatesOf(tx, clubId, upload.sessionId)
-  const athleteId = matchAthlete(upload.fileName, candidates)
+  const named = matchAthlete(upload.fileName, candidates)
+  // Named among all of the session, so that nobody else is found in the place of one without a seat.
+  const seated = await seatedAthletes(tx, clubId, upload.createdAt)
+  const athleteId = named && seated.has(named) ? named : null
   const { sampleRateHz, channels, timeBaseError, encoding } = read
   for (const [i, { startS, endS, preview, samples, sampleCount, filledSamples }] of read.trials.entries()) {
     const trialId = await insertTrial(

@@ -9,6 +9,13 @@ export const athleteNotInSession = () =>
     'This athlete is not on the session’s sheet. Choose one who is, or leave the recording in the Tray.',
   )
 
+export const athleteUnseated = () =>
+  namedError(
+    'athlete-unseated',
+    409,
+    'This athlete has no seat. The recording is kept in the Tray until a club admin gives them one under Seats.',
+  )
+
 export const mayNotMoveEvents = () =>
   notAllowed('A coach may move the events of any trial, a physio those of sessions of their own.')
 

@@ -15,11 +15,12 @@ import { viewEngineInputs } from '../analyses/engine-inputs.service.ts'
 import { record } from '../audit/audit.service.ts'
 import { notify } from '../events/notify.ts'
 import { rebuildWorking } from '../results/results.service.ts'
+import { seatedAthletes } from '../seats/seats.service.ts'
 import { candidatesOf } from '../sessions/sessions.service.ts'
 import { mayMoveEvents } from './may-move-events.ts'
 import { findEventMoves } from './moved-events.queries.ts'
 import { setAsideOf, toSheetTrial } from './sheet-trials.ts'
-import { athleteNotInSession } from './trials.errors.ts'
+import { athleteNotInSession, athleteUnseated } from './trials.errors.ts'
 import {
   findOwnTrial,
   findSamples,
@@ -130,6 +131,10 @@ export function change(
     const before = await findTrial(tx, clubId, trialId)
     if (!before) throw missing()
     if (body.athleteId) await requireInSession(tx, clubId, before.sessionId, body.athleteId)
+    if (body.athleteId && body.athleteId !== before.athleteId) {
+      const seated = await seatedAthletes(tx, clubId, deps.clock())
+      if (!seated.has(body.athleteId)) throw athleteUnseated()
+    }
     const changed = await updateTrial(
       tx,
       { clubId, trialId, version: body.version },
