@@ -89,3 +89,8 @@ export function hopPhases(
     ['contact', still],
   ])
 }
+
+/** The landing alone, where the fall is stopped. */
+export function landingPhase({ touchdown, landingZeroVelocity }: TrialEvents): PhaseSpan[] {
+  return touchdown ? layFrom(touchdown.position, [['landing', landingZeroVelocity]]) : []
+}

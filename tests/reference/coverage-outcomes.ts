@@ -38,6 +38,9 @@ export interface Lot {
   to: number
 }
 
+/** The plates are loaded for certain so long after the feet strike them, s. */
+const STRUCK_S = 0.05
+
 /** The engine's trial in which this one's feet strike last. */
 function analysed({ trial, recording, startS }: CoverageTrial): TrialAnalysis | undefined {
   const calibrationU = Object.fromEntries(
@@ -45,7 +48,7 @@ function analysed({ trial, recording, startS }: CoverageTrial): TrialAnalysis | 
   )
   const { gravity } = trial.athlete
   const { trials } = analyse(recording, { test: testOf(trial), gravity, calibrationU })
-  const struckS = (trial.marks.flights.at(-1)?.toS ?? trial.marks.arrivalS ?? NaN) - startS
+  const struckS = (trial.marks.flights.at(-1)?.toS ?? trial.marks.arrivalS ?? NaN) - startS + STRUCK_S
   return trials.find((found) => found.startS <= struckS && struckS <= found.endS)
 }
 

@@ -1,11 +1,11 @@
 import type { TrialCheck } from '../types.ts'
 import type { Foot } from '../metrics/sides.ts'
-import type { JumpModel, TrialModel } from '../metrics/trial-model.ts'
+import type { TrialModel } from '../metrics/trial-model.ts'
 import { allGroups } from './affected-groups.ts'
 import { check, rounded } from './check.ts'
 
 /** Longest run, in samples, in which a foot is off its plate within [from, to) while the other is loaded. */
-function longestOff(foot: Foot, model: JumpModel, from: number, to: number): number {
+function longestOff(foot: Foot, model: TrialModel, from: number, to: number): number {
   const { settings, motion } = model
   const threshold = Math.max(2 * settings.eventForceN, settings.unloadedSd * foot.noise.sd)
   const { force } = foot.plate
@@ -21,13 +21,15 @@ function longestOff(foot: Foot, model: JumpModel, from: number, to: number): num
 }
 
 /** Both feet carry a fair part of the weight while the athlete stands, and stay on through the push. */
-function bothOn(model: JumpModel, feet: [Foot, Foot]): TrialCheck {
+function bothOn(model: TrialModel, feet: [Foot, Foot]): TrialCheck | null {
   const { settings, motion, signal, weighing, events } = model
+  if (!weighing) return null
+  const touch = events.arrival ?? events.touchdown
+  const from = events.onset || !touch ? weighing.window.from : touch.position
+  const to = (events.takeoff ?? touch)?.position ?? from
   const share = Math.min(...feet.map(({ plate }) => plate.stanceForce)) / motion.systemWeight
   const limitS = settings.footOffLandingS
-  const off =
-    Math.max(...feet.map((foot) => longestOff(foot, model, weighing.window.from, events.takeoff.position))) *
-    signal.dt
+  const off = Math.max(...feet.map((foot) => longestOff(foot, model, from, to))) * signal.dt
   const fail = share < settings.footShareFail || off > limitS
   return check(
     'both-feet',
@@ -46,7 +48,7 @@ function bothOn(model: JumpModel, feet: [Foot, Foot]): TrialCheck {
 }
 
 /** After both have touched down, no foot leaves its plate until the fall is stopped and the athlete stands. */
-function offInLanding(model: JumpModel, feet: [Foot, Foot]): TrialCheck | null {
+function offInLanding(model: TrialModel, feet: [Foot, Foot]): TrialCheck | null {
   const { events, signal, settings } = model
   if (!events.touchdown) return null
   const latest = Math.max(events.touchdown.position, ...feet.map(({ touchdown }) => touchdown?.position ?? 0))
@@ -67,7 +69,7 @@ function offInLanding(model: JumpModel, feet: [Foot, Foot]): TrialCheck | null {
 }
 
 /** Checks that need two plates. */
-export function feetChecks(model: JumpModel, feet: [Foot, Foot]): TrialCheck[] {
+export function feetChecks(model: TrialModel, feet: [Foot, Foot]): TrialCheck[] {
   return [bothOn(model, feet), offInLanding(model, feet)].filter((entry) => entry !== null)
 }
 

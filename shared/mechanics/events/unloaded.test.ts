@@ -34,6 +34,15 @@ describe('findUnloaded', () => {
     expect(found?.flights).toEqual([{ from: 2000, to: 2508 }])
   })
 
+  it('takes slow noise of empty plates for no foot', () => {
+    const slow = trace([0, 1500], [800, 300], [0, 450], [800, 2000]).map((newton, i) =>
+      newton < 400 ? newton + 9 * Math.sin(i / 120) : newton,
+    )
+    const found = find(slow)
+    expect(found?.offPlate).toHaveLength(1)
+    expect(found?.flights).toHaveLength(1)
+  })
+
   it('still finds the flight when most of the record is empty', () => {
     expect(find(trace([0, 9000], [800, 1500], [0, 400], [800, 1500], [0, 4000]))?.flights).toHaveLength(1)
   })

@@ -49,8 +49,16 @@ function usualLoad(force: Float64Array, level: number, smallestLoad: number): nu
   return usualLevel(force.filter((value) => value > level + smallestLoad))
 }
 
-/** Stretches below `threshold`, joined over gaps shorter than `gap` samples. */
-function stretchesBelow(force: Float64Array, threshold: number, gap: number): Stretch[] {
+function staysBelow(force: Float64Array, from: number, to: number, weak: number): boolean {
+  for (let i = from; i < to; i++) if (force[i] >= weak) return false
+  return true
+}
+
+/**
+ * Stretches below `threshold`, joined over gaps shorter than `gap` samples and over those in which the force stays
+ * below `weak`: slow noise of empty plates, not a foot.
+ */
+function stretchesBelow(force: Float64Array, threshold: number, gap: number, weak: number): Stretch[] {
   const { length } = force
   const found: Stretch[] = []
   let i = 0
@@ -60,7 +68,7 @@ function stretchesBelow(force: Float64Array, threshold: number, gap: number): St
     const from = i
     while (i < length && force[i] < threshold) i++
     const last = found.at(-1)
-    if (last && from - last.to < gap) last.to = i
+    if (last && (from - last.to < gap || staysBelow(force, last.to, from, weak))) last.to = i
     else found.push({ from, to: i })
   }
   return found
@@ -95,9 +103,10 @@ export function findUnloaded(
   const gap = Math.round(settings.shortestContactS / dt)
   const shortest = settings.eventPersistenceS / dt
   const longest = settings.longestFlightS / dt
+  const weak = level + settings.smallestLoadN
   const flights: Stretch[] = []
   const offPlate: Stretch[] = []
-  for (const stretch of stretchesBelow(force, threshold, gap)) {
+  for (const stretch of stretchesBelow(force, threshold, gap, weak)) {
     const inside = stretch.from > 0 && stretch.to < force.length
     const duration = stretch.to - stretch.from
     if (inside && duration <= longest) {

@@ -16,17 +16,21 @@ export interface MeasuredContact {
   peakForce: Quantity
 }
 
-/** Times, height and RSI of a contact from the instants of its touchdown, its takeoff and the next touchdown. */
+/**
+ * Times, height and RSI of a contact from the instants of its touchdown, its takeoff and the next touchdown. What the
+ * recorder delays a takeoff by more than a touch, `recorder`, lengthens the contact and shortens the flight.
+ */
 export function measureContact(
   model: TrialModel,
   { peak }: PlacedContact,
   touchdown: Quantity,
   takeoff: Quantity,
   landing: Quantity,
+  recorder: Quantity,
 ): MeasuredContact {
   const { budget } = model
-  const contactTime = budget.minus(takeoff, touchdown)
-  const flightTime = budget.minus(landing, takeoff)
+  const contactTime = budget.plus(budget.minus(takeoff, touchdown), recorder)
+  const flightTime = budget.minus(budget.minus(landing, takeoff), recorder)
   const height = heightOfFlight(model, flightTime)
   return {
     touchdown,

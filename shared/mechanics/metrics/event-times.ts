@@ -1,6 +1,5 @@
 import type { Crossing } from '../events/flank.ts'
 import { staysWithin } from '../events/turning-points.ts'
-import type { Settings } from '../settings.ts'
 import { meanAround } from '../signal/running-mean.ts'
 import type { Quantity } from '../uncertainty/budget.ts'
 import { at, velocityOf, type JumpModel, type TrialModel } from './trial-model.ts'
@@ -24,35 +23,45 @@ export interface EventTimes extends TrialTimes, TakeoffTime {
   onset: Quantity
 }
 
-/**
- * What a touch adds to the force without showing in the fit: ringing that the rise swallows, a recorder's low-pass,
- * a heel or toe that comes a moment later. It moves a gentle crossing further than a steep one; samples.
- */
-function unseenU(slope: number, dt: number, settings: Settings): number {
-  const byForce = Math.min(settings.touchLongestU / dt, settings.touchForceU / slope)
-  return Math.hypot(settings.touchTimeU / dt, byForce)
+/** Share of the variance of touches of the same kind that is the same in all of them. */
+const alikeShare = 0.4
+
+/** Longest time that a touch is taken to need to load the plates, s. */
+const longestRiseS = 0.03
+
+/** Time from a touch until the force is beyond what ringing of the plates can reach, s. */
+function riseTime({ signal, settings }: TrialModel, position: number): number {
+  const { total, dt } = signal
+  const latest = Math.min(total.length - 1, position + longestRiseS / dt)
+  let i = Math.ceil(position)
+  while (i < latest && total[i] < settings.touchRiseN) i++
+  return (i - position) * dt
 }
 
 /**
- * A crossing of the event force moves with the noise of its fit, with what a touch sets off, and with the zero of the
- * plates. Touches of the same kind share one error `alike` of size 1; one of its own where not given.
+ * A crossing of the event force moves with the noise of its fit and with the zero of the plates. A touch sets off more
+ * than shows in the fit, which moves a gentle crossing further than a steep one; touches of the same kind share
+ * a part of its variance, the error `alike` of size 1.
  */
 export function crossingTime(
-  { budget, signal, settings, plates, zero }: TrialModel,
+  model: TrialModel,
   { position, positionU, ringingU, slope }: Crossing,
   alike?: Quantity,
 ): Quantity {
+  const { budget, signal, settings, plates, zero } = model
   const { dt } = signal
-  const seenU = ringingU ?? 0
-  const noiseU = Math.sqrt(Math.max(0, positionU * positionU - seenU * seenU))
+  const seenU = (ringingU ?? 0) * dt
+  const noiseU = Math.sqrt(Math.max(0, positionU * positionU * dt * dt - seenU * seenU))
   const isTouch = slope > 0 && ringingU !== undefined
-  const touchU = isTouch ? Math.max(seenU, unseenU(slope, dt, settings)) : seenU
-  const touch = touchU > 0 ? [[touchU * dt, alike ?? budget.input(0, 1)] as const] : []
-  return budget.linear(position * dt, [
-    [1, budget.input(0, noiseU * dt, zero.noiseDof)],
-    ...touch,
+  const touchU = isTouch ? Math.max(seenU, settings.touchRiseShare * riseTime(model, position)) : seenU
+  const own = alike ? Math.sqrt(1 - alikeShare) : 1
+  const terms: (readonly [number, Quantity])[] = [
+    [1, budget.input(0, noiseU, zero.noiseDof)],
     ...plates.map(({ offset }) => [-dt / slope, offset] as const),
-  ])
+  ]
+  if (touchU > 0) terms.push([own * touchU, budget.input(0, 1)])
+  if (touchU > 0 && alike) terms.push([Math.sqrt(alikeShare) * touchU, alike])
+  return budget.linear(position * dt, terms)
 }
 
 /** The onset moves with the noise of its fit and, because its threshold is a part of the weight, with the weighing. */

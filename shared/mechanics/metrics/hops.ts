@@ -2,6 +2,7 @@ import type { PlacedContact } from '../events/contacts.ts'
 import type { Quantity } from '../uncertainty/budget.ts'
 import { isRebound, measureContact, type MeasuredContact } from './contacts.ts'
 import { crossingTime } from './event-times.ts'
+import { recorderDelay } from './recorder-delay.ts'
 import { miss, put, reasons, type Measured } from './measured.ts'
 import type { TrialModel } from './trial-model.ts'
 
@@ -16,19 +17,21 @@ export interface Hop extends MeasuredContact {
  */
 export function measureHops(model: TrialModel, contacts: readonly PlacedContact[]): Hop[] {
   const { contactsConsidered } = model.settings
-  const alike = model.budget.input(0, 1)
+  const { budget } = model
+  const alike = budget.input(0, 1)
+  const recorder = recorderDelay(model)
   let touchdown = contacts.length > 0 ? crossingTime(model, contacts[0].touchdown, alike) : null
   return contacts.map((placed, i) => {
     const isLast = i === contacts.length - 1
     const landing = crossingTime(model, placed.landing, isLast ? undefined : alike)
     const takeoff = crossingTime(model, placed.takeoff)
-    const measured = measureContact(model, placed, touchdown ?? landing, takeoff, landing)
+    const measured = measureContact(model, placed, touchdown ?? landing, takeoff, landing, recorder)
     touchdown = landing
     return { ...measured, counted: i < contactsConsidered && isRebound(model, measured) }
   })
 }
 
-function meanOf({ budget }: TrialModel, quantities: readonly Quantity[]): Quantity {
+function meanOf({ budget }: Pick<TrialModel, 'budget'>, quantities: readonly Quantity[]): Quantity {
   const share = 1 / quantities.length
   const sum = quantities.reduce((total, { value }) => total + value, 0)
   return budget.linear(
@@ -38,7 +41,11 @@ function meanOf({ budget }: TrialModel, quantities: readonly Quantity[]): Quanti
 }
 
 /** Count, mean contact time, and the mean RSI of the best hops (Harper, Hobbs, Moore 2011). */
-export function hopFigures(model: TrialModel, hops: readonly Hop[], into: Measured): void {
+export function hopFigures(
+  model: Pick<TrialModel, 'budget' | 'settings'>,
+  hops: readonly Hop[],
+  into: Measured,
+): void {
   const { budget, settings } = model
   put(into, 'hopCount', budget.exact(hops.length))
   const counted = hops.filter((hop) => hop.counted)

@@ -24,7 +24,10 @@ export function takeoffVelocityOf(model: TakeoffModel, times: TakeoffTime): Quan
 }
 
 /** Height that a velocity upwards reaches, or that a fall comes from: v²/2g. */
-export function heightOfVelocity({ budget, gravity }: TrialModel, velocity: Quantity): Quantity {
+export function heightOfVelocity(
+  { budget, gravity }: Pick<TrialModel, 'budget' | 'gravity'>,
+  velocity: Quantity,
+): Quantity {
   const g = gravity.value
   const height = (velocity.value * velocity.value) / (2 * g)
   return budget.pair(height, velocity.value / g, velocity, -height / g, gravity)

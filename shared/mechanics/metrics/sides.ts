@@ -1,12 +1,12 @@
 import type { MetricKey } from '../catalogue.ts'
 import type { Figure, Phase, Sides } from '../types.ts'
 import { fitFlank, type Crossing } from '../events/flank.ts'
-import { phasesOf } from '../phases.ts'
+import type { PhaseSpan } from '../phases.ts'
 import { grossImpulse } from '../signal/gross-impulse.ts'
 import { integratedNoise, type Noise } from '../signal/noise.ts'
 import { findPeak } from '../signal/peak.ts'
 import type { Quantity } from '../uncertainty/budget.ts'
-import { isSide, type JumpModel, type PlateInputs } from './trial-model.ts'
+import { isSide, type TrialModel, type PlateInputs } from './trial-model.ts'
 import { asymmetryOf } from './asymmetry.ts'
 import { findRise, greatestSlope } from './loading-rate.ts'
 import { miss, put, type Measured, type Outcome } from './measured.ts'
@@ -45,7 +45,7 @@ function edgeNear(
 }
 
 /** The feet of a trial on two plates, left first; `null` with one plate. */
-export function findFeet(model: JumpModel): [Foot, Foot] | null {
+export function findFeet(model: TrialModel): [Foot, Foot] | null {
   const { plates, zero, events, signal, settings } = model
   if (plates.length !== 2 || !plates.every(({ channel }) => isSide(channel))) return null
   const reach = settings.unloadedWindowS / signal.dt
@@ -61,7 +61,7 @@ export function findFeet(model: JumpModel): [Foot, Foot] | null {
     return {
       plate,
       noise,
-      takeoff: place(events.takeoff.position, false),
+      takeoff: events.takeoff && place(events.takeoff.position, false),
       touchdown: events.touchdown && place(events.touchdown.position, true),
     }
   })
@@ -69,7 +69,7 @@ export function findFeet(model: JumpModel): [Foot, Foot] | null {
 }
 
 /** A force of one foot: noise of its own, its plate's zero and calibration. */
-function footForce({ budget }: JumpModel, foot: Foot, value: number, u: number): Quantity {
+function footForce({ budget }: TrialModel, foot: Foot, value: number, u: number): Quantity {
   return budget.linear(value, [
     [1, budget.input(0, u)],
     [1, foot.plate.offset],
@@ -77,7 +77,7 @@ function footForce({ budget }: JumpModel, foot: Foot, value: number, u: number):
   ])
 }
 
-function footImpulse(model: JumpModel, foot: Foot, from: number, to: number): Quantity {
+function footImpulse(model: TrialModel, foot: Foot, from: number, to: number): Quantity {
   const { budget, signal } = model
   const duration = (to - from) * signal.dt
   const value = grossImpulse(foot.plate.force, foot.plate.sums, from, to, signal.dt)
@@ -90,7 +90,7 @@ function footImpulse(model: JumpModel, foot: Foot, from: number, to: number): Qu
 
 /** A loading rate of one foot: calibration, its peak's own error, and the error of its duration. */
 function footRate(
-  { budget }: JumpModel,
+  { budget }: TrialModel,
   foot: Foot,
   rate: number,
   peakU: number,
@@ -102,7 +102,7 @@ function footRate(
   ])
 }
 
-function loadingRates(model: JumpModel, foot: Foot, landingEnd: number, into: Measured): void {
+function loadingRates(model: TrialModel, foot: Foot, landingEnd: number, into: Measured): void {
   const { budget, signal, settings } = model
   if (!foot.touchdown)
     return miss(
@@ -139,13 +139,15 @@ function loadingRates(model: JumpModel, foot: Foot, landingEnd: number, into: Me
 }
 
 /** Every figure of one foot, over the phases of the total. */
-function footFigures(model: JumpModel, foot: Foot): Measured {
+function footFigures(model: TrialModel, foot: Foot, phases: readonly PhaseSpan[]): Measured {
   const { signal, budget, weighing } = model
   const into: Measured = new Map()
-  const windowS = (weighing.window.to - weighing.window.from) * signal.dt
-  const stanceU = integratedNoise(foot.noise, windowS, signal.dt) / windowS
-  put(into, 'stanceForce', footForce(model, foot, foot.plate.stanceForce, stanceU))
-  for (const { phase, from, to } of phasesOf(model.events)) {
+  if (weighing) {
+    const windowS = (weighing.window.to - weighing.window.from) * signal.dt
+    const stanceU = integratedNoise(foot.noise, windowS, signal.dt) / windowS
+    put(into, 'stanceForce', footForce(model, foot, foot.plate.stanceForce, stanceU))
+  }
+  for (const { phase, from, to } of phases) {
     const keys = perPhase[phase]
     if (!keys) continue
     const gross = footImpulse(model, foot, from, to)
@@ -160,27 +162,38 @@ function footFigures(model: JumpModel, foot: Foot): Measured {
   return into
 }
 
-/** Lags of the feet, right less left. */
-export function lagFigures(model: JumpModel, [left, right]: [Foot, Foot], into: Measured): void {
-  const { budget, signal } = model
-  const lag = (a: Crossing | null, b: Crossing | null): Outcome => {
-    if (!a || !b) return { missing: 'A foot has no event of its own here.' }
-    const u = Math.hypot(a.positionU, b.positionU) * signal.dt
-    return {
-      quantity: budget.linear((b.position - a.position) * signal.dt, [
-        [1, budget.input(0, u)],
-        [-signal.dt / b.slope, right.plate.offset],
-        [signal.dt / a.slope, left.plate.offset],
-      ]),
-    }
+/** How much later an event of the right foot is than that of the left. */
+function lagOf(
+  { budget, signal }: TrialModel,
+  [left, right]: [Foot, Foot],
+  event: 'takeoff' | 'touchdown',
+): Outcome {
+  const [a, b] = [left[event], right[event]]
+  if (!a || !b) return { missing: 'A foot has no event of its own here.' }
+  const u = Math.hypot(a.positionU, b.positionU) * signal.dt
+  return {
+    quantity: budget.linear((b.position - a.position) * signal.dt, [
+      [1, budget.input(0, u)],
+      [-signal.dt / b.slope, right.plate.offset],
+      [signal.dt / a.slope, left.plate.offset],
+    ]),
   }
-  into.set('feetTakeoffLag', lag(left.takeoff, right.takeoff))
-  into.set('feetTouchdownLag', lag(left.touchdown, right.touchdown))
+}
+
+/** Lag of the feet where they touch down, right less left. */
+export function touchdownLag(model: TrialModel, feet: [Foot, Foot], into: Measured): void {
+  into.set('feetTouchdownLag', lagOf(model, feet, 'touchdown'))
+}
+
+/** Lags of the feet at takeoff and touchdown, right less left. */
+export function lagFigures(model: TrialModel, feet: [Foot, Foot], into: Measured): void {
+  into.set('feetTakeoffLag', lagOf(model, feet, 'takeoff'))
+  touchdownLag(model, feet, into)
 }
 
 /** Figures of each foot and their asymmetry. */
-export function sidesOf(model: JumpModel, feet: [Foot, Foot]): Sides {
-  const [left, right] = feet.map((foot) => footFigures(model, foot))
+export function sidesOf(model: TrialModel, feet: [Foot, Foot], phases: readonly PhaseSpan[]): Sides {
+  const [left, right] = feet.map((foot) => footFigures(model, foot, phases))
   const sides: Sides = { left: {}, right: {}, asymmetry: {} }
   const enter = (into: Record<string, Figure>, key: string, outcome: Outcome) => {
     if ('quantity' in outcome)

@@ -1,13 +1,15 @@
 import { dropHeight, oneRebound, plausibleRebound } from '../checks/drop-checks.ts'
-import { deadPlates } from '../checks/feet-checks.ts'
+import { deadPlates, feetChecks } from '../checks/feet-checks.ts'
 import { heightAgreement, landedOnPlates, landingLength, plausibleLanding } from '../checks/jump-checks.ts'
 import type { PlacedContact } from '../events/contacts.ts'
 import { locateDropJump, type DropSearch, type Rebound, type ReboundEvents } from '../events/drop-events.ts'
 import type { Stretch, Unloaded } from '../events/unloaded.ts'
 import { contactOut, isRebound, measureContact, type MeasuredContact } from '../metrics/contacts.ts'
 import { landingFigures } from '../metrics/landing.ts'
+import { recorderDelay } from '../metrics/recorder-delay.ts'
 import type { Measured } from '../metrics/measured.ts'
 import { reboundFigures, reboundTimes, type ReboundModel, type ReboundTimes } from '../metrics/rebound.ts'
+import { findFeet, lagFigures, sidesOf } from '../metrics/sides.ts'
 import { buildModel } from '../metrics/trial-model.ts'
 import { weighingFigures } from '../metrics/weighing.ts'
 import { reboundPhases } from '../phases.ts'
@@ -41,14 +43,15 @@ function placedContact({ signal, zero, settings }: DropSearch, events: ReboundEv
 function contactOf(search: DropSearch, model: ReboundModel, times: ReboundTimes): MeasuredContact | null {
   const placed = placedContact(search, model.events)
   if (!placed || !times.touchdown) return null
-  return measureContact(model, placed, times.arrival, times.takeoff, times.touchdown)
+  const recorder = recorderDelay(model)
+  return measureContact(model, placed, times.arrival, times.takeoff, times.touchdown, recorder)
 }
 
 function checksOf(model: ReboundModel, flights: number, metrics: TrialAnalysis['metrics']): TrialCheck[] {
   const impulse = metrics.jumpHeightImpulse?.value ?? null
   const flight = metrics.jumpHeightFlight?.value ?? null
   return [
-    deadPlates(model),
+    model.test.side === 'both' ? deadPlates(model) : null,
     oneRebound(flights),
     plausibleRebound(model, metrics.contactTime.value, impulse ?? flight),
     dropHeight(model, metrics.effectiveDropHeight),
@@ -84,13 +87,16 @@ export const analyseDj: AnalyseTrial = (input) => {
   weighingFigures(model, measured)
   reboundFigures(model, times, contact, measured)
   landingFigures(model, times, measured)
+  const feet = test.side === 'both' ? findFeet(model) : null
+  if (feet) lagFigures(model, feet, measured)
+  const phases = reboundPhases(model.events, fall.from)
   const flights = unloaded.flights.filter(({ from }) => from >= fall.to).length
   return trialOf(input, {
     model,
     measured,
-    phases: reboundPhases(model.events, fall.from),
-    sides: null,
+    phases,
+    sides: feet && sidesOf(model, feet, phases),
     contacts: contact ? [contactOut(model, contact, isRebound(model, contact))] : [],
-    checks: ({ metrics }) => checksOf(model, flights, metrics),
+    checks: ({ metrics }) => [...(feet ? feetChecks(model, feet) : []), ...checksOf(model, flights, metrics)],
   })
 }

@@ -1,5 +1,5 @@
 import { dropHeight, noJump } from '../checks/drop-checks.ts'
-import { deadPlates } from '../checks/feet-checks.ts'
+import { deadPlates, feetChecks } from '../checks/feet-checks.ts'
 import { landingLength, plausibleLanding } from '../checks/jump-checks.ts'
 import { locateDropLanding, type DropSearch } from '../events/drop-events.ts'
 import type { Stretch, Unloaded } from '../events/unloaded.ts'
@@ -8,6 +8,7 @@ import { velocityAtEvent } from '../metrics/jump.ts'
 import { landingFigures } from '../metrics/landing.ts'
 import type { Measured } from '../metrics/measured.ts'
 import { dropFigures } from '../metrics/rebound.ts'
+import { findFeet, sidesOf, touchdownLag } from '../metrics/sides.ts'
 import { buildModel } from '../metrics/trial-model.ts'
 import { weighingFigures } from '../metrics/weighing.ts'
 import { dropPhases } from '../phases.ts'
@@ -43,13 +44,17 @@ export const analyseDropLanding: AnalyseTrial = (input) => {
   if (times.touchdown)
     dropFigures(model, velocityAtEvent(model, model.events.touchdown, times.touchdown), measured)
   landingFigures(model, times, measured)
+  const feet = test.side === 'both' ? findFeet(model) : null
+  if (feet) touchdownLag(model, feet, measured)
+  const phases = dropPhases(model.events, fall.from)
   return trialOf(input, {
     model,
     measured,
-    phases: dropPhases(model.events, fall.from),
-    sides: null,
+    phases,
+    sides: feet && sidesOf(model, feet, phases),
     checks: ({ metrics }) =>
       [
+        ...(feet ? feetChecks(model, feet) : []),
         test.side === 'both' ? deadPlates(model) : null,
         noJump(unloaded.flights.filter(({ from }) => from >= fall.to).length),
         dropHeight(model, metrics.effectiveDropHeight),

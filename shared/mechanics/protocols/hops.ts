@@ -1,4 +1,4 @@
-import { deadPlates } from '../checks/feet-checks.ts'
+import { deadPlates, feetChecks } from '../checks/feet-checks.ts'
 import { hopChecks } from '../checks/hop-checks.ts'
 import { closing, landingLength, plausibleLanding } from '../checks/jump-checks.ts'
 import { locateHops, type HopSearch } from '../events/hop-events.ts'
@@ -8,9 +8,10 @@ import { trialTimes } from '../metrics/event-times.ts'
 import { hopFigures, measureHops } from '../metrics/hops.ts'
 import { landingFigures } from '../metrics/landing.ts'
 import type { Measured } from '../metrics/measured.ts'
+import { findFeet, sidesOf, touchdownLag } from '../metrics/sides.ts'
 import { buildModel } from '../metrics/trial-model.ts'
 import { restToRestFigures, weighingFigures } from '../metrics/weighing.ts'
-import { hopPhases } from '../phases.ts'
+import { hopPhases, landingPhase } from '../phases.ts'
 import type { AnalyseTrial, TrialInput } from './protocol.ts'
 import { allUnloaded, searchRest } from './search-rest.ts'
 import { trialOf } from './trial-of.ts'
@@ -52,15 +53,18 @@ export const analyseHops: AnalyseTrial = (input) => {
   hopFigures(model, hops, measured)
   landingFigures(model, trialTimes(model), measured)
   restToRestFigures(model, measured)
+  const feet = test.side === 'both' ? findFeet(model) : null
+  if (feet) touchdownLag(model, feet, measured)
   return trialOf(input, {
     model,
     measured,
     phases: hopPhases(model.events, located.contacts),
-    sides: null,
+    sides: feet && sidesOf(model, feet, landingPhase(model.events)),
     contacts: hops.map((hop) => contactOut(model, hop, hop.counted)),
     checks: ({ ledger }) =>
       [
-        deadPlates(model),
+        ...(feet ? feetChecks(model, feet) : []),
+        test.side === 'both' ? deadPlates(model) : null,
         ...hopChecks(model, hops.length, hops.filter(({ counted }) => counted).length),
         landingLength(model, true),
         plausibleLanding(model),

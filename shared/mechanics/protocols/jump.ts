@@ -119,7 +119,7 @@ export function analyseJump(input: TrialInput, kind: JumpKind): TrialAnalysis | 
     endS: (signal.length - 1) * signal.dt,
     events: eventsOut(located.events, signal.dt),
     metrics,
-    sides: feet ? sidesOf(model, feet) : null,
+    sides: feet ? sidesOf(model, feet, phasesOf(model.events)) : null,
     ledger,
     checks: [
       ...recordingChecks(recording, signal, unloaded, zero, settings),

@@ -15,23 +15,35 @@ export const uncertaintySettings = {
     source: `${own}: stance from which sway is estimated by means of one window each`,
     effect: 'Sway is estimated in fewer recordings',
   },
-  touchTimeU: {
+  recorderDelayU: {
+    value: 0.0002,
+    unit: 's, standard uncertainty',
+    source: `${own}: a recorder delays a takeoff by some more than a steep first touch`,
+    effect: 'Wider intervals of contact times and RSI',
+  },
+  smoothedDelayU: {
     value: 0.0005,
     unit: 's, standard uncertainty',
-    source: `${own}: a recorder's low-pass of 200 Hz delays the force by a millisecond, a steep rise by less`,
-    effect: 'Wider intervals of touchdown, contact and flight times',
+    source: `${own}: the same of a low-pass of 200 Hz, which delays a takeoff by a millisecond`,
+    effect: 'The same, where the noise of the empty plates shows a low-pass',
   },
-  touchForceU: {
-    value: 8,
-    unit: 'N, standard uncertainty',
-    source: `${own}: ringing of the plate at the touch that the fit takes for the rise`,
-    effect: 'The same, more so where the force rises gently',
+  smoothedRoughness: {
+    value: 2,
+    unit: 'second over first differences, mean squares',
+    source: `${own}: white noise has 3`,
+    effect: 'A low-pass is seen in more recordings',
   },
-  touchLongestU: {
-    value: 0.0012,
-    unit: 's, standard uncertainty',
-    source: `${own}: ringing of 150 Hz has turned by then`,
-    effect: 'The same, where the force rises most gently',
+  touchRiseShare: {
+    value: 0.097,
+    unit: 'of the time from the crossing to touchRiseN, standard uncertainty',
+    source: `${own}: ringing of the plate that the fit takes for the rise, a heel that comes a moment later`,
+    effect: 'Wider intervals of touchdown, contact and flight times, more so where the force rises gently',
+  },
+  touchRiseN: {
+    value: 200,
+    unit: 'N',
+    source: `${own}: more than a plate rings by`,
+    effect: 'The same',
   },
   gravityU: {
     value: 0.0005,
