@@ -1,4 +1,4 @@
-import { roles, type Role } from '../../shared/contracts/roles.ts'
+import { roles, type Role, staffRoles } from '../../shared/contracts/roles.ts'
 import { paths } from '../lib/paths.ts'
 
 export interface NavItem {
@@ -18,7 +18,7 @@ const items: NavItem[] = [
   { path: paths.squads, words: 'Squads', roles: ['coach', 'admin'] },
   { path: paths.seats, words: 'Seats', roles: ['admin'] },
   { path: paths.billing, words: 'Billing', roles: ['admin'] },
-  { path: paths.settings, words: 'Settings', roles: ['physio', 'admin'] },
+  { path: paths.settings, words: 'Settings', roles: staffRoles },
   { path: paths.me, words: 'My results', roles: ['athlete'] },
   { path: paths.methods, words: 'Methods', roles },
 ]

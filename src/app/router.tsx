@@ -80,10 +80,9 @@ export const routes: RouteObject[] = [
           page(paths.billing, async () => (await import('../pages/club-billing.tsx')).ClubBillingPage),
         ],
       ),
-      only(
-        ['admin', 'physio'],
-        [page(paths.settings, async () => (await import('../pages/club-settings.tsx')).ClubSettingsPage)],
-      ),
+      only(staffRoles, [
+        page(paths.settings, async () => (await import('../pages/club-settings.tsx')).ClubSettingsPage),
+      ]),
       { path: '*', element: <NotFoundPage /> },
     ],
   },

@@ -12,6 +12,7 @@ import { Tag } from '../components/tag.tsx'
 import { AthleteResults } from '../features/athletes/athlete-results.tsx'
 import { ChangeAthleteDialog } from '../features/athletes/change-athlete-dialog.tsx'
 import { squadNamesOf } from '../features/athletes/squad-names.ts'
+import { RecomputeEntry } from '../features/recomputes/recompute-entry.tsx'
 import { formatDate } from '../lib/format-date.ts'
 import { formatNumber } from '../lib/format-figure.ts'
 import { mayCall } from '../lib/may-call.ts'
@@ -44,7 +45,12 @@ function AthleteHead({ athlete, squads }: { athlete: Athlete; squads: Squad[] | 
         context={contextOf(athlete, squads ?? [])}
         title={athlete.name}
         aside={athlete.archived && <Tag>archived</Tag>}
-        actions={mayChange && squads && <Button onClick={() => setChanging(true)}>Change</Button>}
+        actions={
+          <>
+            {mayChange && squads && <Button onClick={() => setChanging(true)}>Change</Button>}
+            <RecomputeEntry scope={{ kind: 'athlete', athleteId: athlete.id }} of={athlete.name} />
+          </>
+        }
       />
       {changing && squads && (
         <ChangeAthleteDialog

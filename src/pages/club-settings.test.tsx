@@ -5,6 +5,7 @@ import { expectNoAxeFaults } from '../../tests/setup/axe.ts'
 import { refuse } from '../../tests/setup/msw/answer.ts'
 import { inventedClub } from '../../tests/setup/msw/club.ts'
 import { aMe } from '../../tests/setup/msw/me.ts'
+import { inventedMeasuring } from '../../tests/setup/msw/measuring.ts'
 import { server } from '../../tests/setup/msw/server.ts'
 import { pageTitled, renderApp } from '../../tests/setup/render-app.tsx'
 
@@ -13,7 +14,7 @@ const save = () => screen.getByRole('button', { name: 'Save the limits' })
 
 function open(landingPeakLimits: { cmj?: number } = {}) {
   const made = inventedClub({ settings: { landingPeakLimits, version: 1 } })
-  server.use(...made.handlers)
+  server.use(...made.handlers, ...inventedMeasuring().handlers)
   return { ...made, ...renderApp('/club/settings', aMe(['physio', 'admin'])) }
 }
 
@@ -79,6 +80,7 @@ describe('landing limits', () => {
 
   test('a failed reading can be tried again', async () => {
     const { handlers } = inventedClub()
+    server.use(...inventedMeasuring().handlers)
     server.use(refuse(getClubSettings, 'internal', 500), ...handlers)
     const { user } = renderApp('/club/settings', aMe(['physio']))
     await screen.findByRole('alert')

@@ -9,7 +9,6 @@ import { Button } from '../../components/button.tsx'
 import { CautionLine } from '../../components/caution-line.tsx'
 import { TextField } from '../../components/field.tsx'
 import { FormError } from '../../components/form-error.tsx'
-import { LeaveGuard } from '../../components/leave-guard.tsx'
 import { Sheet } from '../../components/sheet.tsx'
 import { StaleNotice } from '../../components/stale-notice.tsx'
 import { parseDecimal } from '../../lib/parse-decimal.ts'
@@ -17,6 +16,7 @@ import { placeFieldErrors } from '../../lib/server-field-errors.ts'
 import { useFormError } from '../../lib/use-form-error.ts'
 import { useStaleRow } from '../../lib/use-stale-row.ts'
 import { settingsStaleFields } from './settings-stale-fields.ts'
+import { useUnsaved } from './unsaved.tsx'
 
 const FormSchema = z.strictObject({ landingPeakLimits: z.record(Protocol, LandingPeakLimit.nullable()) })
 type FormValues = z.infer<typeof FormSchema>
@@ -32,6 +32,7 @@ export function SettingsForm({ settings }: { settings: ClubSettings }) {
     defaultValues: valuesOf(opened),
   })
   const { errors, isDirty } = form.formState
+  useUnsaved(isDirty && !change.isPending)
 
   const save = form.handleSubmit(async (values) => {
     setRefusal(null)
@@ -84,7 +85,6 @@ export function SettingsForm({ settings }: { settings: ClubSettings }) {
           Save the limits
         </Button>
       </form>
-      <LeaveGuard dirty={isDirty && !change.isPending} />
     </Sheet>
   )
 }

@@ -6,6 +6,7 @@ import { PageHead } from '../../components/page-head.tsx'
 import { counted } from '../../lib/counted.ts'
 import { formatDate, formatMoment } from '../../lib/format-date.ts'
 import { testWords } from '../../lib/test-words.ts'
+import { RecomputeEntry } from '../recomputes/recompute-entry.tsx'
 import type { SheetCounts } from './sheet-rows.ts'
 
 interface Props {
@@ -43,6 +44,7 @@ export function SessionHead({
               {counted(counts.trials, 'trial')}, {counts.setAside} set aside
             </span>
             <Button onClick={onEdit}>Edit</Button>
+            <RecomputeEntry scope={{ kind: 'session', sessionId: session.id }} of={session.title} />
             {addFiles}
             <PublishButton
               session={session}

@@ -8,6 +8,7 @@ const kinds = [
   'trial',
   'upload',
   'analysis',
+  'recompute',
 ] as const
 
 /** The n-th id of a kind: a valid UUID, the same in every run. */
