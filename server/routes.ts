@@ -4,6 +4,7 @@ import { analysisRoutes } from './modules/analyses/analyses.routes.ts'
 import { athleteRoutes } from './modules/athletes/athletes.routes.ts'
 import { billingRoutes } from './modules/billing/billing.routes.ts'
 import { clubRoutes } from './modules/clubs/clubs.routes.ts'
+import { downloadRoutes } from './modules/downloads/downloads.routes.ts'
 import { eventRoutes } from './modules/events/events.routes.ts'
 import { landingWatchRoutes } from './modules/landing-watch/landing-watch.routes.ts'
 import { peopleRoutes } from './modules/people/people.routes.ts'
@@ -25,6 +26,7 @@ export const routes: Route[] = [
   ...sessionRoutes,
   ...uploadRoutes,
   ...trialRoutes,
+  ...downloadRoutes,
   ...landingWatchRoutes,
   ...analysisRoutes,
   ...recomputeRoutes,

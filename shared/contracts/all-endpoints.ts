@@ -3,6 +3,7 @@ import * as analyses from './analyses.ts'
 import * as athletes from './athletes.ts'
 import * as clubs from './clubs.ts'
 import * as billing from './billing.ts'
+import * as downloads from './downloads.ts'
 import type { Endpoint } from './endpoint.ts'
 import * as events from './events.ts'
 import * as landingWatch from './landing-watch.ts'
@@ -30,6 +31,7 @@ export const endpoints: Record<string, Endpoint> = Object.fromEntries(
     sessions,
     uploads,
     trials,
+    downloads,
     analyses,
     recomputes,
     landingWatch,

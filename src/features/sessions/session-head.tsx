@@ -1,6 +1,7 @@
 import { useEffect, useRef, type ReactNode } from 'react'
 import type { SessionSheet } from '../../../shared/contracts/sessions.ts'
 import { useMe } from '../../api/account/get-me.ts'
+import { sessionArchiveAddress } from '../../api/downloads/download-addresses.ts'
 import { Button } from '../../components/button.tsx'
 import { PageHead } from '../../components/page-head.tsx'
 import { counted } from '../../lib/counted.ts'
@@ -44,6 +45,9 @@ export function SessionHead({
               {counted(counts.trials, 'trial')}, {counts.setAside} set aside
             </span>
             <Button onClick={onEdit}>Edit</Button>
+            <a className="button" href={sessionArchiveAddress(session.id)} download>
+              Download
+            </a>
             <RecomputeEntry scope={{ kind: 'session', sessionId: session.id }} of={session.title} />
             {addFiles}
             <PublishButton

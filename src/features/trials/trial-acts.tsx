@@ -1,6 +1,7 @@
 import { useState } from 'react'
 import type { Trial } from '../../../shared/contracts/trials.ts'
 import { useSession } from '../../api/sessions/get-session.ts'
+import { trialCsvAddress } from '../../api/downloads/download-addresses.ts'
 import { originalAddress } from '../../api/uploads/original-address.ts'
 import { Button, ButtonLink } from '../../components/button.tsx'
 import { Dialog } from '../../components/dialog.tsx'
@@ -27,6 +28,9 @@ export function TrialActs({ trial, onMove }: { trial: Trial; onMove: (() => void
       {trial.nextTrialId && <ButtonLink to={pathOf.trial(trial.nextTrialId)}>Next</ButtonLink>}
       <a className="button" href={originalAddress(trial.uploadId)} download>
         Download original
+      </a>
+      <a className="button" href={trialCsvAddress(trial.id)} download>
+        Download samples
       </a>
       {onMove && <Button onClick={onMove}>Move an event</Button>}
       <Button onClick={() => setOpen('move')}>Move to athlete</Button>

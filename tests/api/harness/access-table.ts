@@ -199,6 +199,12 @@ export const accessTable: Record<string, AccessLine> = {
     request: ({ recomputeId }) => ({ params: { recomputeId } }),
     elsewhere: 'not-found',
   },
+  getTrialCsv: { may: test, request: ({ trialId }) => ({ params: { trialId } }), elsewhere: 'not-found' },
+  getSessionArchive: {
+    may: test,
+    request: ({ sessionId }) => ({ params: { sessionId } }),
+    elsewhere: 'not-found',
+  },
   listHighLandings: { may: ['physio'], request: nothing, elsewhere: 'own' },
 
   getClubSettings: { may: ['admin', 'physio'], request: nothing, elsewhere: 'own' },
