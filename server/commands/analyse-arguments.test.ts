@@ -52,6 +52,15 @@ describe('readArguments', () => {
       expect(readArguments(['a.csv', '--protocol', protocol]).given.test?.protocol).toBe(protocol)
   })
 
+  it('reads a column map', () => {
+    const map = {
+      time: null,
+      forces: [{ index: 0, name: 'F', unit: 'N', channel: 'single' }],
+      sampleRateHz: 500,
+    }
+    expect(readArguments(['a.csv', '--map', settingsFile(JSON.stringify(map))]).given).toStrictEqual({ map })
+  })
+
   it('changes settings by name', () => {
     const path = settingsFile('{ "eventForceN": 20, "onsetRule": "standard-deviations" }')
     const { settings } = readArguments(['a.csv', '--settings', path])
@@ -67,6 +76,7 @@ describe('readArguments', () => {
     [['a.csv', '--side', 'front'], '--side takes both, left or right'],
     [['a.csv', '--colour'], "Unknown option '--colour'"],
     [['a.csv', '--settings', '/no/such/file'], 'could not be read as JSON'],
+    [['a.csv', '--map', settingsFile('{ "time": null, "forces": [] }')], 'is no column map: forces'],
     [['a.csv', '--settings', settingsFile('[1]')], 'must hold an object'],
     [['a.csv', '--settings', settingsFile('{ "eventForce": 1 }')], '“eventForce” is no setting'],
     [['a.csv', '--settings', settingsFile('{ "eventForceN": "ten" }')], 'cannot be "ten"'],

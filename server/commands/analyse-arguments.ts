@@ -6,6 +6,8 @@ import { methodChoiceKeys, methodChoices } from '../../shared/mechanics/settings
 import { analysedProtocols } from '../../shared/mechanics/protocols/analysed.ts'
 import type { Protocol, Side } from '../../shared/mechanics/types.ts'
 import { usualTest } from '../../shared/contracts/session-test.ts'
+import { columnMapSchema } from '../../shared/contracts/column-map.ts'
+import type { ColumnMap } from '../../shared/recordings/result.ts'
 import type { GivenFacts } from './analysis-document.ts'
 
 export const usage = `Usage: npm run --silent analyse -- FILE… [options]
@@ -18,6 +20,7 @@ Reads recordings as the server does and prints one JSON document with their figu
   --load 20          external load in kilograms
   --mass 81.5        the athlete's body mass in kilograms, checked against the weighing
   --rate 1000        sampling rate in hertz, for files without a time column
+  --map MAP.json     the column map to read the files by, as "columnMap" of this document shows one
   --settings S.json  settings of the engine to change, by name
   --summary          a line for each trial instead of the document
 
@@ -40,6 +43,7 @@ const options = {
   load: { type: 'string' },
   mass: { type: 'string' },
   rate: { type: 'string' },
+  map: { type: 'string' },
   settings: { type: 'string' },
   summary: { type: 'boolean' },
 } as const
@@ -90,7 +94,7 @@ function testFrom(values: ReturnType<typeof parse>['values']): Pick<GivenFacts, 
 /** The engine's settings with those that a file of `{ name: number }` changes. */
 function settingsFrom(path: string | undefined): Settings {
   if (path === undefined) return defaultSettings
-  const changes = readChanges(path)
+  const changes = readObject(path, 'settings by name')
   for (const [name, value] of Object.entries(changes)) {
     const known = Object.hasOwn(defaultSettings, name) && name !== 'version'
     if (!known) throw new UsageError(`${path}: “${name}” is no setting of the engine.`)
@@ -103,7 +107,8 @@ function settingsFrom(path: string | undefined): Settings {
   return { ...defaultSettings, ...changes }
 }
 
-function readChanges(path: string): Record<string, unknown> {
+/** The object that a file of JSON holds. */
+function readObject(path: string, what: string): Record<string, unknown> {
   let changes: unknown
   try {
     changes = JSON.parse(readFileSync(path, 'utf8'))
@@ -113,9 +118,17 @@ function readChanges(path: string): Record<string, unknown> {
     )
   }
   if (typeof changes !== 'object' || changes === null || Array.isArray(changes)) {
-    throw new UsageError(`${path} must hold an object of settings by name.`)
+    throw new UsageError(`${path} must hold an object: ${what}.`)
   }
   return changes as Record<string, unknown>
+}
+
+/** The column map in a file. */
+function mapFrom(path: string): ColumnMap {
+  const { data, error } = columnMapSchema.safeParse(readObject(path, 'a column map'))
+  if (data) return data
+  const [issue] = error.issues
+  throw new UsageError(`${path} is no column map: ${issue?.path.join('.') ?? ''} ${issue?.message ?? ''}`)
 }
 
 /** @throws UsageError with a sentence for whoever typed the command */
@@ -130,6 +143,7 @@ export function readArguments(args: string[]): AnalyseArguments {
       ...testFrom(values),
       ...(massKg === undefined ? {} : { massKg }),
       ...(sampleRateHz === undefined ? {} : { sampleRateHz }),
+      ...(values.map === undefined ? {} : { map: mapFrom(values.map) }),
     },
     settings: settingsFrom(values.settings),
     summary: values.summary ?? false,

@@ -26,6 +26,7 @@ export interface GivenFacts {
   known?: AnalyseOptions['known']
   massKg?: number
   sampleRateHz?: number
+  map?: ColumnMap
 }
 
 type WithUnit<F> = F & { unit: string }
@@ -115,8 +116,11 @@ function analysed(
 
 export const sha256Of = (bytes: Uint8Array): string => createHash('sha256').update(bytes).digest('hex')
 
-export const hintsOf = ({ sampleRateHz }: GivenFacts): ReadHints =>
-  sampleRateHz === undefined ? {} : { sampleRateHz }
+export const hintsOf = ({ sampleRateHz, massKg, map }: GivenFacts): ReadHints => ({
+  ...(sampleRateHz === undefined ? {} : { sampleRateHz }),
+  ...(massKg === undefined ? {} : { bodyMassKg: massKg }),
+  ...(map === undefined ? {} : { map }),
+})
 
 /** Reads and analyses one file as the server does; `file` is named in the entry as it was given. */
 export function fileEntry(file: string, bytes: Uint8Array, given: GivenFacts, settings: Settings): FileEntry {
