@@ -2,7 +2,7 @@ import type { IncomingMessage, ServerResponse } from 'node:http'
 import { answerCall } from './answer-call.ts'
 import { takeFault } from './faults.ts'
 import { answerPage } from './pages/answer-page.ts'
-import type { PaymentService } from './service.ts'
+import type { PaymentService } from './payment-service.ts'
 
 /** Calls of the SDK under `/v1`, pages for a person everywhere else. */
 export async function answerRequest(

@@ -5,7 +5,8 @@ import { join } from 'node:path'
 import { connectStripe, stripePayments } from '../../integrations/payments/stripe-payments.ts'
 import type { Payments, SubscriptionTruth } from '../../integrations/payments/payments.ts'
 import { buy, giveNewCard } from './visitor.ts'
-import { startPaymentService, type PaymentService } from './service.ts'
+import type { PaymentService } from './payment-service.ts'
+import { startPaymentService } from './service.ts'
 
 const webhookSecret = 'whsec_of_the_tests'
 const startsAtS = Date.parse('2027-03-01T10:00:00Z') / 1000

@@ -4,8 +4,8 @@ import type { AddressInfo } from 'node:net'
 import type { Books } from './books.ts'
 import { stockCatalogue } from './catalogue.ts'
 import { runDue } from './clock.ts'
-import { createDelivery, type Delivery } from './delivery.ts'
-import type { Fault } from './faults.ts'
+import { createDelivery } from './delivery.ts'
+import type { PaymentService } from './payment-service.ts'
 import { answerRequest } from './requests.ts'
 import { openState } from './state.ts'
 
@@ -21,19 +21,6 @@ export interface PaymentServiceOptions {
   startsAtS?: number
   /** Seconds since 1970 by the clock of whoever checks signatures. */
   signedAtS?: () => number
-}
-
-export interface PaymentService {
-  url: string
-  books: Books
-  delivery: Delivery
-  faults: Fault[]
-  /** May be set later than the service itself. */
-  webhookUrl: string | undefined
-  /** Moves the clock on, does what fell due on the way, and delivers what is to be told. */
-  advance(days: number): Promise<void>
-  save(): void
-  stop(): Promise<void>
 }
 
 const loopback = '127.0.0.1'

@@ -1,5 +1,5 @@
 import { keepCard } from './customers.ts'
-import type { PaymentService } from './service.ts'
+import type { PaymentService } from './payment-service.ts'
 
 /** What a person types on the checkout page. */
 export interface Purchase {

@@ -1,6 +1,7 @@
 import { beforeAll, describe, expect, it } from 'vitest'
 import { seededRandom } from '../../../seed/synthetic/random.ts'
-import { startPaymentService, type PaymentService } from '../../fakes/payments/service.ts'
+import type { PaymentService } from '../../fakes/payments/payment-service.ts'
+import { startPaymentService } from '../../fakes/payments/service.ts'
 import { buy, giveNewCard } from '../../fakes/payments/visitor.ts'
 import { payInvoice } from '../../fakes/payments/portal.ts'
 import type { CustomerTruth, Payments } from '../../integrations/payments/payments.ts'

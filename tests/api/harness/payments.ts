@@ -1,4 +1,5 @@
-import { startPaymentService, type PaymentService } from '../../../server/fakes/payments/service.ts'
+import type { PaymentService } from '../../../server/fakes/payments/payment-service.ts'
+import { startPaymentService } from '../../../server/fakes/payments/service.ts'
 import { allJobs } from '../../../server/jobs/all-jobs.ts'
 import type { JobDeps } from '../../../server/jobs/define-job.ts'
 import { startHarness, type Harness } from './harness.ts'
