@@ -6,6 +6,7 @@ import type { Settings } from '../../shared/mechanics/settings.ts'
 import type {
   AnalyseOptions,
   AsymmetryFigure,
+  Contact,
   Figure,
   Note,
   Recording,
@@ -32,9 +33,12 @@ export interface GivenFacts {
 type WithUnit<F> = F & { unit: string }
 type FileError = Omit<ReadError, 'code'> & { code: string }
 
-interface TrialEntry extends Omit<TrialAnalysis, 'test' | 'metrics' | 'sides' | 'ledger'> {
+type ContactEntry = { [Key in keyof Contact]: Contact[Key] extends Figure ? WithUnit<Figure> : Contact[Key] }
+
+interface TrialEntry extends Omit<TrialAnalysis, 'test' | 'metrics' | 'sides' | 'ledger' | 'contacts'> {
   protocol: Test['protocol']
   test: Test
+  contacts?: ContactEntry[]
   metrics: Record<string, WithUnit<Figure>>
   sides: {
     left: Record<string, WithUnit<Figure>>
@@ -72,11 +76,25 @@ function withUnits<F extends Figure>(
   )
 }
 
-function trialEntry({ test, metrics, sides, ledger, ...rest }: TrialAnalysis): TrialEntry {
+function contactEntry(contact: Contact): ContactEntry {
+  const { contactTime, flightTime, height, rsi, rsiFlightContact, peakForce } = contact
+  return {
+    ...contact,
+    contactTime: { ...contactTime, unit: 's' },
+    flightTime: { ...flightTime, unit: 's' },
+    height: { ...height, unit: 'm' },
+    rsi: { ...rsi, unit: 'm/s' },
+    rsiFlightContact: { ...rsiFlightContact, unit: '' },
+    peakForce: { ...peakForce, unit: 'N' },
+  }
+}
+
+function trialEntry({ test, metrics, sides, ledger, contacts, ...rest }: TrialAnalysis): TrialEntry {
   return {
     protocol: test.protocol,
     test,
     ...rest,
+    ...(contacts && { contacts: contacts.map(contactEntry) }),
     metrics: withUnits(metrics, unitOf),
     sides: sides && {
       left: withUnits(sides.left, unitOf),

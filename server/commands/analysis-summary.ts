@@ -1,9 +1,19 @@
 import { catalogue } from '../../shared/mechanics/catalogue.ts'
 import type { MetricKey } from '../../shared/mechanics/catalogue.ts'
+import { protocolNames } from '../../shared/mechanics/protocols/names.ts'
 import type { FileEntry } from './analysis-document.ts'
 
 /** What a line shows of a trial. */
-const SHOWN: readonly MetricKey[] = ['bodyMass', 'jumpHeightImpulse', 'takeoffVelocity', 'landingPeakForce']
+const SHOWN: readonly MetricKey[] = [
+  'bodyMass',
+  'jumpHeightImpulse',
+  'takeoffVelocity',
+  'contactTime',
+  'rsi',
+  'rsiBestFive',
+  'contactTimeMean',
+  'landingPeakForce',
+]
 
 type Trial = FileEntry['trials'][number]
 
@@ -18,7 +28,8 @@ function figureText({ metrics }: Trial, key: MetricKey): string {
 
 function trialLine(trial: Trial): string {
   const failed = trial.checks.filter((check) => check.verdict === 'fail').map((check) => check.key)
-  const figures = SHOWN.map((key) => figureText(trial, key)).join(' · ')
+  const shown = SHOWN.filter((key) => catalogue[key].protocols.includes(trial.protocol))
+  const figures = [protocolNames[trial.protocol], ...shown.map((key) => figureText(trial, key))].join(' · ')
   return failed.length > 0 ? `${figures} · failed: ${failed.join(', ')}` : figures
 }
 
