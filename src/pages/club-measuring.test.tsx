@@ -60,6 +60,21 @@ describe('the measuring settings', () => {
     expect(measuring.settings.version).toBe(2)
   })
 
+  test('keep a chosen method while a number is changed', async () => {
+    const { user, measuring } = open({
+      settings: { changed: { asymmetryFormula: 'logRatio' }, version: 2, change: null },
+    })
+    expect(await screen.findByLabelText('Asymmetry')).toHaveValue('logRatio')
+    await user.selectOptions(screen.getByLabelText('Onset of movement'), 'standard-deviations')
+    await user.click(saveSettings())
+    await waitFor(() =>
+      expect(measuring.settings).toMatchObject({
+        changed: { asymmetryFormula: 'logRatio', onsetRule: 'standard-deviations' },
+        version: 3,
+      }),
+    )
+  })
+
   test('are read, and not changed, by a physio; what the method fixes is shown too', async () => {
     open({}, ['physio'])
     expect(await eventForce()).toHaveAttribute('readonly')

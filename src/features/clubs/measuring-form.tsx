@@ -1,6 +1,11 @@
 import { useForm } from 'react-hook-form'
 import { changeMeasuringSettings, MeasuringSettings } from '../../../shared/contracts/measuring.ts'
-import { methodChoices, type NumberChoice } from '../../../shared/mechanics/settings/choices.ts'
+import {
+  methodChoiceKeys,
+  methodChoices,
+  type NumberChoice,
+} from '../../../shared/mechanics/settings/choices.ts'
+import { defaultSettings } from '../../../shared/mechanics/settings.ts'
 import { useRoles } from '../../api/account/get-me.ts'
 import { useChangeMeasuringSettings } from '../../api/clubs/change-measuring-settings.ts'
 import { useAnnounce } from '../../components/announcer.tsx'
@@ -23,6 +28,7 @@ import {
   faultsOf,
   groups,
   measuringStaleFields,
+  methodNames,
   type MeasuringValues,
   valuesOf,
 } from './measuring-values.ts'
@@ -59,7 +65,6 @@ export function MeasuringForm({ settings }: { settings: MeasuringSettings }) {
     }
   })
 
-  const rule = methodChoices.onsetRule
   return (
     <Sheet title="Measuring settings" titleAside={<EditionLine edition={stale.opened} />}>
       <form noValidate onSubmit={save} className="flex flex-col gap-4">
@@ -79,22 +84,31 @@ export function MeasuringForm({ settings }: { settings: MeasuringSettings }) {
           }}
         />
         <FormError error={refusal} />
-        {mayChange ? (
-          <SelectField
-            label="Onset of movement"
-            hint={`${rule.effect}. Source: ${rule.source}.`}
-            className="max-w-prose"
-            {...form.register('onsetRule')}
-          >
-            {Object.entries(rule.options).map(([value, words]) => (
-              <option key={value} value={value}>
-                {words}
-              </option>
-            ))}
-          </SelectField>
-        ) : (
-          <p>Onset of movement: {rule.options[form.getValues('onsetRule')]}.</p>
-        )}
+        {methodChoiceKeys.map((key) => {
+          const { effect, source, options } = methodChoices[key]
+          if (!mayChange)
+            return (
+              <p key={key}>
+                {methodNames[key]}: {options[form.getValues(`methods.${key}`)]}.
+              </p>
+            )
+          return (
+            <SelectField
+              key={key}
+              label={methodNames[key]}
+              hint={`${effect}. Source: ${source}.`}
+              className="max-w-prose"
+              {...form.register(`methods.${key}`)}
+            >
+              {Object.entries(options).map(([value, words]) => (
+                <option key={value} value={value}>
+                  {words}
+                  {value === defaultSettings[key] ? ' (default)' : ''}
+                </option>
+              ))}
+            </SelectField>
+          )
+        })}
         {groups.map(({ title, keys }) => (
           <div key={title}>
             <h3 className="pb-1 font-semibold">{title}</h3>

@@ -1,6 +1,7 @@
 import type { MeasuringSettings } from '../../../shared/contracts/measuring.ts'
 import {
   type ChangedSettings,
+  type MethodChoice,
   methodChoiceKeys,
   methodChoices,
   type NumberChoice,
@@ -10,26 +11,34 @@ import {
   settingsWith,
 } from '../../../shared/mechanics/settings/choices.ts'
 import { checkSettings } from '../../../shared/mechanics/settings/checks.ts'
-import { defaultSettings, type OnsetRule } from '../../../shared/mechanics/settings.ts'
+import { defaultSettings } from '../../../shared/mechanics/settings.ts'
 import type { StaleField } from '../../components/stale-notice.tsx'
 import { settingWords } from '../methods/setting-words.ts'
 
 /** The form's values: every choice as it stands; an empty number is the engine's default. */
-export type MeasuringValues = { numbers: Record<NumberChoice, number | null>; onsetRule: OnsetRule }
+export interface MeasuringValues {
+  numbers: Record<NumberChoice, number | null>
+  methods: Record<MethodChoice, string>
+}
+
+export const methodNames: Record<MethodChoice, string> = {
+  onsetRule: 'Onset of movement',
+  asymmetryFormula: 'Asymmetry',
+}
 
 export function valuesOf({ changed }: MeasuringSettings): MeasuringValues {
   const settings = settingsWith(changed)
+  const pick = (keys: readonly (NumberChoice | MethodChoice)[]) =>
+    Object.fromEntries(keys.map((key) => [key, settings[key]]))
   return {
-    numbers: Object.fromEntries(
-      numberChoiceKeys.map((key) => [key, settings[key]]),
-    ) as MeasuringValues['numbers'],
-    onsetRule: settings.onsetRule,
+    numbers: pick(numberChoiceKeys) as MeasuringValues['numbers'],
+    methods: pick(methodChoiceKeys) as MeasuringValues['methods'],
   }
 }
 
-export function changedOf({ numbers, onsetRule }: MeasuringValues): ChangedSettings {
+export function changedOf({ numbers, methods }: MeasuringValues): ChangedSettings {
   const given = Object.entries(numbers).filter(([, value]) => value !== null)
-  return onlyChanged({ ...(Object.fromEntries(given) as ChangedSettings), onsetRule })
+  return onlyChanged({ ...Object.fromEntries(given), ...methods } as ChangedSettings)
 }
 
 /** What is wrong with the numbers, by setting; what is no number at all is said first. */
@@ -46,7 +55,7 @@ export const groups = [
 
 export const measuringStaleFields: StaleField<MeasuringSettings>[] = [
   ...methodChoiceKeys.map((key) => ({
-    label: 'Onset rule',
+    label: methodNames[key],
     show: ({ changed }: MeasuringSettings) => methodChoices[key].options[settingsWith(changed)[key]],
   })),
   ...numberChoiceKeys.map((key) => ({
