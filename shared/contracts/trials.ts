@@ -17,6 +17,19 @@ const AsymmetryFigure = Figure.extend({
   larger: z.enum(['left', 'right']),
   zeroWithin: z.boolean().nullable(),
 })
+/** One contact between two flights, or between a drop and a flight. Seconds from the first sample; figures in SI units. */
+const Contact = z.strictObject({
+  touchdownS: z.number(),
+  takeoffS: z.number(),
+  contactTime: Figure,
+  flightTime: Figure,
+  height: Figure,
+  rsi: Figure,
+  rsiFlightContact: Figure,
+  peakForce: Figure,
+  /** Whether it is taken into the figure of the series. */
+  counted: z.boolean(),
+})
 const Phase = z.enum([
   'arrival',
   'unweighting',
@@ -44,6 +57,8 @@ export const Analysis = z.strictObject({
   engineVersion: z.string(),
   gravity: z.number(),
   events: z.partialRecord(EventName, z.strictObject({ timeS: z.number(), sample: z.number().int() })),
+  /** Of a drop jump or of hops; null where the test has none. */
+  contacts: z.array(Contact).nullable(),
   /** Of these events, those that a person set, as they set them. */
   movedEvents: MovedEvents,
   metrics: z.record(z.string(), Figure),

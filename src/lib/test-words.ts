@@ -11,14 +11,22 @@ export const sideWords: Record<z.infer<typeof Side>, string> = {
   right: 'right leg',
 }
 
+/** What was carried, and from how high a fall began: "20 kg load", "30 cm box"; empty where there is neither. */
+export function testParticulars({ externalLoadKg, boxHeightM }: z.infer<typeof Test>): string {
+  const parts = [
+    ...(externalLoadKg > 0 ? [`${formatNumber(externalLoadKg, 1)} kg load`] : []),
+    ...(boxHeightM === null ? [] : [`${formatNumber(boxHeightM * 100, 0)} cm box`]),
+  ]
+  return parts.join(', ')
+}
+
 /** A test in words: "Countermovement jump, hands on hips", and what else makes it another test. */
 export function testWords(test: z.infer<typeof Test>): string {
   const parts = [protocolNames[test.protocol]]
   if (protocolsWithArms.includes(test.protocol)) parts.push(armsWords[test.arms])
   if (test.side !== 'both') parts.push(sideWords[test.side])
-  if (test.externalLoadKg > 0) parts.push(`${formatNumber(test.externalLoadKg, 1)} kg load`)
-  if (test.boxHeightM !== null) parts.push(`${formatNumber(test.boxHeightM * 100, 0)} cm box`)
-  return parts.join(', ')
+  parts.push(testParticulars(test))
+  return parts.filter(Boolean).join(', ')
 }
 
 /** What one trial of a test is called by those who did it. */

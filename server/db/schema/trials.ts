@@ -14,6 +14,7 @@ import {
 import type { MovedEvents } from '../../../shared/mechanics/events/event-order.ts'
 import type { ChangedSettings } from '../../../shared/mechanics/settings/choices.ts'
 import type {
+  Contact,
   EventName,
   EventTime,
   Ledger,
@@ -182,6 +183,8 @@ export const analyses = club.table(
       .notNull(),
     sides: jsonb('sides').$type<Sides | null>(),
     ledger: jsonb('ledger').$type<Ledger | null>(),
+    /** Of a drop jump or of hops; null where the test has none. */
+    contacts: jsonb('contacts').$type<Contact[] | null>(),
     checks: jsonb('checks').$type<TrialCheck[]>().notNull(),
     missing: jsonb('missing').$type<{ key: string; reason: string }[]>().notNull(),
     notes: jsonb('notes').$type<Note[]>().notNull(),

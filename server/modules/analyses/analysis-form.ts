@@ -5,18 +5,26 @@ import type { AnalysisRow, NewAnalysis } from './analyses.queries.ts'
 
 type StoredFigures = Pick<
   NewAnalysis,
-  'events' | 'metricValues' | 'metricUncertainties' | 'sides' | 'ledger' | 'checks' | 'missing' | 'notes'
+  | 'events'
+  | 'contacts'
+  | 'metricValues'
+  | 'metricUncertainties'
+  | 'sides'
+  | 'ledger'
+  | 'checks'
+  | 'missing'
+  | 'notes'
 >
 
 /** What of the engine's answer is kept; the rest is of the trial itself. */
 export type EngineSaid = Pick<
   TrialAnalysis,
-  'events' | 'metrics' | 'sides' | 'ledger' | 'checks' | 'missing' | 'notes'
+  'events' | 'contacts' | 'metrics' | 'sides' | 'ledger' | 'checks' | 'missing' | 'notes'
 >
 
 /** What the engine said, as columns: values apart from uncertainties, so that reading one metric stays cheap. */
 export function toRow(said: EngineSaid): StoredFigures {
-  const { metrics, events, sides, ledger, checks, missing, notes } = said
+  const { metrics, events, contacts = null, sides, ledger, checks, missing, notes } = said
   const figures = Object.entries(metrics)
   return {
     metricValues: Object.fromEntries(figures.map(([key, { value }]) => [key, value])),
@@ -24,6 +32,7 @@ export function toRow(said: EngineSaid): StoredFigures {
       figures.map(([key, { U, k, URepeat, kRepeat }]) => [key, [U, k, URepeat, kRepeat]]),
     ),
     events,
+    contacts,
     sides,
     ledger,
     checks,
@@ -53,13 +62,14 @@ export function figuresOf({
 
 /** The analysis in the form that the API answers with. */
 export function toView(row: AnalysisRow): Analysis {
-  const { id, engineVersion, inputs, events, sides, ledger, checks, missing, notes } = row
+  const { id, engineVersion, inputs, events, contacts, sides, ledger, checks, missing, notes } = row
   const { metrics } = figuresOf(row)
   return {
     id,
     engineVersion,
     gravity: inputs.gravity,
     events,
+    contacts,
     movedEvents: inputs.movedEvents ?? {},
     metrics,
     withheld: withheldMetrics({ metrics, checks }),

@@ -17,8 +17,8 @@ export function TracePhases({ shapes }: { shapes: PhaseShape[] }) {
           <line x1="0" y1="0" x2="0" y2="6" className="stroke-ink" strokeOpacity="0.45" strokeWidth="1" />
         </pattern>
       </defs>
-      {shapes.map((shape) => (
-        <g key={shape.phase}>
+      {shapes.map((shape, i) => (
+        <g key={i}>
           <path d={shape.above} className="fill-ink" fillOpacity={dark.has(shape.phase) ? 0.32 : 0.16} />
           <path d={shape.below} fill={`url(#${hatch})`} />
         </g>
@@ -34,7 +34,7 @@ export function TracePhases({ shapes }: { shapes: PhaseShape[] }) {
 export function PhaseFigures({ shapes, layout }: { shapes: PhaseShape[]; layout: TraceLayout }) {
   return (
     <g className="fill-ink text-[13px] font-semibold">
-      {shapes.map((shape) => {
+      {shapes.map((shape, i) => {
         if (!shape.label) return null
         const text = formatSigned(shape.netImpulse, 0)
         const width = text.length * 7.5 + 6
@@ -45,7 +45,7 @@ export function PhaseFigures({ shapes, layout }: { shapes: PhaseShape[]; layout:
         const edge = shape.label.x + (shape.label.room / 2 + 6) * (left ? -1 : 1)
         return (
           <text
-            key={shape.phase}
+            key={i}
             x={inside ? shape.label.x : left ? edge : Math.min(edge, layout.plot.right - width)}
             y={shape.label.y + 4}
             textAnchor={inside ? 'middle' : left ? 'end' : 'start'}

@@ -29,6 +29,12 @@ export function meanHead(metricKey: string): string {
   return head.startsWith('Mean ') ? head : `Mean ${inSentence(head)}`
 }
 
+/** A metric within a sentence, beside its figure: "jump height", "RSI", "landing peak force". */
+export function metricInSentence(metricKey: MetricKey): string {
+  const { name, display } = catalogue[metricKey]
+  return inSentence(display.unit.startsWith('BW') ? name.replace(saidByUnit, '') : name)
+}
+
 /** "no jump height", where a trial has no such figure. */
 export function noFigureWords(metricKey: MetricKey): string {
   return `no ${inSentence(catalogue[metricKey].name)}`

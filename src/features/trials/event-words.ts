@@ -1,7 +1,14 @@
 import type { EventName, MetricGroup, Phase } from '../../../shared/mechanics/types.ts'
 
 /** Those that stand on the trace; the table of the trace has them all. */
-export const tracedEvents: readonly EventName[] = ['onset', 'zeroVelocity', 'takeoff', 'touchdown', 'still']
+export const tracedEvents: readonly EventName[] = [
+  'onset',
+  'arrival',
+  'zeroVelocity',
+  'takeoff',
+  'touchdown',
+  'still',
+]
 
 export const phaseWords: Record<Phase, string> = {
   arrival: 'Arrival',

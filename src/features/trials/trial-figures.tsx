@@ -1,5 +1,6 @@
 import type { ReactNode } from 'react'
 import type { Analysis } from '../../../shared/contracts/trials.ts'
+import { ContactsSheet } from './contacts-sheet.tsx'
 import { ImpulseLedger } from './impulse-ledger.tsx'
 import { MeasuredSheet } from './measured-sheet.tsx'
 import { SidesSheet } from './sides-sheet.tsx'
@@ -28,6 +29,9 @@ export function TrialFigures({ trace, analysis, saved }: Props) {
       </div>
       {analysis && (
         <div className="flex flex-col gap-6 pt-6">
+          {analysis.contacts && analysis.contacts.length > 0 && (
+            <ContactsSheet contacts={analysis.contacts} checks={analysis.checks} saved={saved?.contacts} />
+          )}
           <MeasuredSheet analysis={analysis} saved={saved} />
           {analysis.sides && (
             <SidesSheet sides={analysis.sides} checks={analysis.checks} saved={saved?.sides} />

@@ -6,10 +6,11 @@ import { formatUncertainty, formatValue } from '../../lib/format-figure.ts'
 import { formatDate } from '../../lib/format-date.ts'
 import { pathOf } from '../../lib/paths.ts'
 import { catalogue } from '../../../shared/mechanics/catalogue.ts'
-import { figureWords } from '../results/metric-words.ts'
+import { sideWords, testParticulars } from '../../lib/test-words.ts'
+import { figureWords, metricInSentence, noFigureWords } from '../results/metric-words.ts'
+import { headlineMetric } from '../results/test-metrics.ts'
 import { TrialActs } from './trial-acts.tsx'
 
-const height = catalogue.jumpHeightImpulse
 const velocity = catalogue.takeoffVelocity
 
 interface Props {
@@ -33,6 +34,7 @@ export function TrialHead({ trial, onMove }: Props) {
 
 function TrialContext({ trial }: { trial: Trial }) {
   const { athlete, placeInSession, fileName } = trial
+  const particulars = testParticulars(trial.test)
   return (
     <>
       {athlete ? (
@@ -43,28 +45,35 @@ function TrialContext({ trial }: { trial: Trial }) {
       · <Link to={pathOf.session(trial.sessionId)}>{trial.sessionTitle}</Link>,{' '}
       {formatDate(trial.sessionDate)}
       {trial.place !== null && `, ${trial.place}`}
+      {particulars !== '' && ` · ${particulars}`}
       {placeInSession && ` · trial ${placeInSession.n} of ${placeInSession.of}`}
       {fileName !== null && <span className="break-all"> · {fileName}</span>}
     </>
   )
 }
 
-/** "Countermovement jump, 35.2 cm" and, behind it, how sure that is. A withheld height makes no title. */
+/**
+ * "Countermovement jump, 35.2 cm" or "Drop jump, RSI 1.85 m/s" and, behind it, how sure that is. A figure that is
+ * withheld makes no title.
+ */
 function resultWords({ analysis, test }: Trial): { title: string; aside?: string } {
-  const name = protocolNames[test.protocol]
+  const { protocol, side } = test
+  const name = [protocolNames[protocol], ...(side === 'both' ? [] : [sideWords[side]])].join(', ')
   if (!analysis) return { title: `${name}, being analysed` }
-  const jumped = analysis.metrics[height.key]
-  if (!jumped) return { title: `${name}, no jump height` }
-  if (analysis.withheld.includes(height.key)) return { title: `${name}, height withheld by a failed check` }
+  const metric = headlineMetric(protocol)
+  const figure = analysis.metrics[metric]
+  if (!figure) return { title: `${name}, ${noFigureWords(metric)}` }
+  const isHeight = metric === 'jumpHeightImpulse'
+  const called = isHeight ? 'height' : metricInSentence(metric)
+  if (analysis.withheld.includes(metric)) return { title: `${name}, ${called} withheld by a failed check` }
+  const { display } = catalogue[metric]
   const left = analysis.metrics[velocity.key]
   const sure = [
-    formatUncertainty(jumped.U, height.display),
-    left && !analysis.withheld.includes(velocity.key)
+    formatUncertainty(figure.U, display),
+    isHeight && left && !analysis.withheld.includes(velocity.key)
       ? `takeoff at ${figureWords(velocity.key, left)}`
       : null,
   ]
-  return {
-    title: `${name}, ${formatValue(jumped.value, height.display)} ${height.display.unit}`,
-    aside: sure.filter(Boolean).join(', '),
-  }
+  const words = [isHeight ? '' : called, formatValue(figure.value, display), display.unit]
+  return { title: `${name}, ${words.filter(Boolean).join(' ')}`, aside: sure.filter(Boolean).join(', ') }
 }

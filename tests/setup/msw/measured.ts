@@ -33,6 +33,7 @@ export function measuredJump(jump: Partial<JumpOptions> = {}, seed = 1) {
     gravity,
     events,
     movedEvents: {},
+    contacts: null,
     metrics,
     withheld: withheldMetrics({ metrics, checks }),
     sides,

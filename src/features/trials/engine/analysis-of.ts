@@ -14,6 +14,17 @@ interface AnalysedBy {
 
 /** What the engine of this page says of a trial, in the form in which the server gives its own analyses. */
 export function analysisOf(trial: TrialAnalysis, by: AnalysedBy): Analysis {
-  const { events, metrics, sides, ledger, checks, missing, notes } = trial
-  return { ...by, events, metrics, withheld: withheldMetrics(trial), sides, ledger, checks, missing, notes }
+  const { events, contacts = null, metrics, sides, ledger, checks, missing, notes } = trial
+  return {
+    ...by,
+    events,
+    contacts,
+    metrics,
+    withheld: withheldMetrics(trial),
+    sides,
+    ledger,
+    checks,
+    missing,
+    notes,
+  }
 }

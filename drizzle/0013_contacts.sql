@@ -1,0 +1,1 @@
+ALTER TABLE "club"."analyses" ADD COLUMN "contacts" jsonb;
