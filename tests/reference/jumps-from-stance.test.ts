@@ -117,6 +117,16 @@ describe('countermovement jump on one leg', () => {
 })
 
 describe('a loaded jump', () => {
+  it('fails where the load leaves next to nothing of the athlete', () => {
+    const performance = perform({}, [{ protocol: 'cmj' }])
+    const recording = recordJump(performance, { durationS: performance.endS })
+    const test = { ...testOf(performance.trials[0]), externalLoadKg: 70 }
+    const [{ checks }] = analyse(recording, { test, gravity: 9.80665, calibrationU: {} }).trials
+    const failed = checks.filter(({ verdict }) => verdict === 'fail')
+    expect(failed.map(({ key }) => key)).toEqual(['mass-agreement'])
+    expect(failed[0]?.affects).toContain('weighing')
+  })
+
   it('takes body weight for the denominator and system weight for the motion', () => {
     const found = analysed({ protocol: 'cmj', takeoffVelocity: 1.9 }, 2, 40)
     expectTrue(found)

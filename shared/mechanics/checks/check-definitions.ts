@@ -85,7 +85,7 @@ const definitions = {
     name: 'Agreement with the recorded mass',
     affects: allGroups,
     remedy: 'Check whose trial this is, the external load, and the recorded mass.',
-    settings: ['massCaution', 'massFail'],
+    settings: ['massCaution', 'massFail', 'lightestBodyKg'],
   },
   'both-feet': {
     name: 'Both feet on the plates',

@@ -102,7 +102,23 @@ function massAgreement({ bodyMass, settings }: TrialModel, recordedMassKg: numbe
   )
 }
 
+/** A load that leaves next to nothing of the weight was not carried. */
+function tooMuchLoad({ bodyMass, settings, test }: TrialModel): TrialCheck {
+  return check(
+    'mass-agreement',
+    'fail',
+    { measured: bodyMass.value, limit: settings.lightestBodyKg, unit: 'kg' },
+    {
+      pass: '',
+      fail: `Without the load of ${rounded(test.externalLoadKg, 1)} kg the athlete would weigh ${rounded(bodyMass.value, 1)} kg: the load is another one.`,
+      remedy: 'Correct the external load of the test.',
+    },
+  )
+}
+
 function massChecks(model: TrialModel, { recordedMassKg }: AnalyseOptions): TrialCheck[] {
+  const { test, bodyMass, settings } = model
+  if (test.externalLoadKg > 0 && bodyMass.value < settings.lightestBodyKg) return [tooMuchLoad(model)]
   return recordedMassKg !== undefined && recordedMassKg > 0 ? [massAgreement(model, recordedMassKg)] : []
 }
 

@@ -72,6 +72,12 @@ export const checkSettings = {
     source: own,
     effect: 'A larger disagreement of mass is kept',
   },
+  lightestBodyKg: {
+    value: 20,
+    unit: 'kg',
+    source: `${own}: lighter than anyone who carries a load`,
+    effect: 'Larger loads fail',
+  },
   footShareCaution: {
     value: 0.3,
     unit: 'of the weight',

@@ -18,7 +18,7 @@ export const checkNotes: Record<CheckKey, string> = {
   'still-at-onset':
     'The speed that the body picked up between the middle of the weighing and the onset. It also fails where no quiet stance lies right before the movement.',
   'mass-agreement':
-    'How far the mass that the plates weigh lies from the athlete’s recorded mass. Made only where a mass is recorded.',
+    'How far the mass that the plates weigh lies from the athlete’s recorded mass. Made only where a mass is recorded, or where too little is left once the external load is taken off.',
   'both-feet':
     'The share of the weight on the lighter foot in quiet stance, and whether a foot left its plate before takeoff. Made with two plates; a caution touches the sides only, a failure everything.',
   'foot-off-landing':
