@@ -10,15 +10,18 @@ function hash(text: string, from: bigint): bigint {
   return value
 }
 
+/** A heading as it is compared: blanks collapsed, in lower case. */
+export function plainHeading(text: string): string {
+  return text.normalize('NFC').replace(/\s+/gu, ' ').trim().toLowerCase().slice(0, 200)
+}
+
 /**
  * The same 32 characters for every file with the same headings and units, however they are spaced, quoted or
  * delimited; a file without headings goes by its number of columns.
  */
 export function fingerprintOf(names: readonly string[], units: readonly string[], columns: number): string {
   const cells = (texts: readonly string[]): string => {
-    const plain = texts.map((text) =>
-      text.normalize('NFC').replace(/\s+/gu, ' ').trim().toLowerCase().slice(0, 200),
-    )
+    const plain = texts.map(plainHeading)
     const last = plain.findLastIndex((text) => text !== '')
     return plain.slice(0, last + 1).join('\u001F')
   }

@@ -128,11 +128,11 @@ function candidateFor(
       row.kinds.includes('number') ? row : atWideBlanks(row, text.slice(starts[i], row.end), columns),
     )
   }
-  return { delimiter, style, top, ...judge(top) }
+  return { delimiter, style, top, ...judge(top, style) }
 }
 
 /** Numbers over words in the rows of the body; headings over all of its columns speak for a delimiter too. */
-function judge(top: readonly TopLine[]): Pick<Candidate, 'layout' | 'score' | 'isClear'> {
+function judge(top: readonly TopLine[], style: NumberStyle): Pick<Candidate, 'layout' | 'score' | 'isClear'> {
   const layout = layoutOf(top)
   if (!layout) return { layout, score: -Infinity, isClear: false }
   let [numbers, texts] = [0, 0]
@@ -148,7 +148,7 @@ function judge(top: readonly TopLine[]): Pick<Candidate, 'layout' | 'score' | 'i
   const wordsAbove = layout.preamble.findLast((row) => row.kinds.some((kind) => kind !== 'blank'))
   const isOpen = layout.headerLine === null && !wordsAbove?.kinds.includes('text')
   const share = isNamed ? 1.25 : isOpen ? 1 : 0.4
-  return { layout, score: (numbers - texts) * share, isClear: isNamed && texts === 0 }
+  return { layout, score: (numbers - texts) * share, isClear: isNamed && texts === 0 && !style.assumed }
 }
 
 /** The delimiter under which the top is most of a table; those that need no mark are tried where the marks leave doubt. */
@@ -215,7 +215,9 @@ function bodyReader(decoded: DecodedBytes, { delimiter, style, top }: Candidate)
 }
 
 /** Rows that are enough where they are a table with its headings already: taking rows apart is slow. */
-const FEW_ROWS = 24
+const FEW_ROWS = 16
+/** Of them so many must be numbers. */
+const FEW_NUMBERS = 10
 
 /** The top of a file as a table: a few rows where they are clear, else all that are looked at. */
 function topOf(decoded: DecodedBytes): { best: Candidate; text: string } {
@@ -224,7 +226,7 @@ function topOf(decoded: DecodedBytes): { best: Candidate; text: string } {
     const text = oneCharacterAByte(piece)
     const best = bestCandidate(withLineFeeds(text), decoded, isWhole)
     const rows = best.top.length - (best.layout?.bodyRow ?? best.top.length)
-    if (lines === TOP_ROWS || (best.isClear && rows >= FEW_ROWS / 2)) return { best, text }
+    if (lines === TOP_ROWS || (best.isClear && rows >= FEW_NUMBERS)) return { best, text }
   }
   throw new RangeError('The top of a file is looked at twice at most.')
 }

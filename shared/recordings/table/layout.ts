@@ -154,7 +154,9 @@ export function numbersAbove({ preamble, numeric }: Layout): TopRow | undefined 
   const isNumber = ({ kinds }: TopRow, column: number): boolean =>
     kinds[column] === 'number' || kinds[column] === 'clock'
   if (numeric.length < 2) return undefined
-  return preamble.filter((row) => isNumber(row, first) && numeric.filter((column) => isNumber(row, column)).length > 1)[1]
+  return preamble.filter(
+    (row) => isNumber(row, first) && numeric.filter((column) => isNumber(row, column)).length > 1,
+  )[1]
 }
 
 /**

@@ -3,7 +3,7 @@ import { buildRecording, wantedColumns } from '../build/build-recording.ts'
 import { contentOf } from '../columns/content.ts'
 import type { ColumnContent } from '../columns/content.ts'
 import type { Settled } from '../columns/draft.ts'
-import { fingerprintOf } from '../columns/fingerprint.ts'
+import { fingerprintOf, plainHeading } from '../columns/fingerprint.ts'
 import { readHeading } from '../columns/heading.ts'
 import { explainMap } from '../columns/map-proposal.ts'
 import { settleMap } from '../columns/settle-map.ts'
@@ -102,7 +102,11 @@ function fromMap(map: ColumnMap, { columns }: OpenTable): { forces: MappedForce[
   )
   for (const { index, name } of used) {
     const heading = columns.headings[index]?.name ?? ''
-    if (columns.numeric.includes(index) && (columns.headerLine === null || heading === name)) continue
+    if (
+      columns.numeric.includes(index) &&
+      (columns.headerLine === null || plainHeading(heading) === plainHeading(name))
+    )
+      continue
     const sentence = `The map expects numbers under ${listed([name])} in column ${index + 1}, and the file has ${heading === '' ? 'no such column' : listed([heading])} there.`
     throw new ReadFault('map-mismatch', sentence, { column: index + 1 })
   }
