@@ -3,7 +3,7 @@ import { cruise, type ICruiseResult, type IForbiddenRuleType } from 'dependency-
 const pure = '^shared/(units|recordings|mechanics|statistics)/'
 const unitTest = '\\.test\\.tsx?$'
 /** The packages that the pure folders may use: no clock, no randomness, no input or output of their own. */
-const purePackages = 'node_modules/(@types/)?(papaparse|simple-statistics)/'
+const purePackages = 'node_modules/(@types/)?(papaparse|saxes|simple-statistics)/'
 
 /**
  * The three import rules of the project, by pattern, so that a new folder is covered on the day it appears.
