@@ -95,6 +95,7 @@ describe('billing', () => {
     )
     await user.click(await screen.findByRole('radio', { name: 'Yearly: €45.00 a year for each seat' }))
     const seats = screen.getByRole('textbox', { name: 'Seats' })
+    await vi.waitFor(() => expect(seats).toHaveValue('18'))
     await user.clear(seats)
     await user.click(screen.getByRole('button', { name: 'Go on to payment' }))
     expect(seats).toHaveAccessibleDescription(/Give a whole number of seats/)

@@ -16,9 +16,11 @@ export function ClubBillingPage() {
     <>
       <PageHead title="Billing" />
       {asking && (
-        <Notice tone="plain" role="status">
-          <p>Asking the payment service how things stand …</p>
-        </Notice>
+        <div className="max-w-2xl pb-6">
+          <Notice tone="plain" role="status">
+            <p>Asking the payment service how things stand …</p>
+          </Notice>
+        </div>
       )}
       <QueryState query={billing} what="the billing">
         {(state) => (

@@ -15,9 +15,11 @@ import { intervalWords, perInterval } from './billing-words.ts'
 export function BuySheet({ active }: { active: number }) {
   const plans = usePlans()
   const checkout = useStartCheckout()
-  const [text, setText] = useState(active > 0 ? String(active) : '')
+  const [typed, setTyped] = useState<string | null>(null)
   const [interval, setInterval] = useState<Interval>('month')
   const [tried, setTried] = useState(false)
+  // As many as the club needs now, until somebody says otherwise; they may be counted after this is shown.
+  const text = typed ?? (active > 0 ? String(active) : '')
   const parsed = SeatCount.safeParse(text.trim() === '' ? Number.NaN : Number(text))
 
   const buy = () => {
@@ -46,7 +48,7 @@ export function BuySheet({ active }: { active: number }) {
               className="max-w-72"
               error={tried && !parsed.success ? parsed.error.issues[0]?.message : undefined}
               value={text}
-              onChange={(event) => setText(event.target.value)}
+              onChange={(event) => setTyped(event.target.value)}
             />
             <FieldGroup label="Paid">
               {offered.map((plan) => (
