@@ -1,3 +1,4 @@
+import { useState } from 'react'
 import { type AnalysisEdition, listAnalyses } from '../../../shared/contracts/analyses.ts'
 import { catalogue, isMetricKey } from '../../../shared/mechanics/catalogue.ts'
 import { useMe, useRoles } from '../../api/account/get-me.ts'
@@ -13,9 +14,20 @@ import { mayCall } from '../../lib/may-call.ts'
 
 const headline = ['jumpHeightImpulse', 'takeoffVelocity', 'contactTime', 'landingPeakForcePerBodyWeight']
 
-/** Every analysis of a trial: the one in force and those it took the place of. Nothing for whoever may not read them. */
+/**
+ * Every analysis of a trial: the one in force and those it took the place of, read when they are opened. Nothing for
+ * whoever may not read them.
+ */
 export function TrialAnalyses({ trialId }: { trialId: string }) {
-  return mayCall(listAnalyses, useRoles()) ? <Analyses trialId={trialId} /> : null
+  const mayRead = mayCall(listAnalyses, useRoles())
+  const [open, setOpen] = useState(false)
+  if (!mayRead) return null
+  return (
+    <details className="no-print pt-4" onToggle={(event) => setOpen(event.currentTarget.open)}>
+      <summary className="cursor-pointer">Analyses of this trial, older ones too</summary>
+      {open && <Analyses trialId={trialId} />}
+    </details>
+  )
 }
 
 function Analyses({ trialId }: { trialId: string }) {

@@ -2,6 +2,7 @@ import { lazy, Suspense, useState } from 'react'
 import type { Trial } from '../../../shared/contracts/trials.ts'
 import { Loading } from '../../components/loading.tsx'
 import { Notice } from '../../components/notice.tsx'
+import { TrialAnalyses } from '../analyses/trial-analyses.tsx'
 import { AdjustedNotice } from './adjusted-notice.tsx'
 import { TraceSheet } from './trace-sheet.tsx'
 import { TrialFigures } from './trial-figures.tsx'
@@ -35,6 +36,7 @@ export function TrialView({ trial }: { trial: Trial }) {
       ) : (
         <TrialFigures analysis={analysis} trace={<TraceSheet trial={trial} />} />
       )}
+      <TrialAnalyses trialId={trial.id} />
     </>
   )
 }
