@@ -53,7 +53,8 @@ export function crossingTime(
   const seenU = (ringingU ?? 0) * dt
   const noiseU = Math.sqrt(Math.max(0, positionU * positionU * dt * dt - seenU * seenU))
   const isTouch = slope > 0 && ringingU !== undefined
-  const touchU = isTouch ? Math.max(seenU, settings.touchRiseShare * riseTime(model, position)) : seenU
+  const gentle = isTouch ? Math.max(0, riseTime(model, position) - settings.touchQuickS) : 0
+  const touchU = Math.max(seenU, settings.touchRiseShare * gentle)
   const own = alike ? Math.sqrt(1 - alikeShare) : 1
   const terms: (readonly [number, Quantity])[] = [
     [1, budget.input(0, noiseU, zero.noiseDof)],

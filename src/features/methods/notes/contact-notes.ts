@@ -1,9 +1,11 @@
 import type { contactMetrics } from '../../../../shared/mechanics/catalogue/contacts.ts'
 import type { SettingKey } from '../../../../shared/mechanics/settings.ts'
-import { crossed, weighed, type MetricNote } from './note.ts'
+import { crossed, touched, weighed, type MetricNote } from './note.ts'
 
 /** What a velocity by integration backwards from quiet stance rests on. */
 const backwards: SettingKey[] = [...weighed, 'stillWindowS', 'recordedMassU', 'flightLowerU', 'gravityU']
+/** What times of contact rest on. */
+const timed: SettingKey[] = [...crossed, ...touched, 'recorderDelayU', 'smoothedDelayU', 'smoothedRoughness']
 /** Which contacts of a series count. */
 const counting: SettingKey[] = ['contactsConsidered', 'longestCountedContactS', 'fewestContacts']
 
@@ -15,7 +17,7 @@ const rsi: MetricNote = {
   formula: 'R = \\frac{h}{t_c}, \\quad h = \\frac{g\\, t_f^2}{8}',
   symbols: 'h height from time in the air, t_c contact time, t_f flight time, g acceleration of free fall',
   from: ['jumpHeightFlight', 'contactTime'],
-  settings: [...crossed, 'gravityU'],
+  settings: [...timed, 'gravityU'],
   evidence: 'memory',
   unchecked: 'Young 1995 and Flanagan, Comyns 2008 are cited from memory.',
   limits:
@@ -30,7 +32,7 @@ const contactTime: MetricNote = {
   formula: 't_c = t_{\\text{takeoff}} - t_{\\text{arrival}}',
   symbols: 'the instants of arrival and takeoff',
   from: [],
-  settings: crossed,
+  settings: timed,
   evidence: 'definition',
   limits:
     'A plate that rings after the arrival, or a recorder that smooths the force, moves the arrival by a millisecond or so.',
@@ -73,7 +75,7 @@ export const contactNotes: Record<keyof typeof contactMetrics, MetricNote> = {
     formula: 'R = \\frac{t_f}{t_c}',
     symbols: 't_f flight time, t_c contact time',
     from: ['flightTime', 'contactTime'],
-    settings: crossed,
+    settings: timed,
     evidence: 'practice',
     unchecked: undefined,
     limits:
@@ -97,7 +99,7 @@ export const contactNotes: Record<keyof typeof contactMetrics, MetricNote> = {
     formula: 'R = \\frac{1}{5} \\sum_{i=1}^{5} R_{(i)}, \\quad R_i = \\frac{g\\, t_{f,i}^2}{8\\, t_{c,i}}',
     symbols: 'R_(1) ≥ R_(2) ≥ … the RSI of the contacts that count, t_f flight time, t_c contact time',
     from: ['hopCount'],
-    settings: [...counting, 'bestContacts', ...crossed, 'gravityU'],
+    settings: [...counting, 'bestContacts', ...timed, 'gravityU'],
     evidence: 'memory',
     unchecked: 'That contacts over 250 ms are left out is cited from memory.',
     limits:
@@ -111,7 +113,7 @@ export const contactNotes: Record<keyof typeof contactMetrics, MetricNote> = {
     formula: 'T = \\frac{1}{n} \\sum_{i=1}^{n} t_{c,i}',
     symbols: 'T the mean, n the number of contacts that count, t_c their contact times',
     from: ['hopCount'],
-    settings: [...counting, ...crossed],
+    settings: [...counting, ...timed],
     read: 'Over the contacts of the series.',
     events: ['takeoff', 'touchdown'],
   },

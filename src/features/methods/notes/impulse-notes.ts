@@ -46,12 +46,13 @@ export const impulseNotes: Record<keyof typeof impulseMetrics, MetricNote> = {
     },
   ),
   brakingImpulse: overPhase(
-    'The net impulse that stops the way down, from the greatest downward velocity to zero velocity.',
+    'The net impulse that stops the way down: from the greatest downward velocity, or the first touch of a drop jump, to zero velocity.',
     ['minimumVelocity', 'zeroVelocity'],
     ['fastest down', 'lowest'],
     {
       from: ['unweightingImpulse'],
-      limits: 'By definition the unweighting impulse with its sign turned: it says nothing new.',
+      limits:
+        'In a countermovement it is the unweighting impulse with its sign turned, in a drop jump system mass times drop velocity: it says nothing new.',
     },
   ),
   propulsionImpulse: overPhase(
@@ -64,12 +65,13 @@ export const impulseNotes: Record<keyof typeof impulseMetrics, MetricNote> = {
     },
   ),
   netImpulse: overPhase(
-    'The net impulse of the whole push, from the onset to takeoff.',
+    'The net impulse of the whole push, from the onset, or the first touch of a drop jump, to takeoff.',
     ['onset', 'takeoff'],
     ['onset', 'takeoff'],
     {
       from: ['systemWeight', 'takeoffVelocity'],
-      limits: 'It is takeoff momentum under another name. A gain error of the plates goes right into it.',
+      limits:
+        'From stance it is takeoff momentum under another name; in a drop jump it is system mass times takeoff velocity less drop velocity. A gain error of the plates goes right into it.',
     },
   ),
   landingImpulse: overPhase(

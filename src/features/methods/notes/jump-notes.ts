@@ -44,7 +44,8 @@ export const jumpNotes: Record<keyof typeof jumpMetrics, MetricNote> = {
     events: ['onset', 'takeoff'],
   },
   takeoffVelocity: {
-    definition: 'The upward velocity of the centre of mass at takeoff, by impulse and momentum from rest.',
+    definition:
+      'The upward velocity of the centre of mass at takeoff, by impulse and momentum from rest: from the onset, or, in a drop jump, backwards from the stance after the landing.',
     formula:
       'v = \\frac{1}{m} \\int_{t_{\\text{onset}}}^{t_{\\text{takeoff}}} (F - W_{\\text{sys}})\\, \\mathrm{d}t',
     symbols: 'F the force, W_sys system weight, m system mass',

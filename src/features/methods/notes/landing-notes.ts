@@ -86,15 +86,16 @@ export const landingNotes: Record<keyof typeof landingMetrics, MetricNote> = {
   landingLoadingRateMax: greatestRate,
   landingLoadingRateMaxPerBodyWeight: perWeight('landingLoadingRateMax', greatestRate),
   landingVelocity: {
-    definition: 'The velocity at touchdown, by integration from rest through push and flight; negative.',
+    definition:
+      'The velocity at touchdown by integration from rest, negative: from the onset through push and flight, or, after a drop and in hops, backwards from the stance after the landing.',
     formula:
-      'v = \\frac{1}{m} \\int_{t_{\\text{onset}}}^{t_{\\text{touchdown}}} (F - W_{\\text{sys}})\\, \\mathrm{d}t',
-    symbols: 'F the force, W_sys system weight, m system mass',
+      'v = \\frac{1}{m} \\int_{t_{\\text{rest}}}^{t_{\\text{touchdown}}} (F - W_{\\text{sys}})\\, \\mathrm{d}t',
+    symbols: 'F the force, W_sys system weight, m system mass, t_rest an instant at rest',
     from: ['systemWeight'],
     settings: [...integrated, ...crossed],
     evidence: 'definition',
     limits: 'The longer the integration, the further an error of the weight carries. It follows jump height.',
-    read: 'At touchdown, by integration since the onset.',
+    read: 'At touchdown, by integration from rest.',
     events: ['onset', 'touchdown'],
   },
   landingTime: {
