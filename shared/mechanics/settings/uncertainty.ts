@@ -34,13 +34,13 @@ export const uncertaintySettings = {
     effect: 'A low-pass is seen in more recordings',
   },
   touchRiseShare: {
-    value: 0.15,
+    value: 0.175,
     unit: 'of the time from the crossing to touchRiseN beyond touchQuickS, standard uncertainty',
     source: `${own}: ringing of the plate that the fit takes for the rise, a heel that comes a moment later`,
     effect: 'Wider intervals of touchdown, contact and flight times, more so where the force rises gently',
   },
   touchQuickS: {
-    value: 0.002,
+    value: 0.0025,
     unit: 's',
     source: `${own}: a force that rises so quickly leaves no room for error`,
     effect: 'Narrower intervals of the same',
@@ -58,7 +58,7 @@ export const uncertaintySettings = {
     effect: 'Wider U, same URepeat',
   },
   driftU: {
-    value: 0.1,
+    value: 0.06,
     unit: 'N/s, standard uncertainty of each plate',
     source: `${own}: residual drift of a plate that has warmed up`,
     effect: 'Wider intervals of weight and velocity',
