@@ -1,12 +1,16 @@
+import type { GivenAttempt } from '../synthetic/attempts.ts'
 import { fileStyle, fileStyles } from '../synthetic/file-styles.ts'
 import type { FileStyle } from '../synthetic/file-styles.ts'
 import { makeJump } from '../synthetic/jump.ts'
 import type { JumpOptions, PlateOptions, SamplingOptions } from '../synthetic/options.ts'
+import { perform } from '../synthetic/perform.ts'
 import { recordJump } from '../synthetic/record.ts'
 import { writeDelimited } from '../synthetic/write-delimited.ts'
 
 interface Sample {
   jump: Partial<JumpOptions>
+  /** Another test than a countermovement jump, by the athlete of `jump`. */
+  attempt?: GivenAttempt
   sampling: Partial<SamplingOptions>
   style: FileStyle
   seed: number
@@ -22,6 +26,48 @@ const plate: Partial<PlateOptions> = {
   stepN: 0.1,
 }
 const uneven = { stance: 0.51, unweighting: 0.5, braking: 0.47, propulsion: 0.48, landing: 0.55 }
+
+const athlete = { massKg: 72.6, body }
+const plain = fileStyle({ preamble: [invented] })
+
+/** One of each other test, for the worked examples of what is measured there alone. */
+const otherTests: Record<string, Sample> = {
+  'squat-jump.csv': {
+    jump: athlete,
+    attempt: { protocol: 'sj', takeoffVelocity: 2.38, stanceS: 2.2, settleS: 1.4 },
+    sampling: {},
+    style: plain,
+    seed: 105,
+  },
+  'drop-jump.csv': {
+    jump: athlete,
+    attempt: { protocol: 'dj', boxHeightM: 0.3, dropHeightM: 0.29, takeoffVelocity: 2.36, settleS: 2 },
+    sampling: {},
+    style: plain,
+    seed: 106,
+  },
+  'single-leg-right.csv': {
+    jump: athlete,
+    attempt: { protocol: 'slcmj', side: 'right', takeoffVelocity: 1.62, depthM: 0.22 },
+    sampling: {},
+    style: plain,
+    seed: 107,
+  },
+  'drop-landing.csv': {
+    jump: athlete,
+    attempt: { protocol: 'dropLanding', boxHeightM: 0.3, dropHeightM: 0.29, settleS: 2.2 },
+    sampling: {},
+    style: plain,
+    seed: 108,
+  },
+  'hops.csv': {
+    jump: athlete,
+    attempt: { protocol: 'hops', settleS: 1.6 },
+    sampling: { sampleRateHz: 500, durationS: 13 },
+    style: plain,
+    seed: 109,
+  },
+}
 
 /** The sample files by name: a jump each, in a style each. */
 const samples: Record<string, Sample> = {
@@ -57,13 +103,15 @@ const samples: Record<string, Sample> = {
     style: { ...fileStyles.quoted, total: null, preamble: [`"${invented}"`] },
     seed: 104,
   },
+  ...otherTests,
 }
 
 /** The bytes of every sample file, the same on every run. */
 export function sampleFiles(): Record<string, Uint8Array> {
   return Object.fromEntries(
-    Object.entries(samples).map(([name, { jump, sampling, style, seed }]) => {
-      const recording = recordJump(makeJump(jump, seed), sampling, { left: plate, right: plate }, seed)
+    Object.entries(samples).map(([name, { jump, attempt, sampling, style, seed }]) => {
+      const done = attempt ? perform(jump, [attempt], seed) : makeJump(jump, seed)
+      const recording = recordJump(done, sampling, { left: plate, right: plate }, seed)
       return [name, writeDelimited(recording, style)]
     }),
   )

@@ -151,7 +151,8 @@ export const errorWording: Record<AnyErrorCode, ErrorWording> = {
   },
   'athlete-unseated': {
     title: 'This athlete has no seat',
-    advice: 'The recording is kept in the Tray. A club admin gives seats on the Seats page; then put it on the athlete.',
+    advice:
+      'The recording is kept in the Tray. A club admin gives seats on the Seats page; then put it on the athlete.',
   },
   'club-reads-only': {
     title: 'The club can only read at the moment',

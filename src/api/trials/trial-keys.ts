@@ -2,5 +2,6 @@
 export const trialKeys = {
   all: ['trials'],
   one: (trialId: string) => ['trials', trialId],
+  overlaid: (trialId: string) => ['trials', trialId, 'overlaid'],
   samples: (trialId: string) => ['samples', trialId],
 } as const

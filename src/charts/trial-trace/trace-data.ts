@@ -27,6 +27,13 @@ export interface TraceOverlay {
   momentum: Float64Array | null
 }
 
+/** A stretch of time that is marked as a whole. */
+export interface TraceSpan {
+  startS: number
+  endS: number
+  label: string
+}
+
 /** Everything that the trace of one trial is drawn from. Seconds from the first sample, newtons, kg·m/s. */
 export interface TraceData {
   sampleRateHz: number
@@ -40,4 +47,5 @@ export interface TraceData {
   phases: TracePhase[]
   events: TraceEvent[]
   overlays: TraceOverlay[]
+  span?: TraceSpan
 }

@@ -2,7 +2,7 @@ import { memo } from 'react'
 import type { TraceLayout } from './lay-out.ts'
 import { TraceAxes } from './trace-axes.tsx'
 import { OverlayLines } from './overlay-lines.tsx'
-import type { TraceData } from './trace-data.ts'
+import type { TraceData, TraceSpan } from './trace-data.ts'
 import { TraceLines } from './trace-lines.tsx'
 import { PhaseFigures, TracePhases } from './trace-phases.tsx'
 import { phaseShape } from './phase-shapes.ts'
@@ -23,6 +23,7 @@ export const TraceDrawing = memo(function TraceDrawing({ data, view, layout, sca
     : []
   return (
     <g>
+      {data.span && <MarkedSpan span={data.span} layout={layout} scales={scales} />}
       <TraceAxes layout={layout} scales={scales} withMomentum={data.momentum !== null} />
       <TracePhases shapes={shapes} />
       <OverlayLines data={data} view={view} scales={scales} />
@@ -32,6 +33,24 @@ export const TraceDrawing = memo(function TraceDrawing({ data, view, layout, sca
     </g>
   )
 })
+
+interface MarkedSpanProps extends Pick<Props, 'layout' | 'scales'> {
+  span: TraceSpan
+}
+
+/** A band behind the force, with its name at the top. */
+function MarkedSpan({ span, layout, scales }: MarkedSpanProps) {
+  const [from, to] = [scales.time(span.startS), scales.time(span.endS)]
+  const { top, bottom } = layout.force
+  return (
+    <g>
+      <rect x={from} y={top} width={to - from} height={bottom - top} className="fill-band stroke-ink-2" />
+      <text x={(from + to) / 2} y={top + 16} textAnchor="middle" className="fill-ink text-[12.5px]">
+        {span.label}
+      </text>
+    </g>
+  )
+}
 
 /** The momentum that the athlete left the ground with, marked where the trace shows it. */
 function TakeoffMomentum({ data, scales }: { data: TraceData; scales: DrawnScales }) {

@@ -1,6 +1,7 @@
 import { Link } from 'react-router-dom'
 import { catalogue, metricKeys } from '../../../shared/mechanics/catalogue.ts'
 import { checkDefinitions, type CheckKey } from '../../../shared/mechanics/checks/check-definitions.ts'
+import type { Protocol } from '../../../shared/mechanics/types.ts'
 import { Facts } from '../../components/facts.tsx'
 import { PageHead } from '../../components/page-head.tsx'
 import { QueryState } from '../../components/query-state.tsx'
@@ -10,6 +11,7 @@ import { formatMeasured } from '../trials/format-measured.ts'
 import { groupWords } from '../trials/event-words.ts'
 import { ExampleSource } from './example-source.tsx'
 import { checkNotes } from './notes/check-notes.ts'
+import { sampleOfCheck } from './sample-of.ts'
 import { SettingsTable } from './settings-table.tsx'
 import { useWorkedExample } from './use-worked-example.ts'
 import type { WorkedExample } from './worked-example.ts'
@@ -17,7 +19,8 @@ import type { WorkedExample } from './worked-example.ts'
 /** The Method note of a Trial check: what is measured, what it takes away, what to do. */
 export function CheckNoteView({ checkKey }: { checkKey: CheckKey }) {
   const { name, affects, remedy, settings } = checkDefinitions[checkKey]
-  const example = useWorkedExample()
+  const sample = sampleOfCheck(checkKey)
+  const example = useWorkedExample(sample)
   return (
     <>
       <PageHead
@@ -59,7 +62,7 @@ export function CheckNoteView({ checkKey }: { checkKey: CheckKey }) {
         </div>
         <Sheet title="Worked example">
           <QueryState query={example} what="the sample recording">
-            {(data) => <ExampleOfCheck example={data} checkKey={checkKey} />}
+            {(data) => <ExampleOfCheck example={data} checkKey={checkKey} sample={sample} />}
           </QueryState>
         </Sheet>
       </div>
@@ -72,7 +75,13 @@ export function CheckNoteView({ checkKey }: { checkKey: CheckKey }) {
 
 const verdictWords = { pass: 'passes', caution: 'caution: look at it', fail: 'fails' } as const
 
-function ExampleOfCheck({ example: { analysis }, checkKey }: { example: WorkedExample; checkKey: CheckKey }) {
+interface ExampleProps {
+  example: WorkedExample
+  checkKey: CheckKey
+  sample: Protocol
+}
+
+function ExampleOfCheck({ example: { analysis }, checkKey, sample }: ExampleProps) {
   const check = analysis.checks.find(({ key }) => key === checkKey)
   return (
     <>
@@ -90,7 +99,7 @@ function ExampleOfCheck({ example: { analysis }, checkKey }: { example: WorkedEx
       ) : (
         <p>The sample does not call for this check: it comes with no recorded mass.</p>
       )}
-      <ExampleSource engineVersion={analysis.engineVersion} />
+      <ExampleSource protocol={sample} engineVersion={analysis.engineVersion} />
     </>
   )
 }

@@ -18,6 +18,7 @@ import { ExampleTrace } from './example-trace.tsx'
 import { Formula } from './formula.tsx'
 import { checksOf } from './note-checks.ts'
 import { metricNotes } from './notes/metric-notes.ts'
+import { sampleOfMetric } from './sample-of.ts'
 import { SettingsTable } from './settings-table.tsx'
 import { Symbols } from './symbols.tsx'
 import { useWorkedExample } from './use-worked-example.ts'
@@ -26,7 +27,8 @@ import { useWorkedExample } from './use-worked-example.ts'
 export function MetricNoteView({ metricKey }: { metricKey: MetricKey }) {
   const metric = catalogue[metricKey]
   const note = metricNotes[metricKey]
-  const example = useWorkedExample()
+  const sample = sampleOfMetric(metricKey)
+  const example = useWorkedExample(sample)
   const touchesHealth = metric.group === 'landing' || metric.group === 'sides' || metric.feet !== undefined
   return (
     <>
@@ -48,7 +50,13 @@ export function MetricNoteView({ metricKey }: { metricKey: MetricKey }) {
           <Sheet title="Where it is read">
             <QueryState query={example} what="the sample recording">
               {(data) => (
-                <ExampleTrace example={data} read={note.read} events={note.events} phase={metric.phase} />
+                <ExampleTrace
+                  example={data}
+                  metricKey={metricKey}
+                  read={note.read}
+                  events={note.events}
+                  phase={metric.phase}
+                />
               )}
             </QueryState>
           </Sheet>
@@ -60,7 +68,7 @@ export function MetricNoteView({ metricKey }: { metricKey: MetricKey }) {
               {(data) => (
                 <>
                   <ExampleFigures example={data} metricKey={metricKey} from={note.from} />
-                  <ExampleSource engineVersion={data.analysis.engineVersion} />
+                  <ExampleSource protocol={sample} engineVersion={data.analysis.engineVersion} />
                 </>
               )}
             </QueryState>

@@ -1,9 +1,12 @@
 import type { EventName, Phase } from '../../../shared/mechanics/types.ts'
-import type { TraceData } from '../../charts/trial-trace/trace-data.ts'
+import type { TraceData, TraceSpan } from '../../charts/trial-trace/trace-data.ts'
 import type { TraceView } from '../../charts/trial-trace/trace-scales.ts'
 
 /** What is drawn before and after the stretch that a figure is read from, seconds. */
 const marginS = 0.3
+
+/** The same round a stretch that is marked as a whole: enough to see what follows it. */
+const aroundSpanS = 1.2
 
 /**
  * The trace with only what a figure is read from marked: its events, and the phases between them, or its own phase
@@ -11,8 +14,13 @@ const marginS = 0.3
  */
 export function traceOfNote(
   data: TraceData,
-  { events, phase }: { events: readonly EventName[]; phase: Phase | null },
+  { events, phase, span }: { events: readonly EventName[]; phase: Phase | null; span?: TraceSpan | null },
 ): { data: TraceData; view: TraceView } {
+  if (span) {
+    const endS = Math.min(data.durationS, span.endS + aroundSpanS)
+    const shown = { ...data, events: [], phases: [], span }
+    return { data: shown, view: { startS: Math.max(0, span.startS - aroundSpanS), endS } }
+  }
   const marked = data.events.filter(({ key }) => events.some((event) => event === key))
   const times = marked.map(({ timeS }) => timeS)
   const between = data.phases.filter(

@@ -1,26 +1,28 @@
 import { useQuery } from '@tanstack/react-query'
-import { getSampleRecording, samplePath } from '../../api/methods/get-sample-recording.ts'
+import { getSampleRecording, sampleRecordings } from '../../api/methods/get-sample-recording.ts'
+import type { Protocol } from '../../../shared/mechanics/types.ts'
 
-/** Lets the page be drawn first. Safari has no idle callback. */
-function idle(): Promise<void> {
-  return new Promise((resolve) => {
-    if ('requestIdleCallback' in window) requestIdleCallback(() => resolve(), { timeout: 500 })
-    else setTimeout(resolve)
-  })
-}
-
-/** The sample recording as the engine of this very page measures it; once for all notes. */
-export function useWorkedExample() {
+/**
+ * The sample recording of a test as the engine measures it here and now, beside the page; once for all notes of
+ * that test.
+ */
+export function useWorkedExample(protocol: Protocol) {
   return useQuery({
-    queryKey: ['worked-example'],
+    queryKey: ['worked-example', protocol],
     staleTime: Infinity,
+    structuralSharing: false,
     queryFn: async ({ signal }) => {
-      const [bytes, { workOut }] = await Promise.all([
-        getSampleRecording(signal),
-        import('./worked-example.ts'),
+      const { path, test } = sampleRecordings[protocol]
+      const [bytes, { openEngine }] = await Promise.all([
+        getSampleRecording(path, signal),
+        import('../trials/engine/open-engine.ts'),
       ])
-      await idle()
-      return workOut(bytes, samplePath.slice(samplePath.lastIndexOf('/') + 1))
+      const engine = openEngine()
+      try {
+        return await engine.ask('workOut', { bytes, fileName: path.slice(path.lastIndexOf('/') + 1), test })
+      } finally {
+        engine.close()
+      }
     },
   })
 }

@@ -1,6 +1,7 @@
 import { analyse } from '../../../shared/mechanics/analyse.ts'
 import { readRecording } from '../../../shared/recordings/read-recording.ts'
 import { standardGravity } from '../../../shared/units/gravity.ts'
+import type { Test } from '../../../shared/mechanics/types.ts'
 import type { Trial } from '../../../shared/contracts/trials.ts'
 import type { Samples } from '../../api/trials/read-samples.ts'
 import { analysisOf } from '../trials/engine/analysis-of.ts'
@@ -15,14 +16,14 @@ export interface WorkedExample {
   samples: Samples
 }
 
-/** A file's bytes through reader and engine, as the server does it. Throws where the file holds no jump. */
-export function workOut(bytes: Uint8Array, fileName: string): WorkedExample {
+/** A file's bytes through reader and engine, as the server does it. Throws where the file holds no trial of that test. */
+export function workOut(bytes: Uint8Array, fileName: string, test: Test): WorkedExample {
   const read = readRecording(bytes, fileName)
   if (!read.ok) throw new Error(read.error.sentence)
   const { recording } = read
-  const { trials, engineVersion } = analyse(recording, { gravity: standardGravity, calibrationU })
+  const { trials, engineVersion } = analyse(recording, { test, gravity: standardGravity, calibrationU })
   const [trial] = trials
-  if (!trial) throw new Error('The engine found no jump in the sample recording.')
+  if (!trial) throw new Error('The engine found no trial in the sample recording.')
   const by = { id: fileName, engineVersion, gravity: standardGravity, movedEvents: {} }
   return {
     analysis: analysisOf(trial, by),

@@ -17,7 +17,7 @@ export function answerQuestions(): (question: EngineQuestion) => EngineReply {
         if (!held) throw new Error('No trial is held.')
         return analyseHeld(held, question.ask.movedEvents)
       case 'workOut':
-        return workOut(question.ask.bytes, question.ask.fileName)
+        return workOut(question.ask.bytes, question.ask.fileName, question.ask.test)
     }
   }
   return (question) => {

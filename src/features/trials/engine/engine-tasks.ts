@@ -1,6 +1,6 @@
 import type { EngineInputs } from '../../../../shared/contracts/moved-events.ts'
 import type { MovedEvents } from '../../../../shared/mechanics/events/event-order.ts'
-import type { Recording } from '../../../../shared/mechanics/types.ts'
+import type { Recording, Test } from '../../../../shared/mechanics/types.ts'
 import type { WorkedExample } from '../../methods/worked-example.ts'
 import type { Analysis } from './analysis-of.ts'
 
@@ -10,8 +10,8 @@ export interface EngineTasks {
   hold: { ask: { recording: Recording; inputs: EngineInputs }; answer: null }
   /** Analyses the held trial with these events moved; null where the engine then finds no trial. */
   analyse: { ask: { movedEvents: MovedEvents }; answer: Analysis | null }
-  /** Reads a file and analyses the trial in it. */
-  workOut: { ask: { bytes: Uint8Array; fileName: string }; answer: WorkedExample }
+  /** Reads a file and analyses the trial of that test in it. */
+  workOut: { ask: { bytes: Uint8Array; fileName: string; test: Test }; answer: WorkedExample }
 }
 
 export type EngineQuestion = {
