@@ -1,90 +1,13 @@
-import type { ForceChannel, Note, Recording } from '../mechanics/types.ts'
+import type { Note, Recording } from '../mechanics/types.ts'
+import type { ColumnMap } from './column-map.ts'
 import type { MapProposal } from './columns/map-proposal.ts'
 import type { ReadError } from './errors.ts'
+import type { FileFormat } from './format.ts'
 import type { Metadata } from './table/metadata.ts'
 
-/** Of a column of time: a length of time, the number of a sample (or of a frame of samples), or a time of day. */
-export type TimeUnit = 's' | 'ms' | 'us' | 'min' | 'samples' | 'clock'
-/** `kgf` and `lbf` are the weight of a kilogram and a pound under standard gravity; `BW` is the athlete's body weight. */
-export type ForceUnit = 'N' | 'kN' | 'kgf' | 'lbf' | 'BW' | '%BW'
-
-/** One column of the file as it was taken. `index` counts from 0; `name` is the heading as written. */
-export interface MappedColumn {
-  index: number
-  name: string
-}
-
-export interface MappedTime extends MappedColumn {
-  unit: TimeUnit
-  /** Of `samples`: the column counts frames, and another one the samples within a frame. */
-  within?: MappedColumn & { samplesPerFrame: number }
-}
-
-export interface MappedForce extends MappedColumn {
-  unit: ForceUnit
-  /** Columns of one channel are added up. */
-  channel: ForceChannel
-  /** Pressing on the plate reads negative. */
-  downward?: true
-}
-
-/** How the columns of one kind of file are read: data that a person can confirm, change and keep. */
-export interface ColumnMap {
-  /** null: the file has no time; the rate is stated. */
-  time: MappedTime | null
-  forces: MappedForce[]
-  /** Hz, as a person confirmed it for files that do not state it themselves. */
-  sampleRateHz?: number
-}
-
-/** What somebody who knows the file says of it. It wins over nothing that the file itself says, but for the map. */
-export interface ReadHints {
-  /** Hz, for a file without a time column. */
-  sampleRateHz?: number
-  /** For forces in body weights. */
-  bodyMassKg?: number
-  /** Taken as it is, where the file's headings are those it was made for. */
-  map?: ColumnMap
-}
-
-/** How a file's text is built. */
-export interface DelimitedFormat {
-  kind: 'delimited'
-  /** A blank stands for any run of blanks and tabs. */
-  delimiter: ',' | ';' | '\t' | '|' | ' '
-  /** Line of the column headings, counted from 1; null where the file has none. */
-  headerLine: number | null
-  encoding: 'utf-8' | 'utf-16le' | 'utf-16be' | 'windows-1252'
-  byteOrderMark: boolean
-  lineBreak: 'LF' | 'CRLF' | 'CR'
-  decimalMark: '.' | ','
-}
-
-/** Which sheet of a workbook was read. */
-export interface WorkbookFormat {
-  kind: 'workbook'
-  sheet: string
-  /** Row of the column headings, counted from 1; null where the sheet has none. */
-  headerLine: number | null
-}
-
-/** How a C3D file stores its numbers, and the force plates in it. */
-export interface C3dFormat {
-  kind: 'c3d'
-  processor: 'intel' | 'dec' | 'mips'
-  storage: 'integer' | 'float'
-  plates: { number: number; type: number; labels: string[] }[]
-  /** 1: the headings are made by the reader, over a sample a row. */
-  headerLine: number | null
-}
-
-export type FileFormat = DelimitedFormat | WorkbookFormat | C3dFormat
-
-/** How a file is built, before its headings are found. */
-export type TableFormat =
-  | Omit<DelimitedFormat, 'headerLine'>
-  | Omit<WorkbookFormat, 'headerLine'>
-  | Omit<C3dFormat, 'headerLine'>
+export type { ColumnMap, ForceUnit, MappedColumn, MappedForce, MappedTime, TimeUnit } from './column-map.ts'
+export type { C3dFormat, DelimitedFormat, FileFormat, TableFormat, WorkbookFormat } from './format.ts'
+export type { ReadHints } from './hints.ts'
 
 export interface ReadSuccess {
   ok: true

@@ -1,6 +1,6 @@
 import type { ForceChannel, Note } from '../../mechanics/types.ts'
 import type { ReadError } from '../errors.ts'
-import type { ForceUnit, MappedColumn, TimeUnit } from '../result.ts'
+import type { ForceUnit, MappedColumn, TimeUnit } from '../column-map.ts'
 import type { Heading } from './heading.ts'
 
 /** A column that may hold a vertical force. */

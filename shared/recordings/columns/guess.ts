@@ -1,4 +1,4 @@
-import type { ForceUnit, TimeUnit } from '../result.ts'
+import type { ForceUnit, TimeUnit } from '../column-map.ts'
 import { evenStep } from './content.ts'
 import type { ColumnContent, ContentOf } from './content.ts'
 import type { DraftMap } from './draft.ts'

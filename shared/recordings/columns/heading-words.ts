@@ -1,4 +1,4 @@
-import type { ForceUnit, TimeUnit } from '../result.ts'
+import type { ForceUnit, TimeUnit } from '../column-map.ts'
 
 /**
  * Words and abbreviations met in column headings, lower case and without accents, in the languages in which

@@ -1,4 +1,4 @@
-import type { ForceUnit, TimeUnit } from '../result.ts'
+import type { ForceUnit, TimeUnit } from '../column-map.ts'
 import {
   AXIS_WORDS,
   FORCE_UNITS,

@@ -1,5 +1,5 @@
 import type { ForceChannel } from '../../mechanics/types.ts'
-import type { ColumnMap, ForceUnit, TimeUnit } from '../result.ts'
+import type { ColumnMap, ForceUnit, TimeUnit } from '../column-map.ts'
 import { shown } from '../safe-text.ts'
 import type { Settled } from './draft.ts'
 import { evenStep } from './content.ts'

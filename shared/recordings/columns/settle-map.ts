@@ -1,7 +1,7 @@
 import type { Note } from '../../mechanics/types.ts'
 import { ReadFault } from '../errors.ts'
 import { readingNotes } from '../notes.ts'
-import type { ForceUnit } from '../result.ts'
+import type { ForceUnit } from '../column-map.ts'
 import { listed, shown } from '../safe-text.ts'
 import type { ContentOf } from './content.ts'
 import type { DraftMap, ForceColumn, Settled, Why } from './draft.ts'

@@ -1,5 +1,5 @@
 import { byteOrderMarkLength } from '../file-kind.ts'
-import type { DelimitedFormat } from '../result.ts'
+import type { DelimitedFormat } from '../format.ts'
 
 export type Encoding = DelimitedFormat['encoding']
 

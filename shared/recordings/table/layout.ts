@@ -1,21 +1,5 @@
 import { unitOf } from '../columns/heading.ts'
-import type { TopRow } from './table.ts'
-
-/** Where the parts of a table stand. */
-export interface Layout {
-  /** Headings over the columns, rows of headings joined; empty where the table has none. */
-  names: readonly string[]
-  /** Units written in a row of their own, or an empty list. */
-  units: readonly string[]
-  /** Line of the headings, null without any. */
-  headerLine: number | null
-  /** Index of the first row of numbers in the top rows. */
-  bodyRow: number
-  /** Columns that hold numbers in most rows. */
-  numeric: readonly number[]
-  /** Rows above the headings. */
-  preamble: readonly TopRow[]
-}
+import type { Layout, TopRow } from './table.ts'
 
 /** A stretch of so many rows of numbers is the body, whatever comes after it. */
 const BODY_ROWS = 10

@@ -1,7 +1,7 @@
 import type { Columns } from '../columns/settle-map.ts'
 import type { TablePreview } from '../result.ts'
 import { shown } from '../safe-text.ts'
-import type { Layout } from './layout.ts'
+import type { Layout } from './table.ts'
 import type { Table } from './table.ts'
 
 /** Rows and columns of a table in little. */

@@ -1,5 +1,5 @@
 import { RowCollector } from '../delimited/parse-numbers.ts'
-import type { WorkbookFormat } from '../result.ts'
+import type { WorkbookFormat } from '../format.ts'
 import { layoutOf } from './layout.ts'
 import { cellKind, numberStyleOf } from './number-text.ts'
 import { TOP_ROWS } from './table.ts'

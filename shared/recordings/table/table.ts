@@ -1,5 +1,4 @@
-import type { Layout } from './layout.ts'
-import type { TableFormat } from '../result.ts'
+import type { TableFormat } from '../format.ts'
 
 /** What a cell's text is: a number, a time of day, nothing (or a word for a missing sample), or other text. */
 export type CellKind = 'number' | 'clock' | 'blank' | 'text'
@@ -15,6 +14,22 @@ export interface TopRow {
   kinds: readonly CellKind[]
   /** Line or row in the file, counted from 1. */
   line: number
+}
+
+/** Where the parts of a table stand. */
+export interface Layout {
+  /** Headings over the columns, rows of headings joined; empty where the table has none. */
+  names: readonly string[]
+  /** Units written in a row of their own, or an empty list. */
+  units: readonly string[]
+  /** Line of the headings, null without any. */
+  headerLine: number | null
+  /** Index of the first row of numbers in the top rows. */
+  bodyRow: number
+  /** Columns that hold numbers in most rows. */
+  numeric: readonly number[]
+  /** Rows above the headings. */
+  preamble: readonly TopRow[]
 }
 
 /** Where a cell stands that is neither a number nor blank, and what it holds, made safe to show. */
