@@ -81,6 +81,25 @@ function spreadOf(force: Float64Array, { from, to }: Stretch): number {
   return Math.sqrt(squares / Math.max(1, to - from - 1))
 }
 
+/**
+ * Inflation of a mean by correlated blocks, with the first run of negative ρ after the positive one: a heartbeat or a
+ * swing pays back in its second half what it added in its first. Slow noise in a short stance has negative ρ too,
+ * because its own mean was taken off; so a part of the inflation stays in any case.
+ */
+function paidBack(blocks: Float64Array, noise: Noise, settings: Settings): number {
+  let squares = 0
+  for (let i = 0; i < blocks.length; i++) squares += (blocks[i] - noise.mean) * (blocks[i] - noise.mean)
+  let inflation = noise.inflation
+  for (let lag = noise.correlation.length; lag < blocks.length >> 1; lag++) {
+    let product = 0
+    for (let i = lag; i < blocks.length; i++)
+      product += (blocks[i] - noise.mean) * (blocks[i - lag] - noise.mean)
+    if (!(product < 0)) break
+    inflation += (2 * product) / squares
+  }
+  return Math.max(1, settings.noiseInflationKept * noise.inflation, inflation)
+}
+
 function unrestOf({ spread, systemWeight }: WeighingWindow): number {
   return spread / Math.abs(systemWeight)
 }
@@ -165,7 +184,11 @@ export function weighIn(
   const noise = estimateNoise(blocks, 0, blocks.length)
   const blocksInWindow = width / block
   const plateU = plateNoise.sd * Math.sqrt(plateNoise.inflation / width)
-  const noiseU = noise.sd * Math.sqrt(noise.inflation / blocksInWindow)
+  const inFull = noise.sd * Math.sqrt(noise.inflation / blocksInWindow)
+  const noiseU = Math.max(
+    noise.sd * Math.sqrt(paidBack(blocks, noise, settings) / blocksInWindow),
+    Math.min(inFull, plateU),
+  )
   const noiseDof = Math.max(1, effectiveSamples(noise) - 1)
 
   // What stance wavers more than the empty plates is the body's own: at least what a slow sway would add.

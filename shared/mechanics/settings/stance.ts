@@ -27,6 +27,12 @@ export const stanceSettings = {
     source: `${own}: block means before the autocorrelation`,
     effect: 'Faster and coarser count of independent samples',
   },
+  noiseInflationKept: {
+    value: 0.93,
+    unit: 'of the inflation to the first ρ ≤ 0',
+    source: `${own}: a heartbeat pays back in its second half what it added in its first`,
+    effect: 'Wider intervals of weight and velocity where the stance swings',
+  },
   onsetFraction: {
     value: 0.025,
     unit: 'of system weight',

@@ -27,13 +27,19 @@ export interface MetricNote {
 }
 
 /** What makes the weighing. */
-export const weighed: SettingKey[] = ['weighingWindowS', 'shortestWeighingS', 'swayVelocityChange', 'driftU']
+export const weighed: SettingKey[] = [
+  'weighingWindowS',
+  'shortestWeighingS',
+  'noiseInflationKept',
+  'swayVelocityChange',
+  'driftU',
+]
 /** What places the onset. */
 export const begun: SettingKey[] = ['onsetFraction', 'onsetLeadS', 'movementFraction', 'quietPersistenceS']
 /** What places takeoff and touchdown. */
 export const crossed: SettingKey[] = ['eventForceN', 'eventPersistenceS', 'flankLimitS']
 /** What a touch may be wrong by. */
-export const touched: SettingKey[] = ['touchRiseShare', 'touchRiseN', 'touchQuickS']
+export const touched: SettingKey[] = ['touchRiseShare', 'touchRiseN']
 /** What a velocity by integration from rest rests on. */
 export const integrated: SettingKey[] = [...weighed, ...begun, 'gravityU']
 /** What places a peak. */
