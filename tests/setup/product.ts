@@ -2,6 +2,7 @@ import { spawn, type ChildProcess } from 'node:child_process'
 import { endsWithStarter } from '../../server/setup/parent-death.mjs'
 import { pause } from '../../server/setup/pause.mjs'
 import { freePort } from '../../server/setup/ports.mjs'
+import { localPayments } from '../../server/setup/services.mjs'
 import type { TestCluster } from '../../server/setup/test-cluster.mjs'
 import { createTestDatabase, type TestDatabase } from './database.ts'
 
@@ -10,6 +11,8 @@ export interface Product {
   url: string
   /** Where the mail catcher shows what was sent. */
   inboxUrl: string
+  /** The local payment service, where one was asked for. */
+  paymentsUrl: string | null
   database: TestDatabase
   /** The environment of its processes, for a command run beside them. */
   env: NodeJS.ProcessEnv
@@ -23,6 +26,8 @@ export interface Product {
 export interface ProductOptions {
   /** Fills the database before the first process starts. */
   prepare?: (env: NodeJS.ProcessEnv) => Promise<void>
+  /** Starts the local payment service as well, and sells by it. */
+  payments?: boolean
   /** Where it is not Vitest that runs. */
   cluster?: TestCluster
 }
@@ -33,10 +38,11 @@ const readyMs = 30_000
  * Starts web, worker and mail catcher on a clone of the migrated database. Call it in `beforeAll`, and `stop`
  * in `afterAll`; the kernel ends the processes where a killed test could not.
  */
-export async function startProduct({ cluster, prepare }: ProductOptions = {}): Promise<Product> {
+export async function startProduct({ cluster, prepare, payments }: ProductOptions = {}): Promise<Product> {
   const database = await createTestDatabase(cluster)
   const ports = { web: await freePort(), smtp: await freePort(), inbox: await freePort() }
-  const env = environmentOf(database, ports)
+  const paymentPort = payments ? await freePort() : null
+  const env = { ...environmentOf(database, ports), ...(paymentPort && sellingBy(paymentPort)) }
   const children: ChildProcess[] = []
   let output = ''
   const start = (file: string) => {
@@ -53,6 +59,7 @@ export async function startProduct({ cluster, prepare }: ProductOptions = {}): P
   const url = `http://localhost:${ports.web}`
   try {
     await prepare?.(env)
+    if (payments) start('server/fakes/payments/main.ts')
     for (const file of ['server/fakes/main.ts', 'server/main.ts', 'server/worker.ts']) start(file)
     await untilOk(`${url}/readyz`, () => output)
   } catch (error) {
@@ -61,6 +68,7 @@ export async function startProduct({ cluster, prepare }: ProductOptions = {}): P
   }
   const inboxUrl = `http://localhost:${ports.inbox}`
   return {
+    paymentsUrl: paymentPort ? `http://127.0.0.1:${paymentPort}` : null,
     url,
     inboxUrl,
     database,
@@ -70,6 +78,12 @@ export async function startProduct({ cluster, prepare }: ProductOptions = {}): P
     stop,
   }
 }
+
+const sellingBy = (port: number) => ({
+  ...localPayments,
+  PAYMENT_SERVICE_URL: `http://127.0.0.1:${port}`,
+  PAYMENT_FAKE_PORT: String(port),
+})
 
 function environmentOf(
   database: TestDatabase,
