@@ -1,5 +1,5 @@
 import { changeClubSettings } from '../../../shared/contracts/clubs.ts'
-import { landingWatchKeys } from '../landing-watch/list-high-landings.ts'
+import { landingWatchKeys } from '../landing-watch/landing-watch-keys.ts'
 import { useAct } from '../use-act.ts'
 import { clubSettingsKey } from './get-club-settings.ts'
 

@@ -1,8 +1,7 @@
 import { queryOptions, useQuery } from '@tanstack/react-query'
 import { getMeasuringSettings } from '../../../shared/contracts/measuring.ts'
 import { call } from '../client.ts'
-
-export const measuringSettingsKey = ['measuring-settings'] as const
+import { measuringSettingsKey } from './club-keys.ts'
 
 export function measuringSettingsQuery() {
   return queryOptions({

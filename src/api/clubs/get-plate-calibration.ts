@@ -1,8 +1,7 @@
 import { queryOptions, useQuery } from '@tanstack/react-query'
 import { getPlateCalibration } from '../../../shared/contracts/measuring.ts'
 import { call } from '../client.ts'
-
-export const plateCalibrationKey = ['plate-calibration'] as const
+import { plateCalibrationKey } from './club-keys.ts'
 
 export function plateCalibrationQuery() {
   return queryOptions({

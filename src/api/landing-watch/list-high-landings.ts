@@ -1,8 +1,7 @@
 import { keepPreviousData, queryOptions, useQuery } from '@tanstack/react-query'
 import { listHighLandings } from '../../../shared/contracts/landing-watch.ts'
 import { call } from '../client.ts'
-
-export const landingWatchKeys = { all: ['landing-watch'] } as const
+import { landingWatchKeys } from './landing-watch-keys.ts'
 
 export function highLandingsQuery(days: number) {
   return queryOptions({

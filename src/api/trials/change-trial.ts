@@ -1,6 +1,6 @@
 import { changeTrial, type Trial } from '../../../shared/contracts/trials.ts'
 import { athleteKeys } from '../athletes/athlete-keys.ts'
-import { landingWatchKeys } from '../landing-watch/list-high-landings.ts'
+import { landingWatchKeys } from '../landing-watch/landing-watch-keys.ts'
 import { sessionKeys } from '../sessions/session-keys.ts'
 import { useAct } from '../use-act.ts'
 import { trialKeys } from './trial-keys.ts'

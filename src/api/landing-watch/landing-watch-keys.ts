@@ -1,0 +1,2 @@
+/** Query keys of the landing watch. */
+export const landingWatchKeys = { all: ['landing-watch'] } as const
