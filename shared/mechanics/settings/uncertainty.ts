@@ -16,7 +16,7 @@ export const uncertaintySettings = {
     effect: 'Sway is estimated in fewer recordings',
   },
   recorderDelayU: {
-    value: 0.0003,
+    value: 0.00015,
     unit: 's, standard uncertainty',
     source: `${own}: a recorder delays a takeoff by some more than a steep first touch`,
     effect: 'Wider intervals of contact times and RSI',
@@ -34,10 +34,16 @@ export const uncertaintySettings = {
     effect: 'A low-pass is seen in more recordings',
   },
   touchRiseShare: {
-    value: 0.09,
-    unit: 'of the time from the crossing to touchRiseN, standard uncertainty',
+    value: 0.15,
+    unit: 'of the time from the crossing to touchRiseN beyond touchQuickS, standard uncertainty',
     source: `${own}: ringing of the plate that the fit takes for the rise, a heel that comes a moment later`,
     effect: 'Wider intervals of touchdown, contact and flight times, more so where the force rises gently',
+  },
+  touchQuickS: {
+    value: 0.002,
+    unit: 's',
+    source: `${own}: a force that rises so quickly leaves no room for error`,
+    effect: 'Narrower intervals of the same',
   },
   touchRiseN: {
     value: 200,
