@@ -113,7 +113,7 @@ def main():
         clock, processor = time.perf_counter(), time.process_time()
         velocities = [figures(*read(path))[7] for path in files]
         spent = {"clockS": time.perf_counter() - clock, "processorS": time.process_time() - processor}
-        print(json.dumps({**spent, "meanVelocity": float(np.mean(velocities))}), flush=True)
+        print(json.dumps({**spent, "meanVelocity": float(np.mean(velocities)), "files": len(files)}), flush=True)
 
 
 main()

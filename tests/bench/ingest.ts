@@ -31,6 +31,7 @@ interface Spent {
   clockS: number
   processorS: number
   meanVelocity: number
+  files: number
 }
 type Way = 'ours' | keyof typeof targets
 
@@ -67,6 +68,7 @@ function ours(paths: readonly string[]): Spent {
     clockS: (performance.now() - start) / 1000,
     processorS: (user + system) / 1e6,
     meanVelocity: velocities / paths.length,
+    files: paths.length,
   }
 }
 
@@ -79,7 +81,9 @@ function startPython(folder: string): { run: (parser: string) => Promise<Spent>;
       child.stdin.write(`${parser}\n`)
       const { value, done } = await lines.next()
       if (done) throw new Error(`${script} ended: are Debian’s python3-pandas and python3-scipy there?`)
-      return JSON.parse(value) as Spent
+      const spent = JSON.parse(value) as Spent
+      if (spent.files !== FILES) throw new Error(`${script} worked through ${spent.files} files.`)
+      return spent
     },
     stop: () => child.stdin.end(),
   }
@@ -87,14 +91,30 @@ function startPython(folder: string): { run: (parser: string) => Promise<Spent>;
 
 const median = (values: number[]): number => values.toSorted((a, b) => a - b)[values.length >> 1] ?? NaN
 
-function show(spent: Spent[], name: string): { clock: number; processor: number } {
-  const clock = FILES / median(spent.map(({ clockS }) => clockS))
-  const processor = FILES / median(spent.map(({ processorS }) => processorS))
-  const velocity = spent[0]?.meanVelocity.toFixed(4) ?? ''
+interface Pace {
+  /** Files a second, by the medians of the rounds. */
+  clock: number
+  processor: number
+  /** Of the fastest round by the clock: what a machine that does other things meanwhile tells best. */
+  fastest: number
+}
+
+function paceOf(spent: Spent[]): Pace {
+  const clocks = spent.map(({ clockS }) => clockS)
+  return {
+    clock: FILES / median(clocks),
+    processor: FILES / median(spent.map(({ processorS }) => processorS)),
+    fastest: FILES / Math.min(...clocks),
+  }
+}
+
+function show(name: string, spent: Spent[]): Pace {
+  const pace = paceOf(spent)
+  const { clock, processor, fastest } = pace
   console.log(
-    `  ${name.padEnd(26)} ${clock.toFixed(0).padStart(6)} files/s by the clock, ${processor.toFixed(0).padStart(6)} by the processor (mean takeoff velocity ${velocity} m/s)`,
+    `  ${name.padEnd(28)}${clock.toFixed(0).padStart(6)} files/s; fastest round ${fastest.toFixed(0)}, by the processor ${processor.toFixed(0)}; mean takeoff velocity ${spent[0]?.meanVelocity.toFixed(4) ?? ''} m/s`,
   )
-  return { clock, processor }
+  return pace
 }
 
 /**
@@ -103,9 +123,9 @@ function show(spent: Spent[], name: string): { clock: number; processor: number 
  */
 export async function benchIngest(): Promise<void> {
   const folder = mkdtempSync(join(tmpdir(), 'underfoot-ingest-'))
+  const paths = writeFiles(folder)
   const baseline = startPython(folder)
   try {
-    const paths = writeFiles(folder)
     const spent: Record<Way, Spent[]> = { ours: [], pandas: [], numpy: [] }
     // One round of each to warm up.
     for (let round = 0; round <= ROUNDS; round++) {
@@ -117,15 +137,14 @@ export async function benchIngest(): Promise<void> {
       if (round > 0) for (const way of ['ours', 'pandas', 'numpy'] as const) spent[way].push(now[way])
     }
     console.log(`  ${FILES} files of 8 s, two plates at 1000 Hz, medians of ${ROUNDS} rounds, warm, one core`)
-    const mine = show(spent.ours, 'read, analyse, uncertainty')
+    const mine = show('read, analyse, uncertainty', spent.ours)
     for (const way of ['pandas', 'numpy'] as const) {
-      const theirs = show(spent[way], `${way} + SciPy, figures only`)
-      const ratio = mine.clock / theirs.clock
-      const processor = mine.processor / theirs.processor
-      const met = ratio >= targets[way]
+      const theirs = show(`${way} + SciPy, figures only`, spent[way])
+      const times = (of: keyof Pace): string => (mine[of] / theirs[of]).toFixed(2)
+      const met = mine.clock >= targets[way] * theirs.clock
       if (!met) process.exitCode = 1
       console.log(
-        `    ${ratio.toFixed(2)} times ${way} + SciPy (${processor.toFixed(2)} by the processor); target ${targets[way]}: ${met ? 'met' : 'MISSED'}`,
+        `    ${times('clock')} times ${way} + SciPy (fastest rounds ${times('fastest')}, by the processor ${times('processor')}); target ${targets[way]}: ${met ? 'met' : 'MISSED'}`,
       )
     }
   } finally {
