@@ -13,7 +13,7 @@ const SIGNATURES: { kind: string; bytes: number[]; at?: number }[] = [
 ]
 
 /** How much of a file is looked at to tell text from anything else. */
-const LOOKED_AT = 8192
+const LOOKED_AT = 4096
 
 function beginsWith(bytes: Uint8Array, signature: number[], at = 0): boolean {
   return signature.every((value, i) => bytes[at + i] === value)

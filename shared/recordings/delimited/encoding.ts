@@ -14,7 +14,7 @@ export interface DecodedBytes {
 }
 
 /** How much of a file is looked at to tell encodings apart. */
-const LOOKED_AT = 16 * 1024
+const LOOKED_AT = 4096
 
 const utf8 = new TextDecoder('utf-8', { ignoreBOM: true })
 /** A superset of Latin-1: the two differ in 27 control characters that no export holds. */
