@@ -2,81 +2,20 @@ import { screen, waitFor, within } from '@testing-library/react'
 import { http, HttpResponse } from 'msw'
 import { describe, expect, test } from 'vitest'
 import { usualTest } from '../../shared/contracts/session-test.ts'
-import {
-  getSession,
-  listSessions,
-  publishSession,
-  type SessionSheet,
-} from '../../shared/contracts/sessions.ts'
-import { listSquads } from '../../shared/contracts/squads.ts'
+import { getSession, publishSession } from '../../shared/contracts/sessions.ts'
 import { changeTrial } from '../../shared/contracts/trials.ts'
 import { changeUpload, finishUpload, startUpload } from '../../shared/contracts/uploads.ts'
 import { expectNoAxeFaults } from '../../tests/setup/axe.ts'
 import { answer, neverAnswers, refuse } from '../../tests/setup/msw/answer.ts'
 import { idOf } from '../../tests/setup/msw/ids.ts'
 import { aMe } from '../../tests/setup/msw/me.ts'
-import {
-  aSession,
-  aSheet,
-  aSheetTrial,
-  aTrial,
-  anUpload,
-  measuredJump,
-} from '../../tests/setup/msw/measured.ts'
+import { aSession, aSheet, aSheetTrial, anUpload } from '../../tests/setup/msw/measured.ts'
 import { server } from '../../tests/setup/msw/server.ts'
 import { pageTitled, renderApp } from '../../tests/setup/render-app.tsx'
+import { openSheet, serveSheet, sheetAddress } from '../../tests/setup/session-sheet.tsx'
 
-const address = `/sessions/${idOf('session', 1)}`
 const mara = idOf('athlete', 1)
 const tomas = idOf('athlete', 2)
-const jump = measuredJump()
-
-/** A server that keeps one sheet and changes it as the real one would. */
-function serve(sheet: SessionSheet) {
-  const kept = { sheet, reads: 0, listReads: 0 }
-  const changeOne = (id: string, change: Partial<SessionSheet['trials'][number]>) => {
-    kept.sheet = {
-      ...kept.sheet,
-      trials: kept.sheet.trials.map((trial) =>
-        trial.id === id ? { ...trial, ...change, version: trial.version + 1 } : trial,
-      ),
-    }
-  }
-  server.use(
-    answer(getSession, () => {
-      kept.reads++
-      return kept.sheet
-    }),
-    answer(listSquads, () => ({ squads: [] })),
-    answer(listSessions, () => {
-      kept.listReads++
-      const { note: _note, squadIds: _squads, publishedByName: _by, ...session } = kept.sheet.session
-      const inTray = kept.sheet.trials.filter((trial) => trial.athleteId === null).length
-      return { sessions: [{ ...session, inTray }], page: 1, pages: 1, total: 1 }
-    }),
-    answer(changeTrial, ({ params, body }) => {
-      const before = kept.sheet.trials.find((trial) => trial.id === params.trialId)!
-      const setAside = body.setAsideReason ? { reason: body.setAsideReason, byName: 'Ines Calloway' } : null
-      const athleteId = body.athleteId === undefined ? before.athleteId : body.athleteId
-      changeOne(params.trialId, { athleteId, ...(body.setAsideReason === undefined ? {} : { setAside }) })
-      const name = kept.sheet.athletes.find((athlete) => athlete.athleteId === athleteId)?.name
-      return aTrial(jump, {
-        id: params.trialId,
-        athlete: athleteId && name ? { id: athleteId, name } : null,
-        setAside,
-        version: before.version + 1,
-      })
-    }),
-  )
-  return kept
-}
-
-async function openSheet(sheet: SessionSheet = aSheet()) {
-  const kept = serve(sheet)
-  const app = renderApp(address, aMe(['coach']))
-  await pageTitled('November jumps')
-  return { ...app, kept }
-}
 
 describe('the Session sheet', () => {
   test('shows every athlete, also those without a trial, and each trial with its height and uncertainty', async () => {
@@ -127,7 +66,7 @@ describe('the Session sheet', () => {
   })
 
   test('arrow keys move among trials and Enter opens one', async () => {
-    const { user, address: at } = await openSheet()
+    const { user, sheetAddress: at } = await openSheet()
     screen.getByRole('link', { name: /Mara Ostrow, trial 1/ }).focus()
     await user.keyboard('{ArrowRight}')
     expect(screen.getByRole('link', { name: /Mara Ostrow, trial 2/ })).toHaveFocus()
@@ -401,15 +340,15 @@ describe('the Session sheet', () => {
 
   test('a sheet that could not be read says so and can be asked for again', async () => {
     server.use(refuse(getSession, 'internal', 500, 'The sheet could not be read.'))
-    const { user } = renderApp(address, aMe(['coach']))
+    const { user } = renderApp(sheetAddress, aMe(['coach']))
     await screen.findByText('The sheet could not be read.')
-    serve(aSheet())
+    serveSheet(aSheet())
     await user.click(screen.getByRole('button', { name: 'Try again' }))
     await pageTitled('November jumps')
   })
 
   test('an athlete may not open a sheet', async () => {
-    renderApp(address, aMe(['athlete']))
+    renderApp(sheetAddress, aMe(['athlete']))
     await pageTitled('Your role does not allow this')
   })
 })

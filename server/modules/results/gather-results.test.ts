@@ -78,9 +78,9 @@ describe('the means of a session’s results', () => {
   })
 
   it('hold no metric that no trial has', () => {
-    expect(Object.keys(meansOf(gatherResults([trial(1)])[0], {}))).toEqual([
-      'takeoffVelocity',
+    expect(Object.keys(meansOf(gatherResults([trial(1)])[0], {})).sort()).toEqual([
       'landingPeakForcePerBodyWeight',
+      'takeoffVelocity',
     ])
   })
 
