@@ -31,7 +31,10 @@ describe('formatUncertainty(U, display)', () => {
     expect(formatUncertainty(0.004, cm)).toBe('±\u00a00.4')
   })
   test('is never shown as nothing', () => {
-    expect(formatUncertainty(0, cm)).toBe('±\u00a00.1')
+    expect(formatUncertainty(1e-9, cm)).toBe('±\u00a00.1')
+  })
+  test('is null where there is none: a count is exact', () => {
+    expect(formatUncertainty(0, cm)).toBeNull()
   })
   test('is null where none is known', () => {
     expect(formatUncertainty(null, cm)).toBeNull()

@@ -20,11 +20,11 @@ export function formatValue(value: number, display: FigureDisplay): string {
 }
 
 /**
- * "± 0.4", or null where no uncertainty is known. Rounded up at the shown decimals: never smaller than it is, and
+ * "± 0.4", or null where no uncertainty is known and where there is none: a count is exact. Rounded up at the shown decimals: never smaller than it is, and
  * never "± 0.0".
  */
 export function formatUncertainty(U: number | null, display: FigureDisplay): string | null {
-  if (U === null) return null
+  if (U === null || U === 0) return null
   const scale = 10 ** display.decimals
   const shown = Math.max(1, Math.ceil(Math.abs(U * display.factor) * scale - 1e-9)) / scale
   return `±\u00a0${formatNumber(shown, display.decimals)}`

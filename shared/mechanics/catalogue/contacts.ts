@@ -71,7 +71,7 @@ export const contactMetrics = define(tests.rebounded, {
     athleteSentence: 'How many times you hopped.',
   },
   rsiBestFive: {
-    name: 'RSI, best five hops',
+    name: 'RSI of the best five hops',
     protocols: tests.hopped,
     unit: 'm/s',
     display: display.metrePerSecondShort,

@@ -39,7 +39,8 @@ export function PhaseFigures({ shapes, layout }: { shapes: PhaseShape[]; layout:
         const text = formatSigned(shape.netImpulse, 0)
         const width = text.length * 7.5 + 6
         const inside = shape.label.room >= width && shape.label.height >= 18
-        if (!inside && layout.narrow) return null
+        // Beside a flight stands the next contact's figure.
+        if (!inside && (layout.narrow || shape.phase === 'flight')) return null
         // Braking runs into propulsion at its right: the free side is the left.
         const left = shape.phase === 'braking'
         const edge = shape.label.x + (shape.label.room / 2 + 6) * (left ? -1 : 1)

@@ -5,6 +5,8 @@ import { Button } from '../../components/button.tsx'
 import { Dialog } from '../../components/dialog.tsx'
 import { FormError } from '../../components/form-error.tsx'
 import { counted } from '../../lib/counted.ts'
+import { metricInSentence } from '../results/metric-words.ts'
+import { headlineMetric } from '../results/test-metrics.ts'
 import type { SheetCounts } from './sheet-rows.ts'
 
 interface Props {
@@ -34,7 +36,7 @@ export function PublishDialog({ session, counts, onClose, onPublished }: Props) 
       <div className="flex flex-col gap-4">
         <p>
           {counted(athletes, 'athlete')} will see {athletes === 1 ? 'their' : 'their own'} results of{' '}
-          {counted(trials, 'trial')}: jump height, landing, and each trial’s trace. Nobody sees another’s.
+          {counted(trials, 'trial')}: {shownWords(session.test.protocol)} Nobody sees another’s.
         </p>
         <StaysOut counts={counts} />
         <p className="text-ink-2">
@@ -58,6 +60,14 @@ export function PublishDialog({ session, counts, onClose, onPublished }: Props) 
       </div>
     </Dialog>
   )
+}
+
+/** The figure that stands for the test, the landing where that is another figure, and the traces. */
+function shownWords(protocol: SessionSheet['session']['test']['protocol']): string {
+  const headline = metricInSentence(headlineMetric(protocol))
+  return protocol === 'dropLanding'
+    ? `${headline} and each trial’s trace.`
+    : `${headline}, landing, and each trial’s trace.`
 }
 
 function StaysOut({ counts: { setAside, inTray, unanalysed } }: { counts: SheetCounts }) {

@@ -40,13 +40,13 @@ export const ImpulseLedger = memo(function ImpulseLedger({
         </thead>
         <tbody>
           <tr>
-            <th scope="row">Opening, standing still</th>
+            <th scope="row">{fell(ledger) ? 'Opening, on the box' : 'Opening, standing still'}</th>
             <td />
             <td>0</td>
           </tr>
           {ledger.entries.map((entry, i) => (
             <tr key={i}>
-              <th scope="row">{phaseWords[entry.phase]}</th>
+              <th scope="row">{entryWords(ledger.entries, i)}</th>
               <td>
                 {figure(entry.netImpulse)}
                 {was(({ entries }) => entries[i]?.netImpulse, entry.netImpulse)}
@@ -74,10 +74,28 @@ export const ImpulseLedger = memo(function ImpulseLedger({
   )
 })
 
-const closesAtRest = (ledger: Ledger) => ledger.entries.at(-1)?.phase === 'settling'
+const fell = ({ entries }: Ledger) => entries[0]?.phase === 'arrival'
+
+/** An account that can be tested ends at rest; one of a fall is reckoned from there. */
+const closesAtRest = ({ entries, closing }: Ledger) =>
+  entries.at(-1)?.phase === 'settling' || closing.closes !== null
+
+/** The phase; in a series of hops the push that starts it, each contact and flight by number, and the landing. */
+function entryWords(entries: Ledger['entries'], i: number): string {
+  const { phase } = entries[i]!
+  const isSeries = entries.filter((entry) => entry.phase === 'contact').length > 1
+  if (!isSeries) return phaseWords[phase]
+  if (i === 0) return 'First push'
+  if (phase === 'contact' && i === entries.length - 1) return 'Landing to standing'
+  if (phase === 'flight' && i === 1) return 'First flight'
+  return `${phaseWords[phase]} ${Math.floor((phase === 'contact' ? i : i - 1) / 2)}`
+}
 
 /** Whether the books close, in a sentence. */
-function closingSentence({ closing }: Ledger): string {
+function closingSentence(ledger: Ledger): string {
+  const { closing } = ledger
+  if (fell(ledger) && closesAtRest(ledger))
+    return 'The account is reckoned backwards from the quiet stance after the landing: it closes by itself, and closing proves nothing.'
   const U = formatUncertainty(closing.U, display)
   if (closing.closes === null || U === null) {
     return 'The closing balance cannot be tested: the recording has no quiet stance after the landing.'

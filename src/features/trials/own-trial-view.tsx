@@ -70,7 +70,9 @@ export function OwnTrialView({ trial }: { trial: Trial }) {
 
 function WhatItMeans({ analysis, protocol }: { analysis: Analysis; protocol: Protocol }) {
   const noun = trialNouns[protocol]
-  const keys = told.filter(
+  const headline = headlineMetric(protocol)
+  const inOrder = [headline, ...told.filter((key) => key !== headline)]
+  const keys = inOrder.filter(
     (key) =>
       analysis.metrics[key] &&
       !analysis.withheld.includes(key) &&

@@ -18,10 +18,24 @@ export function traceDataOf(trial: Traced & Pick<Trial, 'test'>, samples: Sample
     feet: feetOf(signal),
     weight: weightOf(trial),
     momentum: analysis && momentumOf(signal, analysis),
-    phases: analysis?.ledger?.entries ?? [],
+    phases: phasesOf(trial),
     events: eventsOf(trial),
     overlays: [],
   }
+}
+
+/**
+ * The ledger's entries. A fall is drawn as long as gravity needs for its impulse, so that its area is its impulse:
+ * before it the plates are empty and the athlete is still on the box.
+ */
+function phasesOf({ analysis }: Pick<Trial, 'analysis'>): TraceData['phases'] {
+  const weightN = analysis?.metrics.systemWeight?.value
+  const entries = analysis?.ledger?.entries ?? []
+  return entries.map((entry) => {
+    if (entry.phase !== 'arrival' || !weightN) return entry
+    const fallS = Math.abs(entry.netImpulse) / weightN
+    return { ...entry, startS: Math.max(entry.startS, entry.endS - fallS) }
+  })
 }
 
 function feetOf(signal: Signal): TraceChannel[] {

@@ -23,7 +23,7 @@ test('a figure that a failed check takes away is left out, with the reason', () 
     analysis: { ...analysis, checks: [fail], withheld: ['landingPeakForce'] },
   })
   expect(said).not.toContain('the landing peaks at')
-  expect(said).toMatch(/They touch down at [\d.]+ s\. /)
+  expect(said).toMatch(/The feet touch down at [\d.]+ s\. /)
   expect(said).toMatch(/Left out because a check failed: landing peak force\. Stepped off\.$/)
 })
 
