@@ -22,3 +22,7 @@ export function demoDays(today: Date, squad: number): DemoDay[] {
 
 /** In the evening of a session's day. */
 export const eveningOf = (date: string): Date => new Date(`${date}T18:30:00Z`)
+
+/** The date so many days before another. */
+export const daysEarlier = (date: string, days: number): string =>
+  new Date(Date.parse(`${date}T00:00:00Z`) - days * dayMs).toISOString().slice(0, 10)

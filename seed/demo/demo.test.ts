@@ -1,12 +1,14 @@
 import { describe, expect, it } from 'vitest'
 import { foldName } from '../../shared/contracts/names.ts'
+import { analyse } from '../../shared/mechanics/analyse.ts'
 import { readRecording } from '../../shared/recordings/read-recording.ts'
 import { matchAthlete } from '../../server/modules/trials/match-athlete.ts'
 import { seededRandom } from '../synthetic/random.ts'
 import { demoAccounts } from './accounts.ts'
-import { demoDays } from './calendar.ts'
+import { daysEarlier, demoDays } from './calendar.ts'
 import makeFile from './file-thread.ts'
 import { misnamed } from './odd-files.ts'
+import { attemptsOf, cameToOther, otherSessions } from './other-tests.ts'
 import { demoSquads } from './squads.ts'
 import { describeAthlete, isAway, mishapOf, recipeOf } from './stories.ts'
 
@@ -72,6 +74,31 @@ describe('the files of the demo club', () => {
     const mishap = mishapOf(0, 5, 0, seededRandom(1))
     expect(mishap).toBe('swappedFeet')
     expect(recipeOf(describeAthlete('Mara Ostrow', 1), 5, mishap, seededRandom(4), 5).swapped).toBe(true)
+  })
+})
+
+describe('the other tests of the demo club', () => {
+  it.each(otherSessions.map((other) => [other.title, other] as const))(
+    'are twice in the file of each athlete, with figures that stand: %s',
+    (_title, { squad, test }) => {
+      const { athletes, style } = demoSquads[squad]
+      for (const [i, name] of athletes.slice(0, cameToOther).entries()) {
+        const recipe = attemptsOf(describeAthlete(name, squad * 15 + i), test, 900 + i)
+        const read = readRecording(makeFile({ recipe, style }), 'x.csv')
+        if (!read.ok) throw new Error(read.error.sentence)
+        const { trials } = analyse(read.recording, { test, gravity: 9.81, calibrationU: {} })
+        const fails = trials.flatMap(({ checks }) => checks.filter(({ verdict }) => verdict === 'fail'))
+        expect([name, trials.length, fails.map(({ sentence }) => sentence)]).toEqual([name, 2, []])
+      }
+    },
+  )
+
+  it('lie between the monthly jumps of two months ago and of one', () => {
+    for (const { squad, daysBefore } of otherSessions) {
+      const dates = demoDays(today, squad).map(({ date }) => date)
+      const date = daysEarlier(dates[13], daysBefore)
+      expect([date > dates[11], date < dates[12]]).toEqual([true, true])
+    }
   })
 })
 

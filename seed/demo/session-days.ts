@@ -1,4 +1,5 @@
 import { usualTest } from '../../shared/contracts/session-test.ts'
+import { headlineOf } from '../../shared/contracts/sheet-metrics.ts'
 import { setTimeout as pause } from 'node:timers/promises'
 import type { SessionSheet } from '../../shared/contracts/sessions.ts'
 import type { Deps } from '../../server/deps.ts'
@@ -7,19 +8,20 @@ import { create } from '../../server/modules/sessions/sessions.service.ts'
 import { sheet } from '../../server/modules/sessions/sheet.service.ts'
 import { change } from '../../server/modules/trials/trials.service.ts'
 import { seededRandom } from '../synthetic/random.ts'
-import { type DemoDay, demoDays, eveningOf } from './calendar.ts'
+import { daysEarlier, type DemoDay, demoDays, eveningOf } from './calendar.ts'
 import { type DemoFile, dropFiles } from './drop-files.ts'
 import { misnamed, oddFiles } from './odd-files.ts'
+import { attemptsOf, cameToOther, type OtherSession, otherSessions } from './other-tests.ts'
 import type { SquadOnSite } from './people.ts'
-import { isAway, mishapOf, type Recipe, recipeOf } from './stories.ts'
+import { type AttemptsRecipe, isAway, mishapOf, type Recipe, recipeOf } from './stories.ts'
 import type { FileStyle } from '../synthetic/file-styles.ts'
 
 const trialsEach = 2
 const lookEveryMs = 500
 
-export type MakeFile = (recipe: Recipe, style: FileStyle) => Promise<Uint8Array>
+export type MakeFile = (recipe: Recipe | AttemptsRecipe, style: FileStyle) => Promise<Uint8Array>
 
-/** All sessions of one squad, a month after the other, each published but the latest. */
+/** All sessions of one squad, a month after the other, each published but the latest; then those of other tests. */
 export async function runSquad(
   deps: Deps,
   site: SquadOnSite,
@@ -43,6 +45,9 @@ export async function runSquad(
     const { version } = analysed.session
     await publish(onTheDay, site.coach, { sessionId: id, version }, { mail: false })
   }
+  const latest = demoDays(today, number).find((day) => day.latest)
+  for (const other of otherSessions)
+    if (latest && other.squad === number) await runOther(deps, site, other, latest.date, makeFile)
 }
 
 function filesOf(
@@ -76,10 +81,47 @@ async function settled(deps: Deps, { coach }: SquadOnSite, sessionId: string): P
   }
 }
 
+/** A session of another test, published: some of the squad, a file of two attempts each. */
+async function runOther(
+  deps: Deps,
+  site: SquadOnSite,
+  { title, test, daysBefore }: OtherSession,
+  latest: string,
+  makeFile: MakeFile,
+): Promise<void> {
+  const date = daysEarlier(latest, daysBefore)
+  const onTheDay: Deps = { ...deps, clock: () => eveningOf(date) }
+  const { squad, squadId, coach } = site
+  const { id } = await create(onTheDay, coach, {
+    date,
+    title: `${squad.name}: ${title}`,
+    place: squad.place,
+    note: null,
+    test,
+    squadIds: [squadId],
+  })
+  const files = site.athletes.slice(0, cameToOther).map((athlete): DemoFile => {
+    const seed = athlete.seed * 1000 + 500 + daysBefore
+    return {
+      fileName: squad.fileName(athlete.name, date, 1).replace('CMJ', test.protocol),
+      bytes: () => makeFile(attemptsOf(athlete, test, seed), squad.style),
+    }
+  })
+  await dropFiles(onTheDay, coach, id, files)
+  const analysed = await settled(onTheDay, site, id)
+  await setAside(onTheDay, site, analysed)
+  const { version } = analysed.session
+  await publish(onTheDay, coach, { sessionId: id, version }, { mail: false })
+}
+
 /** The coach goes through the sheet: a trial whose jump itself failed a check is set aside, as a coach would. */
-async function setAside(deps: Deps, { coach }: SquadOnSite, { trials }: SessionSheet): Promise<void> {
+async function setAside(
+  deps: Deps,
+  { coach }: SquadOnSite,
+  { trials, session }: SessionSheet,
+): Promise<void> {
   for (const { id, version, analysis } of trials) {
-    if (!analysis?.withheld.includes('jumpHeightImpulse')) continue
+    if (!analysis?.withheld.includes(headlineOf(session.test.protocol))) continue
     const setAsideReason = `Repeated: ${analysis.worstSentence ?? 'the check failed'}`.slice(0, 280)
     await change(deps, coach, id, { version, setAsideReason })
   }

@@ -1,3 +1,4 @@
+import type { GivenAttempt } from '../synthetic/attempts.ts'
 import type { JumpOptions, LeftShares, PlateOptions } from '../synthetic/options.ts'
 import { seededRandom, type Random } from '../synthetic/random.ts'
 
@@ -76,6 +77,14 @@ export function mishapOf(squad: number, month: number, place: number, random: Ra
   return dice < 1 / steppedOffOneIn + 1 / fidgetOneIn ? 'fidgets' : null
 }
 
+/** Everything that makes the file of an athlete's attempts at another test, one after the other. */
+export interface AttemptsRecipe {
+  athlete: Pick<JumpOptions, 'massKg' | 'body'>
+  attempts: readonly GivenAttempt[]
+  plates: Recipe['plates']
+  seed: number
+}
+
 export interface Recipe {
   jump: Partial<JumpOptions>
   plates: { left: Partial<PlateOptions>; right: Partial<PlateOptions> }
@@ -130,7 +139,7 @@ function sharesOf(left: number, random: Random): LeftShares {
   }
 }
 
-function plateOf(sign: 1 | -1, mishap: Mishap): Partial<PlateOptions> {
+export function plateOf(sign: 1 | -1, mishap: Mishap): Partial<PlateOptions> {
   return {
     gainError: sign * 0.0012,
     offsetN: sign * 1.5,
