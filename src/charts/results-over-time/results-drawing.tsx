@@ -1,5 +1,5 @@
 import { formatNumber } from '../../lib/format-figure.ts'
-import type { PlacedFigure, ResultsGeometry } from './results-geometry.ts'
+import { decimalsOf, type PlacedFigure, type ResultsGeometry } from './results-geometry.ts'
 
 interface Props {
   geometry: ResultsGeometry
@@ -12,13 +12,14 @@ interface Props {
 export function ResultsDrawing({ geometry, decimals, read }: Props) {
   const { plot } = geometry
   const newest = geometry.points.length - 1
+  const tickDecimals = Math.max(decimals, decimalsOf(geometry.valueTicks))
   return (
     <g className="fill-ink-2 text-small">
       {geometry.valueTicks.map((tick) => (
         <g key={tick.value}>
           <line x1={plot.left} x2={plot.right} y1={tick.y} y2={tick.y} className="stroke-rule-2" />
           <text x={plot.left - 8} y={tick.y + 4} textAnchor="end">
-            {formatNumber(tick.value, Number.isInteger(tick.value) ? 0 : decimals)}
+            {formatNumber(tick.value, Number.isInteger(tick.value) ? 0 : tickDecimals)}
           </text>
         </g>
       ))}

@@ -1,5 +1,5 @@
 import { describe, expect, it } from 'vitest'
-import { resultsGeometry } from './results-geometry.ts'
+import { decimalsOf, resultsGeometry } from './results-geometry.ts'
 
 const year = [
   { date: '2025-11-12', value: 30.8, U: 0.5 },
@@ -67,5 +67,16 @@ describe('resultsGeometry(figures, width, height)', () => {
       200,
     )
     expect(new Set(dateTicks.map((tick) => tick.text)).size).toBe(dateTicks.length)
+  })
+})
+
+describe('decimalsOf(ticks)', () => {
+  it.each([
+    [[1.305, 1.31, 1.315], 3],
+    [[29, 29.5, 30], 1],
+    [[20, 30, 40], 0],
+    [[1.4], 0],
+  ])('of %j are those that tell neighbours apart: %i', (values, decimals) => {
+    expect(decimalsOf(values.map((value) => ({ value, y: 0 })))).toBe(decimals)
   })
 })

@@ -70,6 +70,13 @@ export function resultsGeometry(
   }
 }
 
+/** Decimals that tell neighbouring ticks apart: results that lie close together need more than a figure has. */
+export function decimalsOf(ticks: ResultsGeometry['valueTicks']): number {
+  const [first, second] = ticks
+  if (!first || !second) return 0
+  return Math.max(0, -Math.floor(Math.log10(second.value - first.value) + 1e-9))
+}
+
 /** Room for a month's name right of its tick, px; a letter of the small size is about 7 wide. */
 const textLength = (text: string) => 4 + 7 * text.length
 

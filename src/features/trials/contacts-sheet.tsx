@@ -14,7 +14,7 @@ type Measured = 'contactTime' | 'flightTime' | 'height' | 'rsi' | 'rsiFlightCont
 
 /** What is measured of a contact, and the metric as which it is shown and explained. */
 const columns: readonly { of: Measured; metric: MetricKey; head: string }[] = [
-  { of: 'contactTime', metric: 'contactTime', head: 'Contact' },
+  { of: 'contactTime', metric: 'contactTime', head: 'Contact time' },
   { of: 'flightTime', metric: 'flightTime', head: 'Flight after it' },
   { of: 'height', metric: 'jumpHeightFlight', head: 'Height from flight' },
   { of: 'rsi', metric: 'rsi', head: 'RSI' },
@@ -41,7 +41,7 @@ export const ContactsSheet = memo(function ContactsSheet({ contacts, checks, sav
           <caption className="sr-only">Contacts with the ground, and the flight after each</caption>
           <thead>
             <tr>
-              <th scope="col">Touchdown at</th>
+              <th scope="col">{many ? 'Contact, touchdown at' : 'Touchdown at'}</th>
               {columns.map(({ of, metric, head }) => (
                 <th key={of} scope="col" className="figure">
                   <MethodLink noteKey={metric}>{head}</MethodLink>
@@ -54,6 +54,7 @@ export const ContactsSheet = memo(function ContactsSheet({ contacts, checks, sav
             {contacts.map((contact, i) => (
               <ContactRow
                 key={i}
+                n={i + 1}
                 contact={contact}
                 saved={saved?.[i]}
                 struck={failed !== undefined}
@@ -68,17 +69,19 @@ export const ContactsSheet = memo(function ContactsSheet({ contacts, checks, sav
 })
 
 interface RowProps {
+  n: number
   contact: Contact
   saved: Contact | undefined
   struck: boolean
   many: boolean
 }
 
-function ContactRow({ contact, saved, struck, many }: RowProps) {
+function ContactRow({ n, contact, saved, struck, many }: RowProps) {
   const quiet = struck || (many && !contact.counted)
   return (
     <tr className={quiet ? 'text-ink-2' : undefined}>
       <th scope="row" className="whitespace-nowrap">
+        {many && `${n}, `}
         {formatNumber(contact.touchdownS, 3)} s
         {struck && <span className="sr-only"> (withheld by a failed check)</span>}
       </th>
