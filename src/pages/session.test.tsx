@@ -66,7 +66,7 @@ describe('the Session sheet', () => {
   })
 
   test('arrow keys move among trials and Enter opens one', async () => {
-    const { user, sheetAddress: at } = await openSheet()
+    const { user, address: at } = await openSheet()
     screen.getByRole('link', { name: /Mara Ostrow, trial 1/ }).focus()
     await user.keyboard('{ArrowRight}')
     expect(screen.getByRole('link', { name: /Mara Ostrow, trial 2/ })).toHaveFocus()

@@ -87,7 +87,18 @@ const resultRow = (
 
 const isTable = (value: unknown): value is PgTable =>
   typeof value === 'object' && value !== null && Symbol.for('drizzle:IsDrizzleTable') in value
-const clubTables = [billing, peopleOfClub, measuring, recomputes, records, results, seats, sessions, trials, uploads]
+const clubTables = [
+  billing,
+  peopleOfClub,
+  measuring,
+  recomputes,
+  records,
+  results,
+  seats,
+  sessions,
+  trials,
+  uploads,
+]
   .flatMap((schema) => Object.values(schema) as unknown[])
   .filter(isTable)
 const nameOf = (table: PgTable) => getTableConfig(table).name

@@ -13,6 +13,9 @@ export const limits = {
   laboratorySd: 0.0033,
 }
 
+/** Figures that are not asked to be narrow: their intervals may err on the careful side. */
+const careful: readonly string[] = ['dropVelocity', 'effectiveDropHeight']
+
 /** A share truly at its limit fails a check of few trials with this probability. The seeds are fixed: no flicker. */
 const CHANCE = 0.002
 
@@ -38,12 +41,13 @@ export function brokenLimits(metric: string, coverage: Coverage): string[] {
   const clean = coverage.strata['noise clean']
   const checks: [boolean, string][] = [
     [covered < limits.overall.least, `covers only ${percent(covered)}`],
-    [covered > limits.overall.most, `covers as much as ${percent(covered)}`],
+    [covered > limits.overall.most && !careful.includes(metric), `covers as much as ${percent(covered)}`],
     [worst.covered < limits.stratum, `covers only ${percent(worst.covered)} of ${worst.name}`],
     [widthRatio > limits.width, `is ${widthRatio.toFixed(2)} times as wide as the errors`],
     [withoutU > limits.withoutU, `has no U in ${percent(withoutU)}`],
     [(clean?.withoutU ?? 0) > 0, `has no U in ${percent(clean?.withoutU ?? 0)} of the clean trials`],
-    [missing > 0, `is missing in ${percent(missing)}`],
+    [missing > limits.withoutU, `is missing in ${percent(missing)}`],
+    [(clean?.missing ?? 0) > 0, `is missing in ${percent(clean?.missing ?? 0)} of the clean trials`],
     [
       metric === 'takeoffVelocity' && Math.abs(bias) >= limits.velocityBias,
       `is biased by ${bias.toPrecision(2)} m/s`,

@@ -45,7 +45,8 @@ const contactV = (u: number) =>
 const contactWay = (u: number) =>
   -fallSpeed * u + (greatestForce / (mass * omega)) * (u - Math.sin(omega * u) / omega) - (g * u * u) / 2
 const leavesAtM = touchM + contactWay(contactS)
-const landingWay = (u: number) => -leaves * u - (g * u * u) / 2 + g * riseS(u, landingS) + p * sin2S(u, landingS)
+const landingWay = (u: number) =>
+  -leaves * u - (g * u * u) / 2 + g * riseS(u, landingS) + p * sin2S(u, landingS)
 const lowestM = leavesAtM + landingWay(landingS)
 const a5 = (-2 * lowestM) / (risingS * risingS)
 
@@ -78,8 +79,7 @@ export function motionAt(t: number): { force: number; velocity: number; displace
     )
   }
   const u = t - landed
-  if (u < risingS)
-    return of(a5 * sin2(u, risingS), a5 * sin2V(u, risingS), lowestM + a5 * sin2S(u, risingS))
+  if (u < risingS) return of(a5 * sin2(u, risingS), a5 * sin2V(u, risingS), lowestM + a5 * sin2S(u, risingS))
   const w = u - risingS
   if (w < risingS) {
     const [v, s] = [a5 * sin2V(risingS, risingS), lowestM + a5 * sin2S(risingS, risingS)]

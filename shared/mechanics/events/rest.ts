@@ -25,7 +25,8 @@ export interface RestSearch extends EventSearch {
 export function restAfter(search: RestSearch, landing: Crossing, limits: Stretch): Rest | null {
   const { signal, zero, gravity, settings } = search
   const { total, sums, dt } = signal
-  const weighing = weigh(total, sums, limits, gravity, zero.total, dt, settings)
+  const { restInflationKept } = settings
+  const weighing = weigh(total, sums, limits, gravity, zero.total, dt, settings, restInflationKept)
   if (!weighing || !(weighing.systemWeight > settings.smallestLoadN)) return null
   if (!(weighing.spread <= settings.steadinessFail * weighing.systemWeight)) return null
   const still = placeStill(search, weighing.systemWeight, landing)

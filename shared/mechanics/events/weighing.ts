@@ -86,7 +86,7 @@ function spreadOf(force: Float64Array, { from, to }: Stretch): number {
  * swing pays back in its second half what it added in its first. Slow noise in a short stance has negative ρ too,
  * because its own mean was taken off; so a part of the inflation stays in any case.
  */
-function paidBack(blocks: Float64Array, noise: Noise, settings: Settings): number {
+function paidBack(blocks: Float64Array, noise: Noise, kept: number): number {
   let squares = 0
   for (let i = 0; i < blocks.length; i++) squares += (blocks[i] - noise.mean) * (blocks[i] - noise.mean)
   let inflation = noise.inflation
@@ -97,7 +97,7 @@ function paidBack(blocks: Float64Array, noise: Noise, settings: Settings): numbe
     if (!(product < 0)) break
     inflation += (2 * product) / squares
   }
-  return Math.max(1, settings.noiseInflationKept * noise.inflation, inflation)
+  return Math.max(1, kept * noise.inflation, inflation)
 }
 
 function unrestOf({ spread, systemWeight }: WeighingWindow): number {
@@ -159,9 +159,10 @@ export function weigh(
   plateNoise: Noise,
   dt: number,
   settings: Settings,
+  inflationKept = settings.noiseInflationKept,
 ): Weighing | null {
   const chosen = chooseWindow(force, sums, limits, dt, settings)
-  return chosen && weighIn(chosen, sums, limits, gravity, plateNoise, dt, settings)
+  return chosen && weighIn(chosen, sums, limits, gravity, plateNoise, dt, settings, inflationKept)
 }
 
 /** The weighing in a window that was chosen already. */
@@ -173,6 +174,7 @@ export function weighIn(
   plateNoise: Noise,
   dt: number,
   settings: Settings,
+  inflationKept = settings.noiseInflationKept,
 ): Weighing {
   const { window, systemWeight } = chosen
   const width = window.to - window.from
@@ -186,7 +188,7 @@ export function weighIn(
   const plateU = plateNoise.sd * Math.sqrt(plateNoise.inflation / width)
   const inFull = noise.sd * Math.sqrt(noise.inflation / blocksInWindow)
   const noiseU = Math.max(
-    noise.sd * Math.sqrt(paidBack(blocks, noise, settings) / blocksInWindow),
+    noise.sd * Math.sqrt(paidBack(blocks, noise, inflationKept) / blocksInWindow),
     Math.min(inFull, plateU),
   )
   const noiseDof = Math.max(1, effectiveSamples(noise) - 1)

@@ -24,7 +24,7 @@ export interface EventTimes extends TrialTimes, TakeoffTime {
 }
 
 /** Share of the variance of touches of the same kind that is the same in all of them. */
-const alikeShare = 0.4
+const alikeShare = 0.2
 
 /** Longest time that a touch is taken to need to load the plates, s. */
 const longestRiseS = 0.03
@@ -47,6 +47,7 @@ export function crossingTime(
   model: TrialModel,
   { position, positionU, ringingU, slope }: Crossing,
   alike?: Quantity,
+  riseShare = model.settings.touchRiseShare,
 ): Quantity {
   const { budget, signal, settings, plates, zero } = model
   const { dt } = signal
@@ -54,7 +55,7 @@ export function crossingTime(
   const noiseU = Math.sqrt(Math.max(0, positionU * positionU * dt * dt - seenU * seenU))
   const isTouch = slope > 0 && ringingU !== undefined
   const gentle = isTouch ? Math.max(0, riseTime(model, position) - settings.touchQuickS) : 0
-  const touchU = Math.max(seenU, settings.touchRiseShare * gentle)
+  const touchU = Math.max(seenU, riseShare * gentle)
   const own = alike ? Math.sqrt(1 - alikeShare) : 1
   const terms: (readonly [number, Quantity])[] = [
     [1, budget.input(0, noiseU, zero.noiseDof)],
@@ -93,7 +94,11 @@ function weightCrossingTime(model: TrialModel): Quantity | null {
   return budget.linear(position * signal.dt, [[stays / u, error]])
 }
 
-/** Where velocity is zero: an error of the velocity moves it as far as the velocity stays within that error. */
+/**
+ * Where velocity is zero: an error of the velocity moves it as far as the velocity stays within that error. Velocity
+ * comes to rest in a curve, so an error of twice the size moves it more than twice as far; the interval is of the
+ * larger one.
+ */
 function zeroVelocityTime(model: TrialModel, position: number): Quantity {
   const { budget, motion, signal } = model
   if (!budget.on) return budget.exact(position * signal.dt)
@@ -101,16 +106,16 @@ function zeroVelocityTime(model: TrialModel, position: number): Quantity {
   const u = budget.combined(velocity).u
   const { velocity: v } = at(model, position)
   const distance = (i: number) => (motion.velocity[i] ?? Infinity) - v
-  const stays = staysWithin(distance, position, u, unsureS / signal.dt) * signal.dt
+  const stays = (staysWithin(distance, position, 2 * u, unsureS / signal.dt) * signal.dt) / 2
   return budget.linear(position * signal.dt, [[u > 0 ? -stays / u : 0, velocity]])
 }
 
 /** Times of what any trial may have: its landing, and the turning points of its movement. */
 export function trialTimes(model: TrialModel): TrialTimes {
-  const { budget, events, signal } = model
+  const { budget, events, signal, settings } = model
   const { touchdown, zeroVelocity, landingPeak, landingZeroVelocity } = events
   return {
-    touchdown: touchdown && crossingTime(model, touchdown),
+    touchdown: touchdown && crossingTime(model, touchdown, undefined, settings.landingRiseShare),
     minimumVelocity: weightCrossingTime(model),
     zeroVelocity: zeroVelocity === null ? null : zeroVelocityTime(model, zeroVelocity),
     landingPeak:

@@ -28,10 +28,16 @@ export const stanceSettings = {
     effect: 'Faster and coarser count of independent samples',
   },
   noiseInflationKept: {
-    value: 0.93,
+    value: 0.85,
     unit: 'of the inflation to the first ρ ≤ 0',
     source: `${own}: a heartbeat pays back in its second half what it added in its first`,
     effect: 'Wider intervals of weight and velocity where the stance swings',
+  },
+  restInflationKept: {
+    value: 0.45,
+    unit: 'of the same inflation, in the stance after a landing',
+    source: `${own}: there the swing of the landing dies away and pays back more of what it added`,
+    effect: 'The same, of drop jumps, drop landings and hops',
   },
   onsetFraction: {
     value: 0.025,

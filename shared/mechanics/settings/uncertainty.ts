@@ -39,6 +39,12 @@ export const uncertaintySettings = {
     source: `${own}: ringing of the plate that the fit takes for the rise, a heel that comes a moment later`,
     effect: 'Wider intervals of touchdown, contact and flight times, more so where the force rises gently',
   },
+  landingRiseShare: {
+    value: 0.21,
+    unit: 'of the same time, of the landing that ends a jump',
+    source: `${own}: the feet come down one after the other, toe before heel`,
+    effect: 'Wider intervals of touchdown and flight times',
+  },
   touchQuickS: {
     value: 0.002,
     unit: 's',
@@ -58,7 +64,7 @@ export const uncertaintySettings = {
     effect: 'Wider U, same URepeat',
   },
   driftU: {
-    value: 0.08,
+    value: 0.07,
     unit: 'N/s, standard uncertainty of each plate',
     source: `${own}: residual drift of a plate that has warmed up`,
     effect: 'Wider intervals of weight and velocity',

@@ -241,7 +241,11 @@ export const accessTable: Record<string, AccessLine> = {
   refreshBilling: { may: ['admin'], request: nothing, elsewhere: 'own' },
   getSeatPlan: { may: ['admin'], request: nothing, elsewhere: 'own' },
   giveSeat: { may: ['admin'], request: ({ athleteId }) => ({ body: { athleteId } }), elsewhere: 'not-found' },
-  releaseSeat: { may: ['admin'], request: ({ athleteId }) => ({ body: { athleteId } }), elsewhere: 'not-found' },
+  releaseSeat: {
+    may: ['admin'],
+    request: ({ athleteId }) => ({ body: { athleteId } }),
+    elsewhere: 'not-found',
+  },
   changeSeatRule: { may: ['admin'], request: form({ byItself: true, version: 99 }), elsewhere: 'own' },
   takePaymentEvent: { may: 'anybody', request: form({ id: 'evt_of_nobody' }), elsewhere: 'own' },
 }

@@ -39,7 +39,7 @@ export const begun: SettingKey[] = ['onsetFraction', 'onsetLeadS', 'movementFrac
 /** What places takeoff and touchdown. */
 export const crossed: SettingKey[] = ['eventForceN', 'eventPersistenceS', 'flankLimitS']
 /** What a touch may be wrong by. */
-export const touched: SettingKey[] = ['touchRiseShare', 'touchRiseN', 'touchQuickS']
+export const touched: SettingKey[] = ['touchRiseShare', 'landingRiseShare', 'touchRiseN', 'touchQuickS']
 /** What a velocity by integration from rest rests on. */
 export const integrated: SettingKey[] = [...weighed, ...begun, 'gravityU']
 /** What places a peak. */
