@@ -12,9 +12,9 @@ import { server } from '../../tests/setup/msw/server.ts'
 import { pageTitled, renderApp } from '../../tests/setup/render-app.tsx'
 
 const pagesOf: Record<Role, string[]> = {
-  coach: ['Sessions', 'Athletes', 'Squads', 'Methods'],
+  coach: ['Sessions', 'Athletes', 'Squads', 'Settings', 'Methods'],
   physio: ['Sessions', 'Athletes', 'Landing watch', 'Settings', 'Methods'],
-  admin: ['People', 'Squads', 'Seats', 'Settings', 'Methods'],
+  admin: ['People', 'Squads', 'Seats', 'Billing', 'Settings', 'Methods'],
   athlete: ['My results', 'Methods'],
 }
 
@@ -38,7 +38,7 @@ describe('the shell', () => {
       within(nav)
         .getAllByRole('link')
         .map((link) => link.textContent),
-    ).toEqual(['Sessions', 'Athletes', 'People', 'Squads', 'Seats', 'Settings', 'Methods'])
+    ).toEqual(['Sessions', 'Athletes', 'People', 'Squads', 'Seats', 'Billing', 'Settings', 'Methods'])
   })
 
   test('says that a demo club is invented, and says nothing of the kind of a real one', async () => {

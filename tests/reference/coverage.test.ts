@@ -70,7 +70,7 @@ describe('the limits', () => {
     ['too many', { covered: 0.98 }, /covers as much as 98.0 %/],
     ['too wide', { widthRatio: 1.4 }, /1.40 times as wide/],
     ['none', { withoutU: 0.03 }, /no U in 3.0 %/],
-    ['no value', { missing: 0.01 }, /missing in 1.0 %/],
+    ['no value', { missing: 0.03 }, /missing in 3.0 %/],
     ['biased', { bias: -0.006 }, /biased by -0.0060 m\/s/],
   ])('are broken by %s', (_, change, words) => {
     const coverage = { ...stratum, ...change, strata: { 'noise clean': stratum } }

@@ -71,9 +71,9 @@ function loadedSide({ signal, unloaded, settings }: Trace): 'left' | 'right' | n
     mean(force, from, flight.from) - mean(force, flight.from, flight.to)
   const [left, right] = [carried(a.force), carried(b.force)]
   const share = Math.min(left, right) / (left + right)
-  // A plate that reads the very same throughout is not empty but not connected.
+  // A plate that reads the very same all that time is not empty but not connected, or stuck.
   const idle = left < right ? a : b
-  if (!(share < settings.otherFootFail) || isConstant(idle.force)) return null
+  if (!(share < settings.otherFootFail) || isConstant(idle.force, from, flight.to)) return null
   return left > right ? 'left' : 'right'
 }
 
@@ -83,8 +83,9 @@ function mean(force: Float64Array, from: number, to: number): number {
   return sum / Math.max(1, to - from)
 }
 
-function isConstant(force: Float64Array): boolean {
-  return force.every((newton) => newton === force[0])
+function isConstant(force: Float64Array, from: number, to: number): boolean {
+  for (let i = from + 1; i < to; i++) if (force[i] !== force[from]) return false
+  return true
 }
 
 function protocolOf(trace: Trace, side: Side): Protocol {

@@ -21,6 +21,7 @@ import {
   type Person,
 } from '../../../shared/contracts/people.ts'
 import type { ResultPoint } from '../../../shared/contracts/results.ts'
+import { getSeatPlan } from '../../../shared/contracts/seats.ts'
 import { changeSquad, createSquad, listSquads, type Squad } from '../../../shared/contracts/squads.ts'
 import { answer, Refusal } from './answer.ts'
 import { anAthlete, anInvitation, aSquad } from './club-rows.ts'
@@ -162,6 +163,13 @@ function clubHandlers(club: ClubState) {
       club.settings = { ...body, version: body.version + 1 }
       return club.settings
     }),
+    answer(getSeatPlan, () => ({
+      paid: club.paidSeats,
+      used: 0,
+      byItself: true,
+      version: 0,
+      athletes: [],
+    })),
     answer(getSeats, () => ({
       used: club.athletes.filter(({ archived }) => !archived).length,
       paid: club.paidSeats,
