@@ -1,13 +1,17 @@
-import { Suspense, useState } from 'react'
+import { lazy, Suspense, useState } from 'react'
 import { Navigate, Outlet, ScrollRestoration, useLocation } from 'react-router-dom'
 import { useMe } from '../api/account/get-me.ts'
 import { ErrorState } from '../components/error-state.tsx'
 import { Loading } from '../components/loading.tsx'
 import { paths, signInPathFrom } from '../lib/paths.ts'
-import { SessionEndedDialog } from '../features/account/session-ended-dialog.tsx'
 import { useSessionEnded } from './session-ended.ts'
 import { TopBar } from './top-bar.tsx'
 import { useFocusOnNewPage } from './use-focus-on-new-page.ts'
+
+// A page that never loses its sign-in never fetches it.
+const SessionEndedDialog = lazy(async () => ({
+  default: (await import('../features/account/session-ended-dialog.tsx')).SessionEndedDialog,
+}))
 
 /** The frame of every signed-in page. */
 export function Shell() {
@@ -34,7 +38,11 @@ export function Shell() {
         </Suspense>
       </main>
       <ScrollRestoration />
-      {session.ended && <SessionEndedDialog me={me.data} onSignedIn={session.settle} />}
+      {session.ended && (
+        <Suspense fallback={null}>
+          <SessionEndedDialog me={me.data} onSignedIn={session.settle} />
+        </Suspense>
+      )}
     </>
   )
 }

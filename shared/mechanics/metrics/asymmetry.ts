@@ -27,12 +27,16 @@ export function asymmetryOf(
     const [above, below] = [at(step), at(-step)]
     return ((above ?? value) - (below ?? value)) / (above === null || below === null ? step : 2 * step)
   }
-  const ofLeft = slope((by) => formula(l + by, r))
-  const ofRight = slope((by) => formula(l, r + by))
-  const figure = budget.figure(budget.pair(value, ofRight, right, ofLeft, left), withoutU)
-  return {
-    ...figure,
-    larger: value >= 0 ? 'right' : 'left',
-    zeroWithin: figure.U === null ? null : Math.abs(value) <= figure.U,
-  }
+  const quantity = budget.on
+    ? budget.pair(
+        value,
+        slope((by) => formula(l, r + by)),
+        right,
+        slope((by) => formula(l + by, r)),
+        left,
+      )
+    : budget.exact(value)
+  const { U, k, URepeat, kRepeat } = budget.figure(quantity, withoutU)
+  const zeroWithin = U === null ? null : Math.abs(value) <= U
+  return { value, U, k, URepeat, kRepeat, larger: value >= 0 ? 'right' : 'left', zeroWithin }
 }

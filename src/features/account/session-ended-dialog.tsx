@@ -1,14 +1,10 @@
 import { useQueryClient } from '@tanstack/react-query'
-import { lazy, Suspense } from 'react'
 import { useNavigate } from 'react-router-dom'
 import type { Me } from '../../../shared/contracts/account.ts'
 import { startAs } from '../../api/account/get-me.ts'
 import { Dialog } from '../../components/dialog.tsx'
-import { Loading } from '../../components/loading.tsx'
 import { paths } from '../../lib/paths.ts'
-
-// The form brings its validation along; a page that never loses its sign-in never fetches it.
-const SignInForm = lazy(async () => ({ default: (await import('./sign-in-form.tsx')).SignInForm }))
+import { SignInForm } from './sign-in-form.tsx'
 
 interface SessionEndedDialogProps {
   me: Me
@@ -37,9 +33,7 @@ export function SessionEndedDialog({ me, onSignedIn }: SessionEndedDialogProps) 
   return (
     <Dialog title="Your sign-in has ended" onClose={leave}>
       <p className="pb-4">Sign in again to go on from here. What is on this page is kept meanwhile.</p>
-      <Suspense fallback={<Loading what="the form" />}>
-        <SignInForm email={me.person.email} onSignedIn={goOn} />
-      </Suspense>
+      <SignInForm email={me.person.email} onSignedIn={goOn} />
     </Dialog>
   )
 }
