@@ -32,6 +32,25 @@ export async function answerTimes(
     await page.keyboard.press(key)
     await page.waitForFunction(([times, count]) => times.length >= count, [answers, i] as const)
   }
-  const times = [...(await answers.jsonValue())].sort((a, b) => a - b)
+  return summaryOf(await answers.jsonValue())
+}
+
+/** Times every answer of the page's workers from now on; the function it gives tells them, in milliseconds. */
+export async function timeWorkers(page: Page): Promise<() => Promise<AnswerTimes>> {
+  const answers = await page.evaluateHandle(() => {
+    const times: number[] = []
+    const post = Worker.prototype.postMessage as (this: Worker, message: unknown) => void
+    Worker.prototype.postMessage = function (this: Worker, message: unknown) {
+      const asked = performance.now()
+      this.addEventListener('message', () => times.push(performance.now() - asked), { once: true })
+      post.call(this, message)
+    }
+    return times
+  })
+  return async () => summaryOf(await answers.jsonValue())
+}
+
+function summaryOf(answers: number[]): AnswerTimes {
+  const times = [...answers].sort((a, b) => a - b)
   return { median: times[times.length >> 1] ?? NaN, longest: times.at(-1) ?? NaN, count: times.length }
 }

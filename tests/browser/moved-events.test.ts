@@ -2,7 +2,7 @@ import type { Browser } from 'playwright-core'
 import { afterAll, beforeAll, expect, test } from 'vitest'
 import { accessibilityProblems, openBrowser, sizes, visit, type Visit } from '../setup/browser.ts'
 import { startProduct, type Product } from '../setup/product.ts'
-import { answerTimes } from './answer-times.ts'
+import { answerTimes, timeWorkers } from './answer-times.ts'
 import { buildClubDay, jumpFile, people, squadName } from './club-day.ts'
 import { signIn } from './sign-in.ts'
 
@@ -45,6 +45,7 @@ const provisional = (key: string) => coach.page.locator(`dd[data-metric="${key}"
 
 test('the keyboard moves takeoff by samples and the figures follow, computed beside the page', async () => {
   const { page, complaints } = coach
+  const engineTimes = await timeWorkers(page)
   await page.getByRole('button', { name: 'Move an event' }).click()
   await handle('takeoff').focus()
   const automatic = await valueOf('takeoff')
@@ -52,9 +53,14 @@ test('the keyboard moves takeoff by samples and the figures follow, computed bes
   await page.keyboard.press('ArrowLeft')
   await provisional('timeToTakeoff').getByText(/was /).waitFor()
   const times = await answerTimes(page, 'dd[data-metric=timeToTakeoff]', 'ArrowLeft', 12)
+  const engine = await engineTimes()
+  process.stdout.write(
+    `The engine beside the page: median ${engine.median.toFixed(0)} ms, longest ${engine.longest.toFixed(0)} ms ` +
+      `of ${engine.count} answers (wanted: under 50 ms)\n`,
+  )
   process.stdout.write(
     `From a key press to the figures it gives, on the page: median ${times.median.toFixed(0)} ms, ` +
-      `longest ${times.longest.toFixed(0)} ms of ${times.count} (wanted: under 50 ms)\n`,
+      `longest ${times.longest.toFixed(0)} ms of ${times.count}\n`,
   )
   expect(times.count).toBe(12)
   await page.keyboard.press('Home')
