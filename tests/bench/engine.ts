@@ -5,8 +5,8 @@ import { sampled } from '../setup/closed-form-cmj.ts'
 import { whiteNoise } from '../setup/white-noise.ts'
 
 const recordings = 50
-const warmUps = 1000
-const rounds = 3000
+const warmUps = 3000
+const rounds = 4000
 const options: AnalyseOptions = {
   gravity: standardGravity,
   calibrationU: { left: 0.005, right: 0.005 },

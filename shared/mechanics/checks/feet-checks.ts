@@ -11,11 +11,13 @@ function longestOff(foot: Foot, model: TrialModel, from: number, to: number): nu
   const { force } = foot.plate
   const total = motion.force
   const end = Math.min(force.length, to)
+  const isOff = (i: number) => force[i] < threshold && total[i] > 4 * threshold
   let longest = 0
-  let since = Math.max(0, Math.ceil(from))
-  for (let i = since; i < end; i++) {
-    if (!(force[i] < threshold && total[i] > 4 * threshold)) since = i + 1
-    else if (i + 1 - since > longest) longest = i + 1 - since
+  for (let i = Math.max(0, Math.ceil(from)); i < end; i++) {
+    if (!(force[i] < threshold)) continue
+    const since = i
+    while (i < end && isOff(i)) i++
+    longest = Math.max(longest, i - since)
   }
   return longest
 }
