@@ -31,7 +31,10 @@ const fixedKeys: MetricKey[] = [
   'timeToStabilisation',
 ]
 
-/** Position of the first maximum that the force falls away from by the asked prominence; the peak if none. */
+/**
+ * Position of the first maximum that the force falls away from by the asked prominence, above what a plate rings by at
+ * the touch; the peak if none.
+ */
 function firstPeak(model: TrialModel, touchdown: number, peak: Peak): Peak {
   const { motion, settings, bodyWeight, zero, signal } = model
   const prominence = settings.firstPeakProminence * bodyWeight.value
@@ -41,7 +44,7 @@ function firstPeak(model: TrialModel, touchdown: number, peak: Peak): Peak {
     if (motion.force[i] > highest) {
       highest = motion.force[i]
       where = i
-    } else if (motion.force[i] < highest - prominence) {
+    } else if (highest >= settings.touchRiseN && motion.force[i] < highest - prominence) {
       const around = 0.01 / signal.dt
       return findPeak(
         motion.force,
