@@ -65,7 +65,7 @@ export const landingNotes: Record<keyof typeof landingMetrics, MetricNote> = {
       'The force of the first maximum of the landing from which it falls away by the asked prominence; the landing peak where there is no other.',
     formula: 'F_1 = F(t_1)',
     symbols: 't_1 the first maximum after touchdown that stands out by the prominence',
-    settings: ['firstPeakProminence', ...peaked],
+    settings: ['firstPeakProminence', 'touchRiseN', ...peaked],
     evidence: 'published',
     unchecked: 'That landings have two peaks is published; the prominence is our own setting.',
     limits: `Where the peaks run into one another, noise can decide which is first. ${noLimit}`,
