@@ -1,14 +1,9 @@
 import { getRecompute, getStanding, startRecompute } from '../../shared/contracts/recomputes.ts'
-import { loadConfig } from '../../server/config/config.ts'
-import { createDatabase } from '../../server/db/database.ts'
-import { ensureClient } from '../../server/setup/client-build.mjs'
 import { pause } from '../../server/setup/pause.mjs'
-import { startTestCluster } from '../../server/setup/test-cluster.mjs'
-import { ApiClient } from '../api/harness/api-client.ts'
-import { dropFile, settledSheet, startTestingDay, type TestingDay } from '../api/harness/testing-day.ts'
-import { startProduct, type Product } from '../setup/product.ts'
+import { dropFile, settledSheet, type TestingDay } from '../api/harness/testing-day.ts'
 import { eightSeconds } from './eight-seconds.ts'
 import { fillTrials } from './fill-trials.ts'
+import { onTestingDay } from './on-testing-day.ts'
 
 const originals = 24
 const trials = 10_000
@@ -20,49 +15,16 @@ const giveUpMs = 600_000
  * PostgreSQL: a dry run, then the recompute itself. Prints the rate of both.
  */
 export async function benchRecompute(): Promise<void> {
-  await ensureClient()
-  const { cluster, stop } = await startTestCluster()
-  try {
-    const product = await startProduct({ cluster })
+  await onTestingDay(originals / 2, async ({ product, day, fileName }) => {
     product.startWorker()
-    try {
-      await measure(product)
-    } catch (error) {
-      console.error(product.output())
-      throw error
-    } finally {
-      await product.stop()
-    }
-  } finally {
-    await stop()
-  }
-}
-
-async function measure(product: Product): Promise<void> {
-  const db = createDatabase(loadConfig('web', product.env), () => undefined)
-  const names = Array.from(
-    { length: originals / 2 },
-    (_, i) => `Invented Person${String.fromCharCode(65 + i)}`,
-  )
-  const signedIn = async ({ email }: { email: string }) => {
-    const client = new ApiClient(product.url, [])
-    await client.signIn(email)
-    return client
-  }
-  try {
-    const day = await startTestingDay({ db, signedIn }, names)
-    for (let i = 0; i < originals; i++) {
-      const fileName = `${names[i % names.length]} cmj ${1 + Math.floor(i / names.length)}.csv`
-      await dropFile(day.coach, day.session.id, fileName, eightSeconds(i + 1))
-    }
+    for (let i = 0; i < originals; i++)
+      await dropFile(day.coach, day.session.id, fileName(i), eightSeconds(i + 1))
     await settledSheet(day.coach, day.session.id)
     await fillTrials(product.database, day.clubId, trials)
     for (const dryRun of [true, false]) report(dryRun, await timeRun(day, dryRun))
     const { stale } = await day.coach.call(getStanding)
     if (stale > 0) throw new Error(`${stale} analyses are still of the engine before.`)
-  } finally {
-    await db.close()
-  }
+  })
 }
 
 async function timeRun({ coach }: TestingDay, dryRun: boolean): Promise<number> {

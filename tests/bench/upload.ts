@@ -1,13 +1,8 @@
 import { getSession } from '../../shared/contracts/sessions.ts'
-import { loadConfig } from '../../server/config/config.ts'
-import { createDatabase } from '../../server/db/database.ts'
-import { ensureClient } from '../../server/setup/client-build.mjs'
 import { pause } from '../../server/setup/pause.mjs'
-import { startTestCluster } from '../../server/setup/test-cluster.mjs'
-import { ApiClient } from '../api/harness/api-client.ts'
-import { dropFile, startTestingDay, type TestingDay } from '../api/harness/testing-day.ts'
-import { startProduct, type Product } from '../setup/product.ts'
+import { dropFile, type TestingDay } from '../api/harness/testing-day.ts'
 import { eightSeconds } from './eight-seconds.ts'
+import { onTestingDay } from './on-testing-day.ts'
 
 const files = 40
 /** As many at once as the drop zone sends. */
@@ -23,44 +18,13 @@ const lookEveryMs = 250
  * time until the sheet shows every one of them analysed.
  */
 export async function benchUpload(): Promise<void> {
-  await ensureClient()
-  const { cluster, stop } = await startTestCluster()
-  try {
-    const product = await startProduct({ cluster })
-    try {
-      await measure(product)
-    } catch (error) {
-      console.error(product.output())
-      throw error
-    } finally {
-      await product.stop()
-    }
-  } finally {
-    await stop()
-  }
-}
-
-async function measure(product: Product): Promise<void> {
-  const db = createDatabase(loadConfig('web', product.env), () => undefined)
-  const names = Array.from({ length: files / 2 }, (_, i) => `Invented Person${String.fromCharCode(65 + i)}`)
-  const signedIn = async ({ email }: { email: string }) => {
-    const client = new ApiClient(product.url, [])
-    await client.signIn(email)
-    return client
-  }
-  try {
-    const day = await startTestingDay({ db, signedIn }, names)
-    const drop = Array.from({ length: files }, (_, i) => ({
-      name: `${names[i % names.length]} cmj ${1 + Math.floor(i / names.length)}.csv`,
-      bytes: eightSeconds(i + 1),
-    }))
+  await onTestingDay(files / 2, async ({ day, fileName }) => {
+    const drop = Array.from({ length: files }, (_, i) => ({ name: fileName(i), bytes: eightSeconds(i + 1) }))
     report(
       await timeDrop(day, drop),
       drop.reduce((sum, { bytes }) => sum + bytes.length, 0),
     )
-  } finally {
-    await db.close()
-  }
+  })
 }
 
 async function timeDrop(day: TestingDay, drop: { name: string; bytes: Uint8Array }[]): Promise<number> {
